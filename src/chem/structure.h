@@ -3,7 +3,6 @@
 #pragma once
 
 #include <expected>
-#include <memory>
 #include <string>
 #include <string_view>
 
@@ -11,21 +10,27 @@ namespace vialkeeper::chem {
 
 /// What a line notation says about a substance.
 struct Structure {
-  std::string canonicalSmiles;
-  std::string formula;   ///< Hill order with charge; isotopes as `D`, `T`, `[13C]`: readable by parseFormula
-  std::string inchi;     ///< standard InChI
-  std::string inchiKey;  ///< 27 characters; empty where InChI cannot describe the structure
-  int heavyAtoms = 0;
+  std::string canonicalSmiles;  ///< isomeric; the same text for every way to write the structure
+  std::string formula;  ///< Hill order with charge; isotopes as `D`, `T`, `[13C]`: readable by parseFormula
+  int heavyAtoms = 0;   ///< atoms other than hydrogen
 };
 
-/// Why a structure could not be read.
+/// The names by which other people's databases know a structure; both are empty where InChI
+/// cannot describe it (more than 1023 atoms, for one).
+struct Identity {
+  std::string inchi;     ///< standard InChI; bonds to metals are left out of it, as the standard has it
+  std::string inchiKey;  ///< 27 characters
+};
+
+/// Why a structure could not be read. Both parts without a full stop.
 struct StructureFault {
-  std::string what;
+  std::string what;  ///< with the position in the SMILES, counted from 1, where one is at fault
   std::string mend;
 };
 
-/// Reads and draws structures. Implemented by the structure module over RDKit and libinchi, which
-/// is loaded on first use: most of a cold start would go into loading it.
+/// Reads and draws structures. Implemented by two modules over RDKit and libinchi; the one that
+/// reads is loaded by structureEngine(), the one that draws (three times as slow to load) by the
+/// first drawing. A SMILES has at most 10 000 characters; blanks around it do not count.
 /// Not safe for use from two threads at once.
 class StructureEngine {
  public:
@@ -34,11 +39,17 @@ class StructureEngine {
   StructureEngine& operator=(const StructureEngine&) = delete;
   virtual ~StructureEngine() = default;
 
-  /// Reads a SMILES. The whole text must be the notation: nothing after it, no reaction arrow.
+  /// Reads a SMILES. The whole text must be the notation: nothing after it, no reaction arrow, no
+  /// atom or bond that stands for "any". Salts and hydrates written with `.` are one formula.
   [[nodiscard]] virtual std::expected<Structure, StructureFault> read(std::string_view smiles) = 0;
 
-  /// A vector drawing of one structure, as SVG of the given size [px], black on transparent,
-  /// fitted with the same bond length as the others of a scheme where that fits.
+  /// The InChI and InChIKey of a SMILES. Apart from read(), because a charge does not need them.
+  [[nodiscard]] virtual std::expected<Identity, StructureFault> identify(
+      std::string_view smiles) = 0;
+
+  /// A vector drawing of one structure, as SVG of the given size [px], black on transparent, with
+  /// bonds of 28 px, shorter where the structure would not fit; paths only, no text and no fonts.
+  /// Fault: also a size below 1 or above 10 000 px.
   [[nodiscard]] virtual std::expected<std::string, StructureFault> drawSvg(std::string_view smiles,
                                                                            int width_px,
                                                                            int height_px) = 0;
@@ -54,6 +65,7 @@ class StructureEngine {
 
 /// The engine, loaded on the first call and kept for the life of the process.
 /// Fault: the module is missing from this installation or does not load; says where it was sought.
+/// A fault is not kept: the next call tries again.
 [[nodiscard]] std::expected<StructureEngine*, StructureFault> structureEngine();
 
 }  // namespace vialkeeper::chem

@@ -21,8 +21,8 @@ struct Fault {
   std::string file = {};   ///< empty where no file is involved
   int line = 0;            ///< counted from 1; 0 where unknown
   std::string field = {};  ///< `component.amine.amount`, `reaction.limiting`, an option's name
-  std::string what;        ///< what is wrong, without a full stop
-  std::string mend;        ///< what to do about it, without a full stop
+  std::string what = {};   ///< what is wrong, without a full stop
+  std::string mend = {};   ///< what to do about it, without a full stop
 };
 
 /// All faults of one file or call: they are told together, never one at a time.

@@ -1,0 +1,32 @@
+// SPDX-FileCopyrightText: The Vialkeeper developers
+// SPDX-License-Identifier: GPL-3.0-or-later
+#pragma once
+
+#include <string>
+#include <vector>
+
+#include "app/sheet_content.h"
+#include "text/fault.h"
+
+/// Printed pages. Plain values in, the bytes of a PDF out; nothing of Qt shows through, so that the
+/// command line can use it. The pages module, which holds Qt, is loaded on first use.
+namespace vialkeeper::exports {
+
+enum class Paper { kA4, kLetter };
+
+/// A finished document.
+struct PdfDocument {
+  std::string bytes;
+  int pages = 0;
+};
+
+/// The weighing sheet: one page where it fits, else broken between rows with the table's head repeated.
+/// Fonts are embedded, text can be selected, structures and the QR code are vector graphics.
+/// Fault: the pages module or a font is missing, a structure cannot be drawn.
+[[nodiscard]] text::Checked<PdfDocument> printWeighingSheet(const app::SheetContent& content, Paper paper);
+
+/// One page for every stock solution.
+[[nodiscard]] text::Checked<PdfDocument> printStockSheets(
+    const std::vector<app::StockSheetContent>& contents, Paper paper);
+
+}  // namespace vialkeeper::exports

@@ -1,0 +1,18 @@
+// SPDX-FileCopyrightText: The Vialkeeper developers
+// SPDX-License-Identifier: GPL-3.0-or-later
+#pragma once
+
+#include <GraphMol/ROMol.h>
+
+#include <string>
+
+namespace vialkeeper::chem {
+
+/// The formula of all fragments together, counted from the atoms and their hydrogens, in Hill
+/// order: C, H, D, T, then by symbol; by symbol throughout where there is no carbon. A labelled
+/// nuclide follows its element as `[13C]`. A net charge ends it as `+`, `-`, `^2+` or `^2-`, the
+/// caret keeping it apart from a count.
+/// Source: @cite hill1900; RDKit's own formula is not used, as it writes D as H.
+[[nodiscard]] std::string hillFormula(const RDKit::ROMol& mol);
+
+}  // namespace vialkeeper::chem

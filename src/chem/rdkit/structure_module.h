@@ -1,0 +1,66 @@
+// SPDX-FileCopyrightText: The Vialkeeper developers
+// SPDX-License-Identifier: GPL-3.0-or-later
+#pragma once
+
+#include <expected>
+#include <string>
+#include <string_view>
+
+#include "chem/structure.h"
+
+/// What the program and its structure modules have agreed on. Nothing of RDKit is named here.
+namespace vialkeeper::chem {
+
+/// Raised whenever a class of this file or of chem/structure.h changes: a module of another
+/// number is refused before any of its functions is called.
+inline constexpr int kStructureModuleAbi = 1;
+
+/// Reads and names structures; the functions are those of StructureEngine.
+class StructureReader {
+ public:
+  StructureReader() = default;
+  StructureReader(const StructureReader&) = delete;
+  StructureReader& operator=(const StructureReader&) = delete;
+  virtual ~StructureReader() = default;
+  [[nodiscard]] virtual std::expected<Structure, StructureFault> read(std::string_view smiles) = 0;
+  [[nodiscard]] virtual std::expected<Identity, StructureFault> identify(
+      std::string_view smiles) = 0;
+};
+
+/// Draws structures; the functions are those of StructureEngine.
+class StructureDrawer {
+ public:
+  StructureDrawer() = default;
+  StructureDrawer(const StructureDrawer&) = delete;
+  StructureDrawer& operator=(const StructureDrawer&) = delete;
+  virtual ~StructureDrawer() = default;
+  [[nodiscard]] virtual std::expected<std::string, StructureFault> drawSvg(std::string_view smiles,
+                                                                           int width_px,
+                                                                           int height_px) = 0;
+  [[nodiscard]] virtual std::expected<StructureEngine::Extent, StructureFault> extent(
+      std::string_view smiles) = 0;
+};
+
+/// A module's file, without directory, and the one function that it exports. The function takes
+/// the caller's ABI number and returns the module's object, which it keeps, or null where the
+/// numbers differ.
+struct StructureModule {
+  const char* file = nullptr;
+  const char* factory = nullptr;
+};
+using StructureModuleFactory = void*(int abiVersion);
+
+inline constexpr StructureModule kReaderModule{"vialkeeper_structures.so",
+                                               "vialkeeper_open_structure_reader"};
+inline constexpr StructureModule kDrawerModule{"vialkeeper_drawings.so",
+                                               "vialkeeper_open_structure_drawer"};
+
+/// The object of a module: a StructureReader* or StructureDrawer* behind `void*`.
+/// Sought in the directory that the environment variable VIALKEEPER_MODULE_DIR names and nowhere
+/// else if that is set; otherwise beside the program (`../lib/vialkeeper`), then where it was
+/// installed. An opened module stays for the life of the process.
+/// Fault: missing, not loadable, or of another ABI number; says where and how to mend it.
+[[nodiscard]] std::expected<void*, StructureFault> openStructureModule(
+    const StructureModule& module, int abiVersion = kStructureModuleAbi);
+
+}  // namespace vialkeeper::chem

@@ -1,0 +1,144 @@
+// SPDX-FileCopyrightText: The Vialkeeper developers
+// SPDX-License-Identifier: GPL-3.0-or-later
+#include <dlfcn.h>
+
+#include <cstdlib>
+#include <expected>
+#include <filesystem>
+#include <string>
+#include <string_view>
+#include <system_error>
+#include <vector>
+
+#include "chem/rdkit/structure_module.h"
+#include "chem/structure.h"
+
+namespace vialkeeper::chem {
+namespace {
+
+namespace fs = std::filesystem;
+
+constexpr const char* kDirectoryVariable = "VIALKEEPER_MODULE_DIR";
+constexpr const char* kReinstall =
+    "install Vialkeeper again, program and modules together, or give a formula or molar mass in "
+    "place of the SMILES";
+
+/// The directories in which a module may stand, the most particular first.
+std::vector<fs::path> moduleDirectories() {
+  if (const char* named = std::getenv(kDirectoryVariable); named != nullptr && *named != '\0') {
+    return {fs::path(named)};
+  }
+  std::vector<fs::path> directories;
+  std::error_code unreadable;
+  const fs::path program = fs::read_symlink("/proc/self/exe", unreadable);
+  if (!unreadable) {
+    directories.push_back(program.parent_path().parent_path() / "lib" / "vialkeeper");
+  }
+#ifdef VIALKEEPER_MODULE_INSTALL_DIR
+  const fs::path installed(VIALKEEPER_MODULE_INSTALL_DIR);  // absolute, or below the prefix
+  if (installed.is_absolute()) {
+    directories.push_back(installed);
+  } else if (!unreadable) {
+    directories.push_back(program.parent_path().parent_path() / installed);
+  }
+#endif
+  return directories;
+}
+
+StructureFault missingModule(const char* file, const std::vector<fs::path>& sought) {
+  StructureFault fault;
+  fault.what = std::string("the structure module ") + file + " is not in ";
+  for (std::size_t i = 0; i < sought.size(); ++i) {
+    if (i > 0) fault.what += i + 1 == sought.size() ? " or " : ", ";
+    fault.what += sought[i].string();
+  }
+  fault.mend = std::getenv(kDirectoryVariable) != nullptr
+                   ? std::string("correct or unset ") + kDirectoryVariable
+                   : std::string(kReinstall);
+  return fault;
+}
+
+std::string loaderMessage() {
+  const char* message = dlerror();
+  return message != nullptr ? message : "no reason given";
+}
+
+/// The engine that the rest of the program sees: hands each call to the module that serves it.
+class LoadedEngine final : public StructureEngine {
+ public:
+  explicit LoadedEngine(StructureReader* reader) : m_reader(reader) {}
+
+  std::expected<Structure, StructureFault> read(std::string_view smiles) override {
+    return m_reader->read(smiles);
+  }
+  std::expected<Identity, StructureFault> identify(std::string_view smiles) override {
+    return m_reader->identify(smiles);
+  }
+  std::expected<std::string, StructureFault> drawSvg(std::string_view smiles, int width_px,
+                                                     int height_px) override {
+    const auto opened = drawer();
+    if (!opened) return std::unexpected(opened.error());
+    return (*opened)->drawSvg(smiles, width_px, height_px);
+  }
+  std::expected<Extent, StructureFault> extent(std::string_view smiles) override {
+    const auto opened = drawer();
+    if (!opened) return std::unexpected(opened.error());
+    return (*opened)->extent(smiles);
+  }
+
+ private:
+  std::expected<StructureDrawer*, StructureFault> drawer() {
+    if (m_drawer == nullptr) {
+      const auto opened = openStructureModule(kDrawerModule);
+      if (!opened) return std::unexpected(opened.error());
+      m_drawer = static_cast<StructureDrawer*>(*opened);
+    }
+    return m_drawer;
+  }
+
+  StructureReader* m_reader;
+  StructureDrawer* m_drawer = nullptr;
+};
+
+}  // namespace
+
+std::expected<void*, StructureFault> openStructureModule(const StructureModule& module,
+                                                         int abiVersion) {
+  const std::vector<fs::path> directories = moduleDirectories();
+  for (const fs::path& directory : directories) {
+    const fs::path file = directory / module.file;
+    std::error_code unreadable;
+    if (!fs::exists(file, unreadable)) continue;
+    // All symbols now: a library that does not fit is told here, not by an abort in mid-use.
+    void* handle = dlopen(file.c_str(), RTLD_NOW | RTLD_LOCAL);
+    if (handle == nullptr) {
+      return std::unexpected(StructureFault{
+          "the structure module does not load: " + loaderMessage(),
+          "install the RDKit and InChI libraries of this system (librdkit1 and libinchi1 on "
+          "Debian), then Vialkeeper again"});
+    }
+    void* symbol = dlsym(handle, module.factory);
+    void* object =
+        symbol != nullptr ? reinterpret_cast<StructureModuleFactory*>(symbol)(abiVersion) : nullptr;
+    if (object == nullptr) {
+      return std::unexpected(StructureFault{
+          "the structure module " + file.string() + " belongs to another version of Vialkeeper",
+          kReinstall});
+    }
+    return object;
+  }
+  return std::unexpected(missingModule(module.file, directories));
+}
+
+std::expected<StructureEngine*, StructureFault> structureEngine() {
+  // Never destroyed: the modules' own static objects may be gone before ours at exit.
+  static StructureEngine* engine = nullptr;
+  if (engine == nullptr) {
+    const auto opened = openStructureModule(kReaderModule);
+    if (!opened) return std::unexpected(opened.error());
+    engine = new LoadedEngine(static_cast<StructureReader*>(*opened));
+  }
+  return engine;
+}
+
+}  // namespace vialkeeper::chem
