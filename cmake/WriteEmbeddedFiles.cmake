@@ -11,7 +11,7 @@ foreach(file IN LISTS files)
   math(EXPR length "${length} / 2")
   string(REGEX REPLACE "(..)" "\\\\x\\1" escaped "${bytes}")
   # A string literal in chunks: no compiler limit on one literal is met.
-  string(REGEX REPLACE "((\\\\x..)(\\\\x..)?(\\\\x..)?(\\\\x..)?(\\\\x..)?(\\\\x..)?(\\\\x..)?(\\\\x..)?(\\\\x..)?(\\\\x..)?(\\\\x..)?(\\\\x..)?(\\\\x..)?(\\\\x..)?(\\\\x..)?)" "\\1\"\n    \"" escaped "${escaped}")
+  string(REGEX REPLACE "(................................................................)" "\\1\"\n    \"" escaped "${escaped}")
   get_filename_component(name "${file}" NAME)
   string(APPEND text "  {\"${name}\", std::string_view(\n    \"${escaped}\", ${length})},\n")
   math(EXPR count "${count} + 1")

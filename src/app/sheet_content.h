@@ -4,7 +4,12 @@
 
 #include <optional>
 #include <string>
+#include <string_view>
 #include <vector>
+
+namespace vialkeeper::app {
+struct PlannedRun;
+}
 
 /// What the printed pages say, ready to be laid out: every text is final, every number rounded.
 namespace vialkeeper::app {
@@ -104,5 +109,19 @@ struct StockSheetContent {
   std::vector<std::string> cautions;
   std::string footer;
 };
+
+/// The weighing sheet of a planned run, with recorded values where there are some.
+[[nodiscard]] SheetContent weighingSheet(const PlannedRun& run);
+
+/// A sheet for every stock solution that the plan uses and for every one that was proposed.
+[[nodiscard]] std::vector<StockSheetContent> stockSheets(const PlannedRun& run);
+
+/// The components in the order of addition, as places in the plan: those that the plan lists first,
+/// then solids, neat liquids, stocks, solvents, gases, each in the plan's order.
+[[nodiscard]] std::vector<std::size_t> additionOrder(const PlannedRun& run);
+
+/// What stands for a run that has no code yet: eight hexadecimal digits of its plan's text, so that
+/// paper and file can be matched (FNV-1a, 64 bits, folded).
+[[nodiscard]] std::string planMark(std::string_view planText);
 
 }  // namespace vialkeeper::app

@@ -11,14 +11,16 @@ namespace vialkeeper::chem {
 /// What a line notation says about a substance.
 struct Structure {
   std::string canonicalSmiles;  ///< isomeric; the same text for every way to write the structure
-  std::string formula;  ///< Hill order with charge; isotopes as `D`, `T`, `[13C]`: readable by parseFormula
-  int heavyAtoms = 0;   ///< atoms other than hydrogen
+  std::string
+      formula;  ///< Hill order with charge; isotopes as `D`, `T`, `[13C]`: readable by parseFormula
+  int heavyAtoms = 0;  ///< atoms other than hydrogen
 };
 
 /// The names by which other people's databases know a structure; both are empty where InChI
-/// cannot describe it (more than 1023 atoms, for one).
+/// cannot describe it.
 struct Identity {
-  std::string inchi;     ///< standard InChI; bonds to metals are left out of it, as the standard has it
+  std::string
+      inchi;  ///< standard InChI; bonds to metals are left out of it, as the standard has it
   std::string inchiKey;  ///< 27 characters
 };
 
@@ -30,8 +32,8 @@ struct StructureFault {
 
 /// Reads and draws structures. Implemented by two modules over RDKit and libinchi; the one that
 /// reads is loaded by structureEngine(), the one that draws (three times as slow to load) by the
-/// first drawing. A SMILES has at most 10 000 characters; blanks around it do not count.
-/// Not safe for use from two threads at once.
+/// first drawing. A SMILES has at most 10 000 characters and 1000 atoms; blanks around it do not
+/// count. Not safe for use from two threads at once.
 class StructureEngine {
  public:
   StructureEngine() = default;

@@ -8,11 +8,12 @@
 
 namespace vialkeeper::chem {
 
-/// The formula of all fragments together, counted from the atoms and their hydrogens, in Hill
-/// order: C, H, D, T, then by symbol; by symbol throughout where there is no carbon. A labelled
-/// nuclide follows its element as `[13C]`. A net charge ends it as `+`, `-`, `^2+` or `^2-`, the
-/// caret keeping it apart from a count.
-/// Source: @cite hill1900; RDKit's own formula is not used, as it writes D as H.
+/// The formula of all fragments together, counted from the atoms and their hydrogens, in the order
+/// of toHillFormula() in chem/formula.h: carbon, hydrogen with D and T, then by symbol; by symbol
+/// throughout where there is no carbon. A labelled nuclide follows its element as `[13C]`.
+/// A net charge ends it as `+`, `-`, `^2+` or `^2-`; a single one as `^-` where the count before it
+/// could be taken for the charge (`N3^-`), so that parseFormula() reads back what is meant.
+/// Source: @cite hill1900. RDKit's own formula is not used, as it writes D as H.
 [[nodiscard]] std::string hillFormula(const RDKit::ROMol& mol);
 
 }  // namespace vialkeeper::chem

@@ -15,7 +15,8 @@
 namespace vialkeeper::chem {
 namespace {
 
-constexpr unsigned int kMostAtoms = 1023;  // inchi_api.h: "number of atoms in the structure < 1024"
+constexpr unsigned int kMostInchiAtoms =
+    1023;  // inchi_api.h: "number of atoms in the structure < 1024"
 
 /// The structure in the form that libinchi takes.
 struct InchiInput {
@@ -25,10 +26,14 @@ struct InchiInput {
 
 S_CHAR bondType(const RDKit::Bond& bond) {
   switch (bond.getBondType()) {
-    case RDKit::Bond::DOUBLE: return INCHI_BOND_TYPE_DOUBLE;
-    case RDKit::Bond::TRIPLE: return INCHI_BOND_TYPE_TRIPLE;
-    case RDKit::Bond::AROMATIC: return INCHI_BOND_TYPE_ALTERN;
-    default: return INCHI_BOND_TYPE_SINGLE;
+    case RDKit::Bond::DOUBLE:
+      return INCHI_BOND_TYPE_DOUBLE;
+    case RDKit::Bond::TRIPLE:
+      return INCHI_BOND_TYPE_TRIPLE;
+    case RDKit::Bond::AROMATIC:
+      return INCHI_BOND_TYPE_ALTERN;
+    default:
+      return INCHI_BOND_TYPE_SINGLE;
   }
 }
 
@@ -52,7 +57,8 @@ bool addBond(std::vector<inchi_Atom>& atoms, const RDKit::Bond& bond) {
   const unsigned int first = std::min(bond.getBeginAtomIdx(), bond.getEndAtomIdx());
   const unsigned int second = std::max(bond.getBeginAtomIdx(), bond.getEndAtomIdx());
   inchi_Atom& atom = atoms[first];
-  if (atom.num_bonds >= MAXVAL || bond.getOwningMol().getAtomWithIdx(second)->getDegree() > MAXVAL) {
+  if (atom.num_bonds >= MAXVAL ||
+      bond.getOwningMol().getAtomWithIdx(second)->getDegree() > MAXVAL) {
     return false;
   }
   atom.neighbor[atom.num_bonds] = static_cast<AT_NUM>(second);
@@ -103,7 +109,7 @@ std::optional<inchi_Stereo0D> doubleBondParity(const RDKit::Bond& bond) {
 }
 
 std::optional<InchiInput> inchiInput(const RDKit::ROMol& mol) {
-  if (mol.getNumAtoms() > kMostAtoms) return std::nullopt;
+  if (mol.getNumAtoms() > kMostInchiAtoms) return std::nullopt;
   InchiInput input;
   for (const RDKit::Atom* atom : mol.atoms()) {
     input.atoms.push_back(inchiAtom(*atom));

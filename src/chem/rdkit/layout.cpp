@@ -36,9 +36,9 @@ void normalise(RDKit::RWMol& mol) {
   RDKit::Conformer& layout = mol.getConformer();
   std::vector<double> lengths;
   for (const RDKit::Bond* bond : mol.bonds()) {
-    lengths.push_back((layout.getAtomPos(bond->getBeginAtomIdx()) -
-                       layout.getAtomPos(bond->getEndAtomIdx()))
-                          .length());
+    lengths.push_back(
+        (layout.getAtomPos(bond->getBeginAtomIdx()) - layout.getAtomPos(bond->getEndAtomIdx()))
+            .length());
   }
   if (lengths.empty()) return;
   const auto middle = lengths.begin() + static_cast<std::ptrdiff_t>(lengths.size() / 2);

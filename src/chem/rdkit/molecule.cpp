@@ -7,11 +7,13 @@
 #include <GraphMol/SanitException.h>
 #include <GraphMol/SmilesParse/SmilesParse.h>
 #include <RDGeneral/RDLog.h>
+#include <fmt/format.h>
 
 #include <optional>
 #include <string>
 
 #include "chem/rdkit/smiles_scan.h"
+#include "chem/rdkit/smiles_syntax.h"
 
 namespace vialkeeper::chem {
 namespace {
@@ -35,73 +37,101 @@ RDKit::SmilesParserParams parserSettings(bool sanitize) {
   return settings;
 }
 
-std::string described(const AtomPlace& place) {
-  return place.text + " at position " + std::to_string(place.position);
+StructureFault valenceFault(const std::string& atom) {
+  return {fmt::format("the atom {} has more bonds than its element and charge allow", atom),
+          "check its bonds, charge and hydrogens; a quaternary nitrogen is written "
+          "[N+], the bond from a donor to a metal ->, and ions stand apart with ."};
 }
 
-StructureFault valenceFault(const AtomPlace& place) {
-  return {"the atom " + described(place) + " has more bonds than its element and charge allow",
-          "check its bonds, charge and hydrogens; a quaternary nitrogen is written [N+]"};
+StructureFault aromaticFault(const std::string& atom) {
+  return {
+      fmt::format("the aromatic (lower-case) ring with {} has no arrangement of alternating double "
+                  "bonds",
+                  atom),
+      "write the hydrogen of a pyrrole-type nitrogen as [nH], or write the ring with capital "
+      "letters and = bonds"};
 }
 
-StructureFault aromaticFault(const AtomPlace& place) {
-  return {"the aromatic (lower-case) ring with " + described(place) +
-              " has no arrangement of alternating double bonds",
-          "write the hydrogen of a pyrrole-type nitrogen as [nH], or write the ring with capital "
-          "letters and = bonds"};
-}
-
-/// Why RDKit refused a SMILES of good syntax. Parses again without sanitising, so that the atoms
-/// stand in the order of writing.
-StructureFault explainChemistry(std::string_view smiles) {
-  const std::unique_ptr<RWMol> mol(
-      RDKit::SmilesToMol(std::string(smiles), parserSettings(false)));
-  if (mol) {
-    for (const auto& problem : RDKit::MolOps::detectChemistryProblems(*mol)) {
-      if (const auto* ring = dynamic_cast<const RDKit::KekulizeException*>(problem.get())) {
-        if (ring->getAtomIndices().empty()) continue;
-        return aromaticFault(placeOfAtom(smiles, ring->getAtomIndices().front()));
-      }
-      if (const auto* atom = dynamic_cast<const RDKit::AtomSanitizeException*>(problem.get())) {
-        const AtomPlace place = placeOfAtom(smiles, atom->getAtomIdx());
-        if (atom->getType() == "AtomValenceException") return valenceFault(place);
-        if (atom->getType() == "AtomKekulizeException") {
-          return {"the atom " + described(place) + " is aromatic (lower-case) outside of a ring",
-                  "write it with a capital letter, or close its ring"};
-        }
-        return aromaticFault(place);
-      }
-    }
+/// RDKit's problem in our words, with the place of the first atom that it names.
+std::optional<StructureFault> explained(const RDKit::MolSanitizeException& problem,
+                                        std::string_view smiles) {
+  if (const auto* ring = dynamic_cast<const RDKit::KekulizeException*>(&problem)) {
+    if (ring->getAtomIndices().empty()) return std::nullopt;
+    return aromaticFault(describedAtom(smiles, ring->getAtomIndices().front()));
   }
-  return {"the bonds and charges of the SMILES do not add up to a structure",
+  const auto* atom = dynamic_cast<const RDKit::AtomSanitizeException*>(&problem);
+  if (atom == nullptr) return std::nullopt;
+  const std::string place = describedAtom(smiles, atom->getAtomIdx());
+  if (atom->getType() == "AtomValenceException") return valenceFault(place);
+  if (atom->getType() != "AtomKekulizeException") return aromaticFault(place);
+  return StructureFault{
+      fmt::format("the atom {} is aromatic (lower-case) outside of a ring", place),
+      "write it with a capital letter, or close its ring"};
+}
+
+/// Why RDKit refused a SMILES of good syntax. Parses it again with all hydrogens left where they
+/// are, so that the atoms stand in the order of writing when the problem is met.
+StructureFault explainChemistry(std::string_view smiles) {
+  try {
+    const std::unique_ptr<RWMol> mol(
+        RDKit::SmilesToMol(std::string(smiles), parserSettings(false)));
+    if (mol) RDKit::MolOps::sanitizeMol(*mol);
+  } catch (const RDKit::MolSanitizeException& problem) {
+    if (auto found = explained(problem, smiles)) return *found;
+  } catch (const std::exception&) {
+    // RDKit cannot say more about it: the general sentence has to do.
+  }
+  return {"the bonds, hydrogens and charges of the SMILES do not add up to a structure",
           "compare it with the drawing it came from, or export the SMILES again"};
 }
 
+std::optional<StructureFault> refuseAtom(const RDKit::Atom& atom) {
+  const int element = atom.getAtomicNum();
+  if (element == 0 || atom.hasQuery()) {
+    return StructureFault{
+        "one atom of the SMILES stands for any atom, so the substance has no molar mass",
+        "write the atom or group that is really there"};
+  }
+  if (atom.getFormalCharge() > element) {
+    return StructureFault{
+        fmt::format("an atom {} has a larger charge than it has electrons", atom.getSymbol()),
+        "correct its charge"};
+  }
+  const unsigned int isotope = atom.getIsotope();
+  if (isotope == 0) return std::nullopt;
+  const auto* table = RDKit::PeriodicTable::getTable();
+  if (table->getMassForIsotope(static_cast<unsigned int>(element), isotope) > 0.0) {
+    return std::nullopt;
+  }
+  return StructureFault{fmt::format("there is no nuclide [{}{}]", isotope, atom.getSymbol()),
+                        "correct the mass number, or leave it out for the natural mixture"};
+}
+
+std::optional<StructureFault> refuseBond(const RDKit::Bond& bond) {
+  if (bond.hasQuery()) {
+    return StructureFault{"one bond of the SMILES stands for any bond",
+                          "write every bond as what it is"};
+  }
+  const bool betweenAromatic =
+      bond.getBeginAtom()->getIsAromatic() && bond.getEndAtom()->getIsAromatic();
+  if (bond.getBondType() == RDKit::Bond::AROMATIC && !betweenAromatic) {
+    return StructureFault{
+        "an aromatic bond (:) of the SMILES is between atoms that are not aromatic",
+        "write it as a single or double bond, or its atoms in lower case"};
+  }
+  return std::nullopt;
+}
+
 /// What RDKit accepts although no substance is meant by it.
-std::optional<StructureFault> refuseAtoms(const RWMol& mol) {
+std::optional<StructureFault> refuseMolecule(const RWMol& mol) {
   if (mol.getNumAtoms() == 0) {
     return StructureFault{"the SMILES has no atoms", "give the SMILES of a substance"};
   }
   for (const RDKit::Atom* atom : mol.atoms()) {
-    if (atom->getAtomicNum() == 0 || atom->hasQuery()) {
-      return StructureFault{
-          "one atom of the SMILES stands for any atom, so the substance has no molar mass",
-          "write the atom or group that is really there"};
-    }
-    const unsigned int isotope = atom->getIsotope();
-    if (isotope == 0) continue;
-    const auto element = static_cast<unsigned int>(atom->getAtomicNum());
-    if (!(RDKit::PeriodicTable::getTable()->getMassForIsotope(element, isotope) > 0.0)) {
-      return StructureFault{
-          "there is no nuclide [" + std::to_string(isotope) + atom->getSymbol() + "]",
-          "correct the mass number, or leave it out for the natural mixture"};
-    }
+    if (auto refused = refuseAtom(*atom)) return refused;
   }
   for (const RDKit::Bond* bond : mol.bonds()) {
-    if (bond->hasQuery()) {
-      return StructureFault{"one bond of the SMILES stands for any bond",
-                            "write every bond as what it is"};
-    }
+    if (auto refused = refuseBond(*bond)) return refused;
   }
   return std::nullopt;
 }
@@ -115,13 +145,13 @@ std::expected<std::unique_ptr<RWMol>, StructureFault> parseMolecule(std::string_
   std::unique_ptr<RWMol> mol;
   try {
     mol.reset(RDKit::SmilesToMol(std::string(smiles), parserSettings(true)));
-  } catch (const RDKit::MolSanitizeException&) {
-    return std::unexpected(explainChemistry(smiles));
   } catch (const RDKit::SmilesParseException&) {
     return std::unexpected(explainSyntax(smiles));
+  } catch (const std::exception&) {  // sanitising, and invariants that absurd counts break
+    return std::unexpected(explainChemistry(smiles));
   }
   if (!mol) return std::unexpected(explainSyntax(smiles));
-  if (auto refused = refuseAtoms(*mol)) return std::unexpected(*refused);
+  if (auto refused = refuseMolecule(*mol)) return std::unexpected(*refused);
   return mol;
 }
 

@@ -1,6 +1,7 @@
 // SPDX-FileCopyrightText: The Vialkeeper developers
 // SPDX-License-Identifier: GPL-3.0-or-later
 #include <GraphMol/MolDraw2D/MolDraw2DSVG.h>
+#include <fmt/format.h>
 
 #include <algorithm>
 #include <cmath>
@@ -59,9 +60,8 @@ class RdkitDrawer final : public StructureDrawer {
     return guarded([&]() -> std::expected<std::string, StructureFault> {
       if (std::min(width_px, height_px) < 1 || std::max(width_px, height_px) > kLargestSide_px) {
         return std::unexpected(StructureFault{
-            "a drawing of " + std::to_string(width_px) + " by " + std::to_string(height_px) +
-                " px cannot be made",
-            "give a width and a height from 1 to " + std::to_string(kLargestSide_px) + " px"});
+            fmt::format("a drawing of {} by {} px cannot be made", width_px, height_px),
+            fmt::format("give a width and a height from 1 to {} px", kLargestSide_px)});
       }
       const auto mol = parseMolecule(smiles);
       if (!mol) return std::unexpected(mol.error());
@@ -74,9 +74,8 @@ class RdkitDrawer final : public StructureDrawer {
       const auto mol = parseMolecule(smiles);
       if (!mol) return std::unexpected(mol.error());
       const SvgPicture picture = draw(**mol);
-      return StructureEngine::Extent{
-          static_cast<int>(std::ceil(picture.right - picture.left)),
-          static_cast<int>(std::ceil(picture.bottom - picture.top))};
+      return StructureEngine::Extent{static_cast<int>(std::ceil(picture.right - picture.left)),
+                                     static_cast<int>(std::ceil(picture.bottom - picture.top))};
     });
   }
 };

@@ -1,0 +1,187 @@
+// SPDX-FileCopyrightText: The Vialkeeper developers
+// SPDX-License-Identifier: GPL-3.0-or-later
+#include "exports/page_parts.h"
+
+#include <algorithm>
+
+namespace vialkeeper::exports {
+namespace {
+
+const TextStyle kHeading{8.5, Weight::kBold, colours::kInk};
+const TextStyle kBody{8.0, Weight::kRegular, colours::kInk};
+const TextStyle kBodyBold{8.0, Weight::kBold, colours::kInk};
+const TextStyle kNotice{7.8, Weight::kRegular, colours::kWarning};
+
+constexpr double kAfterHeading_mm = 1.6;
+constexpr double kBetweenParagraphs_mm = 1.3;
+
+/// A paragraph as a block at a fixed left edge.
+Block textBlock(const TextBlock& text, double x_mm, double gap_mm) {
+  return {text.height_mm(),
+          [text, x_mm](PagePainter& painter, double y_mm) { painter.text(text, x_mm, y_mm); },
+          gap_mm};
+}
+
+Blocks cautionBlocks(const Setting& setting, const std::vector<std::string>& cautions, double x_mm,
+                     double width_mm) {
+  constexpr double kIndent_mm = 3.2;
+  Blocks blocks;
+  if (cautions.empty()) return blocks;
+  blocks.push_back(textBlock(heading(setting, QStringLiteral("Cautions")), x_mm, 0.0));
+  for (const std::string& caution : cautions) {
+    const TextBlock text(setting.typesetter, toQString(caution), kBody, width_mm - kIndent_mm);
+    const double gap = blocks.size() == 1 ? kAfterHeading_mm : kBetweenParagraphs_mm;
+    blocks.push_back({text.height_mm(),
+                      [text, x_mm](PagePainter& painter, double y_mm) {
+                        QPainterPath dot;
+                        dot.addEllipse(QPointF(0.0, 0.0), 0.5, 0.5);
+                        painter.fill(dot, x_mm + 0.6, y_mm + text.ascent_mm() * 0.66, 1.0,
+                                     colours::kInk);
+                        painter.text(text, x_mm + kIndent_mm, y_mm);
+                      },
+                      gap});
+  }
+  return blocks;
+}
+
+/// Several blocks as one.
+Block merged(const Blocks& blocks) {
+  return {heightOf(blocks), [blocks](PagePainter& painter, double y_mm) {
+            for (std::size_t i = 0; i < blocks.size(); ++i) {
+              if (i > 0) y_mm += blocks[i].gap_mm;
+              blocks[i].draw(painter, y_mm);
+              y_mm += blocks[i].height_mm;
+            }
+          }};
+}
+
+}  // namespace
+
+TextBlock heading(const Setting& setting, const QString& text) {
+  return TextBlock(setting.typesetter, text, kHeading, setting.page.contentWidth());
+}
+
+QString dotted(const std::vector<std::string>& texts) {
+  QString line;
+  for (const std::string& text : texts) {
+    if (text.empty()) continue;
+    if (!line.isEmpty()) line += QStringLiteral(" · ");
+    line += toQString(text);
+  }
+  return line;
+}
+
+Blocks noticeBlocks(const Setting& setting, const std::vector<std::string>& notices, double x_mm,
+                    double width_mm) {
+  constexpr double kSign_mm = 2.9;
+  constexpr double kIndent_mm = 4.2;
+  Blocks blocks;
+  for (const std::string& notice : notices) {
+    const TextBlock text(setting.typesetter, toQString(notice), kNotice, width_mm - kIndent_mm);
+    blocks.push_back({text.height_mm(),
+                      [text, x_mm](PagePainter& painter, double y_mm) {
+                        painter.warningSign(x_mm, y_mm + text.ascent_mm() - kSign_mm * 0.9,
+                                            kSign_mm);
+                        painter.text(text, x_mm + kIndent_mm, y_mm);
+                      },
+                      0.8});
+  }
+  return blocks;
+}
+
+Blocks hazardBlocks(const Setting& setting, const std::vector<app::HazardContent>& hazards) {
+  constexpr double kNameShare = 0.23;
+  constexpr double kColumnGap_mm = 4.0;
+  Blocks blocks;
+  if (hazards.empty()) return blocks;
+  const double left = setting.page.left();
+  const double nameWidth = kNameShare * setting.page.contentWidth();
+  const double textLeft = left + nameWidth + kColumnGap_mm;
+  blocks.push_back(textBlock(heading(setting, QStringLiteral("Hazards")), left,
+                             setting.density.sectionGap_mm));
+  for (const app::HazardContent& hazard : hazards) {
+    const TextBlock name(setting.typesetter, toQString(hazard.name), kBodyBold, nameWidth);
+    const TextBlock text(setting.typesetter, dotted(hazard.statements), kBody,
+                         setting.page.right() - textLeft);
+    blocks.push_back({std::max(name.height_mm(), text.height_mm()),
+                      [name, text, left, textLeft](PagePainter& painter, double y_mm) {
+                        painter.text(name, left, y_mm);
+                        painter.text(text, textLeft, y_mm);
+                      },
+                      blocks.size() == 1 ? kAfterHeading_mm : kBetweenParagraphs_mm});
+  }
+  return blocks;
+}
+
+Blocks besideCautions(const Setting& setting, const Block& left, double leftWidth_mm,
+                      const std::vector<std::string>& cautions) {
+  constexpr double kColumnGap_mm = 8.0;
+  constexpr double kTooLong_mm = 110.0;
+  const double x = setting.page.left() + leftWidth_mm + kColumnGap_mm;
+  const Blocks column = cautionBlocks(setting, cautions, x, setting.page.right() - x);
+  if (heightOf(column) > std::max(kTooLong_mm, left.height_mm)) {
+    Blocks blocks{left};
+    for (Block& block :
+         cautionBlocks(setting, cautions, setting.page.left(), setting.page.contentWidth())) {
+      if (blocks.size() == 1) block.gap_mm = setting.density.sectionGap_mm;
+      blocks.push_back(std::move(block));
+    }
+    return blocks;
+  }
+  const Block right = merged(column);
+  return {{std::max(left.height_mm, right.height_mm),
+           [left, right](PagePainter& painter, double y_mm) {
+             left.draw(painter, y_mm);
+             right.draw(painter, y_mm);
+           },
+           left.gap_mm}};
+}
+
+Block signBlock(const Setting& setting, const std::vector<QString>& labels) {
+  constexpr double kGap_mm = 4.0;
+  constexpr double kHeight_mm = 9.0;
+  std::vector<TextBlock> texts;
+  double used = kGap_mm * static_cast<double>(labels.size() - 1);
+  for (const QString& label : labels) {
+    texts.emplace_back(setting.typesetter, label, kBody, setting.page.contentWidth());
+    used += texts.back().width_mm() + 1.5;
+  }
+  const double line = (setting.page.contentWidth() - used) / static_cast<double>(labels.size());
+  const double left = setting.page.left();
+  return {kHeight_mm, [texts, line, left](PagePainter& painter, double y_mm) {
+            const double baseline = y_mm + kHeight_mm - 1.5;
+            double x = left;
+            for (const TextBlock& text : texts) {
+              painter.text(text, x, baseline - text.ascent_mm());
+              x += text.width_mm() + 1.5;
+              painter.rule(x, baseline + 0.5, line, colours::kBox, 0.25);
+              x += line + kGap_mm;
+            }
+          }};
+}
+
+bool closePage(PageFlow& flow, const Setting& setting, const std::vector<QString>& signLabels) {
+  constexpr double kLeastNotes_mm = 25.0;
+  constexpr double kLine_mm = 8.0;
+  const Block sign = signBlock(setting, signLabels);
+  if (flow.remaining_mm() < sign.height_mm + 2.0) flow.newPage();
+  const double room = flow.remaining_mm() - sign.height_mm - setting.density.sectionGap_mm;
+  const bool hasNotes = room >= kLeastNotes_mm;
+  if (hasNotes) {
+    const TextBlock title = heading(setting, QStringLiteral("Notes"));
+    const double left = setting.page.left();
+    const double width = setting.page.contentWidth();
+    flow.add({room,
+              [title, left, width, room](PagePainter& painter, double y_mm) {
+                painter.text(title, left, y_mm);
+                for (double y = title.height_mm() + kLine_mm; y <= room; y += kLine_mm) {
+                  painter.rule(left, y_mm + y, width);
+                }
+              },
+              setting.density.sectionGap_mm});
+  }
+  flow.addAtBottom(sign);
+  return hasNotes;
+}
+
+}  // namespace vialkeeper::exports

@@ -1,0 +1,25 @@
+// SPDX-FileCopyrightText: The Vialkeeper developers
+// SPDX-License-Identifier: GPL-3.0-or-later
+#include "exports/pages.h"
+
+#include "exports/pages_module.h"
+#include "exports/scheme_pictures.h"
+
+namespace vialkeeper::exports {
+
+text::Checked<PdfDocument> printWeighingSheet(const app::SheetContent& content, Paper paper) {
+  const auto printer = pagePrinter();
+  if (!printer) return std::unexpected(printer.error());
+  const auto pictures = drawStructures(content.scheme);
+  if (!pictures) return std::unexpected(pictures.error());
+  return (*printer)->weighingSheet(content, *pictures, paper);
+}
+
+text::Checked<PdfDocument> printStockSheets(const std::vector<app::StockSheetContent>& contents,
+                                            Paper paper) {
+  const auto printer = pagePrinter();
+  if (!printer) return std::unexpected(printer.error());
+  return (*printer)->stockSheets(contents, paper);
+}
+
+}  // namespace vialkeeper::exports

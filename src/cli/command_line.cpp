@@ -1,0 +1,116 @@
+// SPDX-FileCopyrightText: The Vialkeeper developers
+// SPDX-License-Identifier: GPL-3.0-or-later
+#include "cli/command_line.h"
+
+#include <fmt/format.h>
+#include <fmt/ranges.h>
+
+#include <CLI/CLI.hpp>
+#include <algorithm>
+#include <exception>
+#include <ostream>
+#include <vector>
+
+#include "cli/verb.h"
+#include "text/utf8.h"
+#include "units/toml_section.h"
+
+namespace vialkeeper::cli {
+namespace {
+
+using text::Fault;
+using text::FaultKind;
+using text::Faults;
+
+int exitStatus(const Faults& faults) {
+  const auto any = [&faults](FaultKind kind) {
+    return std::ranges::any_of(faults, [kind](const Fault& fault) { return fault.kind == kind; });
+  };
+  if (any(FaultKind::kNotebook)) return 3;
+  return any(FaultKind::kUsage) ? 2 : 1;
+}
+
+int report(const Faults& faults, std::ostream& err) {
+  for (const Fault& fault : faults) err << text::toLine(fault) << '\n';
+  return exitStatus(faults);
+}
+
+std::string helpHint(const CLI::App& program) {
+  for (const CLI::App* verb : program.get_subcommands()) {
+    return fmt::format("see vialkeeper {} --help", verb->get_name());
+  }
+  return "see vialkeeper --help";
+}
+
+Fault unknownVerb(const CLI::App& program, const std::string& name) {
+  std::vector<std::string> verbs;
+  for (const CLI::App* verb : program.get_subcommands([](const CLI::App*) { return true; })) {
+    verbs.push_back(verb->get_name());
+  }
+  const auto nearest = units::nearestName(name, verbs);
+  return usageFault(name, "this verb is not known",
+                    nearest ? fmt::format("did you mean {}?", *nearest)
+                            : fmt::format("choose among {}", fmt::join(verbs, ", ")));
+}
+
+/// The parser's complaint in our words.
+Faults parserFaults(const CLI::App& program, const CLI::ParseError& error) {
+  const bool verbGiven = !program.get_subcommands().empty();
+  if (error.get_exit_code() == static_cast<int>(CLI::ExitCodes::ExtrasError)) {
+    Faults faults;
+    for (const std::string& extra : program.remaining(true)) {
+      if (!verbGiven && faults.empty() && !extra.starts_with('-')) return {unknownVerb(program, extra)};
+      const bool option = extra.starts_with('-');
+      faults.push_back(usageFault(extra, option ? "this option is not known" : "one argument too many",
+                                  helpHint(program)));
+    }
+    if (!faults.empty()) return faults;
+  }
+  if (error.get_exit_code() == static_cast<int>(CLI::ExitCodes::RequiredError) && !verbGiven) {
+    // The parser misses the verb before it looks at what it could not place.
+    for (const std::string& extra : program.remaining()) {
+      if (!extra.starts_with('-')) return {unknownVerb(program, extra)};
+    }
+    return {usageFault("", "no verb is given", helpHint(program))};
+  }
+  return {usageFault("", text::oneLine(error.what()), helpHint(program))};
+}
+
+void describe(CLI::App& program, CommonOptions& common) {
+  program.description("Vialkeeper: a record for light-driven, hydrogen-evolving reactions in sealed vials.");
+  program.set_version_flag("--version", "vialkeeper " VIALKEEPER_VERSION);
+  program.add_option("--book", common.book, "the notebook file");
+  program.add_flag("--json", common.json, "print one JSON object in place of a table");
+  program.require_subcommand(1);
+  program.fallthrough();
+  program.footer("Exit status: 0 done, 1 the input is at fault, 2 the command line, 3 the notebook.");
+}
+
+}  // namespace
+
+int run(std::span<const std::string> arguments, std::ostream& out, std::ostream& err) {
+  CLI::App program;
+  program.name("vialkeeper");
+  CommonOptions common;
+  describe(program, common);
+  const std::vector<Verb> verbs = {massVerb(program), chargeVerb(program), sheetVerb(program)};
+  try {
+    // CLI11 takes its arguments from the back.
+    program.parse(std::vector<std::string>(arguments.rbegin(), arguments.rend()));
+  } catch (const CLI::Success& wanted) {
+    return program.exit(wanted, out, err);  // --help, --version
+  } catch (const CLI::ParseError& error) {
+    return report(parserFaults(program, error), err);
+  }
+  for (const Verb& verb : verbs) {
+    if (!verb.parser->parsed()) continue;
+    const VerbResult result = verb.run(common);
+    if (!result) return report(result.error(), err);
+    out << *result;
+    if (out.flush()) return 0;
+    return report({{.what = "the output could not be written", .mend = "check the disk or the pipe"}}, err);
+  }
+  return 2;
+}
+
+}  // namespace vialkeeper::cli
