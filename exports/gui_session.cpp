@@ -60,10 +60,10 @@ text::Checked<QString> startGuiSession() {
   }
   const QStringList installed = QFontDatabase::families();
   if (installed.isEmpty()) {
-    return std::unexpected(
-        text::Faults{{.kind = text::FaultKind::kUsage,
-                      .what = "no font is installed, so that no page can be printed",
-                      .mend = "install one, DejaVu Sans for example (fonts-dejavu-core on Debian)"}});
+    return std::unexpected(text::Faults{
+        {.kind = text::FaultKind::kUsage,
+         .what = "no font is installed, so that no page can be printed",
+         .mend = "install one, DejaVu Sans for example (fonts-dejavu-core on Debian)"}});
   }
   return preferredFamily(installed);
 }

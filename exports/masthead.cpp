@@ -65,7 +65,8 @@ void drawEntry(PagePainter& painter, const PlacedEntry& entry, double x_mm, doub
   const double valueLeft = x_mm + entry.x_mm + entry.label.width_mm() + kAfterLabel_mm;
   painter.text(entry.label, x_mm + entry.x_mm, baseline - entry.label.ascent_mm());
   painter.text(entry.value, valueLeft, baseline - entry.value.ascent_mm());
-  if (entry.value.isEmpty()) painter.rule(valueLeft, baseline + 0.6, kBlank_mm, colours::kBox, 0.25);
+  if (entry.value.isEmpty())
+    painter.rule(valueLeft, baseline + 0.6, kBlank_mm, colours::kBox, 0.25);
 }
 
 /// Code and title: beside each other on one baseline if both fit, else the title below.
@@ -115,10 +116,11 @@ Block mastheadBlock(const Setting& setting, const Masthead& masthead) {
   const Names names = namesOf(setting, masthead, width);
   const std::vector<PlacedEntry> entries =
       placeEntries(setting, masthead.entries, width, names.height_mm + kAfterNames_mm);
-  double height = std::max(names.height_mm, qrSide + (masthead.qr ? masthead.qr->quietZone_mm() : 0.0));
+  double height =
+      std::max(names.height_mm, qrSide + (masthead.qr ? masthead.qr->quietZone_mm() : 0.0));
   for (const PlacedEntry& entry : entries) {
-    height = std::max({height, entry.y_mm + entry.value.height_mm(),
-                       entry.y_mm + entry.label.height_mm() + 1.0});
+    height = std::max(
+        {height, entry.y_mm + entry.value.height_mm(), entry.y_mm + entry.label.height_mm() + 1.0});
   }
   return {height, [=, qr = masthead.qr](PagePainter& painter, double y_mm) {
             painter.text(names.code, left, y_mm + names.codeTop_mm);
@@ -137,7 +139,8 @@ PageFurniture furniture(const Setting& setting, const std::string& code, const s
   constexpr double kNumber_mm = 30.0;
   const Typesetter typesetter = setting.typesetter;
   const PageGeometry page = setting.page;
-  const QString codeLine = shortened(typesetter, toQString(code), kHeadCode, page.contentWidth() / 2);
+  const QString codeLine =
+      shortened(typesetter, toQString(code), kHeadCode, page.contentWidth() / 2);
   const double codeWidth = textWidth_mm(typesetter, codeLine, kHeadCode);
   const double titleLeft = codeLine.isEmpty() ? 0.0 : codeWidth + 2.5;
   const double titleWidth = page.contentWidth() - titleLeft;
@@ -145,7 +148,8 @@ PageFurniture furniture(const Setting& setting, const std::string& code, const s
   const TextBlock headTitle(typesetter,
                             shortened(typesetter, toQString(title), kHeadTitle, titleWidth - 1.0),
                             kHeadTitle, titleWidth);
-  const TextBlock foot(typesetter, toQString(footer), kFoot, page.contentWidth() - kNumber_mm - 4.0);
+  const TextBlock foot(typesetter, toQString(footer), kFoot,
+                       page.contentWidth() - kNumber_mm - 4.0);
   const double number = TextBlock(typesetter, QStringLiteral("0"), kFoot, kNumber_mm).height_mm();
   PageFurniture furniture;
   furniture.headHeight_mm = std::max(headCode.height_mm(), headTitle.height_mm()) + 6.0;

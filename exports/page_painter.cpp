@@ -23,8 +23,7 @@ void PagePainter::box(const QRectF& rect_mm, double thickness_mm, const QColor& 
   constexpr double kCorner_mm = 1.2;
   m_painter.setPen(QPen(colour, thickness_mm * m_unitsPerMm));
   m_painter.setBrush(Qt::NoBrush);
-  m_painter.drawRoundedRect(toUnits(rect_mm), kCorner_mm * m_unitsPerMm,
-                            kCorner_mm * m_unitsPerMm);
+  m_painter.drawRoundedRect(toUnits(rect_mm), kCorner_mm * m_unitsPerMm, kCorner_mm * m_unitsPerMm);
 }
 
 void PagePainter::dashedBox(const QRectF& rect_mm) {

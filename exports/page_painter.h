@@ -17,14 +17,11 @@ class PagePainter {
   PagePainter(QPainter& painter, const Typesetter& typesetter)
       : m_painter(painter), m_unitsPerMm(typesetter.unitsPerMm) {}
 
-  void text(const TextBlock& block, double x_mm, double y_mm) {
-    block.draw(m_painter, x_mm, y_mm);
-  }
+  void text(const TextBlock& block, double x_mm, double y_mm) { block.draw(m_painter, x_mm, y_mm); }
   void rule(double x_mm, double y_mm, double width_mm, const QColor& colour = colours::kHairline,
             double thickness_mm = 0.2);
   /// An empty box with rounded corners, to write in.
-  void box(const QRectF& rect_mm, double thickness_mm = 0.3,
-           const QColor& colour = colours::kBox);
+  void box(const QRectF& rect_mm, double thickness_mm = 0.3, const QColor& colour = colours::kBox);
   void dashedBox(const QRectF& rect_mm);
   void tickBox(double x_mm, double y_mm, double side_mm);
   /// A triangle with an exclamation mark, as a shape: fonts without the character have it too.

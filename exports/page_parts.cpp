@@ -44,6 +44,13 @@ Blocks cautionBlocks(const Setting& setting, const std::vector<std::string>& cau
   return blocks;
 }
 
+/// A statement whose code is not parted from its first word: `H302 Harmful if swallowed`.
+QString codeBound(QString statement) {
+  const qsizetype blank = statement.indexOf(QLatin1Char(' '));
+  if (blank > 0 && blank <= 7) statement[blank] = QChar(QChar::Nbsp);
+  return statement;
+}
+
 /// Several blocks as one.
 Block merged(const Blocks& blocks) {
   return {heightOf(blocks), [blocks](PagePainter& painter, double y_mm) {
@@ -57,18 +64,31 @@ Block merged(const Blocks& blocks) {
 
 }  // namespace
 
+Blocks paragraphBlocks(const TextBlock& text, double x_mm, double gap_mm) {
+  constexpr int kLinesTogether = 20;
+  Blocks blocks;
+  for (int line = 0; line < text.lines(); line += kLinesTogether) {
+    blocks.push_back(textBlock(text.slice(line, kLinesTogether), x_mm, line == 0 ? gap_mm : 0.0));
+  }
+  return blocks;
+}
+
 TextBlock heading(const Setting& setting, const QString& text) {
   return TextBlock(setting.typesetter, text, kHeading, setting.page.contentWidth());
 }
 
-QString dotted(const std::vector<std::string>& texts) {
+QString dotted(const std::vector<QString>& texts) {
   QString line;
-  for (const std::string& text : texts) {
-    if (text.empty()) continue;
-    if (!line.isEmpty()) line += QStringLiteral(" · ");
-    line += toQString(text);
+  for (const QString& text : texts) {
+    if (text.isEmpty()) continue;
+    if (!line.isEmpty()) line += QStringLiteral("\u00A0· ");
+    line += text;
   }
   return line;
+}
+
+QString unbroken(const std::string& text) {
+  return toQString(text).replace(QLatin1Char(' '), QChar(QChar::Nbsp));
 }
 
 Blocks noticeBlocks(const Setting& setting, const std::vector<std::string>& notices, double x_mm,
@@ -97,11 +117,15 @@ Blocks hazardBlocks(const Setting& setting, const std::vector<app::HazardContent
   const double left = setting.page.left();
   const double nameWidth = kNameShare * setting.page.contentWidth();
   const double textLeft = left + nameWidth + kColumnGap_mm;
-  blocks.push_back(textBlock(heading(setting, QStringLiteral("Hazards")), left,
-                             setting.density.sectionGap_mm));
+  blocks.push_back(
+      textBlock(heading(setting, QStringLiteral("Hazards")), left, setting.density.sectionGap_mm));
   for (const app::HazardContent& hazard : hazards) {
     const TextBlock name(setting.typesetter, toQString(hazard.name), kBodyBold, nameWidth);
-    const TextBlock text(setting.typesetter, dotted(hazard.statements), kBody,
+    std::vector<QString> statements;
+    for (const std::string& statement : hazard.statements) {
+      statements.push_back(codeBound(toQString(statement)));
+    }
+    const TextBlock text(setting.typesetter, dotted(statements), kBody,
                          setting.page.right() - textLeft);
     blocks.push_back({std::max(name.height_mm(), text.height_mm()),
                       [name, text, left, textLeft](PagePainter& painter, double y_mm) {

@@ -15,10 +15,10 @@ namespace vialkeeper::exports {
 
 /// How much air a page has: where a looser one would need another page, a denser one is taken.
 struct Density {
-  double rowPad_mm = 2.2;     ///< above and below each row of the table
-  double box_mm = 9.5;        ///< height of the boxes to write in
+  double rowPad_mm = 2.2;  ///< above and below each row of the table
+  double box_mm = 9.5;     ///< height of the boxes to write in
   double sectionGap_mm = 7.0;
-  double bond_mm = 5.2;       ///< see SchemeSize
+  double bond_mm = 5.2;  ///< see SchemeSize
   double structure_mm = 40.0;
 };
 
@@ -50,6 +50,9 @@ struct Masthead {
 [[nodiscard]] PageFurniture furniture(const Setting& setting, const std::string& code,
                                       const std::string& title, const std::string& footer);
 
+/// A paragraph at a left edge: one block, more where it is longer than most of a page.
+[[nodiscard]] Blocks paragraphBlocks(const TextBlock& text, double x_mm, double gap_mm);
+
 /// A section's heading.
 [[nodiscard]] TextBlock heading(const Setting& setting, const QString& text);
 
@@ -73,7 +76,10 @@ struct Masthead {
 /// True where there was room for notes.
 bool closePage(PageFlow& flow, const Setting& setting, const std::vector<QString>& signLabels);
 
-/// The texts that are not empty, with dots between.
-[[nodiscard]] QString dotted(const std::vector<std::string>& texts);
+/// The texts that are not empty, with dots between; a line never begins with a dot.
+[[nodiscard]] QString dotted(const std::vector<QString>& texts);
+
+/// The text with blanks at which no line breaks: a number and its unit stay together.
+[[nodiscard]] QString unbroken(const std::string& text);
 
 }  // namespace vialkeeper::exports

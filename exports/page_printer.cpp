@@ -36,8 +36,9 @@ class QtPagePrinter final : public PagePrinter {
   text::Checked<PdfDocument> stockSheets(const std::vector<app::StockSheetContent>& contents,
                                          Paper paper) override {
     if (contents.empty()) {
-      return std::unexpected(text::Faults{{.what = "the plan uses no stock solution to print a sheet for",
-                                           .mend = "print the weighing sheet alone"}});
+      return std::unexpected(
+          text::Faults{{.what = "the plan uses no stock solution to print a sheet for",
+                        .mend = "print the weighing sheet alone"}});
     }
     const auto family = startGuiSession();
     if (!family) return std::unexpected(family.error());

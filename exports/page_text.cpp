@@ -28,9 +28,12 @@ QFont fontOf(const Typesetter& typesetter, const TextStyle& style) {
 
 Qt::Alignment alignmentOf(Align align) {
   switch (align) {
-    case Align::kCentre: return Qt::AlignHCenter;
-    case Align::kRight: return Qt::AlignRight;
-    case Align::kLeft: break;
+    case Align::kCentre:
+      return Qt::AlignHCenter;
+    case Align::kRight:
+      return Qt::AlignRight;
+    case Align::kLeft:
+      break;
   }
   return Qt::AlignLeft;
 }
@@ -98,15 +101,25 @@ void TextBlock::breakIntoLines(double width_units) {
     widest = std::max(widest, line.naturalTextWidth());
   }
   m_layout->endLayout();
+  m_lines = m_layout->lineCount();
   m_height_mm = y / m_unitsPerMm;
   m_width_mm = widest / m_unitsPerMm;
 }
 
-int TextBlock::lines() const { return isEmpty() ? 0 : m_layout->lineCount(); }
+TextBlock TextBlock::slice(int firstLine, int lines) const {
+  TextBlock part = *this;
+  part.m_firstLine = m_firstLine + firstLine;
+  part.m_lines = std::min(lines, m_lines - firstLine);
+  part.m_height_mm = m_height_mm * part.m_lines / m_lines;
+  return part;
+}
 
 void TextBlock::draw(QPainter& painter, double x_mm, double y_mm) const {
   if (isEmpty()) return;
-  m_layout->draw(&painter, QPointF(x_mm * m_unitsPerMm, y_mm * m_unitsPerMm));
+  const double top = m_layout->lineAt(m_firstLine).y();
+  for (int i = m_firstLine; i < m_firstLine + m_lines; ++i) {
+    m_layout->lineAt(i).draw(&painter, QPointF(x_mm * m_unitsPerMm, y_mm * m_unitsPerMm - top));
+  }
 }
 
 double textWidth_mm(const Typesetter& typesetter, const QString& text, const TextStyle& style) {

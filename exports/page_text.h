@@ -68,7 +68,9 @@ class TextBlock {
   [[nodiscard]] double width_mm() const { return m_width_mm; }
   /// From the top to the first line's baseline.
   [[nodiscard]] double ascent_mm() const { return m_ascent_mm; }
-  [[nodiscard]] int lines() const;
+  [[nodiscard]] int lines() const { return m_lines; }
+  /// Some of its lines, as a paragraph of their own: for one that is longer than a page.
+  [[nodiscard]] TextBlock slice(int firstLine, int lines) const;
 
   /// Draws with the top left corner of the column at the given place.
   void draw(QPainter& painter, double x_mm, double y_mm) const;
@@ -77,6 +79,8 @@ class TextBlock {
   void breakIntoLines(double width_units);
 
   std::shared_ptr<QTextLayout> m_layout;
+  int m_firstLine = 0;
+  int m_lines = 0;
   double m_unitsPerMm = 1.0;
   double m_height_mm = 0.0;
   double m_width_mm = 0.0;

@@ -20,10 +20,11 @@ struct PdfDocument {
   int pages = 0;
 };
 
-/// The weighing sheet: one page where it fits, else broken between rows with the table's head repeated.
-/// Fonts are embedded, text can be selected, structures and the QR code are vector graphics.
-/// Fault: the pages module or a font is missing, a structure cannot be drawn.
-[[nodiscard]] text::Checked<PdfDocument> printWeighingSheet(const app::SheetContent& content, Paper paper);
+/// The weighing sheet: one page where it fits, else broken between rows with the table's head
+/// repeated. Fonts are embedded, text can be selected, structures and the QR code are vector
+/// graphics. Fault: the pages module or a font is missing, a structure cannot be drawn.
+[[nodiscard]] text::Checked<PdfDocument> printWeighingSheet(const app::SheetContent& content,
+                                                            Paper paper);
 
 /// One page for every stock solution.
 [[nodiscard]] text::Checked<PdfDocument> printStockSheets(

@@ -19,9 +19,8 @@ constexpr const char* kDirectoryVariable = "VIALKEEPER_MODULE_DIR";
 constexpr const char* kReinstall = "install Vialkeeper again, program and modules together";
 
 std::unexpected<text::Faults> moduleFault(std::string what, std::string mend) {
-  return std::unexpected(text::Faults{{.kind = text::FaultKind::kUsage,
-                                       .what = std::move(what),
-                                       .mend = std::move(mend)}});
+  return std::unexpected(text::Faults{
+      {.kind = text::FaultKind::kUsage, .what = std::move(what), .mend = std::move(mend)}});
 }
 
 /// The directories in which a module may stand, the most particular first: the same as for the
@@ -70,9 +69,8 @@ text::Checked<PagePrinter*> open(const fs::path& file) {
                        "libqrencode4 on Debian), then Vialkeeper again");
   }
   void* symbol = dlsym(handle, kPagesModuleFactory);
-  PagePrinter* printer = symbol != nullptr ? reinterpret_cast<PagesModuleFactory*>(symbol)(
-                                                 kPagesModuleAbi)
-                                           : nullptr;
+  PagePrinter* printer =
+      symbol != nullptr ? reinterpret_cast<PagesModuleFactory*>(symbol)(kPagesModuleAbi) : nullptr;
   if (printer == nullptr) {
     return moduleFault(
         "the pages module " + file.string() + " belongs to another version of Vialkeeper",

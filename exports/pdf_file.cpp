@@ -47,8 +47,8 @@ PdfFile::PdfFile(Paper paper, const QString& family, const std::string& title)
 text::Checked<PdfDocument> PdfFile::write(const std::vector<PageFlow>& flows) {
   QPainter painter;
   if (!painter.begin(&m_writer)) {
-    return std::unexpected(
-        text::Faults{{.what = "the pages cannot be written", .mend = "free some memory and retry"}});
+    return std::unexpected(text::Faults{
+        {.what = "the pages cannot be written", .mend = "free some memory and retry"}});
   }
   painter.setRenderHint(QPainter::Antialiasing);
   PagePainter page(painter, m_typesetter);

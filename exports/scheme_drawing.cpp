@@ -5,7 +5,8 @@
 #include <QByteArray>
 #include <QSvgRenderer>
 #include <algorithm>
-#include <memory>
+
+#include "exports/page_parts.h"
 
 namespace vialkeeper::exports {
 namespace {
@@ -13,7 +14,8 @@ namespace {
 constexpr double kPixelsPerBond = 28.0;  // see chem/structure.h
 constexpr double kGap_mm = 3.0;          // between parts
 constexpr double kLabelGap_mm = 1.8;
-constexpr double kArrowText_mm = 52.0;   // the widest that conditions are set
+constexpr double kFarthestLabel_mm = 6.0;
+constexpr double kArrowText_mm = 52.0;  // the widest that conditions are set
 constexpr double kShortestArrow_mm = 24.0;
 const TextStyle kLabel{8.0, Weight::kRegular, colours::kInk};
 const TextStyle kConditions{7.5, Weight::kRegular, colours::kQuiet};
@@ -22,10 +24,10 @@ const TextStyle kFormula{12.0, Weight::kRegular, colours::kInk};
 /// A structure, a sign, a name or the arrow: all stand centred on the reaction's line.
 struct Part {
   const StructurePicture* picture = nullptr;
-  double scale_mm = 0.0;    ///< for one pixel of the picture
-  TextBlock text;           ///< on the line itself, where there is no picture
-  TextBlock label;          ///< below the structures of this line
-  TextBlock above;          ///< the arrow's
+  double scale_mm = 0.0;  ///< for one pixel of the picture
+  TextBlock text;         ///< on the line itself, where there is no picture
+  TextBlock label;        ///< below the structures of this line
+  TextBlock above;        ///< the arrow's
   TextBlock below;
   bool isArrow = false;
   double width_mm = 0.0;
@@ -50,6 +52,11 @@ QString joined(const std::vector<std::string>& lines) {
     text += toQString(line);
   }
   return text;
+}
+
+TextBlock conditions(const Typesetter& typesetter, const std::vector<std::string>& lines,
+                     double width_mm) {
+  return TextBlock(typesetter, joined(lines), kConditions, width_mm, Align::kCentre);
 }
 
 class SchemeSetter {
@@ -97,16 +104,19 @@ class SchemeSetter {
     part.scale_mm = m_scale_mm;
     const double drawn = picture.width_px * m_scale_mm;
     const double room = std::max(drawn, kNarrowestLabel_mm);
-    part.width_mm = std::max(drawn, std::min(textWidth_mm(m_typesetter, label, kLabel) + 0.5, room));
+    part.width_mm =
+        std::max(drawn, std::min(textWidth_mm(m_typesetter, label, kLabel) + 0.5, room));
     part.label = TextBlock(m_typesetter, label, kLabel, part.width_mm, Align::kCentre);
     return part;
   }
 
   Part arrowPart() {
-    const QString above = joined(m_scheme.above);
-    const QString below = joined(m_scheme.below);
-    const double text = std::min(kArrowText_mm, std::max(textWidth_mm(m_typesetter, above, kConditions),
-                                                         textWidth_mm(m_typesetter, below, kConditions)) + 0.5);
+    const QString above = m_size.conditionsOnArrow ? joined(m_scheme.above) : QString();
+    const QString below = m_size.conditionsOnArrow ? joined(m_scheme.below) : QString();
+    const double text =
+        std::min(kArrowText_mm, std::max(textWidth_mm(m_typesetter, above, kConditions),
+                                         textWidth_mm(m_typesetter, below, kConditions)) +
+                                    0.5);
     Part part;
     part.isArrow = true;
     part.width_mm = std::max(kShortestArrow_mm, text + 5.0);
@@ -218,31 +228,40 @@ void drawLine(PagePainter& painter, const SetLine& line, double x_mm, double y_m
     if (part.picture != nullptr) drawStructure(painter, part, x_mm, middle);
     if (part.isArrow) drawArrow(painter, part, x_mm, middle);
     painter.text(part.text, x_mm, middle - part.text.height_mm() / 2.0);
-    painter.text(part.label, x_mm, middle + line.labels_mm);
+    // Labels stand on one line, but not far below a structure that is much smaller than others.
+    const double own = part.pictureHeight() / 2.0 + kFarthestLabel_mm;
+    painter.text(part.label, x_mm, middle + std::min(line.labels_mm, own));
     x_mm += part.width_mm + kGap_mm;
   }
 }
 
 }  // namespace
 
-Block schemeBlock(const Typesetter& typesetter, const app::SchemeContent& scheme,
-                  const SchemePictures& pictures, const SchemeSize& size, double x_mm) {
+Blocks schemeBlocks(const Typesetter& typesetter, const app::SchemeContent& scheme,
+                    const SchemePictures& pictures, SchemeSize size, double x_mm) {
   constexpr double kBetweenLines_mm = 4.0;
+  constexpr double kMostOnArrow_mm = 44.0;
   if (scheme.isEmpty()) return {};
-  std::vector<SetLine> lines;
-  double height = 0.0;
-  for (Line& line : SchemeSetter(typesetter, scheme, pictures, size).set()) {
-    lines.push_back(measured(std::move(line)));
-    height += lines.back().up_mm + lines.back().down_mm;
+  const double onArrow = std::max(conditions(typesetter, scheme.above, kArrowText_mm).height_mm(),
+                                  conditions(typesetter, scheme.below, kArrowText_mm).height_mm());
+  size.conditionsOnArrow = onArrow <= kMostOnArrow_mm;
+  Blocks blocks;
+  for (Line& parts : SchemeSetter(typesetter, scheme, pictures, size).set()) {
+    const SetLine line = measured(std::move(parts));
+    const double left = x_mm + (size.width_mm - line.width_mm) / 2.0;
+    blocks.push_back(
+        {line.up_mm + line.down_mm,
+         [line, left](PagePainter& painter, double y_mm) { drawLine(painter, line, left, y_mm); },
+         kBetweenLines_mm});
   }
-  height += kBetweenLines_mm * static_cast<double>(lines.size() - 1);
-  const double width = size.width_mm;
-  return {height, [lines = std::move(lines), x_mm, width](PagePainter& painter, double y_mm) {
-            for (const SetLine& line : lines) {
-              drawLine(painter, line, x_mm + (width - line.width_mm) / 2.0, y_mm);
-              y_mm += line.up_mm + line.down_mm + kBetweenLines_mm;
-            }
-          }};
+  if (size.conditionsOnArrow) return blocks;
+  for (const auto* list : {&scheme.above, &scheme.below}) {
+    for (const std::string& condition : *list) {
+      const TextBlock text(typesetter, toQString(condition), kConditions, size.width_mm);
+      for (Block& block : paragraphBlocks(text, x_mm, 0.8)) blocks.push_back(std::move(block));
+    }
+  }
+  return blocks;
 }
 
 }  // namespace vialkeeper::exports

@@ -43,8 +43,8 @@ QString hazardCodes(const std::vector<app::HazardContent>& hazards) {
 }
 
 /// `date ____  initials ____` over the label's width.
-void drawBlanks(PagePainter& painter, const TextBlock& date, const TextBlock& initials,
-                double x_mm, double y_mm) {
+void drawBlanks(PagePainter& painter, const TextBlock& date, const TextBlock& initials, double x_mm,
+                double y_mm) {
   const double half = kInside_mm / 2.0;
   const double baseline = y_mm + date.ascent_mm();
   painter.text(date, x_mm, y_mm);
@@ -73,7 +73,8 @@ Block stockLabelBlock(const Setting& setting, const app::StockSheetContent& stoc
   const TextBlock date = set(QStringLiteral("date"), kSmall);
   const TextBlock initials = set(QStringLiteral("initials"), kSmall);
   const double texts = name.height_mm() + strength.height_mm() + forRun.height_mm();
-  const double inside = std::max(26.0, texts + 2.0 * kBlankGap_mm + date.height_mm() + codes.height_mm());
+  const double inside =
+      std::max(26.0, texts + 2.0 * kBlankGap_mm + date.height_mm() + codes.height_mm());
   const double top = hint.height_mm() + kHintGap_mm;
   const double left = setting.page.left();
   return {top + inside + 2.0 * kPad_mm,

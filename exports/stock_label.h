@@ -8,7 +8,8 @@ namespace vialkeeper::exports {
 
 inline constexpr double kStockLabelWidth_mm = 82.0;
 
-/// A label to cut out for the bottle: what is in it, when and by whom, and the codes of its hazards.
+/// A label to cut out for the bottle: what is in it, when and by whom, and the codes of its
+/// hazards.
 [[nodiscard]] Block stockLabelBlock(const Setting& setting, const app::StockSheetContent& stock);
 
 }  // namespace vialkeeper::exports

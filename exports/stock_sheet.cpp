@@ -29,16 +29,18 @@ Block targetBlock(const Setting& setting, const app::StockSheetContent& stock) {
   QString target = toQString(stock.target);
   if (!stock.target.empty() && !stock.unit.empty()) target += QChar(QChar::Nbsp);
   target += toQString(stock.unit);
-  const double targetWidth =
-      std::clamp(textWidth_mm(type, target, kTarget) + 0.5, 30.0, 74.0);
+  const double targetWidth = std::clamp(textWidth_mm(type, target, kTarget) + 0.5, 30.0, 74.0);
   const double targetLeft = boxLeft - kColumnGap_mm - targetWidth;
   const double nameWidth = targetLeft - kColumnGap_mm - left;
   const TextBlock number(type, target, kTarget, targetWidth, Align::kRight);
-  const TextBlock tolerance(type, toQString(stock.tolerance), kTolerance, targetWidth, Align::kRight);
+  const TextBlock tolerance(type, toQString(stock.tolerance), kTolerance, targetWidth,
+                            Align::kRight);
   const TextBlock weigh(type, QStringLiteral("weigh"), kLabel, nameWidth);
   const TextBlock actual(type, QStringLiteral("actual"), kLabel, kBoxWidth_mm);
   const TextBlock name(type, toQString(stock.name), kName, nameWidth);
-  const TextBlock detail(type, dotted({stock.cas, stock.molarMass, stock.assay}), kDetail, nameWidth);
+  const TextBlock detail(
+      type, dotted({toQString(stock.cas), unbroken(stock.molarMass), unbroken(stock.assay)}),
+      kDetail, nameWidth);
   const double labelHeight = weigh.height_mm() + 1.0;
   const double height = std::max({name.height_mm() + detail.height_mm(),
                                   number.height_mm() + tolerance.height_mm(), kBoxHeight_mm});
@@ -60,15 +62,16 @@ Block targetBlock(const Setting& setting, const app::StockSheetContent& stock) {
 /// Labels above their values, side by side, as many on a line as there is room for.
 Blocks factBlocks(const Setting& setting, const std::vector<Entry>& facts) {
   constexpr std::size_t kPerLine = 3;
-  const double width =
-      (setting.page.contentWidth() - kColumnGap_mm * (kPerLine - 1)) / static_cast<double>(kPerLine);
+  const double width = (setting.page.contentWidth() - kColumnGap_mm * (kPerLine - 1)) /
+                       static_cast<double>(kPerLine);
   Blocks blocks;
   for (std::size_t first = 0; first < facts.size(); first += kPerLine) {
     std::vector<std::pair<TextBlock, TextBlock>> cells;
     double height = 0.0;
     for (std::size_t i = first; i < std::min(first + kPerLine, facts.size()); ++i) {
-      const auto& cell = cells.emplace_back(TextBlock(setting.typesetter, facts[i].label, kLabel, width),
-                                            TextBlock(setting.typesetter, facts[i].value, kFact, width));
+      const auto& cell =
+          cells.emplace_back(TextBlock(setting.typesetter, facts[i].label, kLabel, width),
+                             TextBlock(setting.typesetter, facts[i].value, kFact, width));
       height = std::max(height, cell.first.height_mm() + 0.4 + cell.second.height_mm());
     }
     const double left = setting.page.left();
@@ -114,7 +117,9 @@ Block formulaBlock(const Setting& setting, const std::string& formula) {
   const double left = setting.page.left();
   const double blankLeft = setting.page.right() - kBlank_mm;
   const double width = blankLeft - kColumnGap_mm - left;
-  const TextBlock label(setting.typesetter, QStringLiteral("actual concentration"), kLabel, width);
+  const TextBlock label(setting.typesetter, QStringLiteral("formula"), kLabel, width);
+  const TextBlock result(setting.typesetter, QStringLiteral("actual concentration"), kLabel,
+                         kBlank_mm);
   const TextBlock text(setting.typesetter, toQString(formula), kFact, width);
   if (text.isEmpty()) return {};
   const double height = label.height_mm() + 0.6 + text.height_mm();
@@ -122,8 +127,9 @@ Block formulaBlock(const Setting& setting, const std::string& formula) {
           [=](PagePainter& painter, double y_mm) {
             painter.text(label, left, y_mm);
             painter.text(text, left, y_mm + label.height_mm() + 0.6);
-            painter.rule(blankLeft, y_mm + label.height_mm() + 0.6 + text.ascent_mm() + 0.6, kBlank_mm,
-                         colours::kBox, 0.25);
+            painter.text(result, blankLeft, y_mm);
+            painter.rule(blankLeft, y_mm + label.height_mm() + 0.6 + text.ascent_mm() + 0.6,
+                         kBlank_mm, colours::kBox, 0.25);
           },
           setting.density.sectionGap_mm};
 }
@@ -158,8 +164,8 @@ void addSteps(PageFlow& flow, const Setting& setting, const app::StockSheetConte
   if (const Block formula = formulaBlock(setting, stock.formula); formula.height_mm > 0.0) {
     flow.add(formula);
   }
-  Blocks notices = noticeBlocks(setting, stock.notices, setting.page.left(),
-                                setting.page.contentWidth());
+  Blocks notices =
+      noticeBlocks(setting, stock.notices, setting.page.left(), setting.page.contentWidth());
   for (std::size_t i = 0; i < notices.size(); ++i) {
     notices[i].gap_mm = i == 0 ? setting.density.sectionGap_mm * 0.7 : 1.2;
     flow.add(notices[i]);
@@ -176,10 +182,11 @@ Laid layOut(const Setting& setting, const app::StockSheetContent& stock,
   Laid laid{PageFlow(setting.page, furniture(setting, stock.code, stock.title, stock.footer))};
   // The title says what the page is for; the run's code only to whom it belongs.
   const std::vector<Entry> entries{{QStringLiteral("for run"), toQString(stock.forRun)}};
-  laid.flow.add(mastheadBlock(setting, {stock.code, true, stock.title, entries, qr}));
+  const std::string code = stock.forRun.starts_with(stock.code) ? std::string() : stock.code;
+  laid.flow.add(mastheadBlock(setting, {code, true, stock.title, entries, qr}));
   addSteps(laid.flow, setting, stock);
-  Blocks tail = besideCautions(setting, stockLabelBlock(setting, stock), kStockLabelWidth_mm,
-                               stock.cautions);
+  Blocks tail =
+      besideCautions(setting, stockLabelBlock(setting, stock), kStockLabelWidth_mm, stock.cautions);
   for (Block& block : hazardBlocks(setting, stock.hazards)) tail.push_back(std::move(block));
   laid.flow.addTogether(tail);
   laid.hasNotes = closePage(laid.flow, setting,

@@ -17,9 +17,8 @@ const TextStyle kVerdict{8.5, Weight::kBold, colours::kInk};
 constexpr double kVialBlockShare = 0.47;
 
 /// From loose to tight; the boxes stay large enough for a gloved hand.
-constexpr Density kDensities[] = {{2.2, 9.5, 7.0, 5.2, 38.0},
-                                  {1.5, 9.0, 5.5, 4.6, 32.0},
-                                  {0.9, 8.5, 4.0, 3.8, 26.0}};
+constexpr Density kDensities[] = {
+    {2.2, 9.5, 7.0, 6.0, 38.0}, {1.5, 9.0, 5.5, 5.0, 32.0}, {0.9, 8.5, 4.0, 4.0, 26.0}};
 
 struct Laid {
   PageFlow flow;
@@ -74,12 +73,14 @@ Block vialBlock(const Setting& setting, const app::VialContent& vial) {
 
 void addScheme(PageFlow& flow, const Setting& setting, const app::SchemeContent& scheme,
                const SchemePictures& pictures) {
-  const SchemeSize size{setting.page.contentWidth(), setting.density.bond_mm,
-                        setting.density.structure_mm};
-  Block block = schemeBlock(setting.typesetter, scheme, pictures, size, setting.page.left());
-  if (block.height_mm <= 0.0) return;
-  block.gap_mm = setting.density.sectionGap_mm;
-  flow.add(block);
+  SchemeSize size;
+  size.width_mm = setting.page.contentWidth();
+  size.bond_mm = setting.density.bond_mm;
+  size.structure_mm = setting.density.structure_mm;
+  Blocks blocks = schemeBlocks(setting.typesetter, scheme, pictures, size, setting.page.left());
+  if (blocks.empty()) return;
+  blocks.front().gap_mm = setting.density.sectionGap_mm;
+  flow.addTogether(blocks);
 }
 
 /// Vial, cautions and hazards: below the table if there is room, else together on a new page.
@@ -94,8 +95,8 @@ void addTail(PageFlow& flow, const Setting& setting, const app::SheetContent& co
 
 Laid layOut(const Setting& setting, const app::SheetContent& content,
             const SchemePictures& pictures, const std::optional<QrCode>& qr) {
-  Laid laid{PageFlow(setting.page,
-                     furniture(setting, content.code, content.title, content.footer))};
+  Laid laid{
+      PageFlow(setting.page, furniture(setting, content.code, content.title, content.footer))};
   Masthead masthead{content.code, content.codeIsMark, content.title, {}, qr};
   if (!content.series.empty()) {
     masthead.entries.push_back({QStringLiteral("series"), toQString(content.series)});
@@ -105,8 +106,8 @@ Laid layOut(const Setting& setting, const app::SheetContent& content,
   laid.flow.add(mastheadBlock(setting, masthead));
   addScheme(laid.flow, setting, content.scheme, pictures);
   addWeighingTable(laid.flow, setting, content.rows);
-  for (Block& notice : noticeBlocks(setting, content.notices, setting.page.left(),
-                                    setting.page.contentWidth())) {
+  for (Block& notice :
+       noticeBlocks(setting, content.notices, setting.page.left(), setting.page.contentWidth())) {
     notice.gap_mm = 1.6;
     laid.flow.add(notice);
   }

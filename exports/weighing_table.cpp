@@ -11,6 +11,7 @@ constexpr double kTick_mm = 6.5;
 constexpr double kColumnGap_mm = 3.5;
 const TextStyle kHead{7.2, Weight::kRegular, colours::kQuiet};
 const TextStyle kName{9.8, Weight::kBold, colours::kInk};
+const TextStyle kLongName{9.0, Weight::kBold, colours::kInk};
 const TextStyle kDetail{7.5, Weight::kRegular, colours::kQuiet};
 const TextStyle kCell{8.5, Weight::kRegular, colours::kInk};
 const TextStyle kTarget{14.0, Weight::kBold, colours::kInk};
@@ -37,7 +38,8 @@ QString targetOf(const app::SheetRow& row) {
 /// The widest of some texts, within limits.
 class Widest {
  public:
-  Widest(const Typesetter& typesetter, double least_mm) : m_typesetter(typesetter), m_width(least_mm) {}
+  Widest(const Typesetter& typesetter, double least_mm)
+      : m_typesetter(typesetter), m_width(least_mm) {}
   void see(const QString& text, const TextStyle& style) {
     m_width = std::max(m_width, textWidth_mm(m_typesetter, text, style) + 0.5);
   }
@@ -72,8 +74,7 @@ Columns columnsFor(const Setting& setting, const std::vector<app::SheetRow>& row
   columns.supply.left_mm = columns.ratio.left_mm - kColumnGap_mm - columns.supply.width_mm;
   columns.tick = {setting.page.left(), kTick_mm};
   columns.component.left_mm = columns.tick.right() + kColumnGap_mm;
-  columns.component.width_mm =
-      columns.supply.left_mm - kColumnGap_mm - columns.component.left_mm;
+  columns.component.width_mm = columns.supply.left_mm - kColumnGap_mm - columns.component.left_mm;
   return columns;
 }
 
@@ -128,60 +129,126 @@ struct RowCells {
   }
 };
 
-RowCells cellsOf(const Setting& setting, const Columns& columns, const app::SheetRow& row) {
+/// Role, CAS number, molar mass and amount: on one line, or on two of a kind.
+TextBlock detailOf(const Setting& setting, const Column& column, const app::SheetRow& row) {
+  const QString who = dotted({toQString(row.role), toQString(row.cas)});
+  const QString much = dotted({unbroken(row.molarMass), unbroken(row.amount)});
+  const QString line = dotted({who, much});
+  if (who.isEmpty() || much.isEmpty() ||
+      textWidth_mm(setting.typesetter, line, kDetail) < column.width_mm) {
+    return TextBlock(setting.typesetter, line, kDetail, column.width_mm);
+  }
+  return TextBlock(setting.typesetter, who + QChar(QChar::LineSeparator) + much, kDetail,
+                   column.width_mm);
+}
+
+RowCells cellsOf(const Setting& setting, const Columns& columns, const app::SheetRow& row,
+                 const TextBlock& name) {
   const auto set = [&](const QString& text, const TextStyle& style, const Column& column,
                        Align align = Align::kLeft) {
     return TextBlock(setting.typesetter, text, style, column.width_mm, align);
   };
   RowCells cells;
-  cells.cells = {
-      {set(toQString(row.name), kName, columns.component),
-       set(dotted({row.role, row.cas, row.molarMass, row.amount}), kDetail, columns.component),
-       {},
-       columns.component.left_mm},
-      {set(toQString(row.supply), kCell, columns.supply),
-       set(toQString(row.device), kDetail, columns.supply),
-       {},
-       columns.supply.left_mm},
-      {set(toQString(row.ratio), kCell, columns.ratio, Align::kRight), {}, {}, columns.ratio.left_mm},
-      {set(targetOf(row), kTarget, columns.target, Align::kRight),
-       set(toQString(row.tolerance), kTolerance, columns.target, Align::kRight),
-       set(toQString(row.alternative), kDetail, columns.target, Align::kRight),
-       columns.target.left_mm}};
+  cells.cells = {{name, detailOf(setting, columns.component, row), {}, columns.component.left_mm},
+                 {set(toQString(row.supply), kCell, columns.supply),
+                  set(toQString(row.device), kDetail, columns.supply),
+                  {},
+                  columns.supply.left_mm},
+                 {set(toQString(row.ratio), kCell, columns.ratio, Align::kRight),
+                  {},
+                  {},
+                  columns.ratio.left_mm},
+                 {set(targetOf(row), kTarget, columns.target, Align::kRight),
+                  set(unbroken(row.tolerance), kTolerance, columns.target, Align::kRight),
+                  set(unbroken(row.alternative), kTolerance, columns.target, Align::kRight),
+                  columns.target.left_mm}};
   cells.settle();
   return cells;
 }
 
-/// The row without its notices.
-Block cellsBlock(const Setting& setting, const Columns& columns, const app::SheetRow& row) {
-  constexpr double kBoxPad_mm = 1.5;
-  const RowCells cells = cellsOf(setting, columns, row);
-  const TextBlock actual(setting.typesetter, toQString(row.actual), kActual,
-                         columns.actual.width_mm - 2.0 * kBoxPad_mm, Align::kCentre);
-  const double box = std::max(setting.density.box_mm, actual.height_mm() + 2.0 * kBoxPad_mm);
-  const double pad = setting.density.rowPad_mm;
-  const double height = pad + std::max(cells.height_mm, box);
+/// What was weighed, or the unit in the box's corner, so that the number alone has to be written.
+struct ActualBox {
+  TextBlock text;
+  TextBlock unit;
+  QRectF place_mm;  ///< from the row's top
+
+  void draw(PagePainter& painter, double y_mm) const {
+    constexpr double kPad_mm = 1.6;
+    const QRectF box = place_mm.translated(0.0, y_mm);
+    painter.box(box);
+    painter.text(text, box.left() + kPad_mm, box.center().y() - text.height_mm() / 2.0);
+    painter.text(unit, box.right() - kPad_mm - unit.width_mm(),
+                 box.bottom() - 1.0 - unit.height_mm());
+  }
+};
+
+ActualBox actualOf(const Setting& setting, const Columns& columns, const app::SheetRow& row,
+                   double top_mm) {
+  constexpr double kPad_mm = 1.6;
+  const double width = columns.actual.width_mm - 2.0 * kPad_mm;
+  ActualBox actual;
+  actual.text =
+      TextBlock(setting.typesetter, toQString(row.actual), kActual, width, Align::kCentre);
+  if (row.actual.empty())
+    actual.unit = TextBlock(setting.typesetter, toQString(row.unit), kHead, width);
+  actual.place_mm =
+      QRectF(columns.actual.left_mm, top_mm, columns.actual.width_mm,
+             std::max({setting.density.box_mm, actual.text.height_mm() + 2.0 * kPad_mm,
+                       actual.unit.height_mm() + 2.0}));
+  return actual;
+}
+
+/// The row without its notices and without a name that is set above it.
+Block cellsBlock(const Setting& setting, const Columns& columns, const app::SheetRow& row,
+                 const TextBlock& name, bool hasTick) {
+  const RowCells cells = cellsOf(setting, columns, row, name);
+  const double pad = hasTick ? setting.density.rowPad_mm : 0.8;
+  const ActualBox actual = actualOf(setting, columns, row, pad);
   const double tickTop = pad + (setting.density.box_mm - kTick_mm) / 2.0;
   // Text begins a little below the box's upper edge, so that a single line stands in its middle.
   const double textTop = pad + std::max(0.0, (setting.density.box_mm - 9.0) / 2.0);
-  return {std::max(height, textTop + cells.height_mm),
+  return {std::max(actual.place_mm.bottom(), textTop + cells.height_mm),
           [=](PagePainter& painter, double y_mm) {
-            painter.tickBox(columns.tick.left_mm, y_mm + tickTop, kTick_mm);
+            if (hasTick) painter.tickBox(columns.tick.left_mm, y_mm + tickTop, kTick_mm);
             for (const Cell& cell : cells.cells) {
               cell.draw(painter, y_mm + textTop + cells.ascent_mm - cell.first.ascent_mm());
             }
-            painter.box({columns.actual.left_mm, y_mm + pad, columns.actual.width_mm, box});
-            painter.text(actual, columns.actual.left_mm + kBoxPad_mm,
-                         y_mm + pad + (box - actual.height_mm()) / 2.0);
+            actual.draw(painter, y_mm);
           }};
 }
 
+/// A name too long for its column, over the whole width, with the row's tick box at its side.
+Blocks longNameBlocks(const Setting& setting, const Columns& columns, const app::SheetRow& row) {
+  const double left = columns.component.left_mm;
+  const TextBlock name(setting.typesetter, toQString(row.name), kLongName,
+                       setting.page.right() - left);
+  Blocks blocks = paragraphBlocks(name, left, 0.0);
+  Block& first = blocks.front();
+  const double pad = setting.density.rowPad_mm;
+  first.height_mm += pad;
+  first.draw = [draw = first.draw, pad, x = columns.tick.left_mm](PagePainter& painter,
+                                                                  double y_mm) {
+    painter.tickBox(x, y_mm + pad, kTick_mm);
+    draw(painter, y_mm + pad);
+  };
+  return blocks;
+}
+
 Blocks rowBlocks(const Setting& setting, const Columns& columns, const app::SheetRow& row) {
-  Blocks blocks{cellsBlock(setting, columns, row)};
+  constexpr int kMostLines = 3;
+  Blocks blocks;
+  TextBlock name(setting.typesetter, toQString(row.name), kName, columns.component.width_mm);
+  const bool isLong = name.lines() > kMostLines;
+  if (isLong) {
+    blocks = longNameBlocks(setting, columns, row);
+    name = {};
+  }
+  blocks.push_back(cellsBlock(setting, columns, row, name, !isLong));
   const double x = columns.component.left_mm;
-  for (Block& notice : noticeBlocks(setting, row.notices, x, setting.page.right() - x)) {
-    if (blocks.size() == 1) notice.gap_mm = 1.2;
-    blocks.push_back(std::move(notice));
+  Blocks notices = noticeBlocks(setting, row.notices, x, setting.page.right() - x);
+  for (std::size_t i = 0; i < notices.size(); ++i) {
+    if (i == 0) notices[i].gap_mm = 1.2;
+    blocks.push_back(std::move(notices[i]));
   }
   const double left = setting.page.left();
   const double width = setting.page.contentWidth();
@@ -208,7 +275,8 @@ void addWeighingTable(PageFlow& flow, const Setting& setting,
   for (Block& block : rowBlocks(setting, columns, rows.front())) first.push_back(std::move(block));
   flow.addTogether(first);
   flow.repeatOnNewPages(head);
-  for (std::size_t i = 1; i < rows.size(); ++i) flow.addTogether(rowBlocks(setting, columns, rows[i]));
+  for (std::size_t i = 1; i < rows.size(); ++i)
+    flow.addTogether(rowBlocks(setting, columns, rows[i]));
   flow.repeatOnNewPages({});
 }
 

@@ -221,14 +221,20 @@ class ChargeSolver {
           "make the stock more concentrated, or the liquid's volume larger");
   }
 
+  /// A fault of the liquid's volume, at the field that fixes it.
+  void faultLiquid(std::string what, std::string mend) {
+    const std::string field = m_plan.liquid.total ? "total" : "limiting_concentration";
+    m_faults.push_back({.file = m_plan.file,
+                        .line = m_plan.liquid.place.lineOf(field),
+                        .field = "liquid." + field,
+                        .what = std::move(what),
+                        .mend = std::move(mend)});
+  }
+
   void faultTotal(double excess_m3) {
-    m_faults.push_back(
-        {.file = m_plan.file,
-         .line = m_plan.liquid.place.lineOf(m_plan.liquid.total ? "total" : "limiting_concentration"),
-         .field = m_plan.liquid.total ? "liquid.total" : "liquid.limiting_concentration",
-         .what = fmt::format("the liquids come to {} more than the total of {}",
-                             units::shown(Volume::fromSi(excess_m3)), units::shown(Volume::fromSi(m_total_m3))),
-         .mend = "raise the total or lower the volumes"});
+    faultLiquid(fmt::format("the liquids come to {} more than the total of {}",
+                            units::shown(Volume::fromSi(excess_m3)), units::shown(Volume::fromSi(m_total_m3))),
+                "raise the total or lower the volumes");
   }
 
   void checkVolumes() {
@@ -240,13 +246,9 @@ class ChargeSolver {
     if (sum_m3 > m_total_m3 * (1.0 + 1e-9) + kVolumeRounding_m3) return faultTotal(sum_m3 - m_total_m3);
     m_missing_m3 = m_total_m3 - sum_m3;
     if (m_plan.vial && m_plan.vial->displaced.si() + m_total_m3 >= m_plan.vial->volume.si()) {
-      m_faults.push_back({.file = m_plan.file,
-                          .line = m_plan.liquid.place.line,
-                          .field = "liquid",
-                          .what = fmt::format("{} of liquid leave no headspace in a vial of {}",
-                                              units::shown(Volume::fromSi(m_total_m3)),
-                                              units::shown(m_plan.vial->volume)),
-                          .mend = "take a larger vial or less liquid"});
+      faultLiquid(fmt::format("{} of liquid leave no headspace in a vial of {}", units::shown(Volume::fromSi(m_total_m3)),
+                              units::shown(m_plan.vial->volume)),
+                  "take a larger vial or less liquid");
     }
   }
 

@@ -126,7 +126,7 @@ class PlanChecker {
       fault(component.place, "mass", "the mass of a stock solution needs its density",
             "give the volume, or the density in the supply");
     }
-    if (basis == Basis::kShare && !std::holds_alternative<LiquidSupply>(component.supply)) {
+    if (basis == Basis::kShare && component.isSolvent() && !std::holds_alternative<LiquidSupply>(component.supply)) {
       fault(component.place, "share", "a share is filled up with a neat liquid",
             "leave the supply out or make it of kind liquid");
     }

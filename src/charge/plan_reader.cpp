@@ -150,7 +150,8 @@ Mixture readAtmosphere(TomlSection& seal) {
     Mixture mixture = readSpeciesNumbers(*seal.section("atmosphere"), {.least = 0.0, .most = 1.0});
     double sum = 0.0;
     for (const auto& [species, fraction] : mixture) sum += fraction;
-    if (std::abs(sum - 1.0) > 1e-6) {
+    const bool allRead = mixture.size() == std::get<text::TomlTable>(value->data).size();
+    if (allRead && std::abs(sum - 1.0) > 1e-6) {
       seal.fault("atmosphere", fmt::format("the fractions sum to {:.6g}", sum), "make them sum to 1");
     }
     return mixture;

@@ -53,7 +53,34 @@ Fault unknownVerb(const CLI::App& program, const std::string& name) {
                             : fmt::format("choose among {}", fmt::join(verbs, ", ")));
 }
 
-/// The parser's complaint in our words.
+/// One complaint about an option or argument that is known: its name goes into the place.
+Fault reworded(const CLI::ParseError& error, std::string hint) {
+  const std::string said = text::oneLine(error.what());
+  switch (static_cast<CLI::ExitCodes>(error.get_exit_code())) {
+    case CLI::ExitCodes::RequiredError:  // "PLAN is required"
+      if (const std::size_t end = said.find(" is required"); end != std::string::npos) {
+        return usageFault(said.substr(0, end), "this is missing", std::move(hint));
+      }
+      break;
+    case CLI::ExitCodes::ArgumentMismatch:  // "--pdf: 1 required TEXT missing", "--pdf: At Most 1 required but …"
+      if (const std::size_t end = said.find(": "); end != std::string::npos) {
+        const bool repeated = said.find("At Most") != std::string::npos;
+        return repeated ? usageFault(said.substr(0, end), "this option is given more than once", "keep one of them")
+                        : usageFault(said.substr(0, end), "its value is missing", std::move(hint));
+      }
+      break;
+    case CLI::ExitCodes::ConversionError:  // "Could not convert: --json = maybe"
+      if (const std::size_t begin = said.find("--"); begin != std::string::npos) {
+        return usageFault(said.substr(begin, said.find_first_of(" =", begin) - begin),
+                          "this option takes no value", std::move(hint));
+      }
+      break;
+    default: break;
+  }
+  return usageFault("", said, std::move(hint));
+}
+
+/// The parser's complaints in our words.
 Faults parserFaults(const CLI::App& program, const CLI::ParseError& error) {
   const bool verbGiven = !program.get_subcommands().empty();
   if (error.get_exit_code() == static_cast<int>(CLI::ExitCodes::ExtrasError)) {
@@ -68,12 +95,15 @@ Faults parserFaults(const CLI::App& program, const CLI::ParseError& error) {
   }
   if (error.get_exit_code() == static_cast<int>(CLI::ExitCodes::RequiredError) && !verbGiven) {
     // The parser misses the verb before it looks at what it could not place.
+    Faults faults;
     for (const std::string& extra : program.remaining()) {
       if (!extra.starts_with('-')) return {unknownVerb(program, extra)};
+      faults.push_back(usageFault(extra, "this option is not known", helpHint(program)));
     }
-    return {usageFault("", "no verb is given", helpHint(program))};
+    if (faults.empty()) faults.push_back(usageFault("", "no verb is given", helpHint(program)));
+    return faults;
   }
-  return {usageFault("", text::oneLine(error.what()), helpHint(program))};
+  return {reworded(error, helpHint(program))};
 }
 
 void describe(CLI::App& program, CommonOptions& common) {

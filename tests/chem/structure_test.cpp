@@ -234,6 +234,8 @@ TEST_CASE("formulas stand in Hill order with isotopes and charge", "[chem][ident
       {"[NH4+].[Cl-]", "ClH4N", 2},
       {"OC(=O)C(=O)O.O.O", "C2H6O6", 8},
       {"[Na+].[BH4-]", "BH4Na", 2},
+      {"[Na+].[H-]", "HNa", 1},
+      {"[Na+].[H-][Al]", "AlHNa", 2},  // the charge of a bonded hydride is not lost
       {"[K+].[K+].[K+].[Fe+3].[O-]C(=O)C(=O)[O-].[O-]C(=O)C(=O)[O-].[O-]C(=O)C(=O)[O-].O.O.O",
        "C6H6FeK3O15", 25},
   }));
@@ -347,6 +349,8 @@ TEST_CASE("a structure whose valences do not add up is refused with its atom", "
       {"Cn1cccc1.n1cccc1", "with n at position 10"},
       {"Cc", "the atom c at position 2 is aromatic"},
       {"C:C", "aromatic bond"},
+      {"N[H+]", "the atom [H+] at position 2 has more bonds"},  // its charge would be lost
+      {"Co1CCCC1", "the atom o at position 2 has more bonds"},
       {"[999C]", "no nuclide [999C]"},
       {"[C+9]", "larger charge than it has electrons"},
       {"[CH5]C", "the atom [CH5] at position 1 has more bonds"},
@@ -365,7 +369,8 @@ TEST_CASE("counts that would wrap round in a byte or two are refused", "[chem]")
   CHECK(contains(faultOf("[C" + repeated("+", 256) + "]").what, "charge"));
   CHECK(contains(faultOf("[65549CH4]").what, "mass number"));
   CHECK(contains(faultOf("[U-16]").what, "charge"));
-  CHECK(read("[Sn++++]").formula == "Sn^4+");
+  CHECK(read("[Sn++]").formula == "Sn^2+");
+  CHECK(read("N[Co@OH12](O)(F)(Cl)(Br)I").formula == "BrClCoFH3INO");
   CHECK(read("[Hf+4]").formula == "Hf^4+");
   CHECK(read("[15NH4+]").formula == "H4[15N]+");
 }

@@ -75,7 +75,10 @@ StructureFault explainChemistry(std::string_view smiles) {
   try {
     const std::unique_ptr<RWMol> mol(
         RDKit::SmilesToMol(std::string(smiles), parserSettings(false)));
-    if (mol) RDKit::MolOps::sanitizeMol(*mol);
+    if (mol) {
+      RDKit::MolOps::sanitizeMol(*mol);
+      mol->updatePropertyCache(true);
+    }
   } catch (const RDKit::MolSanitizeException& problem) {
     if (auto found = explained(problem, smiles)) return *found;
   } catch (const std::exception&) {
@@ -144,7 +147,14 @@ std::expected<std::unique_ptr<RWMol>, StructureFault> parseMolecule(std::string_
   if (auto refused = refuseNotation(smiles)) return std::unexpected(*refused);
   std::unique_ptr<RWMol> mol;
   try {
-    mol.reset(RDKit::SmilesToMol(std::string(smiles), parserSettings(true)));
+    RDKit::SmilesParserParams settings = parserSettings(true);
+    // A hydride or proton that is bonded would be counted as a hydrogen and its charge be lost.
+    settings.removeHs = smiles.find("[H-") == std::string_view::npos &&
+                        smiles.find("[H+") == std::string_view::npos;
+    mol.reset(RDKit::SmilesToMol(std::string(smiles), settings));
+    // Once more after aromaticity is settled: RDKit lets a lower-case atom of a ring that is not
+    // aromatic after all pass with any number of bonds, such as the o of an unbracketed `Co`.
+    if (mol) mol->updatePropertyCache(true);
   } catch (const RDKit::SmilesParseException&) {
     return std::unexpected(explainSyntax(smiles));
   } catch (const std::exception&) {  // sanitising, and invariants that absurd counts break

@@ -80,7 +80,10 @@ std::optional<StructureFault> refuseCounts(std::string_view atom, std::size_t po
   if (runLength(atom, 1, kDigits) > 3) {
     return refused("mass number", "correct it, or leave it out for the natural mixture");
   }
-  const std::size_t hydrogen = atom.rfind('H');
+  // `@OH12` is the arrangement of an octahedral centre, not twelve hydrogens.
+  const std::size_t arrangement = atom.find("@OH");
+  const std::size_t counts = arrangement == std::string_view::npos ? 1 : arrangement + 3;
+  const std::size_t hydrogen = atom.find('H', counts);
   if (hydrogen != std::string_view::npos && runLength(atom, hydrogen + 1, kDigits) > 1) {
     return refused("number of hydrogens", "correct it; one atom bears at most 9");
   }
