@@ -7,6 +7,7 @@
 #include <QFontInfo>
 #include <QGuiApplication>
 #include <QHashSeed>
+#include <QRawFont>
 #include <QStringList>
 #include <clocale>
 #include <string>
@@ -44,8 +45,12 @@ QString preferredFamily(const QStringList& installed) {
   }
   QFont any;
   any.setStyleHint(QFont::SansSerif);
-  const QString family = QFontInfo(any).family();
-  return installed.contains(family) ? family : installed.front();
+  return QFontInfo(any).family();
+}
+
+/// Qt lists families, and draws boxes, on a system without a single font.
+bool isReal(const QString& family) {
+  return !QRawFont::fromFont(QFont(family)).fontTable("cmap").isEmpty();
 }
 
 }  // namespace
@@ -58,14 +63,14 @@ text::Checked<QString> startGuiSession() {
          .what = "pages cannot be printed from a program whose Qt application has no fonts",
          .mend = "print from the desktop or with the vialkeeper command"}});
   }
-  const QStringList installed = QFontDatabase::families();
-  if (installed.isEmpty()) {
+  const QString family = preferredFamily(QFontDatabase::families());
+  if (!isReal(family)) {
     return std::unexpected(text::Faults{
         {.kind = text::FaultKind::kUsage,
          .what = "no font is installed, so that no page can be printed",
          .mend = "install one, DejaVu Sans for example (fonts-dejavu-core on Debian)"}});
   }
-  return preferredFamily(installed);
+  return family;
 }
 
 }  // namespace vialkeeper::exports

@@ -82,13 +82,18 @@ struct Names {
 Names namesOf(const Setting& setting, const Masthead& masthead, double width_mm) {
   constexpr double kBetween_mm = 3.6;
   const TextStyle codeStyle = masthead.codeIsMark ? kMark : kCode;
-  const TextStyle titleStyle = masthead.codeIsMark ? kTitleAlone : kTitle;
   const QString title = toQString(masthead.title);
   Names names;
   names.code = TextBlock(setting.typesetter, toQString(masthead.code), codeStyle, width_mm);
   const double beside = width_mm - names.code.width_mm() - kBetween_mm;
-  const bool isBeside = names.code.lines() == 1 && !masthead.codeIsMark &&
-                        textWidth_mm(setting.typesetter, title, titleStyle) < beside;
+  TextStyle titleStyle = masthead.codeIsMark ? kTitleAlone : kTitle;
+  bool isBeside = false;
+  for (const double size : {12.5, 11.8, 11.0}) {
+    if (isBeside || names.code.lines() != 1 || masthead.codeIsMark) break;
+    titleStyle.size_pt = size;
+    isBeside = textWidth_mm(setting.typesetter, title, titleStyle) < beside;
+  }
+  if (!isBeside && !masthead.codeIsMark) titleStyle = kTitle;
   names.title = TextBlock(setting.typesetter, title, titleStyle, isBeside ? beside : width_mm);
   if (isBeside) {
     names.titleLeft_mm = names.code.width_mm() + kBetween_mm;

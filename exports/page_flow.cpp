@@ -56,10 +56,13 @@ void PageFlow::addTogether(const Blocks& blocks) {
   const bool fitsHere = height + gap <= remaining_mm() + kSlack_mm;
   const bool fitsOnePage = height <= emptyPage_mm() + kSlack_mm;
   if (!fitsHere && fitsOnePage && !isAtTop()) newPage();
-  for (const Block& block : blocks) {
-    const double above = isAtTop() ? 0.0 : block.gap_mm;
-    if (above + block.height_mm > remaining_mm() + kSlack_mm && !isAtTop()) newPage();
-    place(block);
+  for (std::size_t i = 0; i < blocks.size(); ++i) {
+    double needed = blocks[i].height_mm + (isAtTop() ? 0.0 : blocks[i].gap_mm);
+    if (blocks[i].isHeading && i + 1 < blocks.size()) {
+      needed += blocks[i + 1].gap_mm + blocks[i + 1].height_mm;
+    }
+    if (needed > remaining_mm() + kSlack_mm && !isAtTop()) newPage();
+    place(blocks[i]);
   }
 }
 

@@ -13,7 +13,8 @@ namespace vialkeeper::exports {
 struct Block {
   double height_mm = 0.0;
   std::function<void(PagePainter&, double y_mm)> draw = {};
-  double gap_mm = 0.0;  ///< above it, except at the top of a page
+  double gap_mm = 0.0;     ///< above it, except at the top of a page
+  bool isHeading = false;  ///< never the last on a page
 };
 
 using Blocks = std::vector<Block>;

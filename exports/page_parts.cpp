@@ -3,6 +3,8 @@
 #include "exports/page_parts.h"
 
 #include <algorithm>
+#include <functional>
+#include <iterator>
 
 namespace vialkeeper::exports {
 namespace {
@@ -22,24 +24,39 @@ Block textBlock(const TextBlock& text, double x_mm, double gap_mm) {
           gap_mm};
 }
 
+using Mark = std::function<void(PagePainter&, double y_mm)>;
+
+/// A paragraph that may be longer than a page, with a mark beside its first line.
+Blocks markedParagraph(const TextBlock& text, double x_mm, double gap_mm, const Mark& mark) {
+  Blocks blocks = paragraphBlocks(text, x_mm, gap_mm);
+  if (blocks.empty()) return blocks;
+  blocks.front().draw = [mark, draw = blocks.front().draw](PagePainter& painter, double y_mm) {
+    mark(painter, y_mm);
+    draw(painter, y_mm);
+  };
+  return blocks;
+}
+
+void append(Blocks& blocks, Blocks more) {
+  std::move(more.begin(), more.end(), std::back_inserter(blocks));
+}
+
 Blocks cautionBlocks(const Setting& setting, const std::vector<std::string>& cautions, double x_mm,
                      double width_mm) {
   constexpr double kIndent_mm = 3.2;
   Blocks blocks;
   if (cautions.empty()) return blocks;
   blocks.push_back(textBlock(heading(setting, QStringLiteral("Cautions")), x_mm, 0.0));
+  blocks.back().isHeading = true;
   for (const std::string& caution : cautions) {
     const TextBlock text(setting.typesetter, toQString(caution), kBody, width_mm - kIndent_mm);
+    const Mark dot = [x_mm, middle = text.ascent_mm() * 0.66](PagePainter& painter, double y_mm) {
+      QPainterPath path;
+      path.addEllipse(QPointF(0.0, 0.0), 0.5, 0.5);
+      painter.fill(path, x_mm + 0.6, y_mm + middle, 1.0, colours::kInk);
+    };
     const double gap = blocks.size() == 1 ? kAfterHeading_mm : kBetweenParagraphs_mm;
-    blocks.push_back({text.height_mm(),
-                      [text, x_mm](PagePainter& painter, double y_mm) {
-                        QPainterPath dot;
-                        dot.addEllipse(QPointF(0.0, 0.0), 0.5, 0.5);
-                        painter.fill(dot, x_mm + 0.6, y_mm + text.ascent_mm() * 0.66, 1.0,
-                                     colours::kInk);
-                        painter.text(text, x_mm + kIndent_mm, y_mm);
-                      },
-                      gap});
+    append(blocks, markedParagraph(text, x_mm + kIndent_mm, gap, dot));
   }
   return blocks;
 }
@@ -98,13 +115,10 @@ Blocks noticeBlocks(const Setting& setting, const std::vector<std::string>& noti
   Blocks blocks;
   for (const std::string& notice : notices) {
     const TextBlock text(setting.typesetter, toQString(notice), kNotice, width_mm - kIndent_mm);
-    blocks.push_back({text.height_mm(),
-                      [text, x_mm](PagePainter& painter, double y_mm) {
-                        painter.warningSign(x_mm, y_mm + text.ascent_mm() - kSign_mm * 0.9,
-                                            kSign_mm);
-                        painter.text(text, x_mm + kIndent_mm, y_mm);
-                      },
-                      0.8});
+    const Mark sign = [x_mm, ascent = text.ascent_mm()](PagePainter& painter, double y_mm) {
+      painter.warningSign(x_mm, y_mm + ascent - kSign_mm * 0.9, kSign_mm);
+    };
+    append(blocks, markedParagraph(text, x_mm + kIndent_mm, 0.8, sign));
   }
   return blocks;
 }
@@ -127,12 +141,14 @@ Blocks hazardBlocks(const Setting& setting, const std::vector<app::HazardContent
     }
     const TextBlock text(setting.typesetter, dotted(statements), kBody,
                          setting.page.right() - textLeft);
-    blocks.push_back({std::max(name.height_mm(), text.height_mm()),
-                      [name, text, left, textLeft](PagePainter& painter, double y_mm) {
-                        painter.text(name, left, y_mm);
-                        painter.text(text, textLeft, y_mm);
-                      },
-                      blocks.size() == 1 ? kAfterHeading_mm : kBetweenParagraphs_mm});
+    const Mark label = [name, left](PagePainter& painter, double y_mm) {
+      painter.text(name, left, y_mm);
+    };
+    const double gap = blocks.size() == 1 ? kAfterHeading_mm : kBetweenParagraphs_mm;
+    Blocks entry = markedParagraph(text, textLeft, gap, label);
+    if (entry.empty()) entry = {textBlock(name, left, gap)};
+    entry.front().height_mm = std::max(entry.front().height_mm, name.height_mm());
+    append(blocks, std::move(entry));
   }
   return blocks;
 }
@@ -143,13 +159,12 @@ Blocks besideCautions(const Setting& setting, const Block& left, double leftWidt
   constexpr double kTooLong_mm = 110.0;
   const double x = setting.page.left() + leftWidth_mm + kColumnGap_mm;
   const Blocks column = cautionBlocks(setting, cautions, x, setting.page.right() - x);
-  if (heightOf(column) > std::max(kTooLong_mm, left.height_mm)) {
-    Blocks blocks{left};
-    for (Block& block :
-         cautionBlocks(setting, cautions, setting.page.left(), setting.page.contentWidth())) {
-      if (blocks.size() == 1) block.gap_mm = setting.density.sectionGap_mm;
-      blocks.push_back(std::move(block));
-    }
+  const bool hasLeft = left.height_mm > 0.0;
+  if (!hasLeft || heightOf(column) > std::max(kTooLong_mm, left.height_mm)) {
+    Blocks blocks =
+        cautionBlocks(setting, cautions, setting.page.left(), setting.page.contentWidth());
+    if (!blocks.empty()) blocks.front().gap_mm = setting.density.sectionGap_mm;
+    if (hasLeft) blocks.insert(blocks.begin(), left);
     return blocks;
   }
   const Block right = merged(column);

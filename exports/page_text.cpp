@@ -21,8 +21,9 @@ QFont fontOf(const Typesetter& typesetter, const TextStyle& style) {
   font.setPointSizeF(style.size_pt);
   font.setBold(style.weight == Weight::kBold);
   font.setHintingPreference(QFont::PreferNoHinting);
-  // Spacing that is not zero keeps ligatures out: "fi" drawn as one glyph cannot be searched for.
-  font.setLetterSpacing(QFont::AbsoluteSpacing, 0.02);
+  // One glyph for one character: what a font draws for two ("fi"), or instead of another beside a
+  // digit ("±" in Inter), is lost to whoever selects or searches the text.
+  font.setStyleStrategy(QFont::PreferNoShaping);
   return font;
 }
 

@@ -30,4 +30,8 @@ struct PdfDocument {
 [[nodiscard]] text::Checked<PdfDocument> printStockSheets(
     const std::vector<app::StockSheetContent>& contents, Paper paper);
 
+/// Labels of vials, one a page of 62 mm × 29 mm, the size of a common label roll (common practice, no
+/// source).
+[[nodiscard]] text::Checked<PdfDocument> printVialLabels(const std::vector<app::LabelContent>& contents);
+
 }  // namespace vialkeeper::exports

@@ -52,6 +52,7 @@ Blocks vialTexts(const Setting& setting, const app::VialContent& vial, double x_
 }
 
 Block vialBlock(const Setting& setting, const app::VialContent& vial) {
+  if (vial.lines.empty() && !vial.forecast && vial.fill <= 0.0) return {};
   constexpr double kVialHeight_mm = 36.0;
   constexpr double kVialGap_mm = 6.0;
   const double left = setting.page.left();

@@ -148,8 +148,12 @@ RowCells cellsOf(const Setting& setting, const Columns& columns, const app::Shee
                        Align align = Align::kLeft) {
     return TextBlock(setting.typesetter, text, style, column.width_mm, align);
   };
+  const TextBlock detail = detailOf(setting, columns.component, row);
   RowCells cells;
-  cells.cells = {{name, detailOf(setting, columns.component, row), {}, columns.component.left_mm},
+  cells.cells = {{name.isEmpty() ? detail : name,
+                  name.isEmpty() ? TextBlock() : detail,
+                  {},
+                  columns.component.left_mm},
                  {set(toQString(row.supply), kCell, columns.supply),
                   set(toQString(row.device), kDetail, columns.supply),
                   {},
@@ -272,6 +276,7 @@ void addWeighingTable(PageFlow& flow, const Setting& setting,
   Block head = headBlock(setting, columns);
   Blocks first{head};
   first.front().gap_mm = setting.density.sectionGap_mm;
+  first.front().isHeading = true;
   for (Block& block : rowBlocks(setting, columns, rows.front())) first.push_back(std::move(block));
   flow.addTogether(first);
   flow.repeatOnNewPages(head);

@@ -110,11 +110,27 @@ struct StockSheetContent {
   std::string footer;
 };
 
+/// The label of one vial: what must be known of it on a rack and behind glass.
+struct LabelContent {
+  std::string code;
+  std::string title;
+  std::string qrText;
+  std::vector<std::string> lines;  ///< contents in a few words: substrate, catalysts, solvent, atmosphere
+  std::string conditions;          ///< `440 nm, 35 °C, 20 h`
+  std::string hazards;             ///< codes of all components, each once: `H225 H302 H315`
+  std::string caution;             ///< one short line: `gives off H₂: pressure`
+  std::string person;
+  std::string date;
+};
+
 /// The weighing sheet of a planned run, with recorded values where there are some.
 [[nodiscard]] SheetContent weighingSheet(const PlannedRun& run);
 
 /// A sheet for every stock solution that the plan uses and for every one that was proposed.
 [[nodiscard]] std::vector<StockSheetContent> stockSheets(const PlannedRun& run);
+
+/// The label of the vial of a planned run.
+[[nodiscard]] LabelContent vialLabel(const PlannedRun& run);
 
 /// The components in the order of addition, as places in the plan: those that the plan lists first,
 /// then solids, neat liquids, stocks, solvents, gases, each in the plan's order.

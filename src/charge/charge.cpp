@@ -245,7 +245,7 @@ class ChargeSolver {
     if (!m_faults.empty()) return;
     if (sum_m3 > m_total_m3 * (1.0 + 1e-9) + kVolumeRounding_m3) return faultTotal(sum_m3 - m_total_m3);
     m_missing_m3 = m_total_m3 - sum_m3;
-    if (m_plan.vial && m_plan.vial->displaced.si() + m_total_m3 >= m_plan.vial->volume.si()) {
+    if (m_plan.vial && m_plan.vial->displaced.si() + m_total_m3 > m_plan.vial->volume.si() - kVolumeRounding_m3) {
       faultLiquid(fmt::format("{} of liquid leave no headspace in a vial of {}", units::shown(Volume::fromSi(m_total_m3)),
                               units::shown(m_plan.vial->volume)),
                   "take a larger vial or less liquid");

@@ -48,9 +48,9 @@ std::string targetStep(const ComponentPlan& component, const ComponentCharge& ch
                        assayFactor(std::get<SolidSupply>(component.supply).assay));
   }
   if (const auto* liquid = std::get_if<LiquidSupply>(&component.supply)) {
-    return fmt::format("{} = {} × {}{} = {} ÷ {:.4g} g/mL", shown(*charge.targetMass), amount, M,
-                       assayFactor(liquid->assay), shown(*charge.targetVolume),
-                       charge.density->gramsPerMillilitre());
+    const std::string mass = shown(*charge.targetMass);
+    return fmt::format("{} = {} × {}{}; {} = {} ÷ {:.4g} g/mL", mass, amount, M, assayFactor(liquid->assay),
+                       shown(*charge.targetVolume), mass, charge.density->gramsPerMillilitre());
   }
   if (const auto* stock = std::get_if<StockSupply>(&component.supply)) {
     if (stock->concentration) {

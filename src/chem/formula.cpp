@@ -268,6 +268,10 @@ class FormulaReader {
     m_at += length;
     AtomKind kind{symbol, massNumber};
     if (heavyHydrogen) kind = {"H", symbol == "D" ? 2 : 3};
+    if (massNumber != 0 && massNumber != kind.massNumber) {
+      return fault(begin, m_at, fmt::format("{} has the mass number {}", symbol, kind.massNumber),
+                   "write the symbol alone, or H with its mass number");
+    }
     return times({{kind, 1.0}});
   }
 
@@ -299,11 +303,15 @@ std::string toText(const AtomKind& kind) {
   return fmt::format("[{}{}]", kind.massNumber, kind.symbol);
 }
 
-std::string chargeText(int charge) {
-  if (charge == 0) return {};
-  const char sign = charge > 0 ? '+' : '-';
-  const int size = std::abs(charge);
-  return size == 1 ? std::string(1, sign) : fmt::format("^{}{}", size, sign);
+/// The formula with its charge, marked with `^` wherever a bare sign would be read otherwise (azide,
+/// `N3^-`, is not N with three charges).
+std::string withCharge(const std::string& hill, const Composition& composition) {
+  if (composition.charge == 0) return hill;
+  const char sign = composition.charge > 0 ? '+' : '-';
+  const int size = std::abs(composition.charge);
+  if (size > 1) return fmt::format("{}^{}{}", hill, size, sign);
+  const auto bare = parseFormula(hill + sign);
+  return bare && *bare == composition ? hill + sign : hill + '^' + sign;
 }
 
 }  // namespace
@@ -331,7 +339,7 @@ std::string toHillFormula(const Composition& composition) {
       if (count != 1.0) hill += fmt::format("{}", count);
     }
   }
-  return hill + chargeText(composition.charge);
+  return withCharge(hill, composition);
 }
 
 std::expected<MolarMassEstimate, TextFault> molarMass(const Composition& composition) {

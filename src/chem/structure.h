@@ -3,6 +3,7 @@
 #pragma once
 
 #include <expected>
+#include <memory>
 #include <string>
 #include <string_view>
 
@@ -30,9 +31,31 @@ struct StructureFault {
   std::string mend;
 };
 
-/// Reads and draws structures. Implemented by two modules over RDKit and libinchi; the one that
-/// reads is loaded by structureEngine(), the one that draws (three times as slow to load) by the
-/// first drawing. A SMILES has at most 10 000 characters and 1000 atoms; blanks around it do not
+/// A part of a structure that is looked for in others. Every atom must be met by one of the same
+/// element and every bond by one of the same kind, once aromaticity is settled on both sides; where
+/// the part is open, anything may follow. A charge or an isotope must be met where the part names
+/// one. Of hydrogens, only those written as atoms (`[H]n1cccc1`) must be met: they keep a place
+/// free, while the count in `[nH]` does not. Stereochemistry and radicals do not count.
+/// Not safe for use from two threads at once.
+class Pattern {
+ public:
+  Pattern() = default;
+  Pattern(const Pattern&) = delete;
+  Pattern& operator=(const Pattern&) = delete;
+  virtual ~Pattern() = default;
+
+  /// For mayContain() in chem/fingerprint.h, which tells most structures without the part apart
+  /// before isIn() has to read them.
+  [[nodiscard]] virtual std::string fingerprint() const = 0;
+
+  /// Whether the structure has the part; false also for a text that is no structure.
+  /// Cost: reading the SMILES, about 0.1 ms; the search itself is exponential at worst.
+  [[nodiscard]] virtual bool isIn(std::string_view smiles) const = 0;
+};
+
+/// Reads, draws and searches structures. Implemented by three modules over RDKit and libinchi; the
+/// one that reads is loaded by structureEngine(), those that draw (three times as slow to load) and
+/// search by the first drawing, fingerprint or pattern. A SMILES has at most 10 000 characters and 1000 atoms; blanks around it do not
 /// count. Not safe for use from two threads at once.
 class StructureEngine {
  public:
@@ -63,6 +86,18 @@ class StructureEngine {
     int height_px = 0;
   };
   [[nodiscard]] virtual std::expected<Extent, StructureFault> extent(std::string_view smiles) = 0;
+
+  /// The fingerprint of a whole structure, for mayContain() in chem/fingerprint.h: 256 bytes, bit i
+  /// of 2048 as bit i % 8 (the lowest is 0) of byte i / 8. To be made anew with another release of
+  /// RDKit, which may change its meaning.
+  /// Source: RDKit, pattern fingerprint 1.0.0.
+  [[nodiscard]] virtual std::expected<std::string, StructureFault> fingerprint(
+      std::string_view smiles) = 0;
+
+  /// The part that a SMILES describes, kept for any number of structures. Not SMARTS. A nitrogen
+  /// of an aromatic ring may be left open (`n1cccc1`) as well as written with its hydrogen.
+  [[nodiscard]] virtual std::expected<std::unique_ptr<Pattern>, StructureFault> readPattern(
+      std::string_view smiles) = 0;
 };
 
 /// The engine, loaded on the first call and kept for the life of the process.

@@ -5,6 +5,7 @@
 #include <cstdlib>
 #include <expected>
 #include <filesystem>
+#include <memory>
 #include <string>
 #include <string_view>
 #include <system_error>
@@ -19,9 +20,13 @@ namespace {
 namespace fs = std::filesystem;
 
 constexpr const char* kDirectoryVariable = "VIALKEEPER_MODULE_DIR";
-constexpr const char* kReinstall =
-    "install Vialkeeper again, program and modules together, or give a formula or molar mass in "
-    "place of the SMILES";
+
+/// The way to mend an installation, and the way to do without the module where there is one.
+std::string reinstall(const StructureModule& module) {
+  std::string mend = "install Vialkeeper again, program and modules together";
+  if (module.detour != nullptr) mend.append(", or ").append(module.detour);
+  return mend;
+}
 
 /// The directories in which a module may stand, the most particular first.
 std::vector<fs::path> moduleDirectories() {
@@ -45,16 +50,16 @@ std::vector<fs::path> moduleDirectories() {
   return directories;
 }
 
-StructureFault missingModule(const char* file, const std::vector<fs::path>& sought) {
+StructureFault missingModule(const StructureModule& module, const std::vector<fs::path>& sought) {
   StructureFault fault;
-  fault.what = std::string("the structure module ") + file + " is not in ";
+  fault.what = std::string("the structure module ") + module.file + " is not in ";
   for (std::size_t i = 0; i < sought.size(); ++i) {
     if (i > 0) fault.what += i + 1 == sought.size() ? " or " : ", ";
     fault.what += sought[i].string();
   }
   fault.mend = std::getenv(kDirectoryVariable) != nullptr
                    ? std::string("correct or unset ") + kDirectoryVariable
-                   : std::string(kReinstall);
+                   : reinstall(module);
   return fault;
 }
 
@@ -85,19 +90,40 @@ class LoadedEngine final : public StructureEngine {
     if (!opened) return std::unexpected(opened.error());
     return (*opened)->extent(smiles);
   }
+  std::expected<std::string, StructureFault> fingerprint(std::string_view smiles) override {
+    const auto opened = searcher();
+    if (!opened) return std::unexpected(opened.error());
+    return (*opened)->fingerprint(smiles);
+  }
+  std::expected<std::unique_ptr<Pattern>, StructureFault> readPattern(
+      std::string_view smiles) override {
+    const auto opened = searcher();
+    if (!opened) return std::unexpected(opened.error());
+    return (*opened)->readPattern(smiles);
+  }
 
  private:
   std::expected<StructureDrawer*, StructureFault> drawer() {
-    if (m_drawer == nullptr) {
-      const auto opened = openStructureModule(kDrawerModule);
+    return openOnce(m_drawer, kDrawerModule);
+  }
+  std::expected<StructureSearcher*, StructureFault> searcher() {
+    return openOnce(m_searcher, kSearcherModule);
+  }
+
+  template <class Object>
+  static std::expected<Object*, StructureFault> openOnce(Object*& object,
+                                                         const StructureModule& module) {
+    if (object == nullptr) {
+      const auto opened = openStructureModule(module);
       if (!opened) return std::unexpected(opened.error());
-      m_drawer = static_cast<StructureDrawer*>(*opened);
+      object = static_cast<Object*>(*opened);
     }
-    return m_drawer;
+    return object;
   }
 
   StructureReader* m_reader;
   StructureDrawer* m_drawer = nullptr;
+  StructureSearcher* m_searcher = nullptr;
 };
 
 }  // namespace
@@ -123,11 +149,11 @@ std::expected<void*, StructureFault> openStructureModule(const StructureModule& 
     if (object == nullptr) {
       return std::unexpected(StructureFault{
           "the structure module " + file.string() + " belongs to another version of Vialkeeper",
-          kReinstall});
+          reinstall(module)});
     }
     return object;
   }
-  return std::unexpected(missingModule(module.file, directories));
+  return std::unexpected(missingModule(module, directories));
 }
 
 std::expected<StructureEngine*, StructureFault> structureEngine() {

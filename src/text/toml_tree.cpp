@@ -22,6 +22,9 @@ constexpr std::string_view kUnreadableWritten = R"("\u0001")";
 
 constexpr std::size_t kMostRounds = 64;
 
+/// Parts of a dotted key beyond which it is refused; no file of ours has half as many.
+constexpr int kDeepestKey = 8;
+
 std::vector<std::string> splitLines(std::string_view text) {
   std::vector<std::string> lines;
   while (true) {
@@ -34,6 +37,29 @@ std::vector<std::string> splitLines(std::string_view text) {
 
 std::string joinLines(const std::vector<std::string>& lines) {
   return fmt::format("{}", fmt::join(lines, "\n"));
+}
+
+/// Number of the line with a dotted key too deep to follow, or 0. The parser and the tree that it makes
+/// descend one call per part, so that a key of some thousand parts would overrun the stack.
+int lineOfEndlessKey(const std::vector<std::string>& lines) {
+  for (std::size_t i = 0; i < lines.size(); ++i) {
+    int dots = 0;
+    char quote = '\0';
+    char before = '\0';
+    for (const char c : lines[i]) {
+      if (quote != '\0') {
+        if (c == quote) quote = '\0';
+      } else if (c == '"' || c == '\'') {
+        quote = c;
+      } else if (c == '.' && before != '.') {
+        if (++dots >= kDeepestKey) return static_cast<int>(i) + 1;
+      } else if (std::string_view(".=[]{},#").find(c) != std::string_view::npos) {
+        dots = 0;
+      }
+      before = c;
+    }
+  }
+  return 0;
 }
 
 /// `key` where the line reads `key = …`, else nothing.
@@ -182,6 +208,12 @@ TomlDocument readToml(std::string_view bytes, const std::string& file) {
     return document;
   }
   std::vector<std::string> lines = splitLines(withoutByteOrderMark(bytes));
+  if (const int line = lineOfEndlessKey(lines)) {
+    document.faults.push_back({.file = file, .line = line, .what = "a key of too many parts",
+                               .mend = "write sections as [name] and fields as name = value"});
+    document.complete = false;
+    return document;
+  }
   LineRepair repair(lines);
   for (std::size_t round = 0; round < kMostRounds; ++round) {
     try {
@@ -190,10 +222,11 @@ TomlDocument readToml(std::string_view bytes, const std::string& file) {
       return document;
     } catch (const toml::parse_error& error) {
       document.faults.push_back(toFault(error, lines, file));
+      const auto redefined = redefinedName(error.description());
       const auto index = static_cast<std::size_t>(error.source().begin.line) - 1;
       const bool header = index < lines.size() && trimmed(lines[index]).starts_with('[');
-      if (header) document.complete = false;
-      if (!repair.setAside(index, redefinedName(error.description()))) break;
+      if (header && !redefined) document.complete = false;  // a repeated section stands there once
+      if (!repair.setAside(index, redefined)) break;
     }
   }
   document.root.clear();

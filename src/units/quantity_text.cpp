@@ -86,7 +86,10 @@ Reading<void> checkSeparators(const Cursor& cursor, std::size_t begin, Dialect d
   if (next != ',' && next != '.') {
     if (number.find(',') == std::string_view::npos || dialect == Dialect::kPerson) return {};
   }
-  const std::size_t place = next == ',' || next == '.' ? cursor.at : begin + number.find(',');
+  const std::size_t comma = number.find(',');
+  const bool second = next == ',' || next == '.';
+  const bool commaFirst = comma != std::string_view::npos && (dialect == Dialect::kFile || !second);
+  const std::size_t place = commaFirst ? begin + comma : cursor.at;
   if (dialect == Dialect::kFile && cursor.text[place] == ',') {
     return textFault(place, 1, "a comma in a number", "write a decimal point and no group separators");
   }
@@ -97,9 +100,9 @@ Reading<void> checkSeparators(const Cursor& cursor, std::size_t begin, Dialect d
 /// Reads digits with at most one decimal sign; the cursor then stands behind the number.
 Reading<double> scanNumber(Cursor& cursor, Dialect dialect) {
   const std::size_t begin = cursor.at;
-  if (!cursor.skip('-')) (void)cursor.skip('+');
+  const bool plainSign = cursor.skip('-') || cursor.skip('+');
   // U+2212, the minus sign proper.
-  const bool typographicMinus = cursor.text.substr(cursor.at).starts_with("\u2212");
+  const bool typographicMinus = !plainSign && cursor.text.substr(cursor.at).starts_with("\u2212");
   if (typographicMinus) cursor.at += 3;
   std::size_t digits = cursor.skipDigits();
   if (cursor.peek() == '.' || cursor.peek() == ',') {
@@ -164,6 +167,7 @@ bool isWanted(Kind kind, Kinds kinds) {
 
 Reading<ReadQuantity> scanQuantity(Cursor& cursor, Kinds kinds, Dialect dialect) {
   cursor.skipBlanks();
+  const std::size_t begin = cursor.at;
   const auto number = scanNumber(cursor, dialect);
   if (!number) return std::unexpected(number.error());
   cursor.skipBlanks();
@@ -171,12 +175,13 @@ Reading<ReadQuantity> scanQuantity(Cursor& cursor, Kinds kinds, Dialect dialect)
   const auto unit = scanUnit(cursor, kinds, dialect);
   if (!unit) return std::unexpected(unit.error());
   if (!isWanted((*unit)->kind, kinds)) {
-    return textFault(unitAt, (*unit)->symbol.size(),
+    return textFault(unitAt, text::trimmed(cursor.text.substr(unitAt, cursor.at - unitAt)).size(),
                  fmt::format("{} is {}, but {} is wanted", (*unit)->symbol, nameOf((*unit)->kind),
                              kindList(kinds)),
                  unitAdvice(kinds, dialect));
   }
   const double si = *number * (*unit)->numerator / (*unit)->denominator + (*unit)->offset;
+  if (!std::isfinite(si)) return textFault(begin, cursor.at - begin, "a value too large to hold", "give a smaller one");
   return ReadQuantity{(*unit)->kind, si, *number, (*unit)->symbol};
 }
 
@@ -215,7 +220,6 @@ Reading<ReadQuantity> checkRange(const ReadQuantity& read, std::string_view text
   if (range == Range::kNonNegative && read.si < 0.0) {
     return textFault(begin, length, "a negative value", "give zero or a value above");
   }
-  if (!std::isfinite(read.si)) return textFault(begin, length, "a value too large to hold", "give a smaller one");
   return read;
 }
 

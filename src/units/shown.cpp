@@ -54,7 +54,8 @@ std::string shown(Temperature temperature) {
 std::string shown(Pressure pressure, int digits) { return toSignificant(pressure.bar(), digits) + " bar"; }
 
 std::string shown(Duration duration) {
-  const auto seconds = static_cast<long long>(std::llround(duration.seconds()));
+  auto seconds = std::llround(duration.seconds());
+  if (seconds >= 3600) seconds = 60 * std::llround(duration.seconds() / 60.0);
   const long long hours = seconds / 3600;
   const long long minutes = seconds % 3600 / 60;
   if (hours > 0) return minutes == 0 ? fmt::format("{} h", hours) : fmt::format("{} h {} min", hours, minutes);

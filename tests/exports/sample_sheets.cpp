@@ -1,6 +1,6 @@
 // SPDX-FileCopyrightText: The Vialkeeper developers
 // SPDX-License-Identifier: GPL-3.0-or-later
-#include "sample_sheets.h"
+#include "exports/sample_sheets.h"
 
 #include <fmt/format.h>
 

@@ -6,6 +6,7 @@
 #include <memory>
 #include <optional>
 #include <string>
+#include <variant>
 #include <vector>
 
 #include "app/notebook/records.h"
@@ -26,6 +27,7 @@ struct SubstanceCondition {
   std::vector<RowNumber> substances;  ///< resolved before the search; empty matches nothing
   std::optional<Interval> loading_molPercent = {};
   std::optional<Interval> concentration_mol_L = {};
+  bool anySubstance = false;  ///< whatever substance it is: `additive:*`
 };
 
 /// All of these words (or their beginnings) stand in observations, title, aim, conclusion or code.
@@ -39,6 +41,7 @@ struct WordsCondition {
 struct TextFieldCondition {
   enum class Field { kCode, kSeries, kPerson, kState, kVial, kLamp, kAtmosphere } field;
   std::string value;
+  bool isPrefix = false;  ///< begins with the value, else equals it
 };
 
 /// A number of the run lies within the interval.
@@ -51,7 +54,7 @@ struct MeasureCondition {
     kDuration,
     kLiquid,
     kLimiting,
-    kDate  ///< day of creation in local time, as UTC milliseconds
+    kDate  ///< creation by the local clock, its digits read as UTC [ms since 1970]
   } measure;
   Interval interval;
 };
@@ -67,7 +70,7 @@ struct AllOf {
 struct AnyOf {
   FindConditions conditions;
 };
-/// The conditions do not hold together.
+/// The conditions do not all hold: the opposite of AllOf.
 struct NoneOf {
   FindConditions conditions;
 };

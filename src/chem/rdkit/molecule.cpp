@@ -141,7 +141,8 @@ std::optional<StructureFault> refuseMolecule(const RWMol& mol) {
 
 }  // namespace
 
-std::expected<std::unique_ptr<RWMol>, StructureFault> parseMolecule(std::string_view text) {
+std::expected<std::unique_ptr<RWMol>, StructureFault> parseMolecule(std::string_view text,
+                                                                     Hydrogens hydrogens) {
   silenceLogs();
   const std::string_view smiles = withoutOuterBlanks(text);
   if (auto refused = refuseNotation(smiles)) return std::unexpected(*refused);
@@ -149,7 +150,8 @@ std::expected<std::unique_ptr<RWMol>, StructureFault> parseMolecule(std::string_
   try {
     RDKit::SmilesParserParams settings = parserSettings(true);
     // A hydride or proton that is bonded would be counted as a hydrogen and its charge be lost.
-    settings.removeHs = smiles.find("[H-") == std::string_view::npos &&
+    settings.removeHs = hydrogens == Hydrogens::Counted &&
+                        smiles.find("[H-") == std::string_view::npos &&
                         smiles.find("[H+") == std::string_view::npos;
     mol.reset(RDKit::SmilesToMol(std::string(smiles), settings));
     // Once more after aromaticity is settled: RDKit lets a lower-case atom of a ring that is not

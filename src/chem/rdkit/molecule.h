@@ -12,12 +12,17 @@
 
 namespace vialkeeper::chem {
 
-/// The sanitised molecule of a SMILES, with hydrogens as counts except where they bear a
-/// meaning (isotopes, H2, double-bond geometry). RDKit's own messages are switched off.
+/// Whether hydrogens that are written as atoms stay atoms.
+enum class Hydrogens {
+  Counted,   ///< no, except where they bear a meaning (isotopes, H2, double-bond geometry)
+  AsWritten  ///< yes
+};
+
+/// The sanitised molecule of a SMILES. RDKit's own messages are switched off.
 /// Fault: not one real structure, or one whose valences do not add up; says where.
 /// Throws nothing of its own; std::bad_alloc and RDKit's invariant failures pass through.
 [[nodiscard]] std::expected<std::unique_ptr<RDKit::RWMol>, StructureFault> parseMolecule(
-    std::string_view smiles);
+    std::string_view smiles, Hydrogens hydrogens = Hydrogens::Counted);
 
 /// What a module answers when RDKit fails in a way that is nobody's mistake.
 [[nodiscard]] StructureFault unexpectedFault();

@@ -3,6 +3,7 @@
 #pragma once
 
 #include <expected>
+#include <memory>
 #include <string>
 #include <string_view>
 
@@ -13,7 +14,7 @@ namespace vialkeeper::chem {
 
 /// Raised whenever a class of this file or of chem/structure.h changes: a module of another
 /// number is refused before any of its functions is called.
-inline constexpr int kStructureModuleAbi = 1;
+inline constexpr int kStructureModuleAbi = 2;
 
 /// Reads and names structures; the functions are those of StructureEngine.
 class StructureReader {
@@ -41,21 +42,39 @@ class StructureDrawer {
       std::string_view smiles) = 0;
 };
 
+/// Searches structures; the functions are those of StructureEngine.
+class StructureSearcher {
+ public:
+  StructureSearcher() = default;
+  StructureSearcher(const StructureSearcher&) = delete;
+  StructureSearcher& operator=(const StructureSearcher&) = delete;
+  virtual ~StructureSearcher() = default;
+  [[nodiscard]] virtual std::expected<std::string, StructureFault> fingerprint(
+      std::string_view smiles) = 0;
+  [[nodiscard]] virtual std::expected<std::unique_ptr<Pattern>, StructureFault> readPattern(
+      std::string_view smiles) = 0;
+};
+
 /// A module's file, without directory, and the one function that it exports. The function takes
 /// the caller's ABI number and returns the module's object, which it keeps, or null where the
 /// numbers differ.
 struct StructureModule {
   const char* file = nullptr;
   const char* factory = nullptr;
+  const char* detour = nullptr;  ///< what a user can do without the module, for the fault; or null
 };
 using StructureModuleFactory = void*(int abiVersion);
 
-inline constexpr StructureModule kReaderModule{"vialkeeper_structures.so",
-                                               "vialkeeper_open_structure_reader"};
+inline constexpr StructureModule kReaderModule{
+    "vialkeeper_structures.so", "vialkeeper_open_structure_reader",
+    "give a formula or molar mass in place of the SMILES"};
 inline constexpr StructureModule kDrawerModule{"vialkeeper_drawings.so",
                                                "vialkeeper_open_structure_drawer"};
+inline constexpr StructureModule kSearcherModule{"vialkeeper_search.so",
+                                                 "vialkeeper_open_structure_searcher"};
 
-/// The object of a module: a StructureReader* or StructureDrawer* behind `void*`.
+/// The object of a module: a StructureReader*, StructureDrawer* or StructureSearcher* behind
+/// `void*`.
 /// Sought in the directory that the environment variable VIALKEEPER_MODULE_DIR names and nowhere
 /// else if that is set; otherwise beside the program (`../lib/vialkeeper`), then where it was
 /// installed. An opened module stays for the life of the process.

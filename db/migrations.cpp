@@ -1,0 +1,97 @@
+// SPDX-FileCopyrightText: The Vialkeeper developers
+// SPDX-License-Identifier: GPL-3.0-or-later
+#include "db/migrations.h"
+
+#include <SQLiteCpp/Backup.h>
+#include <fcntl.h>
+#include <fmt/format.h>
+#include <unistd.h>
+
+#include <cstdlib>
+#include <filesystem>
+
+#include "text/embedded_file.h"
+
+namespace vialkeeper::text {
+// Defined in the file that the build generates from db/migrations, in the order of their numbers.
+extern const EmbeddedFile migrationFiles[];
+extern const std::size_t migrationFilesCount;
+}  // namespace vialkeeper::text
+
+namespace vialkeeper::db {
+namespace {
+
+namespace fs = std::filesystem;
+
+std::unexpected<text::Faults> fault(const std::string& file, std::string what, std::string mend) {
+  return std::unexpected(text::Faults{{.kind = text::FaultKind::kNotebook,
+                                       .file = file,
+                                       .what = std::move(what),
+                                       .mend = std::move(mend)}});
+}
+
+void step(Connection& connection, int to) {
+  const text::EmbeddedFile& script = text::migrationFiles[to - 1];
+  SQLite::Transaction transaction(connection.database(), SQLite::TransactionBehavior::IMMEDIATE);
+  connection.database().exec(std::string(script.contents));
+  connection.database().exec(fmt::format("PRAGMA application_id = {}", kApplicationId));
+  connection.database().exec(fmt::format("PRAGMA user_version = {}", to));
+  transaction.commit();
+}
+
+void flushToDisk(const std::string& file) {
+  const int descriptor = ::open(file.c_str(), O_RDONLY | O_CLOEXEC);
+  if (descriptor < 0) return;
+  ::fsync(descriptor);
+  ::close(descriptor);
+}
+
+}  // namespace
+
+int newestSchema() { return static_cast<int>(text::migrationFilesCount); }
+
+int schemaOf(Connection& connection) { return static_cast<int>(connection.integer("PRAGMA user_version")); }
+
+text::Checked<void> migrate(Connection& connection, const std::string& stamp) {
+  const int found = schemaOf(connection);
+  if (found > 0 && found < newestSchema()) {
+    const std::string copy = fmt::format("{}.before-form-{}-{}", connection.file(), newestSchema(), stamp);
+    if (const auto copied = copyTo(connection, copy); !copied) {
+      return fault(connection.file(), "the notebook was not brought to the newer form, because no copy of it could be made: " +
+                                          copied.error().front().what,
+                   "make room beside the notebook or free the name, then open it again");
+    }
+  }
+  for (int to = found + 1; to <= newestSchema(); ++to) step(connection, to);
+  return {};
+}
+
+text::Checked<void> copyTo(Connection& connection, const std::string& file) {
+  std::error_code ignored;
+  if (fs::exists(file, ignored)) return fault(file, "there is a file of this name already", "name another");
+  const std::string temporary = file + ".part";
+  fs::remove(temporary, ignored);
+  try {
+    {
+      SQLite::Database target(temporary, SQLite::OPEN_READWRITE | SQLite::OPEN_CREATE);
+      SQLite::Backup(target, connection.database()).executeStep();
+    }
+    SQLite::Database reopened(temporary, SQLite::OPEN_READONLY);
+    SQLite::Statement check(reopened, "PRAGMA integrity_check(1)");
+    if (!check.executeStep() || check.getColumn(0).getString() != "ok") {
+      fs::remove(temporary, ignored);
+      return fault(connection.file(), "the copy is not sound, so the notebook itself may be damaged", "run verify");
+    }
+  } catch (const SQLite::Exception& error) {
+    fs::remove(temporary, ignored);
+    return std::unexpected(text::Faults{toFault(error, file)});
+  }
+  flushToDisk(temporary);
+  fs::rename(temporary, file, ignored);
+  if (ignored) return fault(file, "the copy could not get its name: " + ignored.message(), "check the folder");
+  const fs::path folder = fs::absolute(file).parent_path();
+  flushToDisk(folder.string());
+  return {};
+}
+
+}  // namespace vialkeeper::db

@@ -1,0 +1,100 @@
+// SPDX-FileCopyrightText: The Vialkeeper developers
+// SPDX-License-Identifier: GPL-3.0-or-later
+#include "app/notebook/find_runs.h"
+
+#include <fmt/format.h>
+
+#include <memory>
+
+#include "app/notebook/find_language.h"
+#include "app/notebook/fold_name.h"
+#include "chem/fingerprint.h"
+#include "chem/structure.h"
+#include "text/text_fault.h"
+#include "text/utf8.h"
+
+namespace vialkeeper::app {
+namespace {
+
+/// Looks substances up in a notebook; a fault of the file is kept until the search is over.
+class NotebookResolver final : public SubstanceResolver {
+ public:
+  explicit NotebookResolver(Notebook& notebook) : m_notebook(notebook) {}
+
+  std::vector<RowNumber> numbersByName(std::string_view folded) override {
+    std::vector<RowNumber> numbers;
+    for (const SubstanceRecord& substance : kept(m_notebook.substancesByName(folded))) numbers.push_back(substance.n);
+    return numbers;
+  }
+
+  std::vector<RowNumber> numbersByNameBeginning(std::string_view folded) override {
+    std::vector<RowNumber> numbers;
+    for (const auto& [name, n] : kept(m_notebook.substanceNames())) {
+      if (foldName(name).starts_with(folded)) numbers.push_back(n);
+    }
+    return numbers;
+  }
+
+  std::vector<RowNumber> numbersByCas(std::string_view cas) override {
+    const auto found = m_notebook.substanceByCas(cas);
+    if (!found) m_faults = found.error();
+    return found && *found ? std::vector{(*found)->n} : std::vector<RowNumber>{};
+  }
+
+  std::expected<std::vector<RowNumber>, text::TextFault> numbersBySubstructure(std::string_view smiles) override {
+    const auto fault = [smiles](const chem::StructureFault& why) {
+      return text::textFault(0, smiles.size(), why.what, why.mend);
+    };
+    const auto engine = chem::structureEngine();
+    if (!engine) return fault(engine.error());
+    const auto pattern = (*engine)->readPattern(smiles);
+    if (!pattern) return fault(pattern.error());
+    const std::string bits = (*pattern)->fingerprint();
+    std::vector<RowNumber> numbers;
+    for (const SubstanceRecord& substance : kept(m_notebook.substances())) {
+      const bool candidate = !substance.canonicalSmiles.empty() &&
+                             (substance.fingerprint.empty() || chem::mayContain(substance.fingerprint, bits));
+      if (candidate && (*pattern)->isIn(substance.canonicalSmiles)) numbers.push_back(substance.n);
+    }
+    return numbers;
+  }
+
+  std::vector<std::string> names() override {
+    std::vector<std::string> list;
+    for (const auto& [name, n] : kept(m_notebook.substanceNames())) list.push_back(name);
+    return list;
+  }
+
+  [[nodiscard]] const text::Faults& faults() const { return m_faults; }
+
+ private:
+  template <class T>
+  std::vector<T> kept(Checked<std::vector<T>> list) {
+    if (list) return *std::move(list);
+    m_faults = list.error();
+    return {};
+  }
+
+  Notebook& m_notebook;
+  text::Faults m_faults;
+};
+
+std::unexpected<text::Faults> queryFault(const text::TextFault& fault, std::string_view text) {
+  return std::unexpected(text::Faults{{.field = "query",
+                                       .what = fmt::format("{}: {}", text::quoted(text), whatWithPosition(fault, text)),
+                                       .mend = fault.mend}});
+}
+
+}  // namespace
+
+Checked<FindResult> findRuns(Notebook& notebook, std::string_view text, const FindOptions& options, bool asYouType) {
+  const auto parsed = parseFind(text, {.asYouType = asYouType});
+  if (!parsed) return queryFault(parsed.error(), text);
+  NotebookResolver resolver(notebook);
+  const auto query = resolveQuery(*parsed, resolver, {.unknownMatchesNothing = asYouType});
+  if (!resolver.faults().empty()) return std::unexpected(resolver.faults());
+  if (!query) return queryFault(query.error(), text);
+  return notebook.find(*query, options);
+}
+
+}  // namespace vialkeeper::app
