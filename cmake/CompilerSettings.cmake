@@ -8,6 +8,7 @@ function(vialkeeper_compiler_settings target)
     -Wall -Wextra -Wpedantic -Wshadow -Wconversion -Wold-style-cast
     -Woverloaded-virtual -Wnon-virtual-dtor
     -Wno-restrict  # false alarms on std::string in g++ 12, GCC bug 105651
+    -fpch-preprocess  # lets ccache keep what was compiled with a precompiled header
     $<$<BOOL:${VIALKEEPER_WARNINGS_AS_ERRORS}>:-Werror>)
   if(VIALKEEPER_SANITIZE)
     target_compile_options(${target} PRIVATE -fsanitize=address,undefined -fno-omit-frame-pointer

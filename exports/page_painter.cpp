@@ -42,7 +42,7 @@ void PagePainter::tickBox(double x_mm, double y_mm, double side_mm) {
                             kCorner_mm * m_unitsPerMm);
 }
 
-void PagePainter::warningSign(double x_mm, double y_mm, double size_mm) {
+void PagePainter::warningSign(double x_mm, double y_mm, double size_mm, const QColor& colour) {
   QPainterPath sign;
   sign.setFillRule(Qt::OddEvenFill);
   sign.moveTo(0.50, 0.06);
@@ -51,7 +51,7 @@ void PagePainter::warningSign(double x_mm, double y_mm, double size_mm) {
   sign.closeSubpath();
   sign.addRect(0.455, 0.36, 0.09, 0.30);
   sign.addRect(0.455, 0.73, 0.09, 0.09);
-  fill(sign, x_mm, y_mm, size_mm, colours::kWarning);
+  fill(sign, x_mm, y_mm, size_mm, colour);
 }
 
 void PagePainter::fill(const QPainterPath& path, double x_mm, double y_mm, double scale_mm,

@@ -25,7 +25,8 @@ class PagePainter {
   void dashedBox(const QRectF& rect_mm);
   void tickBox(double x_mm, double y_mm, double side_mm);
   /// A triangle with an exclamation mark, as a shape: fonts without the character have it too.
-  void warningSign(double x_mm, double y_mm, double size_mm);
+  void warningSign(double x_mm, double y_mm, double size_mm,
+                   const QColor& colour = colours::kWarning);
   /// A path in units of its own, `scale_mm` each, with its origin at the given place.
   void fill(const QPainterPath& path, double x_mm, double y_mm, double scale_mm,
             const QColor& colour);

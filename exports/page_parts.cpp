@@ -11,11 +11,13 @@ namespace {
 
 const TextStyle kHeading{8.5, Weight::kBold, colours::kInk};
 const TextStyle kBody{8.0, Weight::kRegular, colours::kInk};
-const TextStyle kBodyBold{8.0, Weight::kBold, colours::kInk};
 const TextStyle kNotice{7.8, Weight::kRegular, colours::kWarning};
 
 constexpr double kAfterHeading_mm = 1.6;
-constexpr double kBetweenParagraphs_mm = 1.3;
+
+TextStyle body(const Setting& setting, Weight weight = Weight::kRegular) {
+  return {.size_pt = setting.density.body_pt, .weight = weight, .colour = colours::kInk};
+}
 
 /// A paragraph as a block at a fixed left edge.
 Block textBlock(const TextBlock& text, double x_mm, double gap_mm) {
@@ -49,13 +51,14 @@ Blocks cautionBlocks(const Setting& setting, const std::vector<std::string>& cau
   blocks.push_back(textBlock(heading(setting, QStringLiteral("Cautions")), x_mm, 0.0));
   blocks.back().isHeading = true;
   for (const std::string& caution : cautions) {
-    const TextBlock text(setting.typesetter, toQString(caution), kBody, width_mm - kIndent_mm);
+    const TextBlock text(setting.typesetter, toQString(caution), body(setting),
+                         width_mm - kIndent_mm);
     const Mark dot = [x_mm, middle = text.ascent_mm() * 0.66](PagePainter& painter, double y_mm) {
       QPainterPath path;
       path.addEllipse(QPointF(0.0, 0.0), 0.5, 0.5);
       painter.fill(path, x_mm + 0.6, y_mm + middle, 1.0, colours::kInk);
     };
-    const double gap = blocks.size() == 1 ? kAfterHeading_mm : kBetweenParagraphs_mm;
+    const double gap = blocks.size() == 1 ? kAfterHeading_mm : setting.density.paragraph_mm;
     append(blocks, markedParagraph(text, x_mm + kIndent_mm, gap, dot));
   }
   return blocks;
@@ -77,6 +80,56 @@ Block merged(const Blocks& blocks) {
               y_mm += blocks[i].height_mm;
             }
           }};
+}
+
+/// Each substance's name with its statements behind it.
+std::vector<TextBlock> hazardEntries(const Setting& setting,
+                                     const std::vector<app::HazardContent>& hazards,
+                                     double width_mm) {
+  std::vector<TextBlock> entries;
+  for (const app::HazardContent& hazard : hazards) {
+    std::vector<QString> statements;
+    for (const std::string& statement : hazard.statements) {
+      statements.push_back(codeBound(toQString(statement)));
+    }
+    QString name = toQString(hazard.name);
+    if (!name.isEmpty()) name += QStringLiteral("  ");
+    entries.emplace_back(setting.typesetter,
+                         std::vector<TextRun>{{name, body(setting, Weight::kBold)},
+                                              {dotted(statements), body(setting)}},
+                         width_mm);
+  }
+  return entries;
+}
+
+/// Paragraphs in two columns, the first no shorter than it must be to hold half of the height.
+Block columnsBlock(const std::vector<TextBlock>& texts, double left_mm, double right_mm,
+                   double gap_mm) {
+  const auto height = [&](std::size_t first, std::size_t last) {
+    double sum = 0.0;
+    for (std::size_t i = first; i < last; ++i) {
+      sum += texts[i].height_mm() + (i > first ? gap_mm : 0.0);
+    }
+    return sum;
+  };
+  std::size_t split = 0;
+  double least = height(0, texts.size());
+  for (std::size_t i = 1; i <= texts.size(); ++i) {
+    const double higher = std::max(height(0, i), height(i, texts.size()));
+    if (split > 0 && higher >= least) continue;
+    split = i;
+    least = higher;
+  }
+  return {least,
+          [=](PagePainter& painter, double y_mm) {
+            double y = y_mm;
+            for (std::size_t i = 0; i < texts.size(); ++i) {
+              if (i == split) y = y_mm;
+              painter.text(texts[i], i < split ? left_mm : right_mm, y);
+              y += texts[i].height_mm() + gap_mm;
+            }
+          },
+          gap_mm};
 }
 
 }  // namespace
@@ -124,32 +177,36 @@ Blocks noticeBlocks(const Setting& setting, const std::vector<std::string>& noti
 }
 
 Blocks hazardBlocks(const Setting& setting, const std::vector<app::HazardContent>& hazards) {
-  constexpr double kNameShare = 0.23;
-  constexpr double kColumnGap_mm = 4.0;
+  constexpr double kColumnGap_mm = 7.0;
+  constexpr double kTooLong_mm = 60.0;
+  constexpr std::size_t kTogether = 8;  // entries that no page's end comes between
   Blocks blocks;
   if (hazards.empty()) return blocks;
   const double left = setting.page.left();
-  const double nameWidth = kNameShare * setting.page.contentWidth();
-  const double textLeft = left + nameWidth + kColumnGap_mm;
   blocks.push_back(
       textBlock(heading(setting, QStringLiteral("Hazards")), left, setting.density.sectionGap_mm));
-  for (const app::HazardContent& hazard : hazards) {
-    const TextBlock name(setting.typesetter, toQString(hazard.name), kBodyBold, nameWidth);
-    std::vector<QString> statements;
-    for (const std::string& statement : hazard.statements) {
-      statements.push_back(codeBound(toQString(statement)));
+  blocks.back().isHeading = true;
+  const double width = setting.page.contentWidth();
+  const double half = (width - kColumnGap_mm) / 2.0;
+  std::vector<TextBlock> entries = hazardEntries(setting, hazards, half);
+  const bool inColumns =
+      entries.size() > 1 && std::ranges::all_of(entries, [](const TextBlock& entry) {
+        return entry.height_mm() <= kTooLong_mm;
+      });
+  if (inColumns) {
+    for (std::size_t first = 0; first < entries.size(); first += kTogether) {
+      const std::size_t last = std::min(first + kTogether, entries.size());
+      const std::vector<TextBlock> some(entries.begin() + static_cast<std::ptrdiff_t>(first),
+                                        entries.begin() + static_cast<std::ptrdiff_t>(last));
+      blocks.push_back(
+          columnsBlock(some, left, left + half + kColumnGap_mm, setting.density.paragraph_mm));
     }
-    const TextBlock text(setting.typesetter, dotted(statements), kBody,
-                         setting.page.right() - textLeft);
-    const Mark label = [name, left](PagePainter& painter, double y_mm) {
-      painter.text(name, left, y_mm);
-    };
-    const double gap = blocks.size() == 1 ? kAfterHeading_mm : kBetweenParagraphs_mm;
-    Blocks entry = markedParagraph(text, textLeft, gap, label);
-    if (entry.empty()) entry = {textBlock(name, left, gap)};
-    entry.front().height_mm = std::max(entry.front().height_mm, name.height_mm());
-    append(blocks, std::move(entry));
+  } else {
+    for (const TextBlock& entry : hazardEntries(setting, hazards, width)) {
+      append(blocks, paragraphBlocks(entry, left, setting.density.paragraph_mm));
+    }
   }
+  if (blocks.size() > 1) blocks[1].gap_mm = kAfterHeading_mm;
   return blocks;
 }
 
@@ -200,7 +257,7 @@ Block signBlock(const Setting& setting, const std::vector<QString>& labels) {
 }
 
 bool closePage(PageFlow& flow, const Setting& setting, const std::vector<QString>& signLabels) {
-  constexpr double kLeastNotes_mm = 25.0;
+  constexpr double kLeastNotes_mm = 14.0;  // the heading and one line
   constexpr double kLine_mm = 8.0;
   const Block sign = signBlock(setting, signLabels);
   if (flow.remaining_mm() < sign.height_mm + 2.0) flow.newPage();

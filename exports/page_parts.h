@@ -20,6 +20,9 @@ struct Density {
   double sectionGap_mm = 7.0;
   double bond_mm = 5.2;  ///< see SchemeSize
   double structure_mm = 40.0;
+  double vial_mm = 36.0;      ///< height of the drawn vial
+  double body_pt = 8.0;       ///< cautions, hazards and what is known of the vial
+  double paragraph_mm = 1.3;  ///< between two of them
 };
 
 /// What every part is set with.
@@ -60,7 +63,8 @@ struct Masthead {
 [[nodiscard]] Blocks noticeBlocks(const Setting& setting, const std::vector<std::string>& notices,
                                   double x_mm, double width_mm);
 
-/// Hazard statements under their heading, one substance a block.
+/// Hazard statements under their heading, in two columns to be read one after the other; one below
+/// the other where a substance has too many for that.
 [[nodiscard]] Blocks hazardBlocks(const Setting& setting,
                                   const std::vector<app::HazardContent>& hazards);
 

@@ -5,6 +5,7 @@
 #include "exports/pdf_file.h"
 #include "exports/qr_code.h"
 #include "exports/stock_sheet.h"
+#include "exports/vial_label.h"
 #include "exports/weighing_sheet.h"
 
 namespace vialkeeper::exports {
@@ -48,6 +49,25 @@ class QtPagePrinter final : public PagePrinter {
       const auto qr = codeFor(content.qrText);
       if (!qr) return std::unexpected(qr.error());
       flows.push_back(layOutStockSheet(file.typesetter(), file.geometry(), content, *qr));
+    }
+    return file.write(flows);
+  }
+
+  text::Checked<PdfDocument> vialLabels(const std::vector<app::LabelContent>& contents) override {
+    if (contents.empty()) {
+      return std::unexpected(text::Faults{
+          {.what = "there is no vial to print a label for", .mend = "name a plan or a run"}});
+    }
+    const auto family = startGuiSession();
+    if (!family) return std::unexpected(family.error());
+    PdfFile file(vialLabelGeometry(), *family, contents.front().title);
+    std::vector<PageFlow> flows;
+    for (const app::LabelContent& content : contents) {
+      const auto qr = codeFor(content.qrText);
+      if (!qr) return std::unexpected(qr.error());
+      const auto label = layOutVialLabel(file.typesetter(), content, *qr);
+      if (!label) return std::unexpected(label.error());
+      flows.push_back(*label);
     }
     return file.write(flows);
   }

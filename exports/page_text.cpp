@@ -86,11 +86,10 @@ TextBlock::TextBlock(const Typesetter& typesetter, const std::vector<TextRun>& r
   QTextOption option(alignmentOf(align));
   option.setWrapMode(QTextOption::WrapAtWordBoundaryOrAnywhere);
   m_layout->setTextOption(option);
-  breakIntoLines(width_mm * m_unitsPerMm);
+  breakIntoLines(width_mm * m_unitsPerMm, runs.front().style.leading);
 }
 
-void TextBlock::breakIntoLines(double width_units) {
-  constexpr double kLeading = 1.06;
+void TextBlock::breakIntoLines(double width_units, double leading) {
   double y = 0.0;
   double widest = 0.0;
   m_layout->beginLayout();
@@ -98,7 +97,7 @@ void TextBlock::breakIntoLines(double width_units) {
     line.setLineWidth(std::max(width_units, 1.0));
     line.setPosition(QPointF(0.0, y));
     if (y == 0.0) m_ascent_mm = line.ascent() / m_unitsPerMm;
-    y += line.height() * kLeading;
+    y += line.height() * leading;
     widest = std::max(widest, line.naturalTextWidth());
   }
   m_layout->endLayout();

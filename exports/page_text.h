@@ -32,6 +32,7 @@ struct TextStyle {
   double size_pt = 8.5;
   Weight weight = Weight::kRegular;
   QColor colour = colours::kInk;
+  double leading = 1.06;  ///< of the first run's style, in the font's own line heights
 };
 
 /// A stretch of text in one style.
@@ -76,7 +77,7 @@ class TextBlock {
   void draw(QPainter& painter, double x_mm, double y_mm) const;
 
  private:
-  void breakIntoLines(double width_units);
+  void breakIntoLines(double width_units, double leading);
 
   std::shared_ptr<QTextLayout> m_layout;
   int m_firstLine = 0;

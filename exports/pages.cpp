@@ -22,4 +22,10 @@ text::Checked<PdfDocument> printStockSheets(const std::vector<app::StockSheetCon
   return (*printer)->stockSheets(contents, paper);
 }
 
+text::Checked<PdfDocument> printVialLabels(const std::vector<app::LabelContent>& contents) {
+  const auto printer = pagePrinter();
+  if (!printer) return std::unexpected(printer.error());
+  return (*printer)->vialLabels(contents);
+}
+
 }  // namespace vialkeeper::exports

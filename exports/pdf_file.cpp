@@ -3,7 +3,6 @@
 #include "exports/pdf_file.h"
 
 #include <QMarginsF>
-#include <QPageSize>
 #include <QPainter>
 #include <algorithm>
 #include <string_view>
@@ -30,14 +29,23 @@ void takeOutDate(std::string& bytes) {
 }  // namespace
 
 PdfFile::PdfFile(Paper paper, const QString& family, const std::string& title)
-    : m_writer(&m_buffer) {
+    : PdfFile(paper == Paper::kA4 ? PageGeometry{.width_mm = 210.0, .height_mm = 297.0}
+                                  : PageGeometry{.width_mm = 215.9, .height_mm = 279.4},
+              QPageSize(paper == Paper::kA4 ? QPageSize::A4 : QPageSize::Letter), family, title) {}
+
+PdfFile::PdfFile(const PageGeometry& geometry, const QString& family, const std::string& title)
+    : PdfFile(geometry,
+              QPageSize(QSizeF(geometry.width_mm, geometry.height_mm), QPageSize::Millimeter,
+                        QString(), QPageSize::ExactMatch),
+              family, title) {}
+
+PdfFile::PdfFile(const PageGeometry& geometry, const QPageSize& size, const QString& family,
+                 const std::string& title)
+    : m_writer(&m_buffer), m_geometry(geometry) {
   m_buffer.open(QIODevice::WriteOnly);
-  const bool isA4 = paper == Paper::kA4;
-  m_geometry.width_mm = isA4 ? 210.0 : 215.9;
-  m_geometry.height_mm = isA4 ? 297.0 : 279.4;
   // All of this must stand before a painter begins: Qt fixes the page at that moment.
   m_writer.setResolution(kResolution_dpi);
-  m_writer.setPageSize(QPageSize(isA4 ? QPageSize::A4 : QPageSize::Letter));
+  m_writer.setPageSize(size);
   m_writer.setPageMargins(QMarginsF(0.0, 0.0, 0.0, 0.0));
   m_writer.setTitle(toQString(title));
   m_writer.setCreator(QStringLiteral("Vialkeeper"));

@@ -3,6 +3,7 @@
 #pragma once
 
 #include <QBuffer>
+#include <QPageSize>
 #include <QPdfWriter>
 #include <string>
 #include <vector>
@@ -16,6 +17,8 @@ namespace vialkeeper::exports {
 class PdfFile {
  public:
   PdfFile(Paper paper, const QString& family, const std::string& title);
+  /// Pages of any size. Qt rounds the page to whole points (0.35 mm), what is on it not.
+  PdfFile(const PageGeometry& geometry, const QString& family, const std::string& title);
 
   [[nodiscard]] const PageGeometry& geometry() const { return m_geometry; }
   [[nodiscard]] const Typesetter& typesetter() const { return m_typesetter; }
@@ -26,6 +29,9 @@ class PdfFile {
   [[nodiscard]] text::Checked<PdfDocument> write(const std::vector<PageFlow>& flows);
 
  private:
+  PdfFile(const PageGeometry& geometry, const QPageSize& size, const QString& family,
+          const std::string& title);
+
   QBuffer m_buffer;
   QPdfWriter m_writer;
   PageGeometry m_geometry;

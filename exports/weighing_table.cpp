@@ -238,10 +238,21 @@ Blocks longNameBlocks(const Setting& setting, const Columns& columns, const app:
   return blocks;
 }
 
+/// A little smaller where that keeps the name on one line.
+TextStyle nameStyle(const Setting& setting, const app::SheetRow& row, double width_mm) {
+  TextStyle style = kName;
+  for (const double size : {9.8, 9.3, 8.8}) {
+    style.size_pt = size;
+    if (textWidth_mm(setting.typesetter, toQString(row.name), style) < width_mm) return style;
+  }
+  return kName;
+}
+
 Blocks rowBlocks(const Setting& setting, const Columns& columns, const app::SheetRow& row) {
   constexpr int kMostLines = 3;
   Blocks blocks;
-  TextBlock name(setting.typesetter, toQString(row.name), kName, columns.component.width_mm);
+  TextBlock name(setting.typesetter, toQString(row.name),
+                 nameStyle(setting, row, columns.component.width_mm), columns.component.width_mm);
   const bool isLong = name.lines() > kMostLines;
   if (isLong) {
     blocks = longNameBlocks(setting, columns, row);

@@ -109,21 +109,33 @@ Faults parserFaults(const CLI::App& program, const CLI::ParseError& error) {
 void describe(CLI::App& program, CommonOptions& common) {
   program.description("Vialkeeper: a record for light-driven, hydrogen-evolving reactions in sealed vials.");
   program.set_version_flag("--version", "vialkeeper " VIALKEEPER_VERSION);
-  program.add_option("--book", common.book, "the notebook file");
+  program.add_option("--book", common.book, "the notebook file (or VIALKEEPER_BOOK)");
+  program.add_option("--person", common.person, "who works, by initials (or VIALKEEPER_PERSON)");
   program.add_flag("--json", common.json, "print one JSON object in place of a table");
   program.require_subcommand(1);
   program.fallthrough();
   program.footer("Exit status: 0 done, 1 the input is at fault, 2 the command line, 3 the notebook.");
 }
 
+std::vector<Verb> allVerbs(CLI::App& program) {
+  std::vector<Verb> verbs;
+  for (const auto make : {massVerb, chargeVerb, sheetVerb, createVerb, shelfVerb, addVerb, cloneVerb, runsVerb,
+                          findVerb, showVerb, weighVerb, logVerb, correctVerb, resultVerb, compareVerb, labelVerb,
+                          importVerb, exportVerb, backupVerb, verifyVerb, keyVerb, sealVerb, countersignVerb}) {
+    verbs.push_back(make(program));
+  }
+  return verbs;
+}
+
 }  // namespace
 
-int run(std::span<const std::string> arguments, std::ostream& out, std::ostream& err) {
+int run(std::span<const std::string> arguments, std::ostream& out, std::ostream& err, Surroundings& around) {
   CLI::App program;
   program.name("vialkeeper");
   CommonOptions common;
+  common.around = &around;
   describe(program, common);
-  const std::vector<Verb> verbs = {massVerb(program), chargeVerb(program), sheetVerb(program)};
+  const std::vector<Verb> verbs = allVerbs(program);
   try {
     // CLI11 takes its arguments from the back.
     program.parse(std::vector<std::string>(arguments.rbegin(), arguments.rend()));

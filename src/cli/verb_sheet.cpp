@@ -11,6 +11,7 @@
 #include "app/sheet_content.h"
 #include "app/text_files.h"
 #include "cli/json_text.h"
+#include "cli/planned_source.h"
 #include "cli/scale_options.h"
 #include "cli/verb.h"
 #include "exports/pages.h"
@@ -38,7 +39,7 @@ text::Checked<exports::PdfDocument> print(const app::PlannedRun& run, bool stock
 }
 
 VerbResult runSheet(const SheetOptions& options, const CommonOptions& common) {
-  app::ChargeRequest request{.planFile = options.plan, .weighedFile = options.weighed};
+  app::ChargeRequest request{.weighedFile = options.weighed};
   text::Faults faults = readScale(options.scale, request);
   if (options.paper != "A4" && options.paper != "Letter") {
     faults.push_back(usageFault("--paper", fmt::format("{} is no paper size here", text::quoted(options.paper)),
@@ -46,7 +47,7 @@ VerbResult runSheet(const SheetOptions& options, const CommonOptions& common) {
   }
   if (options.pdf.empty()) faults.push_back(usageFault("--pdf", "the file name is empty", "name the PDF to write"));
   if (!faults.empty()) return std::unexpected(std::move(faults));
-  const auto run = app::planCharge(request);
+  const auto run = plannedFrom(options.plan, request, common);
   if (!run) return std::unexpected(run.error());
   const auto paper = options.paper == "A4" ? exports::Paper::kA4 : exports::Paper::kLetter;
   const auto document = print(*run, options.stocks, paper);
@@ -65,7 +66,7 @@ VerbResult runSheet(const SheetOptions& options, const CommonOptions& common) {
 Verb sheetVerb(CLI::App& program) {
   auto options = std::make_shared<SheetOptions>();
   CLI::App* parser = program.add_subcommand("sheet", "The weighing sheet of a plan, as PDF");
-  parser->add_option("PLAN", options->plan, "a plan file")->required();
+  parser->add_option("PLAN", options->plan, "a plan file, or with --book the code of a run")->required();
   parser->add_option("--pdf", options->pdf, "the PDF file to write")->required();
   parser->add_option("--paper", options->paper, "A4 (default) or Letter");
   parser->add_option("--weighed", options->weighed, "CSV of key,actual: fills in what was recorded");

@@ -39,7 +39,7 @@ TEST_CASE("a liquid that with the stir bar fills the vial leaves no headspace, a
   for (const char* total : {"9.85 mL", "10.0 mL", "12 mL"}) {
     const auto faults = tests::faultsOfPlan(planText(std::string("total=\"") + total + "\"", {kLimiting, kWater}, vial("10.0 mL", "0.15 mL")));
     REQUIRE(faults.size() == 1);
-    CHECK(faults[0].field == "liquid");
+    CHECK(faults[0].field == "liquid.total");
     CHECK(faults[0].what.find("leave no headspace") != std::string::npos);
   }
   CHECK_NOTHROW(chargeOf(planText("total=\"9.84 mL\"", {kLimiting, kWater}, vial("10.0 mL", "0.15 mL"))));

@@ -168,7 +168,7 @@ TEST_CASE("atmospheres must be known and their fractions sum to one", "[plan]") 
 
 TEST_CASE("keys must be plain, given and each its own", "[plan]") {
   checkFaults({{"key = \"mecn\"", "key = \"me cn\"", "component[4].key", "cannot be a key"},
-               {"key = \"water\"", "key = \"mecn\"", "component[5].key", "the key 'mecn' is taken by the entry of line 73"},
+               {"key = \"water\"", "key = \"mecn\"", "component[5].key", "the key 'mecn' is taken by the entry of line 72"},
                {"key = \"water\"", "key = \"imine\"", "component[5].key", "the key 'imine' is taken by the entry of line 9"},
                {"key = \"water\"", "key = \"\"", "component[5].key", "the text is empty"}});
 }

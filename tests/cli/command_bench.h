@@ -8,7 +8,7 @@
 #include <string_view>
 #include <vector>
 
-#include "app/scratch_folder.h"
+#include "cli/scratch_folder.h"
 
 namespace vialkeeper::test {
 

@@ -71,7 +71,7 @@ TEST_CASE("a trailing charge is read in every spelling and takes or leaves elect
   }
 }
 
-TEST_CASE("--json may stand before or behind the verb and the bytes stay the same", "[cli][json][mass]") {
+TEST_CASE("the option --json may stand before or behind the verb and the bytes stay the same", "[cli][json][mass]") {
   const Ran behind = run({"mass", "CuSO4·5H2O", "--json"});
   CHECK(run({"--json", "mass", "CuSO4·5H2O"}).out == behind.out);
   CHECK(run({"mass", "--json", "CuSO4·5H2O"}).out == behind.out);

@@ -12,15 +12,15 @@
 namespace vialkeeper::app {
 namespace {
 
+constexpr std::array<std::string_view, 6> kStates = {"planned", "charged", "irradiating", "worked-up", "closed", "sealed"};
+
+}  // namespace
+
 bool areInitials(std::string_view text) {
   return !text.empty() && text.size() <= 8 && std::ranges::all_of(text, [](char c) {
     return (c >= 'A' && c <= 'Z') || (c >= '0' && c <= '9');
   }) && text.front() >= 'A';
 }
-
-constexpr std::array<std::string_view, 6> kStates = {"planned", "charged", "irradiating", "worked-up", "closed", "sealed"};
-
-}  // namespace
 
 std::string_view toText(RunState state) { return kStates[static_cast<std::size_t>(state)]; }
 

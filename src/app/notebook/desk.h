@@ -34,6 +34,9 @@ struct Desk {
   }
 };
 
+/// Whether these are initials: 1 to 8 capital letters and digits, a letter first.
+[[nodiscard]] bool areInitials(std::string_view text);
+
 /// Who works: the initials that were given, else the only person of the notebook.
 /// Fault: initials that are none (1 to 8 capital letters and digits), or nobody named where there are
 /// several or none.

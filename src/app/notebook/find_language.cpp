@@ -28,24 +28,6 @@ constexpr int kDeepest = 32;
 
 constexpr const char* kLiteralAdvice = "put it between quotation marks to search for the text";
 
-RangeForm formOf(Measure measure) {
-  switch (measure) {
-    case Measure::kYield: return {{Kind::kPercent}, "%", "60..80 %"};
-    case Measure::kConversion: return {{Kind::kPercent}, "%", "60..80 %"};
-    case Measure::kWavelength: return {{Kind::kLength}, "nm", "430..460 nm"};
-    case Measure::kTemperature: return {{Kind::kTemperature}, "", "25..35 C"};
-    case Measure::kDuration: return {{Kind::kDuration}, "", "12..24 h"};
-    case Measure::kLiquid: return {{Kind::kVolume}, "", "1..2 mL"};
-    case Measure::kLimiting: return {{Kind::kAmount}, "", "0.1..0.2 mmol"};
-    case Measure::kDate: break;
-  }
-  return {};
-}
-
-RangeForm loadingForm() {
-  return {{Kind::kMolPercent, Kind::kEquivalents, Kind::kConcentration}, "", "5..20 mol%", true};
-}
-
 /// The words of one list of conditions, which are looked for together.
 struct GatheredWords {
   WordsCondition words;
@@ -88,6 +70,12 @@ class Parser {
 
   /// Whether what is missing at the end may still be typed.
   [[nodiscard]] bool isUnfinished() const { return m_asYouType && m_scanner.atEnd(); }
+  /// Passes over a range that begins at `begin` if all that is wrong is that somebody still types it.
+  bool passUnfinished(const FindScanner& begin) {
+    if (!m_asYouType || !endsWithinRange(begin)) return false;
+    m_scanner.at = m_scanner.text.size();
+    return true;
+  }
   Reading<void> countOne(std::size_t at);
 
   FindScanner m_scanner;
@@ -316,11 +304,10 @@ Reading<void> Parser::parseSubstance(const FindField& field, ParsedConditions& c
 }
 
 Reading<WrittenLoading> Parser::parseLoading() {
-  const auto range = scanRange(m_scanner, loadingForm());
+  const FindScanner before = m_scanner;
+  const auto range = scanRange(m_scanner, loadingRange());
   if (!range) {
-    const bool isAtEnd = range.error().offset + range.error().length >= m_scanner.text.size();
-    if (!m_asYouType || !isAtEnd) return std::unexpected(range.error());
-    m_scanner.at = m_scanner.text.size();
+    if (!passUnfinished(before)) return std::unexpected(range.error());
     return WrittenLoading{};
   }
   if (!*range) return WrittenLoading{};
@@ -356,16 +343,15 @@ Reading<void> Parser::parseText(const FindField& field, ParsedConditions& condit
 }
 
 Reading<void> Parser::parseMeasure(const FindField& field, ParsedConditions& conditions) {
+  const FindScanner before = m_scanner;
   const auto read = [&]() -> ScanResult<Interval> {
     if (field.measure == Measure::kDate) return scanDates(m_scanner, false);
-    const auto range = scanRange(m_scanner, formOf(field.measure));
+    const auto range = scanRange(m_scanner, rangeOf(field.measure));
     if (!range) return std::unexpected(range.error());
     return (*range)->interval;
   }();
   if (!read) {
-    const bool isAtEnd = read.error().offset + read.error().length >= m_scanner.text.size();
-    if (!m_asYouType || !isAtEnd) return std::unexpected(read.error());
-    m_scanner.at = m_scanner.text.size();
+    if (!passUnfinished(before)) return std::unexpected(read.error());
     return {};
   }
   conditions.push_back({MeasureCondition{field.measure, **read}});

@@ -298,7 +298,7 @@ Reading<FoundRange> readRange(FindScanner& scanner, const WrittenEnd& first, Com
   const bool isRange = behind.skipDots();
   const bool holdsNumber = first.isThere() || (isRange && numberLength(behind) > 0);
   if (!holdsNumber) {
-    return textFault(begin, scanner.text.size() > scanner.at ? scanner.at - begin : 0, "no number follows",
+    return textFault(begin, scanner.at - begin, "no number follows",
                      fmt::format("write for example {}", form.example));
   }
   if (isRange && comparison != Comparison::kNone && comparison != Comparison::kEqual) {
@@ -339,6 +339,43 @@ ScanResult<FoundRange> scanRange(FindScanner& scanner, const RangeForm& form) {
   const auto read = readRange(scanner, first, comparison, begin, form);
   if (!read) return std::unexpected(read.error());
   return *read;
+}
+
+RangeForm rangeOf(MeasureCondition::Measure measure) {
+  using Measure = MeasureCondition::Measure;
+  switch (measure) {
+    case Measure::kYield: return {{Kind::kPercent}, "%", "60..80 %"};
+    case Measure::kConversion: return {{Kind::kPercent}, "%", "60..80 %"};
+    case Measure::kWavelength: return {{Kind::kLength}, "nm", "430..460 nm"};
+    case Measure::kTemperature: return {{Kind::kTemperature}, "", "25..35 C"};
+    case Measure::kDuration: return {{Kind::kDuration}, "", "12..24 h"};
+    case Measure::kLiquid: return {{Kind::kVolume}, "", "1..2 mL"};
+    case Measure::kLimiting: return {{Kind::kAmount}, "", "0.1..0.2 mmol"};
+    case Measure::kDate: break;
+  }
+  return {};
+}
+
+RangeForm loadingRange() {
+  return {{Kind::kMolPercent, Kind::kEquivalents, Kind::kConcentration}, "", "5..20 mol%", true};
+}
+
+bool endsWithinRange(FindScanner scanner) {
+  while (true) {
+    scanner.skipBlanks();
+    if (scanner.atEnd()) return true;
+    const std::size_t before = scanner.at;
+    (void)scanner.comparison();
+    (void)scanner.skipDots();
+    scanner.at += numberLength(scanner);
+    scanner.skipBlanks();
+    const std::string_view unit = unitText(scanner);
+    if (knownUnit(unit) != nullptr) scanner.at += unit.size();
+    if (scanner.at > before) continue;
+    // A word, which may be the beginning of a unit if nothing follows.
+    while (!scanner.atBoundary()) ++scanner.at;
+    return scanner.atEnd();
+  }
 }
 
 }  // namespace vialkeeper::app

@@ -43,4 +43,14 @@ using ScanResult = std::expected<std::optional<T>, text::TextFault>;
 /// With `mayBeAbsent` only what looks like a month or day is taken.
 [[nodiscard]] ScanResult<Interval> scanDates(FindScanner& scanner, bool mayBeAbsent);
 
+/// What may stand behind a measure, the date apart.
+[[nodiscard]] RangeForm rangeOf(MeasureCondition::Measure measure);
+
+/// What may stand behind a substance.
+[[nodiscard]] RangeForm loadingRange();
+
+/// Whether from here to the end stands nothing but what a range is made of, and perhaps one word that may
+/// become a unit: somebody may still be typing it.
+[[nodiscard]] bool endsWithinRange(FindScanner scanner);
+
 }  // namespace vialkeeper::app

@@ -210,8 +210,9 @@ class LineReader {
     }
     if (gas) return readForm(event_kind::kGasSample, from);
     m_meant = event_kind::kLiquidSample;
-    return textFault(second.begin, trimmedEnd(m_line) - std::min(second.begin, trimmedEnd(m_line)),
-                     "sample or added is wanted behind liquid", "write liquid sample 50 uL or add 0.2 mL acetonitrile");
+    const std::size_t end = std::max(trimmedEnd(m_line), second.begin);
+    return textFault(second.begin, end - second.begin, "sample or added is wanted behind liquid",
+                     "write liquid sample 50 uL or add 0.2 mL acetonitrile");
   }
 
   /// A gas where one is named, else a liquid: `add 2 mL H2`, `add 0.2 mL acetonitrile`.
@@ -229,7 +230,9 @@ class LineReader {
     m_meant = event_kind::kPhoto;
     const std::size_t begin = skipBlanks(m_line, behindSign(from));
     const std::size_t end = trimmedEnd(m_line);
-    if (begin >= end) return textFault(std::min(begin, end), 0, "the file is missing", "write photo and the file's name");
+    if (begin >= end) {
+      return textFault(std::min(begin, end), 0, "the file is missing", "write photo and the file's name");
+    }
     std::string_view file = m_line.substr(begin, end - begin);
     if (file.size() > 2 && (file.front() == '"' || file.front() == '\'') && file.front() == file.back()) {
       file = file.substr(1, file.size() - 2);
@@ -256,13 +259,13 @@ class LineReader {
 
   /// No figure, no unit, and more than the one or two words that a shorthand without figures has.
   bool isLikelyText(std::size_t from, bool lamp) const {
+    if (m_meant == event_kind::kPhoto) return false;
     const LogTokens pieces = logTokens(m_line, from);
     const std::string_view rest = m_line.substr(std::min(from, m_line.size()));
     if (std::ranges::any_of(rest, [](char c) { return c >= '0' && c <= '9'; })) return false;
     // A unit tells of a figure in words (`fifty uL`); in a longer text it is a word (`at the stir bar`).
-    const bool unit = std::ranges::any_of(
-        pieces.tokens, [&](const LogToken& token) { return logUnit(token.of(m_line)).has_value(); });
-    if (unit && pieces.tokens.size() <= 3) return false;
+    const auto isUnit = [&](const LogToken& token) { return logUnit(token.of(m_line)).has_value(); };
+    if (pieces.tokens.size() <= 3 && std::ranges::any_of(pieces.tokens, isUnit)) return false;
     const bool wordsAlone = lamp || m_meant == event_kind::kVent || m_meant == event_kind::kPurge;
     return pieces.tokens.size() > (wordsAlone ? 2U : 0U);
   }
@@ -292,8 +295,9 @@ class LineReader {
       const std::string mended = std::string(head.word) + std::string(m_line.substr(first.end));
       const ReadEntry read = LineReader(mended, LabelCheck::kNo).run();
       if (read.event.kind == event_kind::kObservation) continue;
-      return doubt({first.begin, first.end - first.begin,
-                    fmt::format("{} is no word of the log", text::quoted(m_line.substr(first.begin, first.end - first.begin))),
+      const std::size_t length = first.end - first.begin;
+      return doubt({first.begin, length,
+                    fmt::format("{} is no word of the log", text::quoted(m_line.substr(first.begin, length))),
                     fmt::format("write {}", head.word)},
                    read.event.kind);
     }

@@ -106,7 +106,7 @@ class FormReader {
   std::string example() const { return fmt::format("write it like {}", m_form.example); }
 
   Step takeNumber(const LogToken& token) {
-    const auto unit = unitOf(m_line, token);
+    const auto& unit = token.unit;
     if (!takes(kText) && m_line.substr(token.unitBegin).starts_with(':') && token.hasUnit()) return timeInLine(token);
     const unsigned item = unit ? itemOf(unit->unit->kind) : !token.hasUnit() && wants(kX) ? kX : 0;
     if (isText(token, item)) return takeText(token);
@@ -128,8 +128,8 @@ class FormReader {
     const bool wanted = item != 0 && wants(item);
     if (m_textOpen) return !(wanted && item == kV);
     if (wanted) return false;
-    if (!token.standsFree()) return has(kV) && !unitOf(m_line, token);
-    const auto unit = unitOf(m_line, token);
+    if (!token.standsFree()) return has(kV) && !token.unit;
+    const auto& unit = token.unit;
     const bool solution = unit && (unit->unit->kind == Kind::kConcentration || unit->unit->kind == Kind::kPercent);
     return has(kV) && solution && m_form.kind == event_kind::kLiquidAdded;
   }
@@ -138,10 +138,12 @@ class FormReader {
     // A fault names the kind that is wanted most: what is needed before what is only taken.
     const unsigned open = m_form.needs & ~m_has & ~(kText | kG);
     const unsigned wanted = open != 0 ? open : m_form.takes & ~m_has;
-    const auto unit = unitOf(m_line, token);
+    const auto& unit = token.unit;
     const unsigned given = unit ? itemOf(unit->unit->kind) : 0;
     const unsigned item = given != 0 && wants(given) ? given : wanted;
-    if ((item & kN) != 0 && (item & kV) != 0) return keep(readToken(m_line, token, {Kind::kVolume, Kind::kAmount}, Range::kPositive), token);
+    if ((item & kN) != 0 && (item & kV) != 0) {
+      return keep(readToken(m_line, token, {Kind::kVolume, Kind::kAmount}, Range::kPositive), token);
+    }
     if ((item & kP) != 0) return keep(readToken(m_line, token, {Kind::kPressure}, Range::kAny), token);
     if ((item & kV) != 0) return keep(readToken(m_line, token, {Kind::kVolume}, Range::kPositive), token);
     if ((item & kN) != 0) return keep(readToken(m_line, token, {Kind::kAmount}, Range::kPositive), token);
@@ -179,7 +181,7 @@ class FormReader {
   }
 
   Step takeFraction(const LogToken& token) {
-    const auto unit = unitOf(m_line, token);
+    const auto& unit = token.unit;
     if (token.hasUnit() && (!unit || itemOf(unit->unit->kind) != kX)) {
       return textFault(token.unitBegin, token.unitEnd - token.unitBegin, "a fraction or a percentage is wanted",
                        "write it like 12.3 % or 0.123");
@@ -269,7 +271,7 @@ class FormReader {
 
   bool nextIsTaken() const {
     if (m_at + 1 >= m_pieces.tokens.size() || !m_pieces.tokens[m_at + 1].isNumber) return false;
-    const auto unit = unitOf(m_line, m_pieces.tokens[m_at + 1]);
+    const auto& unit = m_pieces.tokens[m_at + 1].unit;
     return unit && wants(itemOf(unit->unit->kind));
   }
 
@@ -282,7 +284,8 @@ class FormReader {
       if ((missing & item) == 0) continue;
       const bool text = m_textEnd > 0 && item == kV;
       const std::size_t begin = text ? m_textBegin : m_pieces.end;
-      return textFault(begin, text ? m_textEnd - begin : 0, fmt::format("the {} is missing", nameOfItem(item)), example());
+      return textFault(begin, text ? m_textEnd - begin : 0,
+                       fmt::format("the {} is missing", nameOfItem(item)), example());
     }
     return {};
   }
@@ -294,7 +297,7 @@ class FormReader {
     const bool name = m_form.kind == event_kind::kLiquidAdded;
     for (const LogToken& token : m_pieces.tokens) {
       if (token.begin < m_textBegin || token.end > m_textEnd || !token.standsFree()) continue;
-      const auto unit = unitOf(m_line, token);
+      const auto& unit = token.unit;
       const unsigned item = unit ? itemOf(unit->unit->kind) : 0;
       const bool solution = unit && (item == 0 || item == kX) && unit->unit->kind != Kind::kMass;
       if (name && !solution) {

@@ -81,9 +81,11 @@ const units::Unit* unitInAnyCase(std::string_view symbol) {
   // A capital M is mega: nobody means it in a vial, but it is not ours to call it milli.
   if (symbol.starts_with('M')) return nullptr;
   const std::string wanted = plain(symbol);
+  const auto lowered = [](char c) { return c >= 'A' && c <= 'Z' ? static_cast<char>(c + 32) : c; };
   const auto all = units::allUnits();
   const auto found = std::ranges::find_if(all, [&](const units::Unit& unit) {
-    return std::ranges::find(kAnyCase, unit.kind) != kAnyCase.end() && text::asciiLowered(unit.symbol) == wanted;
+    return std::ranges::find(kAnyCase, unit.kind) != kAnyCase.end() &&
+           std::ranges::equal(unit.symbol, wanted, {}, lowered);
   });
   return found == all.end() ? nullptr : &*found;
 }
@@ -155,13 +157,16 @@ class Tokenizer {
   }
 
   LogToken word() {
-    LogToken token{.begin = m_at};
+    LogToken token;
+    token.begin = m_at;
     m_at = token.end = std::max(wordEnd(m_at), m_at + 1);
     return token;
   }
 
   LogToken number() {
-    LogToken token{.isNumber = true, .begin = m_at};
+    LogToken token;
+    token.isNumber = true;
+    token.begin = m_at;
     token.numberEnd = token.unitBegin = token.unitEnd = token.end = numberEnd(m_line, m_at);
     m_at = token.end;
     const std::size_t begin = std::min(skipBlanks(m_line, m_at), m_end);
@@ -171,26 +176,33 @@ class Tokenizer {
     // `vial 3 / 35 C`: a stroke by itself separates.
     if (m_line.substr(begin, end - begin) == "/") return token;
     token.unitBegin = begin;
-    token.unitEnd = token.end = m_at = unitEnd(begin, end);
+    takeUnit(token, end);
+    m_at = token.end = token.unitEnd;
     return token;
   }
 
-  /// Lengthens the unit by a second word (`deg C`) or cuts off what is stuck to it (`bar35C`).
-  std::size_t unitEnd(std::size_t begin, std::size_t end) const {
+  /// The word as the unit, lengthened by a second one (`deg C`) or without what is stuck to it (`bar35C`).
+  void takeUnit(LogToken& token, std::size_t end) const {
+    const std::size_t begin = token.unitBegin;
+    token.unitEnd = end;
     const std::size_t next = std::min(skipBlanks(m_line, end), m_end);
     const std::size_t nextEnd = wordEnd(next);
     if (next > end && nextEnd - begin <= 16) {
       const std::string joined =
           std::string(m_line.substr(begin, end - begin)) + " " + std::string(m_line.substr(next, nextEnd - next));
-      if (lookedUp(kSpellings, joined)) return nextEnd;
+      if (lookedUp(kSpellings, joined)) {
+        token.unit = logUnit(joined);
+        token.unitEnd = nextEnd;
+        return;
+      }
     }
-    if (logUnit(m_line.substr(begin, end - begin))) return end;
-    for (std::size_t cut = begin + 1; cut < std::min(end, begin + 8); ++cut) {
+    token.unit = logUnit(m_line.substr(begin, end - begin));
+    for (std::size_t cut = begin + 1; !token.unit && cut < std::min(end, begin + 8); ++cut) {
       const bool stroke = m_line[cut] == '/' && isDigitAt(m_line, cut + 1);
-      const bool mayCut = isDigit(m_line[cut]) || stroke || m_line[cut - 1] == '%';
-      if (mayCut && logUnit(m_line.substr(begin, cut - begin))) return cut;
+      if (!isDigit(m_line[cut]) && !stroke && m_line[cut - 1] != '%') continue;
+      token.unit = logUnit(m_line.substr(begin, cut - begin));
+      if (token.unit) token.unitEnd = cut;
     }
-    return end;
   }
 
   std::string_view m_line;
@@ -201,6 +213,11 @@ class Tokenizer {
 }  // namespace
 
 std::size_t blankLength(std::string_view text, std::size_t at) {
+  if (at >= text.size()) return 0;
+  const char lead = text[at];
+  if (lead == ' ' || lead == '\t') return 1;
+  // All others begin with the lead byte of U+0080 or above.
+  if (static_cast<unsigned char>(lead) < 0xC2) return 0;
   const auto found = std::ranges::find_if(
       kBlanks, [&](std::string_view blank) { return text.substr(at).starts_with(blank); });
   return found == kBlanks.end() ? 0 : found->size();
@@ -256,30 +273,14 @@ std::optional<LogUnit> logUnit(std::string_view symbol) {
   return found;
 }
 
-std::optional<LogUnit> unitOf(std::string_view line, const LogToken& token) {
-  if (!token.hasUnit()) return std::nullopt;
-  const std::string_view symbol = line.substr(token.unitBegin, token.unitEnd - token.unitBegin);
-  if (auto unit = logUnit(symbol)) return unit;
-  // Two words with more than one blank or a no-break space between them.
-  std::string joined;
-  for (std::size_t at = 0; at < symbol.size();) {
-    const std::size_t blank = blankLength(symbol, at);
-    if (blank > 0 && !joined.ends_with(' ')) joined += ' ';
-    if (blank == 0) joined += symbol[at];
-    at += std::max<std::size_t>(blank, 1);
-  }
-  return logUnit(joined);
-}
-
 std::expected<units::ReadQuantity, text::TextFault> readToken(std::string_view line, const LogToken& token,
                                                               std::initializer_list<Kind> kinds,
                                                               units::Range range) {
   const std::size_t numberLength = token.numberEnd - token.begin;
   std::string written(line.substr(token.begin, numberLength));
   if (token.hasUnit()) {
-    const auto unit = unitOf(line, token);
     written += ' ';
-    written += unit ? unit->unit->symbol : line.substr(token.unitBegin, token.unitEnd - token.unitBegin);
+    written += token.unit ? token.unit->unit->symbol : line.substr(token.unitBegin, token.unitEnd - token.unitBegin);
   }
   auto read = units::readQuantityOf(kinds, written, units::Dialect::kPerson, range);
   if (read) return read;

@@ -16,6 +16,12 @@
 /// A log line taken to pieces: numbers with their units, and words. Used by log_line alone.
 namespace vialkeeper::app {
 
+/// A unit as people spell it in a log, and what its spelling says of a pressure.
+struct LogUnit {
+  const units::Unit* unit = nullptr;
+  std::string_view pressureKind;  ///< `gauge` of `barg`, `abs` of `psia`, else empty
+};
+
 /// A piece of the line, by byte offsets. A number has the word behind it as its unit, whether that is
 /// known or not, unless it is a word of the log itself.
 struct LogToken {
@@ -25,6 +31,7 @@ struct LogToken {
   std::size_t numberEnd = 0;  ///< numbers only, as are the next two
   std::size_t unitBegin = 0;
   std::size_t unitEnd = 0;  ///< equal to unitBegin where there is no unit
+  std::optional<LogUnit> unit;  ///< where it is known
 
   [[nodiscard]] bool hasUnit() const { return unitEnd > unitBegin; }
   /// Whether the number stands alone: `21 drops`, not `2-propanol`.
@@ -36,12 +43,6 @@ struct LogTokens {
   std::vector<LogToken> tokens;
   std::string_view remark;  ///< behind the first semicolon, without blanks round it
   std::size_t end = 0;      ///< behind the last token, or where they would begin
-};
-
-/// A unit as people spell it in a log, and what its spelling says of a pressure.
-struct LogUnit {
-  const units::Unit* unit = nullptr;
-  std::string_view pressureKind;  ///< `gauge` of `barg`, `abs` of `psia`, else empty
 };
 
 /// Bytes of the blank at this place: space, tab, the no-break and thin spaces and what is invisible
@@ -63,9 +64,6 @@ struct LogUnit {
 /// The unit, with more spellings than the unit table: any case where only one unit can be meant and
 /// no mega is written, `barg`, `bar(a)`, `oC`, `vol%`, a full stop behind.
 [[nodiscard]] std::optional<LogUnit> logUnit(std::string_view symbol);
-
-/// The unit of a number, if it is known.
-[[nodiscard]] std::optional<LogUnit> unitOf(std::string_view line, const LogToken& token);
 
 /// The quantity by the one reader of quantities; a fault points into the line.
 [[nodiscard]] std::expected<units::ReadQuantity, text::TextFault> readToken(

@@ -43,8 +43,12 @@ std::expected<seconds, TextFault> readTimeOfDay(std::string_view text, std::size
   std::size_t at = begin;
   while (at < end && count < parts.size()) {
     const std::size_t first = at;
-    while (at < end && at < first + 2 && isDigit(text[at])) parts[count] = parts[count] * 10 + (text[at++] - '0');
-    if (at == first || (count > 0 && at != first + 2)) return textFault(first, end - first, "this is no time of day", kForms);
+    for (; at < end && at < first + 2 && isDigit(text[at]); ++at) {
+      parts[count] = parts[count] * 10 + (text[at] - '0');
+    }
+    if (at == first || (count > 0 && at != first + 2)) {
+      return textFault(first, end - first, "this is no time of day", kForms);
+    }
     ++count;
     if (at == end) break;
     if (text[at] != ':') return textFault(at, end - at, "this is no time of day", kForms);
@@ -98,7 +102,8 @@ PlainSpan plainSpan(std::string_view text, std::size_t begin, std::size_t end) {
 /// The span before `ago`.
 std::expected<milliseconds, TextFault> readSpan(std::string_view text, std::size_t begin, std::size_t end) {
   const PlainSpan plain = plainSpan(text, begin, end);
-  const auto span = units::readQuantity<units::Duration>(plain.text, units::Dialect::kPerson, units::Range::kNonNegative);
+  const auto span =
+      units::readQuantity<units::Duration>(plain.text, units::Dialect::kPerson, units::Range::kNonNegative);
   if (!span) {
     TextFault fault = span.error();
     const auto inText = [&](std::size_t place) { return place < plain.from.size() ? plain.from[place] : end; };

@@ -60,7 +60,8 @@ int powerOfTen(double ratio) {
 
 /// What was typed, taken to its number and unit.
 std::optional<units::ReadQuantity> typed(std::string_view asWritten) {
-  const auto read = units::readQuantityOf({units::Kind::kMass, units::Kind::kVolume}, asWritten, units::Dialect::kPerson);
+  const auto read =
+      units::readQuantityOf({units::Kind::kMass, units::Kind::kVolume}, asWritten, units::Dialect::kPerson);
   return read ? std::optional(*read) : std::nullopt;
 }
 
@@ -139,6 +140,11 @@ class Questioner {
     return std::abs(siOf(m_actual) / siOf(*like) - 1.0) > least;
   }
 
+  Recorded otherTarget(bool mass) const {
+    if (mass) return *m_target.targetVolume;
+    return *m_target.targetMass;
+  }
+
   void askForOtherQuantity() {
     const bool mass = std::holds_alternative<Mass>(m_actual);
     const Usual usual = usualFor(m_plan);
@@ -146,12 +152,13 @@ class Questioner {
     // With a density near 1 the figures of both targets agree, and either may stand.
     const auto meant = isOffTarget(kSameFigure) ? sameFigure() : std::nullopt;
     if (!unusual && !meant) return;
-    SlipQuestion question{.kind = SlipKind::kOtherQuantity, .what = {}, .ask = {}, .likely = meant, .likelyText = {}};
+    SlipQuestion question{
+        .kind = SlipKind::kOtherQuantity, .what = {}, .ask = {}, .likely = meant, .likelyText = {}};
     question.what = unusual ? fmt::format("{} is {}, but {} is {}", written(m_actual, m_asWritten),
                                           mass ? "a mass" : "a volume", m_plan.name,
                                           mass ? "usually taken by volume" : "usually weighed")
                             : fmt::format("{} has the figure of the target of {}", written(m_actual, m_asWritten),
-                                          shownOf(mass ? Recorded(*m_target.targetVolume) : Recorded(*m_target.targetMass)));
+                                          shownOf(otherTarget(mass)));
     if (meant) question.likelyText = shownOf(*meant);
     question.ask = meant ? fmt::format("did you mean {}?", question.likelyText)
                          : fmt::format("was it really {}?", mass ? "weighed" : "taken by volume");
@@ -171,7 +178,8 @@ class Questioner {
                                          : fmt::format("{:.0f} % {}", std::abs(ratio - 1.0) * 100.0,
                                                        ratio > 1.0 ? "above" : "below");
     m_questions.push_back({.kind = SlipKind::kOffTarget,
-                           .what = fmt::format("{} is {} the target of {}", written(m_actual, m_asWritten), size, shownOf(*target)),
+                           .what = fmt::format("{} is {} the target of {}", written(m_actual, m_asWritten), size,
+                                               shownOf(*target)),
                            .ask = "is the figure right?",
                            .likely = std::nullopt,
                            .likelyText = {}});

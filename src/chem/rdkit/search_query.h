@@ -15,7 +15,7 @@ namespace vialkeeper::chem {
 
 /// What a pattern asks of a structure.
 struct SearchQuery {
-  std::unique_ptr<RDKit::RWMol> mol;          ///< without the hydrogens that are counted here
+  std::unique_ptr<RDKit::RWMol> mol;         ///< without the hydrogens that are counted here
   std::vector<unsigned int> leastHydrogens;  ///< for each atom; empty where none are asked for
 };
 

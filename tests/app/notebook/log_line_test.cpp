@@ -409,7 +409,9 @@ TEST_CASE("every beginning of a shorthand is read without a silent observation",
     const std::size_t begin = std::min(line.find(' ', line.find_first_not_of(' ')), line.size());
     for (std::size_t length = begin; length < line.size(); ++length) {
       INFO(line.substr(0, length));
-      checkRecord(readLogLine(line.substr(0, length)), line.substr(0, length));
+      const ReadEntry read = readLogLine(line.substr(0, length));
+      checkRecord(read, line.substr(0, length));
+      REQUIRE((read.doubt || read.event.kind != event_kind::kObservation));
     }
   }
 }

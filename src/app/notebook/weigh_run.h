@@ -1,0 +1,29 @@
+// SPDX-FileCopyrightText: The Vialkeeper developers
+// SPDX-License-Identifier: GPL-3.0-or-later
+#pragma once
+
+#include <string>
+#include <vector>
+
+#include "app/notebook/desk.h"
+#include "app/notebook/run_plan.h"
+#include "app/notebook/weighing_slip.h"
+
+namespace vialkeeper::app {
+
+/// What recording a weighing led to.
+struct WeighedComponent {
+  std::vector<SlipQuestion> questions;  ///< if there are any, nothing was recorded
+  RunSheet sheet;                       ///< the run with what is recorded now
+};
+
+/// Records what the balance or pipette gave for one component, in place of what was recorded before (the
+/// trail keeps that). All weighed components are judged anew, for they may follow the limiting one.
+/// A quantity that looks like a slip is questioned unless `accepted`.
+/// Faults: no such component, a quantity that cannot be read or is of the wrong kind, a run whose state
+/// forbids it or wants a reason.
+[[nodiscard]] Checked<WeighedComponent> weighComponent(const Desk& desk, const RunRecord& run,
+                                                       const std::string& key, const std::string& quantity,
+                                                       bool accepted, const std::string& reason);
+
+}  // namespace vialkeeper::app

@@ -1,0 +1,68 @@
+// SPDX-FileCopyrightText: The Vialkeeper developers
+// SPDX-License-Identifier: GPL-3.0-or-later
+#include "cli/notebook_session.h"
+
+#include <filesystem>
+
+#include "db/sqlite_notebook.h"
+
+namespace vialkeeper::cli {
+namespace {
+
+/// `20260304-142005`, for the name of a copy made before a migration.
+std::string stampOf(const units::Moment& now) {
+  std::string stamp;
+  for (const char c : toIsoText(now).substr(0, 19)) {
+    if (c >= '0' && c <= '9') stamp += c;
+    if (c == 'T') stamp += '-';
+  }
+  return stamp;
+}
+
+text::Checked<std::unique_ptr<app::Notebook>> open(const CommonOptions& common, db::OpenFor use) {
+  const auto file = bookFile(common);
+  if (!file) return std::unexpected(file.error());
+  return db::openNotebook(*file, use, stampOf(common.around->clock.now()));
+}
+
+}  // namespace
+
+text::Checked<std::string> bookFile(const CommonOptions& common) {
+  if (!common.book.empty()) return common.book;
+  if (const auto named = common.around->environment("VIALKEEPER_BOOK"); named && !named->empty()) return *named;
+  return std::unexpected(text::Faults{usageFault("--book", "no notebook is named", "add --book FILE.vialbook, or set VIALKEEPER_BOOK")});
+}
+
+std::optional<std::string> namedPerson(const CommonOptions& common) {
+  if (common.person) return common.person;
+  const auto named = common.around->environment("VIALKEEPER_PERSON");
+  return named && !named->empty() ? named : std::nullopt;
+}
+
+text::Checked<NotebookSession> NotebookSession::forReading(const CommonOptions& common) {
+  auto notebook = open(common, db::OpenFor::kReading);
+  if (!notebook) return std::unexpected(notebook.error());
+  return NotebookSession(*std::move(notebook), common.around->clock, "");
+}
+
+text::Checked<NotebookSession> NotebookSession::forWriting(const CommonOptions& common) {
+  auto notebook = open(common, db::OpenFor::kWriting);
+  if (!notebook) return std::unexpected(notebook.error());
+  auto person = app::whoWorks(**notebook, namedPerson(common));
+  if (!person) {
+    for (text::Fault& fault : person.error()) fault.kind = text::FaultKind::kUsage;
+    return std::unexpected(person.error());
+  }
+  return NotebookSession(*std::move(notebook), common.around->clock, *std::move(person));
+}
+
+text::Checked<NotebookSession> NotebookSession::forRebuilding(const CommonOptions& common) {
+  const auto file = bookFile(common);
+  if (!file) return std::unexpected(file.error());
+  std::error_code ignored;
+  auto notebook = std::filesystem::exists(*file, ignored) ? open(common, db::OpenFor::kWriting) : db::createNotebook(*file);
+  if (!notebook) return std::unexpected(notebook.error());
+  return NotebookSession(*std::move(notebook), common.around->clock, "");
+}
+
+}  // namespace vialkeeper::cli
