@@ -56,7 +56,7 @@ LAYERS = {
     "quench": Layer(FOUNDATION + ("charge", "gas"), CORE_LIBRARIES),
     # Round the core.
     "app": Layer(CORE, OUTER + ("GSL", "toml++", "the module loader")),
-    "db": Layer(CORE + ("app",), OUTER + ("SQLite", "libsodium")),
+    "db": Layer(CORE + ("app",), OUTER + ("SQLite", "libsodium", "nlohmann-json")),
     "exports": Layer(
         CORE + ("app",), OUTER + ("the module loader", "libqrencode") + QT_PAGES
     ),

@@ -10,6 +10,7 @@
 #include <array>
 #include <cerrno>
 #include <cstring>
+#include <filesystem>
 #include <utility>
 
 namespace vialkeeper::app {
@@ -90,9 +91,17 @@ text::Checked<std::string> readFile(const std::string& path) {
   }
 }
 
-text::Checked<void> writeFile(const std::string& path, const std::string& bytes) {
+text::Checked<void> writeFile(const std::string& named, const std::string& bytes) {
   struct stat status {};
-  if (::stat(path.c_str(), &status) == 0 && S_ISDIR(status.st_mode)) return systemFault(path, EISDIR, true);
+  std::string path = named;
+  if (::stat(named.c_str(), &status) == 0) {
+    if (S_ISDIR(status.st_mode)) return systemFault(named, EISDIR, true);
+    if (!S_ISREG(status.st_mode)) return fault(named, "this is a device, not a file", "name a file");
+    // Behind a link it is the file that is replaced, not the link.
+    std::error_code unresolved;
+    const auto resolved = std::filesystem::canonical(named, unresolved);
+    if (!unresolved) path = resolved.string();
+  }
   const std::string temporary = fmt::format("{}.part-{}", path, ::getpid());
   Descriptor file(::open(temporary.c_str(), O_WRONLY | O_CREAT | O_EXCL | O_CLOEXEC, 0666));
   if (!file.isOpen()) return systemFault(path, errno, true);

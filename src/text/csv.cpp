@@ -47,6 +47,9 @@ class CsvScanner {
     return line;
   }
 
+  /// Whether an open quotation mark swallowed the rest of the file.
+  [[nodiscard]] bool isCutShort() const { return m_cutShort; }
+
   [[nodiscard]] char peek() const { return atEnd() ? '\0' : m_bytes[m_at]; }
 
  private:
@@ -90,6 +93,7 @@ class CsvScanner {
         cell += c;
       }
     }
+    m_cutShort = true;
     m_faults.push_back({.file = m_file, .line = openedOn, .what = "a quotation mark is never closed",
                         .mend = "close it at the end of its cell"});
     return cell;
@@ -112,6 +116,7 @@ class CsvScanner {
   Faults& m_faults;
   std::size_t m_at = 0;
   int m_line = 1;
+  bool m_cutShort = false;
 };
 
 void checkHeader(const CsvRow& header, const std::string& file, Faults& faults) {
@@ -133,7 +138,7 @@ void checkCellCounts(const CsvTable& table, const std::string& file, Faults& fau
     if (row.cells.size() == wanted) continue;
     faults.push_back(
         {.file = file, .line = row.line,
-         .what = fmt::format("{} cells where the header has {}", row.cells.size(), wanted),
+         .what = fmt::format("{} {} where the header has {}", row.cells.size(), row.cells.size() == 1 ? "cell" : "cells", wanted),
          .mend = row.cells.size() < wanted ? "add the missing cells, empty ones too"
                                            : "quote a cell that holds a comma, or remove the surplus"});
   }
@@ -166,7 +171,7 @@ Checked<CsvTable> readCsv(std::string_view bytes, const std::string& file, CsvCo
                       .mend = "begin with a row of column names"});
   }
   checkHeader(table.header, file, faults);
-  checkCellCounts(table, file, faults);
+  if (!scanner.isCutShort()) checkCellCounts(table, file, faults);
   if (!faults.empty()) return std::unexpected(std::move(faults));
   return table;
 }

@@ -144,6 +144,10 @@ Fault toFault(const toml::parse_error& error, const std::vector<std::string>& li
     fault.field = std::string(*keyOfLine(text));
     fault.what = "a quantity without quotation marks";
     fault.mend = "write " + *quotedLine;
+  } else if (std::ranges::count(text, '"') % 2 == 1) {
+    fault.field = std::string(keyOfLine(text).value_or(""));
+    fault.what = "a quotation mark is never closed";
+    fault.mend = "close it at the end of the text";
   } else {
     fault.field = std::string(keyOfLine(text).value_or(""));
     fault.what = fmt::format("this line is not TOML ({})", parserSentence(error.description()));

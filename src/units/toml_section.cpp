@@ -35,6 +35,11 @@ std::optional<double> asNumber(const text::TomlValue& value) {
   return std::nullopt;
 }
 
+bool isListOfTables(const text::TomlValue& value) {
+  const auto* list = std::get_if<text::TomlArray>(&value.data);
+  return list != nullptr && !list->empty() && std::holds_alternative<text::TomlTable>(list->front().data);
+}
+
 /// Levenshtein distance: the fewest letters to add, drop or change.
 std::size_t letterDistance(std::string_view a, std::string_view b) {
   std::vector<std::size_t> row(b.size() + 1);
@@ -154,7 +159,8 @@ std::optional<bool> TomlSection::truth(std::string_view field) {
 std::optional<ReadQuantity> TomlSection::quantityOf(std::initializer_list<Kind> kinds,
                                                     std::string_view field, Range range) {
   const std::string unit = unitsOf(*kinds.begin(), Dialect::kFile);
-  const std::string* written = takeText(field, "2.0 " + unit.substr(0, unit.find(',')));
+  const bool temperature = *kinds.begin() == Kind::kTemperature;
+  const std::string* written = takeText(field, (temperature ? "21 " : "2.0 ") + unit.substr(0, unit.find(',')));
   if (written == nullptr) return std::nullopt;
   const auto read = readQuantityOf(kinds, *written, Dialect::kFile, range);
   if (read) return *read;
@@ -185,7 +191,7 @@ std::optional<std::vector<std::string>> TomlSection::texts(std::string_view fiel
     }
   }
   if (array == nullptr || list.size() != array->size()) {
-    fault(field, "this is not a list of texts", "write for example [\"H302\", \"H315\"]");
+    fault(field, "this is not a list of texts", "write texts in quotation marks between [ and ], with commas");
     return std::nullopt;
   }
   return list;
@@ -254,8 +260,7 @@ void TomlSection::finish() {
   for (const auto& [name, value] : *m_table) {
     if (std::ranges::find(m_known, name) != m_known.end()) continue;
     const auto nearest = nearestName(name, m_known);
-    const bool isTable = std::holds_alternative<text::TomlTable>(value.data) ||
-                         std::holds_alternative<text::TomlArray>(value.data);
+    const bool isTable = std::holds_alternative<text::TomlTable>(value.data) || isListOfTables(value);
     fault(name, isTable ? "this section is not known here" : "this field is not known here",
           nearest ? fmt::format("did you mean {}?", *nearest)
                   : fmt::format("known here are {}", fmt::join(m_known, ", ")));
@@ -267,7 +272,8 @@ std::optional<std::string> nearestName(std::string_view name, const std::vector<
   std::size_t least = 3;
   for (const std::string& candidate : known) {
     const std::size_t distance = letterDistance(name, candidate);
-    if (distance < least && distance < std::max(name.size(), candidate.size())) {
+    // Half the letters must be right, else the suggestion is a guess.
+    if (distance < least && 2 * distance < std::max(name.size(), candidate.size())) {
       least = distance;
       best = candidate;
     }

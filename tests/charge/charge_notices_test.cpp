@@ -75,6 +75,16 @@ TEST_CASE("a weighing below the minimum weight is told and gets a stock in the s
   for (const auto& notice : b.notices) CHECK(notice.at == "component.b");
 }
 
+TEST_CASE("a proposal takes no more than half of the solvent that is still to be added", "[charge]") {
+  // 5.6 umol of 1000 g/mol, minimum 40 mg: 50 mg make 25 mL of 2 mM or 10 mL of 5 mM. Of the more dilute stock 2.8 mL
+  // would be needed, more than half of the 5 mL; of the other 1.12 mL.
+  const auto charge = chargeOf(planText("total=\"5 mL\"", {kLimiting, "key=\"b\"\nrole=\"other\"\nname=\"b\"\nmolar_mass=\"1000 g/mol\"\n"
+                                                                     "mass=\"5.6 mg\"\ndevice=\"balance-0.01mg\"", kWater}));
+  REQUIRE(at(charge, "b").proposal);
+  CHECK(at(charge, "b").proposal->concentration.millimolPerLitre() == Approx(5.0).epsilon(1e-12));
+  CHECK(at(charge, "b").proposal->transfer.microlitres() == Approx(1120.0).epsilon(1e-12));
+}
+
 TEST_CASE("a proposal counts the impurity of what is weighed", "[charge][identity]") {
   const auto of = [](const std::string& assay) {
     const auto charge = chargeOf(planText("total=\"5 mL\"", {kLimiting, weighedSolid("amount=\"0.01 mmol\"", "\"balance-0.01mg\"",

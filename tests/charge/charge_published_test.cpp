@@ -5,7 +5,7 @@
 #include <cmath>
 
 #include "charge/plan_fixture.h"
-#include "reference/reference_data.h"
+#include "support/reference_data.h"
 
 using namespace vialkeeper;
 using tests::at;

@@ -2,7 +2,6 @@
 // SPDX-License-Identifier: GPL-3.0-or-later
 #pragma once
 
-#include <random>
 #include <string>
 #include <string_view>
 #include <variant>
@@ -12,13 +11,11 @@
 #include "charge/plan.h"
 #include "charge/substances.h"
 #include "charge/weighing.h"
+#include "support/sample_plan.h"
 #include "text/fault.h"
 
 /// Plans for tests, written as their authors write them. No structures: every substance has a formula.
 namespace vialkeeper::tests {
-
-/// A full plan with one component of every supply but gas.
-[[nodiscard]] std::string samplePlanText();
 
 /// A plan of these components with `[liquid]` as given and the first component's key limiting.
 /// `head` stands behind the liquid section, for a vial or a seal.
@@ -49,8 +46,5 @@ struct Recorded {
 
 /// One line per fault, for comparison and for a failing test's output.
 [[nodiscard]] std::vector<std::string> toLines(const text::Faults& faults);
-
-/// Some bytes, words or lines of the text changed, dropped, doubled or swapped.
-[[nodiscard]] std::string mutated(const std::string& text, std::mt19937_64& random);
 
 }  // namespace vialkeeper::tests

@@ -6,7 +6,7 @@
 
 #include "chem/atomic_weights.h"
 #include "chem/formula.h"
-#include "reference/reference_data.h"
+#include "support/reference_data.h"
 
 using namespace vialkeeper;
 

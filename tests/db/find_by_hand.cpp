@@ -31,22 +31,6 @@ bool meets(const SampleRun& sample, const app::SubstanceCondition& condition) {
   });
 }
 
-/// Runs of letters and digits, lowered and without accents. The sample's letters beyond ASCII all have them.
-std::vector<std::string> tokens(std::string_view text) {
-  std::vector<std::string> found;
-  bool isOpen = false;
-  for (std::size_t at = 0; at < text.size();) {
-    const auto [value, length] = text::codePointAt(text, at);
-    const char c = text[at];
-    const bool isPart = value >= 0x80 || (c >= '0' && c <= '9') || (c >= 'A' && c <= 'Z') || (c >= 'a' && c <= 'z');
-    if (isPart && !isOpen) found.emplace_back();
-    if (isPart) found.back() += app::foldName(text.substr(at, length));
-    isOpen = isPart;
-    at += length;
-  }
-  return found;
-}
-
 bool holdsPhrase(const std::vector<std::string>& text, const std::vector<std::string>& phrase, bool isPrefix) {
   for (std::size_t from = 0; from + phrase.size() <= text.size(); ++from) {
     bool isHere = true;
@@ -61,11 +45,10 @@ bool holdsPhrase(const std::vector<std::string>& text, const std::vector<std::st
 
 bool meets(const SampleRun& sample, const app::WordsCondition& condition) {
   for (std::size_t i = 0; i < condition.words.size(); ++i) {
-    const std::vector<std::string> phrase = tokens(condition.words[i]);
+    const std::vector<std::string> phrase = tokensOf(condition.words[i]);
     if (phrase.empty()) continue;
     const bool isPrefix = (i < condition.prefix.size() && condition.prefix[i]) || (condition.lastIsPrefix && i + 1 == condition.words.size());
-    const bool isThere = holdsPhrase(tokens(sample.run.code), phrase, isPrefix) ||
-                         std::ranges::any_of(sample.texts, [&](const std::string& text) { return holdsPhrase(tokens(text), phrase, isPrefix); });
+    const bool isThere = std::ranges::any_of(sample.tokens, [&](const auto& text) { return holdsPhrase(text, phrase, isPrefix); });
     if (!isThere) return false;
   }
   return true;
@@ -121,6 +104,22 @@ bool meets(const SampleRun& sample, const app::NoneOf& none) {
 }
 
 }  // namespace
+
+// The sample's letters beyond ASCII all have accents.
+std::vector<std::string> tokensOf(std::string_view text) {
+  std::vector<std::string> found;
+  bool isOpen = false;
+  for (std::size_t at = 0; at < text.size();) {
+    const auto [value, length] = text::codePointAt(text, at);
+    const char c = text[at];
+    const bool isPart = value >= 0x80 || (c >= '0' && c <= '9') || (c >= 'A' && c <= 'Z') || (c >= 'a' && c <= 'z');
+    if (isPart && !isOpen) found.emplace_back();
+    if (isPart) found.back() += app::foldName(text.substr(at, length));
+    isOpen = isPart;
+    at += length;
+  }
+  return found;
+}
 
 bool meets(const SampleRun& sample, const app::FindCondition& condition) {
   return std::visit([&sample](const auto& data) { return meets(sample, data); }, condition.data);

@@ -127,6 +127,9 @@ SampleNotebook::SampleNotebook(std::size_t runs, std::uint64_t seed)
   Inventor inventor(seed);
   for (std::size_t i = 0; i < runs; ++i) {
     m_runs.push_back(inventor.run(static_cast<std::int64_t>(i) + 1));
+    SampleRun& sample = m_runs.back();
+    sample.tokens.push_back(tokensOf(sample.run.code));
+    for (const std::string& text : sample.texts) sample.tokens.push_back(tokensOf(text));
     write(m_runs.back());
   }
   m_database.exec("COMMIT; PRAGMA trusted_schema = OFF");

@@ -21,6 +21,7 @@ struct SampleRun {
   app::RunRecord run;
   std::vector<app::ComponentRecord> components;
   std::vector<std::string> texts;  ///< title, aim, conclusion, observations
+  std::vector<std::vector<std::string>> tokens = {};  ///< of the code and each text, as they are compared
 };
 
 class SampleNotebook {
@@ -43,6 +44,9 @@ class SampleNotebook {
   SQLite::Database m_database;
   std::vector<SampleRun> m_runs;
 };
+
+/// Runs of letters and digits, lowered and without accents.
+[[nodiscard]] std::vector<std::string> tokensOf(std::string_view text);
 
 [[nodiscard]] bool meets(const SampleRun& sample, const app::FindCondition& condition);
 

@@ -54,6 +54,7 @@ void checkQuery(const FindQuery& query, std::size_t limit) {
   const auto expected = notebook().matches(query);
   for (const FindOrder order : {FindOrder::kNewest, FindOrder::kOldest, FindOrder::kRank, FindOrder::kYield, FindOrder::kCode}) {
     for (const bool isCounted : {false, true}) {
+      if (isCounted && order == FindOrder::kOldest) continue;  // the same but for the direction
       const db::FindSql all = db::findSql(query, {order, 0, true}, isCounted ? counter() : db::RowCounter());
       INFO(all.select.sql);
       const auto numbers = notebook().numbers(all.select);
@@ -63,7 +64,8 @@ void checkQuery(const FindQuery& query, std::size_t limit) {
       } else {
         REQUIRE(numbers == ordered(expected, order));
       }
-      auto first = notebook().numbers(db::findSql(query, {order, limit, true}, isCounted ? counter() : db::RowCounter()).select);
+      if (order != FindOrder::kNewest && order != FindOrder::kRank) continue;
+      const auto first = notebook().numbers(db::findSql(query, {order, limit, true}, isCounted ? counter() : db::RowCounter()).select);
       REQUIRE(first.size() == std::min(limit, expected.size()));
       if (order != FindOrder::kRank) REQUIRE(std::equal(first.begin(), first.end(), numbers.begin()));
     }
@@ -103,8 +105,8 @@ TEST_CASE("every kind of condition finds what an evaluation by hand finds", "[db
     INFO("condition " << i);
     checkQuery({{kinds[i]}}, 20);
     checkQuery({{{NoneOf{{kinds[i]}}}}}, 20);
-    checkQuery({{kinds[i], kinds[(i + 5) % kinds.size()]}}, 20);
-    checkQuery({{{AnyOf{{kinds[i], kinds[(i + 7) % kinds.size()]}}}}}, 20);
+    if (i % 2 == 0) checkQuery({{kinds[i], kinds[(i + 5) % kinds.size()]}}, 20);
+    if (i % 2 == 1) checkQuery({{{AnyOf{{kinds[i], kinds[(i + 7) % kinds.size()]}}}}}, 20);
   }
   checkQuery({}, 50);
   checkQuery({{{AnyOf{}}}}, 50);
@@ -113,14 +115,14 @@ TEST_CASE("every kind of condition finds what an evaluation by hand finds", "[db
 TEST_CASE("random searches find what an evaluation by hand finds", "[db][find][independent]") {
   testing::RandomQueries queries(7);
   std::size_t some = 0;
-  for (int round = 0; round < 400; ++round) {
+  for (int round = 0; round < 320; ++round) {
     const FindQuery query = queries.query();
     INFO("query " << round);
     checkQuery(query, 1 + static_cast<std::size_t>(round) % 60);
     const std::size_t found = notebook().matches(query).size();
     if (found > 0 && found < notebook().runs().size()) ++some;
   }
-  CHECK(some > 150);  // the searches tell runs apart
+  CHECK(some > 120);  // the searches tell runs apart
 }
 
 TEST_CASE("no text of a search reaches SQL or the full-text syntax", "[db][find][identity]") {
@@ -129,8 +131,8 @@ TEST_CASE("no text of a search reaches SQL or the full-text syntax", "[db][find]
       "' OR 1=1 --", "'; DROP TABLE run; --", "\"", "\"\"", "\" OR \"film", "\"film\" OR \"grey", "film\" NOT \"grey", "NEAR(film grey, 2)",
       "NEAR", "AND", "OR", "NOT", "film AND", "film OR grey", "*", "film*", "^film", "title:film", "title : film", "-film", "+film", "{title}:film",
       "(film", "film)", ":", "?", "?1", ":n", "@n", "$n", "%", "_", "\\", "%_\\", std::string("fi\0lm", 5), std::string(1, '\0'), "\xFF\xFE", "\xE2\x82",
-      "\u202Efilm", "\u200B", "\n", "film\ngrey", "🧪", "--", "/*", "*/", ";", "' COLLATE BINARY --", "x'00'", "rank MATCH", std::string(200'000, 'a'),
-      std::string(100'000, '"'), std::string(100'000, '('), std::string(10'000'000, '%')};
+      "\u202Efilm", "\u200B", "\n", "film\ngrey", "🧪", "--", "/*", "*/", ";", "' COLLATE BINARY --", "x'00'", "rank MATCH", std::string(20'000, 'a'),
+      std::string(20'000, '"'), std::string(20'000, '(')};
   for (const std::string& text : hostile) {
     INFO(text.substr(0, 60));
     std::vector<FindCondition> conditions;
@@ -153,6 +155,15 @@ TEST_CASE("no text of a search reaches SQL or the full-text syntax", "[db][find]
         REQUIRE(static_cast<std::int64_t>(notebook().numbers(sql.select).size()) == notebook().numbers(sql.count).at(0));
       }
     }
+  }
+  for (const std::string& text : {std::string(10'000'000, 'a'), std::string(10'000'000, '"'), std::string(10'000'000, '%')}) {
+    AnyOf any;
+    any.conditions.push_back({WordsCondition{{text}, true, {}}});
+    any.conditions.push_back({TextFieldCondition{TextFieldCondition::Field::kVial, text, true}});
+    FindQuery query;
+    query.conditions.push_back({std::move(any)});
+    const bool isWord = text.front() == 'a';
+    CHECK(notebook().numbers(db::findSql(query, {}).count).at(0) == (isWord ? 0 : 5'000));
   }
   CHECK(notebook().numbers({"SELECT count(*) FROM run"}).at(0) == 5'000);
   // Quoted, a word finds itself and nothing more.

@@ -7,7 +7,7 @@
 #include <algorithm>
 #include <random>
 
-#include "charge/plan_fixture.h"
+#include "support/sample_plan.h"
 
 using namespace vialkeeper;
 using namespace std::string_literals;

@@ -6,7 +6,7 @@
 #include <cmath>
 #include <set>
 
-#include "reference/reference_data.h"
+#include "support/reference_data.h"
 #include "units/quantity_text.h"
 
 using namespace vialkeeper;

@@ -214,8 +214,9 @@ class FormReader {
     const std::string lowered = text::asciiLowered(word.substr(0, 12));
     const bool collecting = m_form.kind == event_kind::kCollected &&
                             (lowered == "over" || lowered == "water" || lowered == "barometer");
+    const bool venting = m_form.kind == event_kind::kVent && lowered == "ambient" && !has(kP);
     const bool more = m_at + 1 < m_pieces.tokens.size();
-    if (collecting || (isJoint(word) && more)) return {};
+    if (collecting || venting || (isJoint(word) && more)) return {};
     return textFault(token.begin, token.end - token.begin, fmt::format("{} is not understood here", text::quoted(word)),
                      fmt::format("{}{}, with a remark behind a semicolon", example(),
                                  takes(kG) ? ", the gas one of H2 N2 O2 Ar CO2 CO CH4" : ""));
@@ -300,10 +301,17 @@ class FormReader {
       const auto& unit = token.unit;
       const unsigned item = unit ? itemOf(unit->unit->kind) : 0;
       const bool solution = unit && (item == 0 || item == kX) && unit->unit->kind != Kind::kMass;
+      if (!name && item == kP) {
+        return textFault(token.begin, token.end - token.begin, "a pressure in the label of a sample",
+                         "log the reading in a line of its own");
+      }
       if (name && !solution) {
         return textFault(token.begin, token.end - token.begin, "a figure in the name of the liquid",
                          fmt::format("{}, with a remark behind a semicolon", example()));
       }
+    }
+    if (name && gasNamed(text)) {
+      return textFault(m_textBegin, text.size(), "a gas where a liquid is wanted", "write it like add gas 2 mL H2");
     }
     std::string_view rest = text;
     for (const std::string_view joint : {"and ", "then ", "+ ", "& "}) {

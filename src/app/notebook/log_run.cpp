@@ -31,9 +31,10 @@ Checked<ReadEntry> readEntry(const RunRecord& run, const LogRequest& request) {
   ReadEntry entry = readLogLine(request.line);
   if (!entry.doubt || request.accepted) return entry;
   return askedFault("entry",
-                    fmt::format("{} looks like a {}, but {}", text::quoted(request.line), entry.meant,
+                    fmt::format("{} looks like {}, but {}", text::quoted(request.line),
+                                entry.meant.empty() ? "no entry" : "an entry of " + entry.meant,
                                 whatWithPosition(*entry.doubt, request.line)),
-                    entry.doubt->mend + "; as text: note " + std::string(text::trimmed(request.line)).substr(0, 60));
+                    entry.doubt->mend);
 }
 
 Checked<LogTime> timeOf(const LogRequest& request, const units::Moment& now, const units::Moment& otherwise) {

@@ -128,7 +128,9 @@ std::string clockOf(const Moment& moment) {
 
 std::string spanOf(milliseconds span) {
   if (span >= days{2}) return fmt::format("{} d", floor<days>(span).count());
-  return units::shown(units::Duration::fromSeconds(static_cast<double>(floor<seconds>(span).count())));
+  // Whole minutes that are over, like a clock, not the nearest.
+  const seconds whole = span >= hours{1} ? seconds{floor<minutes>(span)} : floor<seconds>(span);
+  return units::shown(units::Duration::fromSeconds(static_cast<double>(whole.count())));
 }
 
 /// The day in words where it is this or the last, by the offset of now.
