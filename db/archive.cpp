@@ -124,6 +124,7 @@ class ArchiveReader {
     for (const std::string& table : archivedTables()) {
       if (const auto done = readTable(table); !done) return done;
     }
+    m_connection.run("INSERT INTO run_search(run_search) VALUES('rebuild')");
     if (!m_connection.rows("PRAGMA foreign_key_check").empty()) {
       return fault(m_folder.string(), 0, "rows of the archive refer to others that are not in it", "export it again");
     }

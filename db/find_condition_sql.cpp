@@ -57,7 +57,8 @@ SqlText amountsSql(const SubstanceCondition& condition, const std::string& alias
   }
   if (condition.concentration_mol_L) {
     sql += " AND ";
-    sql += withinSql(fmt::format("coalesce({0}.charged_mol_l, {0}.planned_mol_l)", alias), *condition.concentration_mol_L);
+    sql +=
+        withinSql(fmt::format("coalesce({0}.charged_mol_l, {0}.planned_mol_l)", alias), *condition.concentration_mol_L);
   }
   return sql;
 }
@@ -86,9 +87,9 @@ SqlText probeSql(const SubstanceCondition& condition, const SqlPlace& place) {
 }
 
 SqlText substanceSql(const SubstanceCondition& condition, const SqlPlace& place) {
-  if (condition.anySubstance) return probeSql(condition, place);
-  if (condition.substances.empty()) return {"0"};
-  if (place.isProbed) return probeSql(condition, place);
+  if (!condition.anySubstance && condition.substances.empty()) return {"0"};
+  // Of any role and substance there is no stretch of an index.
+  if (place.isProbed || (condition.anySubstance && condition.role.empty())) return probeSql(condition, place);
   SqlText sql{fmt::format("{}{} IN (SELECT p.run_n FROM component p WHERE ", place.isLed ? "+" : "", place.run)};
   sql += componentSql(condition, "p");
   sql += ")";
@@ -98,8 +99,9 @@ SqlText substanceSql(const SubstanceCondition& condition, const SqlPlace& place)
 SqlText wordsSql(const WordsCondition& words, const SqlPlace& place) {
   const std::string match = matchText(words);
   if (match.empty()) return {"1"};
-  return {fmt::format("{}{} IN (SELECT rowid FROM run_search WHERE run_search MATCH ?)", place.isLed ? "+" : "", place.run),
-          {match}};
+  return {
+      fmt::format("{}{} IN (SELECT rowid FROM run_search WHERE run_search MATCH ?)", place.isLed ? "+" : "", place.run),
+      {match}};
 }
 
 SqlText textFieldSql(const TextFieldCondition& condition) {
@@ -111,13 +113,20 @@ SqlText textFieldSql(const TextFieldCondition& condition) {
     return {fmt::format("substr({}, 1, ?) = ? COLLATE NOCASE", column), {letters, value}};
   };
   switch (condition.field) {
-    case Field::kCode: return compared("r.code");
-    case Field::kState: return compared("r.state");
-    case Field::kSeries: return compared("ifnull(r.series, '')");
-    case Field::kVial: return compared("ifnull(r.vial, '')");
-    case Field::kLamp: return compared("ifnull(r.lamp, '')");
-    case Field::kAtmosphere: return compared("ifnull(r.atmosphere, '')");
-    case Field::kPerson: break;
+    case Field::kCode:
+      return compared("r.code");
+    case Field::kState:
+      return compared("r.state");
+    case Field::kSeries:
+      return compared("ifnull(r.series, '')");
+    case Field::kVial:
+      return compared("ifnull(r.vial, '')");
+    case Field::kLamp:
+      return compared("ifnull(r.lamp, '')");
+    case Field::kAtmosphere:
+      return compared("ifnull(r.atmosphere, '')");
+    case Field::kPerson:
+      break;
   }
   SqlText sql{"r.person_n IN (SELECT n FROM person WHERE "};
   sql += compared("code");
@@ -140,14 +149,22 @@ SqlText dateSql(const Interval& interval) {
 SqlText measureSql(const MeasureCondition& condition) {
   using Measure = MeasureCondition::Measure;
   switch (condition.measure) {
-    case Measure::kYield: return withinSql("r.yield_percent", condition.interval);
-    case Measure::kConversion: return withinSql("r.conversion_percent", condition.interval);
-    case Measure::kWavelength: return withinSql("r.wavelength_nm", condition.interval);
-    case Measure::kTemperature: return withinSql("r.temperature_c", condition.interval);
-    case Measure::kDuration: return withinSql("r.duration_h", condition.interval);
-    case Measure::kLiquid: return withinSql("r.liquid_ml", condition.interval);
-    case Measure::kLimiting: return withinSql("r.limiting_mmol", condition.interval);
-    case Measure::kDate: break;
+    case Measure::kYield:
+      return withinSql("r.yield_percent", condition.interval);
+    case Measure::kConversion:
+      return withinSql("r.conversion_percent", condition.interval);
+    case Measure::kWavelength:
+      return withinSql("r.wavelength_nm", condition.interval);
+    case Measure::kTemperature:
+      return withinSql("r.temperature_c", condition.interval);
+    case Measure::kDuration:
+      return withinSql("r.duration_h", condition.interval);
+    case Measure::kLiquid:
+      return withinSql("r.liquid_ml", condition.interval);
+    case Measure::kLimiting:
+      return withinSql("r.limiting_mmol", condition.interval);
+    case Measure::kDate:
+      break;
   }
   return dateSql(condition.interval);
 }
@@ -195,6 +212,11 @@ struct ConditionWriter {
 
 SqlText componentSql(const SubstanceCondition& condition, const std::string& alias) {
   SqlText sql;
+  if (condition.anySubstance) {
+    sql += roleSql(condition.role, alias + ".role");
+    sql += amountsSql(condition, alias);
+    return sql;
+  }
   if (isIndexed(condition) && !condition.role.empty()) {
     sql += roleSql(condition.role, alias + ".role");
     sql += " AND ";
@@ -237,7 +259,8 @@ std::string matchText(const WordsCondition& words) {
       match += c;
     }
     match += '"';
-    const bool isPrefix = (i < words.prefix.size() && words.prefix[i]) || (words.lastIsPrefix && i + 1 == words.words.size());
+    const bool isPrefix =
+        (i < words.prefix.size() && words.prefix[i]) || (words.lastIsPrefix && i + 1 == words.words.size());
     if (isPrefix) match += '*';
   }
   return match;

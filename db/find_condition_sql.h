@@ -46,7 +46,8 @@ struct SqlPlace {
 /// Whether the condition reads columns of the run itself.
 [[nodiscard]] bool readsRun(const app::FindCondition& condition);
 
-/// What the component `alias` has to be, as an expression over its own columns.
+/// What the component `alias` has to be, as an expression over its own columns. The condition names a role
+/// or substances.
 [[nodiscard]] SqlText componentSql(const app::SubstanceCondition& condition, const std::string& alias);
 
 /// The words in the language of FTS5's MATCH, each within quotation marks; empty where no word holds a letter or digit.

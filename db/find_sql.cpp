@@ -17,7 +17,7 @@ using app::FindOrder;
 using app::SubstanceCondition;
 using app::WordsCondition;
 
-constexpr std::int64_t kFew = 5'000;       ///< up to here runs are asked one by one
+constexpr std::int64_t kFew = 5'000;  ///< up to here runs are asked one by one
 constexpr std::int64_t kMostRanked = 2'000;
 
 /// The conditions that all have to hold: those of AllOf beside the others, words gathered in one.
@@ -64,9 +64,7 @@ struct Lead {
   bool byWords = false;
   std::int64_t rows = kFew;  ///< how many runs it gives, kFew meaning that or more
 
-  [[nodiscard]] const SubstanceCondition& condition() const {
-    return std::get<SubstanceCondition>(substance->data);
-  }
+  [[nodiscard]] const SubstanceCondition& condition() const { return std::get<SubstanceCondition>(substance->data); }
   /// One stretch of an index, which gives the runs in their order.
   [[nodiscard]] bool isInOrder() const { return substance != nullptr && condition().substances.size() == 1; }
 };
@@ -88,8 +86,10 @@ std::int64_t likelyRows(const SubstanceCondition& condition) {
   return isNarrowed ? kFew : 2 * kFew;
 }
 
-Lead chooseLead(const Conjunction& all, const RowCounter& rowsOf) {
+Lead chooseLead(const Conjunction& all, const RowCounter& counter) {
   std::optional<Lead> best;
+  // A condition by itself leads, whatever it finds.
+  const RowCounter rowsOf = all.others().size() + (all.match().empty() ? 0 : 1) > 1 ? counter : RowCounter();
   const auto offer = [&best](Lead lead) {
     if (!best || lead.rows < best->rows) best = lead;
   };
@@ -135,7 +135,8 @@ struct Source {
 Source sourceByComponent(const Conjunction& all, const Lead& lead) {
   Source source{.text = {}, .run = "c.run_n", .mayRepeat = true};
   // CROSS JOIN: SQLite keeps the order of the tables.
-  source.text += restReadsRun(all) ? " FROM component c CROSS JOIN run r ON r.n = c.run_n WHERE " : " FROM component c WHERE ";
+  source.text +=
+      restReadsRun(all) ? " FROM component c CROSS JOIN run r ON r.n = c.run_n WHERE " : " FROM component c WHERE ";
   source.text += componentSql(lead.condition(), "c");
   source.text += " AND ";
   source.text += restSql(all, lead, {.run = source.run, .isLed = true, .isProbed = lead.rows < kFew});

@@ -226,12 +226,15 @@ void SqliteWriting::refreshWords(app::RowNumber run) {
     const std::string note = row.text("note");
     observations += (observations.empty() ? "" : "\n") + (note.empty() ? row.text("raw") : note);
   }
-  m_connection.run(
-      "INSERT INTO run_words (run_n, code, title, aim, conclusion, observations) "
-      "SELECT n, code, coalesce(title, ''), coalesce(aim, ''), coalesce(conclusion, ''), ? FROM run WHERE n = ? "
-      "ON CONFLICT (run_n) DO UPDATE SET code = excluded.code, title = excluded.title, aim = excluded.aim, "
-      "conclusion = excluded.conclusion, observations = excluded.observations",
-      {Cell{observations}, Cell{run}});
+  const std::string columns = "run_n, code, title, aim, conclusion, observations";
+  // The index forgets a text only if it is told the very words that it holds.
+  m_connection.run("INSERT INTO run_search(run_search, rowid, code, title, aim, conclusion, observations) "
+                   "SELECT 'delete', " + columns + " FROM run_words WHERE run_n = ?", {Cell{run}});
+  m_connection.run("INSERT OR REPLACE INTO run_words (" + columns + ") "
+                   "SELECT n, code, coalesce(title, ''), coalesce(aim, ''), coalesce(conclusion, ''), ? FROM run WHERE n = ?",
+                   {Cell{observations}, Cell{run}});
+  m_connection.run("INSERT INTO run_search(rowid, code, title, aim, conclusion, observations) "
+                   "SELECT " + columns + " FROM run_words WHERE run_n = ?", {Cell{run}});
 }
 
 }  // namespace vialkeeper::db

@@ -178,8 +178,8 @@ Blocks noticeBlocks(const Setting& setting, const std::vector<std::string>& noti
 
 Blocks hazardBlocks(const Setting& setting, const std::vector<app::HazardContent>& hazards) {
   constexpr double kColumnGap_mm = 7.0;
-  constexpr double kTooLong_mm = 60.0;
-  constexpr std::size_t kTogether = 8;  // entries that no page's end comes between
+  constexpr double kTooLong_mm = 40.0;
+  constexpr double kTogether_mm = 240.0;  // in both columns: what no page's end comes between
   Blocks blocks;
   if (hazards.empty()) return blocks;
   const double left = setting.page.left();
@@ -188,18 +188,22 @@ Blocks hazardBlocks(const Setting& setting, const std::vector<app::HazardContent
   blocks.back().isHeading = true;
   const double width = setting.page.contentWidth();
   const double half = (width - kColumnGap_mm) / 2.0;
-  std::vector<TextBlock> entries = hazardEntries(setting, hazards, half);
+  const std::vector<TextBlock> entries = hazardEntries(setting, hazards, half);
   const bool inColumns =
       entries.size() > 1 && std::ranges::all_of(entries, [](const TextBlock& entry) {
         return entry.height_mm() <= kTooLong_mm;
       });
   if (inColumns) {
-    for (std::size_t first = 0; first < entries.size(); first += kTogether) {
-      const std::size_t last = std::min(first + kTogether, entries.size());
-      const std::vector<TextBlock> some(entries.begin() + static_cast<std::ptrdiff_t>(first),
-                                        entries.begin() + static_cast<std::ptrdiff_t>(last));
+    std::vector<TextBlock> together;
+    double height = 0.0;
+    for (const TextBlock& entry : entries) {
+      together.push_back(entry);
+      height += entry.height_mm();
+      if (height < kTogether_mm && &entry != &entries.back()) continue;
       blocks.push_back(
-          columnsBlock(some, left, left + half + kColumnGap_mm, setting.density.paragraph_mm));
+          columnsBlock(together, left, left + half + kColumnGap_mm, setting.density.paragraph_mm));
+      together.clear();
+      height = 0.0;
     }
   } else {
     for (const TextBlock& entry : hazardEntries(setting, hazards, width)) {

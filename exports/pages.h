@@ -31,8 +31,9 @@ struct PdfDocument {
     const std::vector<app::StockSheetContent>& contents, Paper paper);
 
 /// Labels of vials, one a page of 62 mm × 29 mm, the size of a common label roll (common practice, no
-/// source); pure black, for printers that know nothing else. Long texts are set smaller; contents
-/// that still have no room are cut with an ellipsis, the code, hazards and caution never.
+/// source); pure black, for printers that know nothing else. Long texts are set smaller;
+/// contents that still have no room are cut with an ellipsis, then the title after two lines and
+/// the person; the code, conditions, hazards and caution never.
 /// Fault: no content, a text for the printed code that is too long for a label, hazards and caution
 /// that do not fit; the pages module or a font is missing.
 [[nodiscard]] text::Checked<PdfDocument> printVialLabels(

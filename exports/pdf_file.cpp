@@ -5,6 +5,7 @@
 #include <QMarginsF>
 #include <QPainter>
 #include <algorithm>
+#include <cmath>
 #include <string_view>
 
 namespace vialkeeper::exports {
@@ -13,6 +14,24 @@ namespace {
 /// A hundredth of a millimetre for every unit, finer than any printer.
 constexpr int kResolution_dpi = 2540;
 constexpr double kUnitsPerMm = 100.0;
+
+/// Writes a page's true size over the one that Qt has rounded to whole points. The length stays, so
+/// that the file's table of offsets stays right; a size of another length is left rounded.
+void putTrueSize(std::string& bytes, const QSizeF& size_pt) {
+  const auto box = [](double width, double height) {
+    return ("MediaBox [0 0 " + QByteArray::number(width, 'f', 6) + ' ' +
+            QByteArray::number(height, 'f', 6) + ']')
+        .toStdString();
+  };
+  const std::string rounded = box(std::round(size_pt.width()), std::round(size_pt.height()));
+  const std::string exact = box(size_pt.width(), size_pt.height());
+  if (exact.size() != rounded.size()) return;
+  for (std::size_t at = bytes.find(rounded); at != std::string::npos;
+       at = bytes.find(rounded, at)) {
+    bytes.replace(at, exact.size(), exact);
+    at += exact.size();
+  }
+}
 
 /// Blanks out the entry of the document's information that says when the file was written. The
 /// length stays, so that the file's table of offsets stays right.
@@ -41,7 +60,7 @@ PdfFile::PdfFile(const PageGeometry& geometry, const QString& family, const std:
 
 PdfFile::PdfFile(const PageGeometry& geometry, const QPageSize& size, const QString& family,
                  const std::string& title)
-    : m_writer(&m_buffer), m_geometry(geometry) {
+    : m_writer(&m_buffer), m_geometry(geometry), m_isOfAnySize(size.id() == QPageSize::Custom) {
   m_buffer.open(QIODevice::WriteOnly);
   // All of this must stand before a painter begins: Qt fixes the page at that moment.
   m_writer.setResolution(kResolution_dpi);
@@ -71,6 +90,9 @@ text::Checked<PdfDocument> PdfFile::write(const std::vector<PageFlow>& flows) {
   painter.end();
   document.bytes = m_buffer.data().toStdString();
   takeOutDate(document.bytes);
+  if (m_isOfAnySize) {
+    putTrueSize(document.bytes, QSizeF(m_geometry.width_mm, m_geometry.height_mm) * 72.0 / 25.4);
+  }
   return document;
 }
 

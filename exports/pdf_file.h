@@ -17,7 +17,7 @@ namespace vialkeeper::exports {
 class PdfFile {
  public:
   PdfFile(Paper paper, const QString& family, const std::string& title);
-  /// Pages of any size. Qt rounds the page to whole points (0.35 mm), what is on it not.
+  /// Pages of any size.
   PdfFile(const PageGeometry& geometry, const QString& family, const std::string& title);
 
   [[nodiscard]] const PageGeometry& geometry() const { return m_geometry; }
@@ -36,6 +36,7 @@ class PdfFile {
   QPdfWriter m_writer;
   PageGeometry m_geometry;
   Typesetter m_typesetter;
+  bool m_isOfAnySize;
 };
 
 }  // namespace vialkeeper::exports

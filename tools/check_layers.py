@@ -68,7 +68,7 @@ LAYERS = {
     "ui/charts": Layer(CORE + ("app", "ui/models", "ui/widgets"), BASE + QT_ALL),
     "ui/main.cpp": Layer((), (), anything=True),
     # What the tests of all layers share: tests/*.h, tests/*.cpp and tests/support/.
-    "tests": Layer((), OUTER + ("Catch2",)),
+    "tests": Layer(("text",), OUTER + ("Catch2",)),
 }
 
 # Where each layer's files lie, from the top of the tree. The longest match counts.

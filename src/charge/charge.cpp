@@ -252,6 +252,13 @@ class ChargeSolver {
     }
   }
 
+  /// What the balance would show [kg]; of a stock, which has a volume for its target, by its density.
+  std::optional<double> weighedMass(std::size_t i) const {
+    if (m_components[i].targetMass) return m_components[i].targetMass->si();
+    const auto& volume = m_components[i].targetVolume;
+    return volume ? m_materials[i].massOfVolume(volume->si()) : std::nullopt;
+  }
+
   /// Amount with the doubt of the device at the target; the value is the plan's to the last digit.
   std::optional<Uncertain> plannedAmount(std::size_t i) {
     if (!m_planned_mol[i]) return std::nullopt;
@@ -259,9 +266,9 @@ class ChargeSolver {
     const Device* device = plan(i).device ? &*plan(i).device : nullptr;
     const bool weighed = device != nullptr && device->balance() != nullptr;
     std::optional<Uncertain> amount;
-    if (weighed && component.targetMass) {
+    if (const auto mass_kg = weighed ? weighedMass(i) : std::nullopt) {
       amount = m_materials[i].amountInMass(
-          Uncertain(component.targetMass->si(), device->balance()->standardUncertainty().si(), m_causes.add()));
+          Uncertain(*mass_kg, device->balance()->standardUncertainty().si(), m_causes.add()));
     } else if (device != nullptr && device->pipette() != nullptr && component.targetVolume) {
       amount = m_materials[i].amountInVolume(
           Uncertain(component.targetVolume->si(),

@@ -5,7 +5,7 @@
 #include "app/sheet_bench.h"
 
 using namespace vialkeeper;
-using namespace vialkeeper::test;
+using namespace vialkeeper::tests;
 
 namespace {
 

@@ -5,7 +5,7 @@
 #include "app/sheet_bench.h"
 
 using namespace vialkeeper;
-using namespace vialkeeper::test;
+using namespace vialkeeper::tests;
 using app::planMark;
 
 // Source: draft-eastlake-fnv, appendix C, FNV-1a of 64 bits: "" cbf29ce484222325, "a" af63dc4c8601ec8c,

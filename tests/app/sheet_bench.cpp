@@ -6,7 +6,7 @@
 #include <catch2/catch.hpp>
 #include <stdexcept>
 
-namespace vialkeeper::test {
+namespace vialkeeper::tests {
 
 const std::string& sheetPlan() {
   static const std::string plan = R"(format = "vialkeeper-plan/1"
@@ -107,4 +107,4 @@ bool anyHolds(const std::vector<std::string>& texts, std::string_view words) {
   return std::ranges::any_of(texts, [words](const std::string& text) { return text.find(words) != std::string::npos; });
 }
 
-}  // namespace vialkeeper::test
+}  // namespace vialkeeper::tests

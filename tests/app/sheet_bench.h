@@ -9,7 +9,7 @@
 #include "app/plan_charge.h"
 #include "app/sheet_content.h"
 
-namespace vialkeeper::test {
+namespace vialkeeper::tests {
 
 /// A plan with a solid, a stock, a neat liquid by pipette and one by balance, and two solvents.
 [[nodiscard]] const std::string& sheetPlan();
@@ -26,4 +26,4 @@ namespace vialkeeper::test {
 /// Whether one of the texts holds the words.
 [[nodiscard]] bool anyHolds(const std::vector<std::string>& texts, std::string_view words);
 
-}  // namespace vialkeeper::test
+}  // namespace vialkeeper::tests

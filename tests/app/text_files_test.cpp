@@ -9,10 +9,10 @@
 #include <catch2/catch.hpp>
 #include <csignal>
 
-#include "app/scratch_folder.h"
+#include "support/scratch_folder.h"
 
 using namespace vialkeeper;
-using namespace vialkeeper::test;
+using namespace vialkeeper::tests;
 using app::readFile;
 using app::writeFile;
 

@@ -2,11 +2,11 @@
 // SPDX-License-Identifier: GPL-3.0-or-later
 #include <catch2/catch.hpp>
 
-#include "app/scratch_folder.h"
+#include "support/scratch_folder.h"
 #include "app/sheet_bench.h"
 
 using namespace vialkeeper;
-using namespace vialkeeper::test;
+using namespace vialkeeper::tests;
 
 namespace {
 

@@ -27,7 +27,7 @@ class PlanWriter {
                                 : line("limiting_concentration", concentration(limiting_mmol / total_mL));
     text += component("a", limiting_mmol, limiting_mmol, total_mL, true);
     for (std::size_t i = 0; i < others; ++i) {
-      text += component("c" + std::to_string(i), limiting_mmol * between(0.01, 2.0), limiting_mmol, total_mL, false);
+      text += component(fmt::format("c{}", i), limiting_mmol * between(0.01, 2.0), limiting_mmol, total_mL, false);
     }
     constexpr const char* kNames[] = {"acetonitrile", "water", "methanol"};
     for (std::size_t i = 0; i < solvents; ++i) {
@@ -67,7 +67,7 @@ class PlanWriter {
       mL = between(0.1, 1.0) * m_room_mL;
       const std::size_t solvent = m_random() % (m_solvents + 1);  // one of the plan's, or toluene
       text += fmt::format("supply = {{ kind = \"stock\", concentration = \"{}\", solvent = \"{}\" }}\ndevice = \"pipette-1000uL\"\n",
-                          concentration(mmol / mL), solvent == m_solvents ? "toluene" : "s" + std::to_string(solvent));
+                          concentration(mmol / mL), solvent == m_solvents ? "toluene" : fmt::format("s{}", solvent));
     } else {
       text += "supply = { kind = \"gas\", pressure = \"" + scaled(1500.0, "mbar", 1e3, "bar") + "\", temperature = \"295 K\" }\n";
       mL = mmol * 8.31446261815324 * 295.0 / 1.5e5 * 1e3;

@@ -56,7 +56,7 @@ TEST_CASE("unknown, missing and repeated columns of a weighed file are faults", 
   CHECK(faultsOf("key,actual,who\namine,23.9 mg,me\n")[0].starts_with("w.csv:1:who: this column is not known here"));
   CHECK(faultsOf("key\namine\n")[0].starts_with("w.csv:1:actual: the column is missing"));
   CHECK(faultsOf("key,key,actual\na,b,c\n")[0].starts_with("w.csv:1:key: this column stands twice"));
-  CHECK(faultsOf("key,actual\namine\n")[0].starts_with("w.csv:2: 1 cells where the header has 2"));
+  CHECK(faultsOf("key,actual\namine\n")[0].starts_with("w.csv:2: 1 cell where the header has 2"));
 }
 
 TEST_CASE("a gas is recorded by volume, a stock with density by mass as well", "[charge]") {

@@ -112,9 +112,9 @@ TEST_CASE("the doubt of a molar mass adds straight within an element and in squa
   CHECK(massOf("H2O").standardUncertainty.gramsPerMole() == Approx(6.2183e-4).epsilon(1e-4));
   // Glucose: sqrt((6 x 0.002)^2 + (12 x 0.0002)^2 + (6 x 0.001)^2)/sqrt(3) = 7.8690e-3.
   CHECK(massOf("C6H12O6").standardUncertainty.gramsPerMole() == Approx(7.8690e-3).epsilon(1e-4));
-  for (const char* formula : {"H2O", "C8H9N", "CuSO4·5H2O"}) {
-    const auto one = massOf(formula);
-    const auto two = massOf("(" + std::string(formula == std::string("CuSO4·5H2O") ? "CuSO4(H2O)5" : formula) + ")2");
+  for (const auto& [single, twice] : {std::pair{"H2O", "(H2O)2"}, {"C8H9N", "C16H18N2"}, {"CuSO4·5H2O", "[CuSO4(H2O)5]2"}}) {
+    const auto one = massOf(single);
+    const auto two = massOf(twice);
     CHECK(two.value.si() == Approx(2.0 * one.value.si()).epsilon(1e-14));
     CHECK(two.standardUncertainty.si() == Approx(2.0 * one.standardUncertainty.si()).epsilon(1e-12));
   }

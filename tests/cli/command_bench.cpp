@@ -9,7 +9,7 @@
 
 #include "cli/command_line.h"
 
-namespace vialkeeper::test {
+namespace vialkeeper::tests {
 
 std::vector<std::string> Ran::faults() const {
   std::vector<std::string> lines;
@@ -116,4 +116,4 @@ void checkPlanFaults(std::span<const PlanFault> faults) {
   }
 }
 
-}  // namespace vialkeeper::test
+}  // namespace vialkeeper::tests

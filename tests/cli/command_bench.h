@@ -8,9 +8,9 @@
 #include <string_view>
 #include <vector>
 
-#include "cli/scratch_folder.h"
+#include "support/scratch_folder.h"
 
-namespace vialkeeper::test {
+namespace vialkeeper::tests {
 
 /// What a command left behind.
 struct Ran {
@@ -49,4 +49,4 @@ void checkPlanFaults(std::span<const PlanFault> faults);
 void checkOneFault(const ScratchFolder& folder, const std::vector<std::string>& arguments, int status,
                    const std::string& place, const std::string& tells, const std::string& mend);
 
-}  // namespace vialkeeper::test
+}  // namespace vialkeeper::tests

@@ -10,7 +10,7 @@
 #include <sstream>
 #include <stdexcept>
 
-namespace vialkeeper::test {
+namespace vialkeeper::tests {
 namespace {
 
 using nlohmann::json;
@@ -86,4 +86,4 @@ const json& component(const json& charge, std::string_view key) {
   throw std::logic_error("no component " + std::string(key));
 }
 
-}  // namespace vialkeeper::test
+}  // namespace vialkeeper::tests

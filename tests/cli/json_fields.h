@@ -6,7 +6,7 @@
 #include <string>
 #include <string_view>
 
-namespace vialkeeper::test {
+namespace vialkeeper::tests {
 
 /// Checks that the text is one JSON object and nothing else, and that every number in it is written
 /// in the shortest form that reads back the same.
@@ -27,4 +27,4 @@ void checkNotices(const nlohmann::json& object);
 /// The component of that key.
 [[nodiscard]] const nlohmann::json& component(const nlohmann::json& charge, std::string_view key);
 
-}  // namespace vialkeeper::test
+}  // namespace vialkeeper::tests

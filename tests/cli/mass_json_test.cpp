@@ -5,7 +5,7 @@
 #include "cli/command_bench.h"
 #include "cli/json_fields.h"
 
-using namespace vialkeeper::test;
+using namespace vialkeeper::tests;
 
 namespace {
 

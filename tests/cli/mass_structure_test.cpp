@@ -5,7 +5,7 @@
 #include "cli/command_bench.h"
 #include "cli/json_fields.h"
 
-using namespace vialkeeper::test;
+using namespace vialkeeper::tests;
 
 TEST_CASE("a structure has the mass of its formula", "[cli][json][mass][structures][identity]") {
   const std::pair<const char*, const char*> pairs[] = {

@@ -4,7 +4,7 @@
 
 #include "cli/command_bench.h"
 
-using namespace vialkeeper::test;
+using namespace vialkeeper::tests;
 
 namespace {
 

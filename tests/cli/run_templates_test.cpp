@@ -11,7 +11,7 @@
 #include "cli/json_fields.h"
 
 using namespace vialkeeper;
-using namespace vialkeeper::test;
+using namespace vialkeeper::tests;
 
 namespace {
 

@@ -23,7 +23,8 @@ bool hasRole(const std::string& role, const std::string& wanted) {
 
 bool meets(const SampleRun& sample, const app::SubstanceCondition& condition) {
   return std::ranges::any_of(sample.components, [&](const app::ComponentRecord& component) {
-    const bool isOne = condition.anySubstance || std::ranges::find(condition.substances, component.substance) != condition.substances.end();
+    const bool isOne = condition.anySubstance ||
+                       std::ranges::find(condition.substances, component.substance) != condition.substances.end();
     const auto concentration = component.charged_mol_L ? component.charged_mol_L : component.planned_mol_L;
     return isOne && hasRole(component.role, condition.role) &&
            (!condition.loading_molPercent || isWithin(component.loading_molPercent(), *condition.loading_molPercent)) &&
@@ -47,8 +48,10 @@ bool meets(const SampleRun& sample, const app::WordsCondition& condition) {
   for (std::size_t i = 0; i < condition.words.size(); ++i) {
     const std::vector<std::string> phrase = tokensOf(condition.words[i]);
     if (phrase.empty()) continue;
-    const bool isPrefix = (i < condition.prefix.size() && condition.prefix[i]) || (condition.lastIsPrefix && i + 1 == condition.words.size());
-    const bool isThere = std::ranges::any_of(sample.tokens, [&](const auto& text) { return holdsPhrase(text, phrase, isPrefix); });
+    const bool isPrefix = (i < condition.prefix.size() && condition.prefix[i]) ||
+                          (condition.lastIsPrefix && i + 1 == condition.words.size());
+    const bool isThere =
+        std::ranges::any_of(sample.tokens, [&](const auto& text) { return holdsPhrase(text, phrase, isPrefix); });
     if (!isThere) return false;
   }
   return true;
@@ -59,13 +62,20 @@ bool meets(const SampleRun& sample, const app::TextFieldCondition& condition) {
   constexpr std::array<const char*, 6> kStates = {"planned", "charged", "irradiating", "worked-up", "closed", "sealed"};
   const std::string held = [&]() -> std::string {
     switch (condition.field) {
-      case Field::kCode: return sample.run.code;
-      case Field::kSeries: return sample.run.series;
-      case Field::kPerson: return sample.run.person;
-      case Field::kState: return kStates[static_cast<std::size_t>(sample.run.state)];
-      case Field::kVial: return sample.run.vial;
-      case Field::kLamp: return sample.run.lamp;
-      case Field::kAtmosphere: return sample.run.atmosphere;
+      case Field::kCode:
+        return sample.run.code;
+      case Field::kSeries:
+        return sample.run.series;
+      case Field::kPerson:
+        return sample.run.person;
+      case Field::kState:
+        return kStates[static_cast<std::size_t>(sample.run.state)];
+      case Field::kVial:
+        return sample.run.vial;
+      case Field::kLamp:
+        return sample.run.lamp;
+      case Field::kAtmosphere:
+        return sample.run.atmosphere;
     }
     return {};
   }();
@@ -78,29 +88,40 @@ bool meets(const SampleRun& sample, const app::MeasureCondition& condition) {
   using Measure = app::MeasureCondition::Measure;
   const app::RunRecord& run = sample.run;
   switch (condition.measure) {
-    case Measure::kYield: return isWithin(run.yield_percent, condition.interval);
-    case Measure::kConversion: return isWithin(run.conversion_percent, condition.interval);
-    case Measure::kWavelength: return isWithin(run.wavelength_nm, condition.interval);
-    case Measure::kTemperature: return isWithin(run.temperature_C, condition.interval);
-    case Measure::kDuration: return isWithin(run.duration_h, condition.interval);
-    case Measure::kLiquid: return isWithin(run.liquid_mL, condition.interval);
-    case Measure::kLimiting: return isWithin(run.limiting_mmol, condition.interval);
-    case Measure::kDate: break;
+    case Measure::kYield:
+      return isWithin(run.yield_percent, condition.interval);
+    case Measure::kConversion:
+      return isWithin(run.conversion_percent, condition.interval);
+    case Measure::kWavelength:
+      return isWithin(run.wavelength_nm, condition.interval);
+    case Measure::kTemperature:
+      return isWithin(run.temperature_C, condition.interval);
+    case Measure::kDuration:
+      return isWithin(run.duration_h, condition.interval);
+    case Measure::kLiquid:
+      return isWithin(run.liquid_mL, condition.interval);
+    case Measure::kLimiting:
+      return isWithin(run.limiting_mmol, condition.interval);
+    case Measure::kDate:
+      break;
   }
   const auto local = run.created.utc + run.created.offset;
   return isWithin(static_cast<double>(local.time_since_epoch().count()), condition.interval);
 }
 
 bool meets(const SampleRun& sample, const app::AllOf& all) {
-  return std::ranges::all_of(all.conditions, [&](const app::FindCondition& each) { return testing::meets(sample, each); });
+  return std::ranges::all_of(all.conditions,
+                             [&](const app::FindCondition& each) { return testing::meets(sample, each); });
 }
 
 bool meets(const SampleRun& sample, const app::AnyOf& any) {
-  return std::ranges::any_of(any.conditions, [&](const app::FindCondition& each) { return testing::meets(sample, each); });
+  return std::ranges::any_of(any.conditions,
+                             [&](const app::FindCondition& each) { return testing::meets(sample, each); });
 }
 
 bool meets(const SampleRun& sample, const app::NoneOf& none) {
-  return !std::ranges::all_of(none.conditions, [&](const app::FindCondition& each) { return testing::meets(sample, each); });
+  return !std::ranges::all_of(none.conditions,
+                              [&](const app::FindCondition& each) { return testing::meets(sample, each); });
 }
 
 }  // namespace

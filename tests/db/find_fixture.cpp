@@ -12,13 +12,16 @@
 namespace vialkeeper::testing {
 namespace {
 
-constexpr std::array<std::string_view, 12> kRoles = {"substrate", "photocatalyst", "cocatalyst", "additive", "acid", "base",
-                                                     "solvent", "standard", "quencher", "gas", "product", "other"};
+constexpr std::array<std::string_view, 12> kRoles = {"substrate", "photocatalyst", "cocatalyst", "additive",
+                                                     "acid",      "base",          "solvent",    "standard",
+                                                     "quencher",  "gas",           "product",    "other"};
 constexpr std::array<std::string_view, 3> kPeople = {"KW", "KWL", "AB"};
-constexpr std::array<std::string_view, 5> kSeries = {"", "acid additives", "Acid Additives", "nickel screen", "same excess"};
+constexpr std::array<std::string_view, 5> kSeries = {"", "acid additives", "Acid Additives", "nickel screen",
+                                                     "same excess"};
 constexpr std::array<std::string_view, 28> kWords = {
-    "film", "grey", "amber", "ambient", "black", "turned", "slowly", "grün", "grun", "résidu", "residu", "4CzIPN", "4-CzIPN", "clear",
-    "cloudy", "leak", "septum", "pivalic", "acid", "Ni(bpy)", "C++", "NEAR", "AND", "or", "3:1", "0.42", "bar", "it's"};
+    "film",   "grey",   "amber",   "ambient", "black",  "turned", "slowly", "grün",    "grun", "résidu",
+    "residu", "4CzIPN", "4-CzIPN", "clear",   "cloudy", "leak",   "septum", "pivalic", "acid", "Ni(bpy)",
+    "C++",    "NEAR",   "AND",     "or",      "3:1",    "0.42",   "bar",    "it's"};
 constexpr std::int64_t kSubstances = 40;
 
 void bind(SQLite::Statement& statement, const std::vector<db::Cell>& cells) {
@@ -59,7 +62,8 @@ class Inventor {
     run.code = fmt::format("{}-{:04}", run.person, n);
     run.state = static_cast<app::RunState>(below(6));
     run.series = kSeries[below(kSeries.size())];
-    run.created = {std::chrono::sys_time<std::chrono::milliseconds>(std::chrono::milliseconds(1'767'225'600'000 + static_cast<std::int64_t>(below(90ULL * 86'400'000)))),
+    run.created = {std::chrono::sys_time<std::chrono::milliseconds>(std::chrono::milliseconds(
+                       1'767'225'600'000 + static_cast<std::int64_t>(below(90ULL * 86'400'000)))),
                    std::chrono::minutes(static_cast<int>(below(5)) * 330 - 660)};
     run.vial = maybe() ? "10 mL crimp vial" : "";
     run.lamp = maybe() ? "LED 440" : "LED 365";
@@ -119,7 +123,8 @@ SampleNotebook::SampleNotebook(std::size_t runs, std::uint64_t seed)
   m_database.exec("PRAGMA foreign_keys = ON; BEGIN");
   m_database.exec("INSERT INTO attachment(n, id, sha256, size, data) VALUES (1, x'01', x'01', 0, x'')");
   for (std::size_t i = 0; i < kPeople.size(); ++i) {
-    m_database.exec(fmt::format("INSERT INTO person(n, id, code) VALUES ({0}, randomblob(16), '{1}')", i + 1, kPeople[i]));
+    m_database.exec(
+        fmt::format("INSERT INTO person(n, id, code) VALUES ({0}, randomblob(16), '{1}')", i + 1, kPeople[i]));
   }
   for (std::int64_t i = 1; i <= kSubstances; ++i) {
     m_database.exec(fmt::format("INSERT INTO substance(n, id, name) VALUES ({0}, randomblob(16), 'substance {0}')", i));
@@ -138,27 +143,44 @@ SampleNotebook::SampleNotebook(std::size_t runs, std::uint64_t seed)
 void SampleNotebook::write(const SampleRun& sample) {
   const app::RunRecord& run = sample.run;
   SQLite::Statement insertRun(m_database,
-      "INSERT INTO run(n, id, code, person_n, state, title, series, created_ms, created_offset_min, plan_n, vial, lamp, atmosphere, "
-      "wavelength_nm, temperature_c, duration_h, limiting_key, limiting_mmol, liquid_ml, yield_percent, conversion_percent) "
-      "VALUES (?, randomblob(16), ?, (SELECT n FROM person WHERE code = ?), ?, ?, ?, ?, ?, 1, ?, ?, ?, ?, ?, ?, 'amine', ?, ?, ?, ?)");
+                              "INSERT INTO run(n, id, code, person_n, state, title, series, created_ms, "
+                              "created_offset_min, plan_n, vial, lamp, atmosphere, "
+                              "wavelength_nm, temperature_c, duration_h, limiting_key, limiting_mmol, liquid_ml, "
+                              "yield_percent, conversion_percent) "
+                              "VALUES (?, randomblob(16), ?, (SELECT n FROM person WHERE code = ?), ?, ?, ?, ?, ?, 1, "
+                              "?, ?, ?, ?, ?, ?, 'amine', ?, ?, ?, ?)");
   constexpr std::array<const char*, 6> kStates = {"planned", "charged", "irradiating", "worked-up", "closed", "sealed"};
   Binder bindRun(insertRun);
-  bindRun(run.n)(run.code)(run.person)(kStates[static_cast<std::size_t>(run.state)])(sample.texts[0]).orNull(run.series)(
-      std::int64_t{run.created.utc.time_since_epoch().count()})(std::int64_t{run.created.offset.count()})
-      .orNull(run.vial).orNull(run.lamp).orNull(run.atmosphere).orNull(run.wavelength_nm).orNull(run.temperature_C)
-      .orNull(run.duration_h)(run.limiting_mmol)(run.liquid_mL).orNull(run.yield_percent).orNull(run.conversion_percent);
+  bindRun(run.n)(run.code)(run.person)(kStates[static_cast<std::size_t>(run.state)])(sample.texts[0])
+      .orNull(run.series)(std::int64_t{run.created.utc.time_since_epoch().count()})(
+          std::int64_t{run.created.offset.count()})
+      .orNull(run.vial)
+      .orNull(run.lamp)
+      .orNull(run.atmosphere)
+      .orNull(run.wavelength_nm)
+      .orNull(run.temperature_C)
+      .orNull(run.duration_h)(run.limiting_mmol)(run.liquid_mL)
+      .orNull(run.yield_percent)
+      .orNull(run.conversion_percent);
   insertRun.exec();
   for (const app::ComponentRecord& component : sample.components) {
     SQLite::Statement insert(m_database,
-        "INSERT INTO component(id, run_n, position, key, role, name, substance_n, planned_mol_percent, charged_mol_percent, "
-        "loading_mol_percent, planned_mol_l, charged_mol_l) VALUES (randomblob(16), ?, ?, ?, ?, 'x', ?, ?, ?, ?, ?, ?)");
+                             "INSERT INTO component(id, run_n, position, key, role, name, substance_n, "
+                             "planned_mol_percent, charged_mol_percent, "
+                             "loading_mol_percent, planned_mol_l, charged_mol_l) VALUES (randomblob(16), ?, ?, ?, ?, "
+                             "'x', ?, ?, ?, ?, ?, ?)");
     Binder bindComponent(insert);
-    bindComponent(run.n)(std::int64_t{component.position})(fmt::format("c{}", component.position))(component.role)(component.substance)
-        .orNull(component.planned_molPercent).orNull(component.charged_molPercent).orNull(component.loading_molPercent())
-        .orNull(component.planned_mol_L).orNull(component.charged_mol_L);
+    bindComponent(run.n)(std::int64_t{component.position})(fmt::format("c{}", component.position))(component.role)(
+        component.substance)
+        .orNull(component.planned_molPercent)
+        .orNull(component.charged_molPercent)
+        .orNull(component.loading_molPercent())
+        .orNull(component.planned_mol_L)
+        .orNull(component.charged_mol_L);
     insert.exec();
   }
-  SQLite::Statement insertWords(m_database, "INSERT INTO run_words(run_n, code, title, aim, conclusion, observations) VALUES (?, ?, ?, ?, ?, ?)");
+  SQLite::Statement insertWords(
+      m_database, "INSERT INTO run_words(run_n, code, title, aim, conclusion, observations) VALUES (?, ?, ?, ?, ?, ?)");
   Binder bindWords(insertWords);
   bindWords(run.n)(run.code)(sample.texts[0])(sample.texts[1])(sample.texts[2])(sample.texts[3]);
   insertWords.exec();
@@ -198,20 +220,28 @@ app::FindQuery RandomQueries::query() {
 app::FindCondition RandomQueries::condition(int depth) {
   switch (below(depth > 0 ? 9 : 6)) {
     case 0:
-    case 1: return substance();
+    case 1:
+      return substance();
     case 2:
-    case 3: return words();
-    case 4: return textField();
-    case 5: return measure();
-    default: break;
+    case 3:
+      return words();
+    case 4:
+      return textField();
+    case 5:
+      return measure();
+    default:
+      break;
   }
   app::FindConditions inner;
   const std::uint64_t conditions = below(4);
   for (std::uint64_t i = 0; i < conditions; ++i) inner.push_back(condition(depth - 1));
   switch (below(3)) {
-    case 0: return {app::AllOf{std::move(inner)}};
-    case 1: return {app::AnyOf{std::move(inner)}};
-    default: return {app::NoneOf{std::move(inner)}};
+    case 0:
+      return {app::AllOf{std::move(inner)}};
+    case 1:
+      return {app::AnyOf{std::move(inner)}};
+    default:
+      return {app::NoneOf{std::move(inner)}};
   }
 }
 
@@ -229,14 +259,16 @@ app::FindCondition RandomQueries::substance() {
   condition.role = below(3) == 0 ? kOther[below(kOther.size())] : kRoles[below(kRoles.size())];
   condition.anySubstance = below(12) == 0;
   const std::uint64_t count = std::array<std::uint64_t, 6>{1, 1, 1, 1, 3, 0}[below(6)];
-  for (std::uint64_t i = 0; i < count; ++i) condition.substances.push_back(1 + static_cast<std::int64_t>(below(kSubstances + 2)));
+  for (std::uint64_t i = 0; i < count; ++i)
+    condition.substances.push_back(1 + static_cast<std::int64_t>(below(kSubstances + 2)));
   if (below(3) == 0) condition.loading_molPercent = interval(0, 35);
   if (below(6) == 0) condition.concentration_mol_L = interval(0, 0.25);
   return {condition};
 }
 
 app::FindCondition RandomQueries::words() {
-  constexpr std::array<std::string_view, 8> kHard = {"turned black", "4 czipn", "amb", "sep", "\"", "--", "film amb", "KW-00"};
+  constexpr std::array<std::string_view, 8> kHard = {"turned black", "4 czipn", "amb",      "sep",
+                                                     "\"",           "--",      "film amb", "KW-00"};
   app::WordsCondition condition;
   const std::uint64_t count = 1 + below(3);
   for (std::uint64_t i = 0; i < count; ++i) {
@@ -249,10 +281,21 @@ app::FindCondition RandomQueries::words() {
 
 app::FindCondition RandomQueries::textField() {
   using Field = app::TextFieldCondition::Field;
-  constexpr std::array<std::pair<Field, std::string_view>, 15> kAsked = {{{Field::kCode, "kw-0012"}, {Field::kCode, "KW-00"},
-      {Field::kSeries, "acid additives"}, {Field::kSeries, "NICKEL"}, {Field::kSeries, ""}, {Field::kPerson, "kw"}, {Field::kPerson, "AB"},
-      {Field::kState, "closed"}, {Field::kState, "c"}, {Field::kVial, "10 mL crimp vial"}, {Field::kVial, "10%"}, {Field::kLamp, "led 440"},
-      {Field::kLamp, "LED"}, {Field::kAtmosphere, "n2"}, {Field::kAtmosphere, "' OR 1=1 --"}}};
+  constexpr std::array<std::pair<Field, std::string_view>, 15> kAsked = {{{Field::kCode, "kw-0012"},
+                                                                          {Field::kCode, "KW-00"},
+                                                                          {Field::kSeries, "acid additives"},
+                                                                          {Field::kSeries, "NICKEL"},
+                                                                          {Field::kSeries, ""},
+                                                                          {Field::kPerson, "kw"},
+                                                                          {Field::kPerson, "AB"},
+                                                                          {Field::kState, "closed"},
+                                                                          {Field::kState, "c"},
+                                                                          {Field::kVial, "10 mL crimp vial"},
+                                                                          {Field::kVial, "10%"},
+                                                                          {Field::kLamp, "led 440"},
+                                                                          {Field::kLamp, "LED"},
+                                                                          {Field::kAtmosphere, "n2"},
+                                                                          {Field::kAtmosphere, "' OR 1=1 --"}}};
   const auto& [field, value] = kAsked[below(kAsked.size())];
   return {app::TextFieldCondition{field, std::string(value), below(2) == 0}};
 }
@@ -260,14 +303,22 @@ app::FindCondition RandomQueries::textField() {
 app::FindCondition RandomQueries::measure() {
   using Measure = app::MeasureCondition::Measure;
   switch (below(8)) {
-    case 0: return {app::MeasureCondition{Measure::kYield, interval(0, 100)}};
-    case 1: return {app::MeasureCondition{Measure::kConversion, interval(0, 100)}};
-    case 2: return {app::MeasureCondition{Measure::kWavelength, interval(360, 450)}};
-    case 3: return {app::MeasureCondition{Measure::kTemperature, interval(20, 40)}};
-    case 4: return {app::MeasureCondition{Measure::kDuration, interval(0, 25)}};
-    case 5: return {app::MeasureCondition{Measure::kLiquid, interval(0, 4)}};
-    case 6: return {app::MeasureCondition{Measure::kLimiting, interval(0, 0.4)}};
-    default: return {app::MeasureCondition{Measure::kDate, interval(1.7672256e12 - 1e8, 1.7672256e12 + 91.0 * 86.4e6)}};
+    case 0:
+      return {app::MeasureCondition{Measure::kYield, interval(0, 100)}};
+    case 1:
+      return {app::MeasureCondition{Measure::kConversion, interval(0, 100)}};
+    case 2:
+      return {app::MeasureCondition{Measure::kWavelength, interval(360, 450)}};
+    case 3:
+      return {app::MeasureCondition{Measure::kTemperature, interval(20, 40)}};
+    case 4:
+      return {app::MeasureCondition{Measure::kDuration, interval(0, 25)}};
+    case 5:
+      return {app::MeasureCondition{Measure::kLiquid, interval(0, 4)}};
+    case 6:
+      return {app::MeasureCondition{Measure::kLimiting, interval(0, 0.4)}};
+    default:
+      return {app::MeasureCondition{Measure::kDate, interval(1.7672256e12 - 1e8, 1.7672256e12 + 91.0 * 86.4e6)}};
   }
 }
 

@@ -20,7 +20,7 @@ namespace vialkeeper::testing {
 struct SampleRun {
   app::RunRecord run;
   std::vector<app::ComponentRecord> components;
-  std::vector<std::string> texts;  ///< title, aim, conclusion, observations
+  std::vector<std::string> texts;                     ///< title, aim, conclusion, observations
   std::vector<std::vector<std::string>> tokens = {};  ///< of the code and each text, as they are compared
 };
 

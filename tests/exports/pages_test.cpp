@@ -2,6 +2,7 @@
 // SPDX-License-Identifier: GPL-3.0-or-later
 #include "exports/pages.h"
 
+#include <algorithm>
 #include <catch2/catch.hpp>
 #include <clocale>
 #include <cmath>
@@ -24,6 +25,12 @@ PdfDocument printed(const app::SheetContent& content, Paper paper = Paper::kA4) 
 
 PdfDocument printed(const std::vector<app::StockSheetContent>& contents, Paper paper = Paper::kA4) {
   auto document = printStockSheets(contents, paper);
+  if (!document) FAIL(text::toLine(document.error().front()));
+  return *document;
+}
+
+PdfDocument printed(const std::vector<app::LabelContent>& contents) {
+  auto document = printVialLabels(contents);
   if (!document) FAIL(text::toLine(document.error().front()));
   return *document;
 }
@@ -127,9 +134,8 @@ void checkOverlaps(const std::vector<Word>& words) {
   }
 }
 
-void checkFile(const PrintedPages& pages, const PdfDocument& document, Paper paper) {
+void checkFile(const PrintedPages& pages, const PdfDocument& document, const std::string& size) {
   const std::string info = pages.output("pdfinfo %");
-  const std::string size = paper == Paper::kA4 ? "595 x 842 pts (A4)" : "612 x 792 pts (letter)";
   CHECK_THAT(info, Catch::Contains(size));
   CHECK_THAT(info, Catch::Matches("[^]*Pages: +" + std::to_string(document.pages) + "\n[^]*"));
   const std::string fonts = pages.output("pdffonts % | tail -n +3");
@@ -146,7 +152,23 @@ void checkPages(const PdfDocument& document, Paper paper, const std::vector<std:
   checkTexts(pages, texts);
   checkMargins(words, paper);
   checkOverlaps(words);
-  checkFile(pages, document, paper);
+  checkFile(pages, document, paper == Paper::kA4 ? "595 x 842 pts (A4)" : "612 x 792 pts (letter)");
+}
+
+/// All words on the label of 62 mm × 29 mm, 1 mm from its edges, and none in the white that a
+/// printed code of so many modules has to have on all sides.
+void checkLabelWords(const std::vector<Word>& words, double qrSide_mm, int qrModules) {
+  constexpr double kPointsPerMm = 72.0 / 25.4;
+  const double qrEnd = qrSide_mm * (1.0 + 8.0 / qrModules) * kPointsPerMm;
+  for (const Word& word : words) {
+    INFO(word.text << " on label " << word.page + 1);
+    CHECK(word.left >= 1.0 * kPointsPerMm);
+    CHECK(word.right <= 61.0 * kPointsPerMm);
+    CHECK(word.top >= 0.5 * kPointsPerMm);  // the box is higher than the letters
+    CHECK(word.bottom <= 28.3 * kPointsPerMm);
+    CHECK((word.left >= qrEnd - 0.5 || word.bottom >= qrEnd + 1.5));
+  }
+  checkOverlaps(words);
 }
 
 /// The page on which a word stands, from 0; -1 where it does not, or more than once.
@@ -336,6 +358,103 @@ TEST_CASE("long stock sheets go on, and each begins on a page of its own",
   for (const std::string& text : textsOf(typical)) texts.push_back(text);
   checkPages(document, Paper::kA4, texts);
   CHECK(PrintedPages(document).scannedCode(document.pages) == typical.qrText + "\n");
+}
+
+TEST_CASE("a run with notices and hazards as they come is one page", "[exports][independent]") {
+  const Paper paper = GENERATE(Paper::kA4, Paper::kLetter);
+  app::SheetContent sheet = samples::templateSheet();
+  const PdfDocument document = printed(sheet, paper);
+  CHECK(document.pages == 1);
+  checkPages(document, paper, textsOf(sheet));
+  sheet.vial.forecast = greekSheet().vial.forecast;
+  const PdfDocument withForecast = printed(sheet, paper);
+  if (paper == Paper::kA4) CHECK(withForecast.pages == 1);
+  checkPages(withForecast, paper, textsOf(sheet));
+}
+
+TEST_CASE("hazards that have no room go on alone", "[exports][independent]") {
+  app::SheetContent sheet = samples::templateSheet();
+  for (int i = 0; i < 6; ++i) sheet.hazards.push_back(sheet.hazards[3]);
+  const PdfDocument document = printed(sheet);
+  CHECK(document.pages == 2);
+  checkPages(document, Paper::kA4, textsOf(sheet));
+  const std::vector<Word> words = PrintedPages(document).words();
+  CHECK(pageOf(words, "Cautions") == 0);
+  CHECK(pageOf(words, "Hazards") == 1);
+  CHECK(pageOf(words, "Notes") == 1);
+}
+
+TEST_CASE("a label has its size, all its texts and a code to scan", "[exports][independent]") {
+  const app::LabelContent first = samples::typicalLabel();
+  app::LabelContent second = first;
+  second.code = second.qrText = "plan 32e6253f";
+  second.person.clear();
+  second.date.clear();
+  const PdfDocument document = printed(std::vector{first, second});
+  CHECK(document.pages == 2);
+  const PrintedPages pages(document);
+  for (const app::LabelContent& label : {first, second}) {
+    checkTexts(pages, {label.code, label.title, label.lines[0], label.lines[1], label.conditions,
+                       label.hazards, label.caution, label.person, label.date});
+  }
+  const std::vector<Word> words = pages.words();
+  CHECK(pageOf(words, "by") == 1);
+  CHECK(pageOf(words, "date") == 1);
+  checkLabelWords(words, 12.0, 21);
+  checkFile(pages, document, "175.748 x 82.2047 pts");  // 62 mm × 29 mm
+  CHECK(pages.scannedCode(1) == "KW-0042\n");
+  CHECK(pages.scannedCode(2) == "plan 32e6253f\n");
+  CHECK(document.bytes == printed(std::vector{first, second}).bytes);
+}
+
+TEST_CASE("a label is black and white", "[exports][identity]") {
+  const PrintedPages pages(printed(std::vector{samples::typicalLabel()}));
+  const std::string picture = pages.output("pdftoppm -r 300 -aa no -aaVector no %");
+  const std::size_t start = picture.find("255\n") + 4;
+  const auto isPure = [](char c) { return c == '\0' || c == '\xFF'; };
+  CHECK(std::all_of(picture.begin() + static_cast<std::ptrdiff_t>(start), picture.end(), isPure));
+}
+
+TEST_CASE("a label's contents are cut before anything else", "[exports][independent]") {
+  const app::LabelContent label = samples::hugeLabel();
+  const PdfDocument document = printed(std::vector{label});
+  CHECK(document.pages == 1);
+  const PrintedPages pages(document);
+  checkTexts(pages, {label.code, label.conditions, label.hazards, label.caution, label.date, "…"});
+  checkLabelWords(pages.words(), 13.2, 33);
+  CHECK(pages.scannedCode(1) == label.qrText + "\n");
+}
+
+TEST_CASE("a label sets its code larger where there is room", "[exports][identity]") {
+  const auto codeHeight = [](const app::LabelContent& label) {
+    const std::vector<Word> words = PrintedPages(printed(std::vector{label})).words();
+    const auto code = std::ranges::find(words, label.code, &Word::text);
+    return code == words.end() ? 0.0 : code->bottom - code->top;
+  };
+  app::LabelContent label = samples::typicalLabel();
+  const double full = codeHeight(label);
+  CHECK(full >= 12.0);  // points: letters of 3 mm, to be read from 60 cm with ease
+  label.lines.clear();
+  label.hazards.clear();
+  CHECK(codeHeight(label) > 1.1 * full);
+}
+
+TEST_CASE("what no label can hold is a fault", "[exports]") {
+  CHECK_FALSE(printVialLabels({}));
+  app::LabelContent label = samples::typicalLabel();
+  label.qrText = std::string(400, 'x');
+  const auto longCode = printVialLabels({label});
+  REQUIRE_FALSE(longCode);
+  CHECK_THAT(longCode.error().front().what, Catch::Contains("printed code"));
+  label = samples::typicalLabel();
+  for (int i = 0; i < 40; ++i) label.caution += " and again";
+  const auto longCaution = printVialLabels({label});
+  REQUIRE_FALSE(longCaution);
+  CHECK_THAT(longCaution.error().front().what, Catch::Contains("caution"));
+  CHECK_THAT(longCaution.error().front().what, Catch::Contains("KW-0042"));
+  CHECK_FALSE(longCaution.error().front().mend.empty());
+  app::LabelContent empty;
+  CHECK(printVialLabels({empty}));
 }
 
 TEST_CASE("the same content gives the same bytes", "[exports][identity]") {

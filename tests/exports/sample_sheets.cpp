@@ -155,6 +155,39 @@ app::SheetContent typicalSheet() {
   return sheet;
 }
 
+app::SheetContent templateSheet() {
+  app::SheetContent sheet = typicalSheet();
+  sheet.code = "plan 32e6253f";
+  sheet.codeIsMark = true;
+  sheet.qrText = sheet.code;
+  sheet.date.clear();
+  sheet.chemist.clear();
+  sheet.rows[0].notices = {
+      "3.18 mg is below the least that balance-0.01mg may weigh to 0.1 %, 40.0 mg",
+      "make 10 mL of a 20 mM stock in acetonitrile (63.6 mg of nickel(II) bromide glyme) and take "
+      "500 µL with pipette-1000uL; try first that it dissolves"};
+  sheet.rows[1].actual.clear();
+  sheet.rows[3].notices.clear();
+  sheet.rows[4].notices = {"1080 µL takes 2 equal strokes of pipette-1000uL"};
+  sheet.notices = {
+      "volumes of liquids are taken to add up; mixing may change the total by some per cent",
+      "solids without a density are taken to displace nothing: nickel"};
+  sheet.hazards = {{"nickel(II) bromide glyme",
+                    {"H302 Harmful if swallowed", "H317 May cause an allergic skin reaction",
+                     "H350i May cause cancer by inhalation"}},
+                   {"indoline",
+                    {"H315 Causes skin irritation", "H319 Causes serious eye irritation",
+                     "H335 May cause respiratory irritation"}},
+                   {"pivalic acid",
+                    {"H302 Harmful if swallowed", "H312 Harmful in contact with skin",
+                     "H315 Causes skin irritation", "H318 Causes serious eye damage"}},
+                   {"acetonitrile",
+                    {"H225 Highly flammable liquid and vapour", "H302 Harmful if swallowed",
+                     "H312 Harmful in contact with skin", "H332 Harmful if inhaled",
+                     "H319 Causes serious eye irritation"}}};
+  return sheet;
+}
+
 app::SheetContent bareSheet() {
   app::SheetContent sheet;
   sheet.title = "Untitled run";
@@ -260,6 +293,33 @@ app::StockSheetContent hugeStock() {
                     i));
   }
   return stock;
+}
+
+app::LabelContent typicalLabel() {
+  return {.code = "KW-0042",
+          .title = "Indoline dehydrogenation, pivalic acid 10 mol%",
+          .qrText = "KW-0042",
+          .lines = {"indoline 1 equiv, 4CzIPN 1 mol%, nickel(II) bromide glyme 5 mol%",
+                    "acetonitrile/water under N₂"},
+          .conditions = "440 nm, 35 °C, 20 h",
+          .hazards = "H225 H302 H312 H315 H317 H319 H350i",
+          .caution = "gives off H₂: pressure",
+          .person = "K. Weiss",
+          .date = "2026-03-04"};
+}
+
+app::LabelContent hugeLabel() {
+  app::LabelContent label = typicalLabel();
+  label.code = "KW-0042-again-and-again-7";
+  label.qrText = "urn:uuid:0190f3a2-7c1e-7b5d-9d3e-5f6a7b8c9d0e";
+  label.title = unbreakable() + " with every additive of the shelf";
+  for (int i = 0; i < 40; ++i) label.lines[0] += fmt::format(", additive number {} 5 mol%", i);
+  label.hazards =
+      "H225 H226 H301 H302 H304 H311 H312 H314 H315 H317 H318 H319 H332 H334 H335 H341 H350i "
+      "H360D H372 H410";
+  label.caution = "gives off H₂ and CO: pressure, poison, open it in the hood only";
+  label.person = "Maria-Magdalena von Hohenstein-Württemberg";
+  return label;
 }
 
 }  // namespace vialkeeper::exports::samples

@@ -10,6 +10,10 @@ namespace vialkeeper::exports::samples {
 /// A typical run: six components, structures, hazards, two of them with notices.
 [[nodiscard]] app::SheetContent typicalSheet();
 
+/// As full as sheets of templates/runs are: 6 rows, 3 notices of theirs and 2 of the charge,
+/// hazards of 4 substances, 4 cautions.
+[[nodiscard]] app::SheetContent templateSheet();
+
 /// The least that a sheet can hold: a title, a mark and one row with a name and a target.
 [[nodiscard]] app::SheetContent bareSheet();
 
@@ -19,5 +23,10 @@ namespace vialkeeper::exports::samples {
 
 [[nodiscard]] app::StockSheetContent typicalStock();
 [[nodiscard]] app::StockSheetContent hugeStock();
+
+[[nodiscard]] app::LabelContent typicalLabel();
+
+/// Every text of it too long for its place; what may not be cut just fits.
+[[nodiscard]] app::LabelContent hugeLabel();
 
 }  // namespace vialkeeper::exports::samples

@@ -79,7 +79,7 @@ TEST_CASE("too few and too many cells are told for every row with its line", "[t
   const auto faults = faultsOf("a,b\n1\n1,2\n1,2,3\n1,2,\n");
   REQUIRE(faults.size() == 3);
   CHECK(faults[0].line == 2);
-  CHECK(faults[0].what == "1 cells where the header has 2");
+  CHECK(faults[0].what == "1 cell where the header has 2");
   CHECK(faults[1].line == 4);
   CHECK(faults[1].what == "3 cells where the header has 2");
   CHECK(faults[2].line == 5);
@@ -158,7 +158,8 @@ TEST_CASE("what toCsvCell writes is read back as it was, in 500 random tables", 
       for (std::size_t c = 0; c < columns; ++c) {
         const std::size_t length = pick(6);
         for (std::size_t i = 0; i < length; ++i) row[c] += pieces[pick(pieces.size())];
-        bytes += (c == 0 ? "" : ",") + text::toCsvCell(row[c]);
+        if (c > 0) bytes += ',';
+        bytes += text::toCsvCell(row[c]);
       }
       bytes += pick(2) == 0 ? "\n" : "\r\n";
     }

@@ -48,9 +48,10 @@ const std::vector<ListedUnit> kListed = {
 /// The unit with µ written as u, as the table of the outside program has it.
 std::string plain(std::string symbol) {
   for (const std::string_view micro : {"\u00B5", "\u03BC"}) {
-    if (const auto at = symbol.find(micro); at != std::string::npos) symbol.replace(at, micro.size(), "u");
+    if (const auto at = symbol.find(micro); at != std::string::npos) symbol = symbol.substr(0, at) + 'u' + symbol.substr(at + micro.size());
   }
-  return symbol == "°C" ? "degC" : symbol;
+  if (symbol == "°C") return "degC";
+  return symbol;
 }
 
 }  // namespace

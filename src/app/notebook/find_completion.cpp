@@ -127,13 +127,20 @@ const std::vector<VocabularyEntry>* valuesOf(const FindField& field, const FindV
   if (field.kind != FindField::Kind::kText) return nullptr;
   using Field = TextFieldCondition::Field;
   switch (field.text) {
-    case Field::kSeries: return &vocabulary.series;
-    case Field::kPerson: return &vocabulary.people;
-    case Field::kVial: return &vocabulary.vials;
-    case Field::kLamp: return &vocabulary.lamps;
-    case Field::kAtmosphere: return &vocabulary.atmospheres;
-    case Field::kState: return &kStates;
-    case Field::kCode: break;
+    case Field::kSeries:
+      return &vocabulary.series;
+    case Field::kPerson:
+      return &vocabulary.people;
+    case Field::kVial:
+      return &vocabulary.vials;
+    case Field::kLamp:
+      return &vocabulary.lamps;
+    case Field::kAtmosphere:
+      return &vocabulary.atmospheres;
+    case Field::kState:
+      return &kStates;
+    case Field::kCode:
+      break;
   }
   return nullptr;
 }
@@ -177,8 +184,8 @@ std::vector<Completion> completeFind(std::string_view text, std::size_t cursor, 
   // One letter is in too many names to be of help.
   if (typed.size() < 2 || found.size() >= most) return found;
   for (const VocabularyEntry* entry : best(vocabulary.substances, typed, most - found.size())) {
-    found.push_back({fmt::format("any:{} ", asFindValue(entry->name)), term->value,
-                     fmt::format("{}, in any role", entry->name)});
+    found.push_back(
+        {fmt::format("any:{} ", asFindValue(entry->name)), term->value, fmt::format("{}, in any role", entry->name)});
   }
   return found;
 }

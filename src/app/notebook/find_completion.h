@@ -34,9 +34,9 @@ struct FindVocabulary {
 void prepareVocabulary(FindVocabulary& vocabulary);
 
 struct Completion {
-  std::string insert;   ///< replaces `replace`; a value is followed by a blank, a field by its `:`
-  TextRange replace;    ///< bytes of the text
-  std::string label;    ///< for the list: `pivalic acid`, `additive: a substance in this role`
+  std::string insert;  ///< replaces `replace`; a value is followed by a blank, a field by its `:`
+  TextRange replace;   ///< bytes of the text
+  std::string label;   ///< for the list: `pivalic acid`, `additive: a substance in this role`
 };
 
 /// Proposals for the word that the cursor, a byte's place in the text, stands in or behind: values behind

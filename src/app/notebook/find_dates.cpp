@@ -57,11 +57,16 @@ std::expected<Span, TextFault> readSpan(FindScanner& scanner, std::size_t length
 
 Interval compared(Comparison comparison, const Span& span) {
   switch (comparison) {
-    case Comparison::kMore: return {span.last + 1.0, std::nullopt};
-    case Comparison::kAtLeast: return {span.first, std::nullopt};
-    case Comparison::kLess: return {std::nullopt, span.first - 1.0};
-    case Comparison::kAtMost: return {std::nullopt, span.last};
-    default: return {span.first, span.last};
+    case Comparison::kMore:
+      return {span.last + 1.0, std::nullopt};
+    case Comparison::kAtLeast:
+      return {span.first, std::nullopt};
+    case Comparison::kLess:
+      return {std::nullopt, span.first - 1.0};
+    case Comparison::kAtMost:
+      return {std::nullopt, span.last};
+    default:
+      return {span.first, span.last};
   }
 }
 

@@ -3,26 +3,28 @@
 #include <algorithm>
 
 #include "app/notebook/find_language.h"
+#include "app/notebook/find_range.h"
 #include "charge/plan.h"
 #include "text/utf8.h"
 
 namespace vialkeeper::app {
 namespace {
 
+using units::Kind;
 using Field = TextFieldCondition::Field;
 using Measure = MeasureCondition::Measure;
 
 std::vector<FindField> makeFields() {
-  using Kind = FindField::Kind;
   std::vector<FindField> fields;
   for (int role = 0; role <= static_cast<int>(charge::Role::kOther); ++role) {
-    fields.push_back({Kind::kRole, charge::toText(static_cast<charge::Role>(role)), "a substance in this role"});
+    fields.push_back(
+        {FindField::Kind::kRole, charge::toText(static_cast<charge::Role>(role)), "a substance in this role"});
   }
-  fields.push_back({Kind::kRole, "catalyst", "a photocatalyst or cocatalyst"});
-  fields.push_back({Kind::kRole, "any", "a substance in any role"});
-  fields.push_back({Kind::kStructure, "structure", "substances that hold a SMILES"});
+  fields.push_back({FindField::Kind::kRole, "catalyst", "a photocatalyst or cocatalyst"});
+  fields.push_back({FindField::Kind::kRole, "any", "a substance in any role"});
+  fields.push_back({FindField::Kind::kStructure, "structure", "substances that hold a SMILES"});
   const auto text = [&fields](std::string_view name, std::string_view meaning, Field field) {
-    fields.push_back({.kind = Kind::kText, .name = name, .meaning = meaning, .text = field});
+    fields.push_back({.kind = FindField::Kind::kText, .name = name, .meaning = meaning, .text = field});
   };
   text("code", "the run's code", Field::kCode);
   text("series", "the run's series", Field::kSeries);
@@ -32,7 +34,7 @@ std::vector<FindField> makeFields() {
   text("lamp", "the lamp's name", Field::kLamp);
   text("atmosphere", "the gas it was closed under", Field::kAtmosphere);
   const auto measure = [&fields](std::string_view name, std::string_view meaning, Measure which) {
-    fields.push_back({.kind = Kind::kMeasure, .name = name, .meaning = meaning, .measure = which});
+    fields.push_back({.kind = FindField::Kind::kMeasure, .name = name, .meaning = meaning, .measure = which});
   };
   measure("yield", "%", Measure::kYield);
   measure("conversion", "%", Measure::kConversion);
@@ -63,6 +65,32 @@ const FindField* findField(std::string_view name) {
   const auto& fields = findFields();
   const auto found = std::ranges::find(fields, text::asciiLowered(name), &FindField::name);
   return found == fields.end() ? nullptr : &*found;
+}
+
+RangeForm rangeOf(MeasureCondition::Measure measure) {
+  switch (measure) {
+    case Measure::kYield:
+      return {{Kind::kPercent}, "%", "60..80 %"};
+    case Measure::kConversion:
+      return {{Kind::kPercent}, "%", "60..80 %"};
+    case Measure::kWavelength:
+      return {{Kind::kLength}, "nm", "430..460 nm"};
+    case Measure::kTemperature:
+      return {{Kind::kTemperature}, "", "25..35 C"};
+    case Measure::kDuration:
+      return {{Kind::kDuration}, "", "12..24 h"};
+    case Measure::kLiquid:
+      return {{Kind::kVolume}, "", "1..2 mL"};
+    case Measure::kLimiting:
+      return {{Kind::kAmount}, "", "0.1..0.2 mmol"};
+    case Measure::kDate:
+      break;
+  }
+  return {};
+}
+
+RangeForm loadingRange() {
+  return {{Kind::kMolPercent, Kind::kEquivalents, Kind::kConcentration}, "", "5..20 mol%", true};
 }
 
 std::string asFindValue(std::string_view value) {

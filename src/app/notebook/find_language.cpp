@@ -202,7 +202,8 @@ Reading<void> Parser::parseGroup(ParsedConditions& conditions) {
   if (!inner) return std::unexpected(inner.error());
   if (m_scanner.atEnd()) {
     if (!m_asYouType) {
-      return textFault(begin, 1, "this parenthesis is never closed", fmt::format("write ) at its end, or {}", kLiteralAdvice));
+      return textFault(begin, 1, "this parenthesis is never closed",
+                       fmt::format("write ) at its end, or {}", kLiteralAdvice));
     }
   } else {
     ++m_scanner.at;
@@ -270,9 +271,12 @@ Reading<void> Parser::parseTerm(ParsedConditions& conditions, GatheredWords& wor
 Reading<void> Parser::parseField(const FindField& field, ParsedConditions& conditions) {
   switch (field.kind) {
     case FindField::Kind::kRole:
-    case FindField::Kind::kStructure: return parseSubstance(field, conditions);
-    case FindField::Kind::kText: return parseText(field, conditions);
-    case FindField::Kind::kMeasure: return parseMeasure(field, conditions);
+    case FindField::Kind::kStructure:
+      return parseSubstance(field, conditions);
+    case FindField::Kind::kText:
+      return parseText(field, conditions);
+    case FindField::Kind::kMeasure:
+      return parseMeasure(field, conditions);
   }
   return {};
 }
@@ -332,10 +336,9 @@ Reading<void> Parser::parseText(const FindField& field, ParsedConditions& condit
     });
     if (!isKnown) {
       const auto nearest = units::nearestName(lowered, known);
-      return textFault(value->place.offset, value->place.length,
-                       fmt::format("there is no state {}", text::quoted(value->text)),
-                       nearest ? fmt::format("did you mean {}?", *nearest)
-                               : fmt::format("a run is {}", fmt::join(known, ", ")));
+      return textFault(
+          value->place.offset, value->place.length, fmt::format("there is no state {}", text::quoted(value->text)),
+          nearest ? fmt::format("did you mean {}?", *nearest) : fmt::format("a run is {}", fmt::join(known, ", ")));
     }
   }
   conditions.push_back({std::move(condition)});

@@ -25,10 +25,10 @@ struct WrittenLoading {
 
 /// A substance by name or CAS number, not looked up yet.
 struct SubstanceName {
-  std::string role;         ///< empty: any role
-  std::string written;      ///< empty with `isPrefix`: any substance
-  bool isPrefix = false;    ///< names that begin so as well
-  bool isFinished = true;   ///< false where somebody may be typing at its end
+  std::string role;        ///< empty: any role
+  std::string written;     ///< empty with `isPrefix`: any substance
+  bool isPrefix = false;   ///< names that begin so as well
+  bool isFinished = true;  ///< false where somebody may be typing at its end
   WrittenLoading loading = {};
   TextRange place = {};
 };

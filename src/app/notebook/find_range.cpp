@@ -35,11 +35,11 @@ std::string_view dash(const FindScanner& scanner) {
 /// One end of a range as it stands in the text.
 struct WrittenEnd {
   TextRange number = {};
-  std::string_view unit = {};    ///< known or not; empty where none stands there
+  std::string_view unit = {};  ///< known or not; empty where none stands there
   std::size_t unitAt = 0;
   const units::Unit* known = nullptr;
-  bool unitTouches = false;      ///< no blank between number and unit
-  TextRange lastNumber = {};     ///< of a time span that is added up
+  bool unitTouches = false;   ///< no blank between number and unit
+  TextRange lastNumber = {};  ///< of a time span that is added up
   const units::Unit* lastUnit = nullptr;
   std::size_t end = 0;
 
@@ -138,9 +138,9 @@ double halfDigit(std::string_view number) {
   const std::size_t point = std::min(number.find_first_of(".,"), mantissa);
   const double places = point == mantissa ? 0.0 : static_cast<double>(mantissa - point - 1);
   const double power =
-      mantissa == number.size() ? 1.0
-                                : units::readNumber("1" + std::string(number.substr(mantissa)), units::Dialect::kPerson)
-                                      .value_or(1.0);
+      mantissa == number.size()
+          ? 1.0
+          : units::readNumber("1" + std::string(number.substr(mantissa)), units::Dialect::kPerson).value_or(1.0);
   return 0.5 * std::pow(10.0, -places) * power;
 }
 
@@ -148,7 +148,8 @@ double halfDigit(std::string_view number) {
 std::unexpected<TextFault> placed(TextFault fault, const WrittenEnd& end, const RangeForm& form) {
   const bool inUnit = fault.offset > end.number.length && !end.unit.empty();
   const TextRange place = inUnit ? TextRange{end.unitAt, end.unit.size()} : end.number;
-  return textFault(place.offset, place.length, std::move(fault.what), fmt::format("write for example {}", form.example));
+  return textFault(place.offset, place.length, std::move(fault.what),
+                   fmt::format("write for example {}", form.example));
 }
 
 /// Understands one end; `unit` may have been written at the other.
@@ -181,14 +182,22 @@ Reading<ReadEnd> readEnd(std::string_view text, const WrittenEnd& end, std::stri
 /// From coherent SI to the unit of the notebook's columns.
 double inColumnUnit(Kind kind, double si) {
   switch (kind) {
-    case Kind::kEquivalents: return si * 100.0;
-    case Kind::kConcentration: return si / 1000.0;
-    case Kind::kLength: return si * 1e9;
-    case Kind::kTemperature: return si - 273.15;
-    case Kind::kDuration: return si / 3600.0;
-    case Kind::kVolume: return si * 1e6;
-    case Kind::kAmount: return si * 1e3;
-    default: return si;
+    case Kind::kEquivalents:
+      return si * 100.0;
+    case Kind::kConcentration:
+      return si / 1000.0;
+    case Kind::kLength:
+      return si * 1e9;
+    case Kind::kTemperature:
+      return si - 273.15;
+    case Kind::kDuration:
+      return si / 3600.0;
+    case Kind::kVolume:
+      return si * 1e6;
+    case Kind::kAmount:
+      return si * 1e3;
+    default:
+      return si;
   }
 }
 
@@ -202,11 +211,16 @@ Interval compared(Comparison comparison, const ReadEnd& end) {
   // Even at zero an excluded end is excluded.
   const double step = std::max(end.rounding, std::numeric_limits<double>::min());
   switch (comparison) {
-    case Comparison::kMore: return {end.si + step, std::nullopt};
-    case Comparison::kAtLeast: return {end.si - end.rounding, std::nullopt};
-    case Comparison::kLess: return {std::nullopt, end.si - step};
-    case Comparison::kAtMost: return {std::nullopt, end.si + end.rounding};
-    default: break;
+    case Comparison::kMore:
+      return {end.si + step, std::nullopt};
+    case Comparison::kAtLeast:
+      return {end.si - end.rounding, std::nullopt};
+    case Comparison::kLess:
+      return {std::nullopt, end.si - step};
+    case Comparison::kAtMost:
+      return {std::nullopt, end.si + end.rounding};
+    default:
+      break;
   }
   const double reach = end.tolerance + end.rounding;
   return {end.si - reach, end.si + reach};
@@ -237,8 +251,7 @@ std::string_view unitFor(const WrittenEnd& end, std::string_view otherwise) {
 
 /// A range whose unit is optional takes a unit of its own kind only: `yield>60 C` is followed by a word.
 void leaveForeignUnit(WrittenEnd& end, const RangeForm& form) {
-  const bool isForeign =
-      end.known != nullptr && std::ranges::find(form.kinds, end.known->kind) == form.kinds.end();
+  const bool isForeign = end.known != nullptr && std::ranges::find(form.kinds, end.known->kind) == form.kinds.end();
   if (!isForeign || form.unitIfNone.empty() || end.unitTouches) return;
   end.unit = {};
   end.known = nullptr;
@@ -298,8 +311,7 @@ Reading<FoundRange> readRange(FindScanner& scanner, const WrittenEnd& first, Com
   const bool isRange = behind.skipDots();
   const bool holdsNumber = first.isThere() || (isRange && numberLength(behind) > 0);
   if (!holdsNumber) {
-    return textFault(begin, scanner.at - begin, "no number follows",
-                     fmt::format("write for example {}", form.example));
+    return textFault(begin, scanner.at - begin, "no number follows", fmt::format("write for example {}", form.example));
   }
   if (isRange && comparison != Comparison::kNone && comparison != Comparison::kEqual) {
     return textFault(begin, behind.at - begin, "a comparison and a range at once",
@@ -339,25 +351,6 @@ ScanResult<FoundRange> scanRange(FindScanner& scanner, const RangeForm& form) {
   const auto read = readRange(scanner, first, comparison, begin, form);
   if (!read) return std::unexpected(read.error());
   return *read;
-}
-
-RangeForm rangeOf(MeasureCondition::Measure measure) {
-  using Measure = MeasureCondition::Measure;
-  switch (measure) {
-    case Measure::kYield: return {{Kind::kPercent}, "%", "60..80 %"};
-    case Measure::kConversion: return {{Kind::kPercent}, "%", "60..80 %"};
-    case Measure::kWavelength: return {{Kind::kLength}, "nm", "430..460 nm"};
-    case Measure::kTemperature: return {{Kind::kTemperature}, "", "25..35 C"};
-    case Measure::kDuration: return {{Kind::kDuration}, "", "12..24 h"};
-    case Measure::kLiquid: return {{Kind::kVolume}, "", "1..2 mL"};
-    case Measure::kLimiting: return {{Kind::kAmount}, "", "0.1..0.2 mmol"};
-    case Measure::kDate: break;
-  }
-  return {};
-}
-
-RangeForm loadingRange() {
-  return {{Kind::kMolPercent, Kind::kEquivalents, Kind::kConcentration}, "", "5..20 mol%", true};
 }
 
 bool endsWithinRange(FindScanner scanner) {

@@ -25,8 +25,8 @@ struct RangeForm {
 };
 
 struct FoundRange {
-  units::Kind kind;  ///< never equivalents: they are given as mol%
-  Interval interval; ///< in the unit of the notebook's columns: mol%, mol/L, %, nm, °C, h, mL, mmol
+  units::Kind kind;   ///< never equivalents: they are given as mol%
+  Interval interval;  ///< in the unit of the notebook's columns: mol%, mol/L, %, nm, °C, h, mL, mmol
 };
 
 template <class T>

@@ -58,8 +58,7 @@ std::string nearMisses(std::string_view written, SubstanceResolver& resolver) {
 
 class QueryBuilder {
  public:
-  QueryBuilder(SubstanceResolver& resolver, const ResolveOptions& options)
-      : m_resolver(resolver), m_options(options) {}
+  QueryBuilder(SubstanceResolver& resolver, const ResolveOptions& options) : m_resolver(resolver), m_options(options) {}
 
   Reading<FindConditions> build(const ParsedConditions& parsed) {
     FindConditions conditions;
@@ -99,9 +98,8 @@ class QueryBuilder {
     if (condition.substances.empty() && !m_options.unknownMatchesNothing) {
       const bool isCas = chem::checkCasNumber(name.written).has_value();
       return textFault(name.place.offset, name.place.length,
-                       fmt::format("no substance of this notebook {} {}{}",
-                                   isCas ? "has the CAS number" : "is called", text::quoted(name.written),
-                                   name.isPrefix ? " or begins so" : ""),
+                       fmt::format("no substance of this notebook {} {}{}", isCas ? "has the CAS number" : "is called",
+                                   text::quoted(name.written), name.isPrefix ? " or begins so" : ""),
                        nearMisses(name.written, m_resolver));
     }
     return FindCondition{std::move(condition)};

@@ -26,7 +26,7 @@ bool isDigit(char c) { return c >= '0' && c <= '9'; }
 
 /// Signs beyond ASCII that hold neither letter nor digit and that people type or paste.
 bool isSign(char32_t value) {
-  if (value == 0xAA || value == 0xB5 || value == 0xBA) return false;                        // ª µ º
+  if (value == 0xAA || value == 0xB5 || value == 0xBA) return false;                                      // ª µ º
   if (value == 0xB2 || value == 0xB3 || value == 0xB9 || (value >= 0xBC && value <= 0xBE)) return false;  // ² ³ ¹ ¼
   if (value >= 0xA1 && value <= 0xBF) return true;
   return value == 0xD7 || value == 0xF7 || (value >= 0x2010 && value <= 0x205E) ||
@@ -80,10 +80,15 @@ std::string_view FindScanner::keyword() const {
 }
 
 Comparison FindScanner::comparison() {
-  constexpr auto kSigns = std::to_array<std::pair<std::string_view, Comparison>>(
-      {{">=", Comparison::kAtLeast}, {"=>", Comparison::kAtLeast}, {"≥", Comparison::kAtLeast},
-       {"<=", Comparison::kAtMost},  {"=<", Comparison::kAtMost},  {"≤", Comparison::kAtMost},
-       {">", Comparison::kMore},     {"<", Comparison::kLess},     {"=", Comparison::kEqual}});
+  constexpr auto kSigns = std::to_array<std::pair<std::string_view, Comparison>>({{">=", Comparison::kAtLeast},
+                                                                                  {"=>", Comparison::kAtLeast},
+                                                                                  {"≥", Comparison::kAtLeast},
+                                                                                  {"<=", Comparison::kAtMost},
+                                                                                  {"=<", Comparison::kAtMost},
+                                                                                  {"≤", Comparison::kAtMost},
+                                                                                  {">", Comparison::kMore},
+                                                                                  {"<", Comparison::kLess},
+                                                                                  {"=", Comparison::kEqual}});
   for (const auto& [sign, meaning] : kSigns) {
     if (!rest().starts_with(sign)) continue;
     at += sign.size();

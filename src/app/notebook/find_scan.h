@@ -20,8 +20,8 @@ struct TextRange {
 
 /// A word or what stands between quotation marks.
 struct FindValue {
-  std::string text;         ///< without quotation marks and without the `*`
-  bool isPrefix = false;    ///< a `*` follows
+  std::string text;       ///< without quotation marks and without the `*`
+  bool isPrefix = false;  ///< a `*` follows
   bool isQuoted = false;
   bool isFinished = false;  ///< something follows, so that nobody is typing at its end
   TextRange place = {};

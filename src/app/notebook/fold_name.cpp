@@ -29,15 +29,25 @@ constexpr std::string_view kLatinAdditional =
 
 constexpr char32_t kAlpha = 0x3B1;
 constexpr std::array<std::string_view, 25> kGreek = {
-    "alpha",  "beta", "gamma", "delta", "epsilon", "zeta",  "eta", "theta",   "iota",
-    "kappa",  "lambda", "u",   "nu",    "xi",      "omicron", "pi", "rho",    "sigma",
-    "sigma",  "tau",  "upsilon", "phi", "chi",     "psi",   "omega"};
+    "alpha", "beta",    "gamma", "delta", "epsilon", "zeta",  "eta", "theta",   "iota", "kappa", "lambda", "u",    "nu",
+    "xi",    "omicron", "pi",    "rho",   "sigma",   "sigma", "tau", "upsilon", "phi",  "chi",   "psi",    "omega"};
 
 // What is spelt with more letters than one, and the Greek letters that stand elsewhere.
 constexpr auto kSpelt = std::to_array<std::pair<char32_t, std::string_view>>({
-    {U'Æ', "ae"}, {U'æ', "ae"}, {U'Þ', "th"}, {U'þ', "th"}, {U'ß', "ss"}, {U'ẞ', "ss"},
-    {U'Ĳ', "ij"}, {U'ĳ', "ij"}, {U'Œ', "oe"}, {U'œ', "oe"}, {U'\u00B5', "u"},
-    {U'\u03D1', "theta"}, {U'\u03D5', "phi"}, {U'\u03F5', "epsilon"},
+    {U'Æ', "ae"},
+    {U'æ', "ae"},
+    {U'Þ', "th"},
+    {U'þ', "th"},
+    {U'ß', "ss"},
+    {U'ẞ', "ss"},
+    {U'Ĳ', "ij"},
+    {U'ĳ', "ij"},
+    {U'Œ', "oe"},
+    {U'œ', "oe"},
+    {U'\u00B5', "u"},
+    {U'\u03D1', "theta"},
+    {U'\u03D5', "phi"},
+    {U'\u03F5', "epsilon"},
 });
 
 bool isWithin(char32_t value, char32_t first, char32_t last) { return value >= first && value <= last; }
@@ -80,8 +90,7 @@ void appendFolded(std::string& folded, char32_t value) {
     folded += static_cast<char>(value);
     return;
   }
-  for (const auto& [from, plain] :
-       {std::pair{kLatinFrom, kLatin}, std::pair{kLatinAdditionalFrom, kLatinAdditional}}) {
+  for (const auto& [from, plain] : {std::pair{kLatinFrom, kLatin}, std::pair{kLatinAdditionalFrom, kLatinAdditional}}) {
     if (const char letter = plainLetter(value, from, plain)) {
       folded += letter;
       return;

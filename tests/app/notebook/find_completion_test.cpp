@@ -2,8 +2,8 @@
 // SPDX-License-Identifier: GPL-3.0-or-later
 #include "app/notebook/find_completion.h"
 
-#include <catch2/catch.hpp>
 #include <fmt/format.h>
+#include <catch2/catch.hpp>
 
 #include <chrono>
 #include <random>
@@ -16,7 +16,13 @@ namespace {
 
 FindVocabulary sample() {
   FindVocabulary vocabulary{
-      .substances = {{"pivalic acid", 40}, {"acetic acid", 90}, {"4CzIPN", 300}, {"acridine", 1}, {"indoline", 200}, {"2-methylindoline", 3}, {"DMF", 500}},
+      .substances = {{"pivalic acid", 40},
+                     {"acetic acid", 90},
+                     {"4CzIPN", 300},
+                     {"acridine", 1},
+                     {"indoline", 200},
+                     {"2-methylindoline", 3},
+                     {"DMF", 500}},
       .series = {{"acid additives"}, {"nickel screen"}},
       .people = {{"KW"}, {"KM"}, {"AB"}},
       .vials = {},
@@ -84,7 +90,8 @@ TEST_CASE("taking a proposal replaces the whole word around the cursor", "[noteb
 
 TEST_CASE("any text and cursor are answered, within the text", "[notebook][find][identity]") {
   const FindVocabulary vocabulary = sample();
-  constexpr std::string_view kParts[] = {"additive:", "\"", "pi", " ", "(", ")", "é", "\xE2", "yield>", "series:", ":", "*", "\0"};
+  constexpr std::string_view kParts[] = {"additive:", "\"",     "pi",      " ", "(", ")", "é",
+                                         "\xE2",      "yield>", "series:", ":", "*", "\0"};
   std::mt19937_64 random(23);
   for (int round = 0; round < 5'000; ++round) {
     std::string text;
@@ -102,7 +109,8 @@ TEST_CASE("any text and cursor are answered, within the text", "[notebook][find]
 
 TEST_CASE("twenty thousand names are gone through between two keystrokes", "[notebook][find]") {
   FindVocabulary vocabulary;
-  for (int i = 0; i < 20'000; ++i) vocabulary.substances.push_back({fmt::format("{}-methyl-{}-indoline acid {}", i % 7, i % 991, i), i % 13});
+  for (int i = 0; i < 20'000; ++i)
+    vocabulary.substances.push_back({fmt::format("{}-methyl-{}-indoline acid {}", i % 7, i % 991, i), i % 13});
   prepareVocabulary(vocabulary);
   const auto begin = std::chrono::steady_clock::now();
   CHECK(completeFind("additive:ind", 12, vocabulary).size() == 12);

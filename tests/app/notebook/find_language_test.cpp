@@ -2,11 +2,12 @@
 // SPDX-License-Identifier: GPL-3.0-or-later
 #include "app/notebook/find_language.h"
 
-#include <catch2/catch.hpp>
 #include <fmt/format.h>
+#include <catch2/catch.hpp>
 
-#include <map>
+#include <fstream>
 #include <random>
+#include <string>
 
 #include "app/notebook/fold_name.h"
 #include "text/utf8.h"
@@ -18,7 +19,9 @@ namespace {
 
 std::string shown(const std::optional<Interval>& interval, const std::string& unit) {
   if (!interval) return {};
-  const auto end = [](const std::optional<double>& value) { return value ? fmt::format("{:.6g}", *value) : std::string(); };
+  const auto end = [](const std::optional<double>& value) {
+    return value ? fmt::format("{:.6g}", *value) : std::string();
+  };
   return fmt::format(" [{},{}]{}", end(interval->least), end(interval->most), unit);
 }
 
@@ -32,9 +35,12 @@ std::string shown(const ParsedConditions& conditions);
 std::string shown(const ParsedCondition& condition) {
   struct {
     std::string operator()(const SubstanceName& name) const {
-      return fmt::format("{}={}{}{}{}", name.role, name.written, name.isPrefix ? "*" : "", name.isFinished ? "" : "~", shown(name.loading));
+      return fmt::format("{}={}{}{}{}", name.role, name.written, name.isPrefix ? "*" : "", name.isFinished ? "" : "~",
+                         shown(name.loading));
     }
-    std::string operator()(const StructurePattern& pattern) const { return "smiles=" + pattern.smiles + shown(pattern.loading); }
+    std::string operator()(const StructurePattern& pattern) const {
+      return "smiles=" + pattern.smiles + shown(pattern.loading);
+    }
     std::string operator()(const WordsCondition& words) const {
       std::string text;
       for (std::size_t i = 0; i < words.words.size(); ++i) {
@@ -47,7 +53,8 @@ std::string shown(const ParsedCondition& condition) {
     }
     std::string operator()(const MeasureCondition& measure) const {
       if (measure.measure == MeasureCondition::Measure::kDate) {
-        return fmt::format("date [{:.0f},{:.0f}]", measure.interval.least.value_or(-1), measure.interval.most.value_or(-1));
+        return fmt::format("date [{:.0f},{:.0f}]", measure.interval.least.value_or(-1),
+                           measure.interval.most.value_or(-1));
       }
       return fmt::format("measure{}{}", static_cast<int>(measure.measure), shown(measure.interval, ""));
     }
@@ -66,7 +73,9 @@ std::string shown(const ParsedConditions& conditions) {
 
 std::string parsed(std::string_view text, bool asYouType = false) {
   const auto query = parseFind(text, {asYouType});
-  if (!query) return fmt::format("fault {}+{}: {}: {}", query.error().offset, query.error().length, query.error().what, query.error().mend);
+  if (!query)
+    return fmt::format("fault {}+{}: {}: {}", query.error().offset, query.error().length, query.error().what,
+                       query.error().mend);
   return shown(query->conditions);
 }
 
@@ -193,7 +202,8 @@ TEST_CASE("not, or, and, parentheses", "[notebook][find]") {
 
 TEST_CASE("a search that cannot be read points at the character and says how to mend it", "[notebook][find]") {
   CHECK(parsed("film additve:TFA") ==
-        "fault 5+7: there is no field 'additve': did you mean additive? Or put it between quotation marks to search for the text");
+        "fault 5+7: there is no field 'additve': did you mean additive? Or put it between quotation marks to search "
+        "for the text");
   CHECK(pointed("yeild>60") == "yeild");
   CHECK(pointed("solvent>DMF") == "solvent>");
   CHECK(pointed("film additive:") == "additive:");
@@ -227,8 +237,9 @@ TEST_CASE("while it is typed, an unfinished end is no fault", "[notebook][find]"
   CHECK(parsed("additive:\"pivalic ac", true) == "additive=pivalic ac~");
   CHECK(parsed("additive:piv ", true) == "additive=piv");
   CHECK(parsed("person:K", true) == "field2=K*");
-  for (const char* unfinished : {"film additive:", "film yield>", "film (", "film not", "film not ", "film or",
-                                 "film or ", "film and", "film and ", "film \"", "film temperature>3", "film yield:60..6foo"}) {
+  for (const char* unfinished :
+       {"film additive:", "film yield>", "film (", "film not", "film not ", "film or", "film or ", "film and",
+        "film and ", "film \"", "film temperature>3", "film yield:60..6foo"}) {
     INFO(unfinished);
     const std::string got = parsed(unfinished, true);
     CHECK(got.starts_with("'film'"));
@@ -237,7 +248,8 @@ TEST_CASE("while it is typed, an unfinished end is no fault", "[notebook][find]"
   CHECK(parsed("acid:TFA 5..20 m", true) == "acid=TFA");
   CHECK(parsed("additve:x film", true).starts_with("fault 0+7"));
   // Whatever is typed up to somewhere may be a fault, but never one behind the text.
-  const std::string whole = "photocatalyst:4CzIPN (additive:\"pivalic acid\" 5..20 mol% or not acid:TFA >0.1 M) yield>60 2026-03 amb*";
+  const std::string whole =
+      "photocatalyst:4CzIPN (additive:\"pivalic acid\" 5..20 mol% or not acid:TFA >0.1 M) yield>60 2026-03 amb*";
   for (std::size_t length = 0; length <= whole.size(); ++length) {
     INFO(whole.substr(0, length));
     CHECK(parseFind(whole.substr(0, length), {true}));
@@ -259,8 +271,9 @@ TEST_CASE("hostile searches are read or refused, never more", "[notebook][find][
   for (int i = 0; i < 201; ++i) many += "a or ";
   CHECK(what(many + "a") == "more than 200 conditions");
 
-  constexpr std::string_view kParts[] = {"a", "or", " ", " ", "not", "(", ")", "\"", "*", "additive:", "yield", ">", "<=", "..", "5",
-                                         "mol%", "2026-03", "-", "é", "\xE2", "\0", "structure:", ":", "0.1 M", "=", "'", "h", "1e9"};
+  constexpr std::string_view kParts[] = {
+      "a", "or",   " ",       " ", "not", "(",    ")",  "\"",         "*", "additive:", "yield", ">", "<=", "..",
+      "5", "mol%", "2026-03", "-", "é",   "\xE2", "\0", "structure:", ":", "0.1 M",     "=",     "'", "h",  "1e9"};
   std::mt19937_64 random(17);
   for (int round = 0; round < 20'000; ++round) {
     std::string text;
@@ -281,7 +294,8 @@ TEST_CASE("hostile searches are read or refused, never more", "[notebook][find][
 TEST_CASE("a value is written so that it is read back", "[notebook][find][identity]") {
   CHECK(asFindValue("4CzIPN") == "4CzIPN");
   CHECK(asFindValue("pivalic acid") == "\"pivalic acid\"");
-  for (const char* name : {"(R)-BINOL", "a\"b", "\"", "x)", "amb*", "5 mol%", "not", "β-pinene", "N,N-dimethyl", "a:b", ">5"}) {
+  for (const char* name :
+       {"(R)-BINOL", "a\"b", "\"", "x)", "amb*", "5 mol%", "not", "β-pinene", "N,N-dimethyl", "a:b", ">5"}) {
     INFO(name);
     const auto query = parseFind("additive:" + asFindValue(name) + " film");
     REQUIRE(query);
@@ -289,4 +303,29 @@ TEST_CASE("a value is written so that it is read back", "[notebook][find][identi
     CHECK(std::get<SubstanceName>(query->conditions[0].data).written == name);
     CHECK_FALSE(std::get<SubstanceName>(query->conditions[0].data).isPrefix);
   }
+}
+
+TEST_CASE("the examples of docs/find.md are read", "[notebook][find]") {
+  std::ifstream page(VIALKEEPER_SOURCE_DIR "/docs/find.md");
+  std::size_t examples = 0;
+  for (std::string line; std::getline(page, line);) {
+    if (line.starts_with("    ")) CHECK(parsed(line).find("fault") == std::string::npos);
+    // In running text, what is written as code and holds a field or a range.
+    for (std::size_t at = line.find('`'); at != std::string::npos; at = line.find('`', at + 1)) {
+      const std::size_t end = line.find('`', at + 1);
+      if (end == std::string::npos) break;
+      const std::string code = line.substr(at + 1, end - at - 1);
+      at = end;
+      const bool isLoading =
+          code.find("mol%") != std::string::npos || code.find("equiv") != std::string::npos || code.ends_with(" M");
+      const bool isExample = code.find_first_of(":>.") != std::string::npos && !code.ends_with(':') && code != ".." &&
+                             code != ">" && code != ">=" && !code.starts_with("vialkeeper") &&
+                             !code.starts_with("5-20");
+      if (!isExample && !isLoading) continue;
+      ++examples;
+      INFO(code);
+      CHECK(parsed(isLoading && !code.starts_with("5-20") ? "any:x " + code : code).find("fault") == std::string::npos);
+    }
+  }
+  CHECK(examples > 30);
 }

@@ -23,7 +23,8 @@ class Shelf : public SubstanceResolver {
   std::vector<RowNumber> numbersByCas(std::string_view cas) override {
     return cas == "75-98-9" ? std::vector<RowNumber>{2} : std::vector<RowNumber>{};
   }
-  std::expected<std::vector<RowNumber>, vialkeeper::text::TextFault> numbersBySubstructure(std::string_view smiles) override {
+  std::expected<std::vector<RowNumber>, vialkeeper::text::TextFault> numbersBySubstructure(
+      std::string_view smiles) override {
     if (smiles == "C(=O)O") return std::vector<RowNumber>{2, 3};
     if (smiles == "C1CC") return vialkeeper::text::textFault(1, 1, "ring 1 is never closed", "close it");
     return std::vector<RowNumber>{};
@@ -43,8 +44,8 @@ class Shelf : public SubstanceResolver {
     }
     return found;
   }
-  std::multimap<std::string, RowNumber> m_names = {
-      {"4CzIPN", 1}, {"pivalic acid", 2}, {"PivOH", 2}, {"acetic acid", 3}, {"DMF", 4}, {"dmf", 5}};
+  std::multimap<std::string, RowNumber> m_names = {{"4CzIPN", 1},      {"pivalic acid", 2}, {"PivOH", 2},
+                                                   {"acetic acid", 3}, {"DMF", 4},          {"dmf", 5}};
 };
 
 std::expected<FindQuery, vialkeeper::text::TextFault> found(std::string_view text, const ParseOptions& parse = {},

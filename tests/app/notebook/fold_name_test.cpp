@@ -58,9 +58,13 @@ TEST_CASE("folding is idempotent on any bytes", "[notebook][find][identity]") {
   }
   for (char32_t value = 1; value < 0x3000; ++value) {
     std::string letter;
-    if (value < 0x80) letter = static_cast<char>(value);
-    else if (value < 0x800) letter = {static_cast<char>(0xC0 | (value >> 6U)), static_cast<char>(0x80 | (value & 0x3FU))};
-    else letter = {static_cast<char>(0xE0 | (value >> 12U)), static_cast<char>(0x80 | ((value >> 6U) & 0x3FU)), static_cast<char>(0x80 | (value & 0x3FU))};
+    if (value < 0x80)
+      letter = static_cast<char>(value);
+    else if (value < 0x800)
+      letter = {static_cast<char>(0xC0 | (value >> 6U)), static_cast<char>(0x80 | (value & 0x3FU))};
+    else
+      letter = {static_cast<char>(0xE0 | (value >> 12U)), static_cast<char>(0x80 | ((value >> 6U) & 0x3FU)),
+                static_cast<char>(0x80 | (value & 0x3FU))};
     REQUIRE(foldName(foldName(letter)) == foldName(letter));
   }
 }

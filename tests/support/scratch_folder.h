@@ -6,7 +6,7 @@
 #include <string>
 #include <string_view>
 
-namespace vialkeeper::test {
+namespace vialkeeper::tests {
 
 /// A folder of a test's own, gone with it.
 class ScratchFolder {
@@ -31,4 +31,4 @@ class ScratchFolder {
 /// The bytes of a file that must be there.
 [[nodiscard]] std::string bytesOf(const std::string& path);
 
-}  // namespace vialkeeper::test
+}  // namespace vialkeeper::tests

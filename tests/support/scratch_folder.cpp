@@ -1,6 +1,6 @@
 // SPDX-FileCopyrightText: The Vialkeeper developers
 // SPDX-License-Identifier: GPL-3.0-or-later
-#include "app/scratch_folder.h"
+#include "support/scratch_folder.h"
 
 #include <cstdlib>
 #include <filesystem>
@@ -8,7 +8,7 @@
 #include <iterator>
 #include <stdexcept>
 
-namespace vialkeeper::test {
+namespace vialkeeper::tests {
 
 namespace fs = std::filesystem;
 
@@ -48,4 +48,4 @@ std::string bytesOf(const std::string& path) {
   return {std::istreambuf_iterator<char>(file), std::istreambuf_iterator<char>()};
 }
 
-}  // namespace vialkeeper::test
+}  // namespace vialkeeper::tests
