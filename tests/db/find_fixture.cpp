@@ -137,7 +137,7 @@ SampleNotebook::SampleNotebook(std::size_t runs, std::uint64_t seed)
     for (const std::string& text : sample.texts) sample.tokens.push_back(tokensOf(text));
     write(m_runs.back());
   }
-  m_database.exec("COMMIT; PRAGMA trusted_schema = OFF");
+  m_database.exec("INSERT INTO run_search(run_search) VALUES('rebuild'); COMMIT; PRAGMA trusted_schema = OFF");
 }
 
 void SampleNotebook::write(const SampleRun& sample) {
