@@ -27,12 +27,15 @@ using text::Faults;
 constexpr const char* kFormat = "vialkeeper-archive/1";
 constexpr std::size_t kLongestInline = 64;
 
-std::unexpected<Faults> fault(const std::string& file, int line, std::string what, std::string mend) {
-  return std::unexpected(Faults{{.file = file, .line = line, .what = std::move(what), .mend = std::move(mend)}});
+std::unexpected<Faults> fault(const std::string& file, int line, std::string what,
+                              std::string mend) {
+  return std::unexpected(
+      Faults{{.file = file, .line = line, .what = std::move(what), .mend = std::move(mend)}});
 }
 
-/// Tables in the order in which they are filled: events and components before their runs, so that the
-/// guards of sealed runs, which look at the run, let them in; references are checked at the end.
+/// Tables in the order in which they are filled: events and components before their runs, so that
+/// the guards of sealed runs, which look at the run, let them in; references are checked at the
+/// end.
 std::vector<std::string> archivedTables() {
   std::vector<std::string> tables = auditedTables();
   std::erase(tables, "run");
@@ -41,36 +44,43 @@ std::vector<std::string> archivedTables() {
   return tables;
 }
 
-/// One row as a line: texts and numbers as they are, short binary values in hexadecimal, longer ones as
-/// files of their own.
+/// One row as a line: texts and numbers as they are, short binary values in hexadecimal, longer
+/// ones as files of their own.
 class ArchiveWriter {
  public:
-  ArchiveWriter(Connection& connection, fs::path folder) : m_connection(connection), m_folder(std::move(folder)) {}
+  ArchiveWriter(Connection& connection, fs::path folder)
+      : m_connection(connection), m_folder(std::move(folder)) {}
 
   Checked<void> write() {
     std::error_code error;
-    if (fs::exists(m_folder, error)) return fault(m_folder.string(), 0, "this folder is there already", "name a new one");
+    if (fs::exists(m_folder, error))
+      return fault(m_folder.string(), 0, "this folder is there already", "name a new one");
     fs::create_directories(m_folder / "tables", error);
     if (!error) fs::create_directories(m_folder / "blobs", error);
-    if (error) return fault(m_folder.string(), 0, "the folder cannot be made: " + error.message(), "name another place");
+    if (error)
+      return fault(m_folder.string(), 0, "the folder cannot be made: " + error.message(),
+                   "name another place");
     // One transaction, so that the archive is the notebook of one moment.
     SQLite::Transaction transaction(m_connection.database());
     std::string counts;
     for (const std::string& table : archivedTables()) {
       const auto rows = writeTable(table);
       if (!rows) return std::unexpected(rows.error());
-      counts += fmt::format("{}\n    {}: {}", counts.empty() ? "" : ",", canonicalText(table), *rows);
+      counts +=
+          fmt::format("{}\n    {}: {}", counts.empty() ? "" : ",", canonicalText(table), *rows);
     }
-    return app::writeFile((m_folder / "notebook.json").string(),
-                          fmt::format("{{\n  \"format\": \"{}\",\n  \"schema\": {},\n  \"rows\": {{{}\n  }}\n}}\n", kFormat,
-                                      schemaOf(m_connection), counts));
+    return app::writeFile(
+        (m_folder / "notebook.json").string(),
+        fmt::format("{{\n  \"format\": \"{}\",\n  \"schema\": {},\n  \"rows\": {{{}\n  }}\n}}\n",
+                    kFormat, schemaOf(m_connection), counts));
   }
 
  private:
   Checked<std::int64_t> writeTable(const std::string& table) {
     const fs::path file = m_folder / "tables" / (table + ".jsonl");
     std::ofstream stream(file, std::ios::binary);
-    SQLite::Statement statement(m_connection.database(), fmt::format("SELECT * FROM {} ORDER BY 1", table));
+    SQLite::Statement statement(m_connection.database(),
+                                fmt::format("SELECT * FROM {} ORDER BY 1", table));
     std::int64_t count = 0;
     while (statement.executeStep()) {
       const auto line = lineOf(rowOf(statement));
@@ -88,7 +98,8 @@ class ArchiveWriter {
     for (const auto& [column, cell] : row.cells()) {
       if (std::holds_alternative<std::monostate>(cell)) continue;
       line += (line.size() > 1 ? "," : "") + canonicalText(column) + ":";
-      if (const auto* blob = std::get_if<Blob>(&cell); blob != nullptr && blob->bytes.size() > kLongestInline) {
+      if (const auto* blob = std::get_if<Blob>(&cell);
+          blob != nullptr && blob->bytes.size() > kLongestInline) {
         const std::string digest = toHex(sha256(blob->bytes));
         const fs::path file = m_folder / "blobs" / digest;
         if (m_blobs.insert(digest).second) {
@@ -112,21 +123,26 @@ class ArchiveWriter {
 
 class ArchiveReader {
  public:
-  ArchiveReader(Connection& connection, fs::path folder) : m_connection(connection), m_folder(std::move(folder)) {}
+  ArchiveReader(Connection& connection, fs::path folder)
+      : m_connection(connection), m_folder(std::move(folder)) {}
 
   Checked<void> read() {
     if (const auto head = checkHead(); !head) return head;
-    if (m_connection.integer("SELECT count(*) FROM revision") != 0 || m_connection.integer("SELECT count(*) FROM person") != 0) {
-      return fault(m_connection.file(), 0, "the notebook is not empty", "import into one that was just created");
+    if (m_connection.integer("SELECT count(*) FROM revision") != 0 ||
+        m_connection.integer("SELECT count(*) FROM person") != 0) {
+      return fault(m_connection.file(), 0, "the notebook is not empty",
+                   "import into one that was just created");
     }
-    SQLite::Transaction transaction(m_connection.database(), SQLite::TransactionBehavior::IMMEDIATE);
+    SQLite::Transaction transaction(m_connection.database(),
+                                    SQLite::TransactionBehavior::IMMEDIATE);
     m_connection.run("PRAGMA defer_foreign_keys = ON");
     for (const std::string& table : archivedTables()) {
       if (const auto done = readTable(table); !done) return done;
     }
     m_connection.run("INSERT INTO run_search(run_search) VALUES('rebuild')");
     if (!m_connection.rows("PRAGMA foreign_key_check").empty()) {
-      return fault(m_folder.string(), 0, "rows of the archive refer to others that are not in it", "export it again");
+      return fault(m_folder.string(), 0, "rows of the archive refer to others that are not in it",
+                   "export it again");
     }
     transaction.commit();
     return {};
@@ -139,7 +155,9 @@ class ArchiveReader {
     if (!bytes) return std::unexpected(bytes.error());
     const json head = json::parse(*bytes, nullptr, false);
     const bool known = head.is_object() && head.contains("format") && head["format"] == kFormat;
-    if (!known) return fault(file, 0, "this is no archive of a notebook", fmt::format("name a folder with {}", kFormat));
+    if (!known)
+      return fault(file, 0, "this is no archive of a notebook",
+                   fmt::format("name a folder with {}", kFormat));
     if (!head.contains("schema") || head["schema"] != schemaOf(m_connection)) {
       return fault(file, 0, "the archive is of another form of the notebook",
                    "import it with the program that wrote it, then open that notebook here");
@@ -152,33 +170,38 @@ class ArchiveReader {
     std::ifstream stream(file, std::ios::binary);
     if (!stream) return fault(file, 0, "the file is missing from the archive", "export it again");
     std::set<std::string> columns;
-    for (const Row& row : m_connection.rows(fmt::format("SELECT name FROM pragma_table_info('{}')", table))) {
+    for (const Row& row :
+         m_connection.rows(fmt::format("SELECT name FROM pragma_table_info('{}')", table))) {
       columns.insert(row.text("name"));
     }
     std::string line;
     for (int number = 1; std::getline(stream, line); ++number) {
       const json object = json::parse(line, nullptr, false);
-      if (!object.is_object()) return fault(file, number, "this line cannot be read", "export it again");
+      if (!object.is_object())
+        return fault(file, number, "this line cannot be read", "export it again");
       if (const auto done = insert(table, columns, object, file, number); !done) return done;
     }
     return {};
   }
 
-  Checked<void> insert(const std::string& table, const std::set<std::string>& columns, const json& object,
-                       const std::string& file, int number) {
+  Checked<void> insert(const std::string& table, const std::set<std::string>& columns,
+                       const json& object, const std::string& file, int number) {
     std::vector<std::string> names;
     std::vector<std::string> places;
     std::vector<Cell> cells;
     for (const auto& [column, value] : object.items()) {
-      if (!columns.contains(column)) return fault(file, number, "an unknown column " + column, "export it again");
+      if (!columns.contains(column))
+        return fault(file, number, "an unknown column " + column, "export it again");
       auto cell = cellOf(value);
-      if (!cell) return fault(file, number, "the value of " + column + " cannot be read", "export it again");
+      if (!cell)
+        return fault(file, number, "the value of " + column + " cannot be read", "export it again");
       names.push_back(column);
       places.emplace_back("?");
       cells.push_back(*std::move(cell));
     }
     if (names.empty()) return fault(file, number, "an empty row", "export it again");
-    m_connection.run(fmt::format("INSERT INTO {} ({}) VALUES ({})", table, fmt::join(names, ", "), fmt::join(places, ", ")),
+    m_connection.run(fmt::format("INSERT INTO {} ({}) VALUES ({})", table, fmt::join(names, ", "),
+                                 fmt::join(places, ", ")),
                      std::span<const Cell>(cells));
     return {};
   }
@@ -188,10 +211,12 @@ class ArchiveReader {
     if (value.is_number_integer()) return Cell{value.get<std::int64_t>()};
     if (value.is_number_float()) return Cell{value.get<double>()};
     if (!value.is_object()) return std::nullopt;
-    if (value.contains("hex") && value["hex"].is_string()) return Cell{Blob{fromHex(value["hex"].get<std::string>())}};
+    if (value.contains("hex") && value["hex"].is_string())
+      return Cell{Blob{fromHex(value["hex"].get<std::string>())}};
     if (!value.contains("file") || !value["file"].is_string()) return std::nullopt;
     const auto digest = value["file"].get<std::string>();
-    if (digest.size() != 64 || fromHex(digest).size() != 32) return std::nullopt;  // nothing but a hash names a file
+    if (digest.size() != 64 || fromHex(digest).size() != 32)
+      return std::nullopt;  // nothing but a hash names a file
     std::ifstream stream(m_folder / "blobs" / digest, std::ios::binary);
     std::string bytes((std::istreambuf_iterator<char>(stream)), std::istreambuf_iterator<char>());
     if (!stream || toHex(sha256(bytes)) != digest) return std::nullopt;

@@ -15,8 +15,8 @@ namespace vialkeeper::db {
 /// Writes the archive into a new folder. Fault: the folder is there already or cannot be made.
 [[nodiscard]] text::Checked<void> writeArchive(Connection& connection, const std::string& folder);
 
-/// Fills an empty notebook from an archive, in one transaction. Fault: the notebook is not empty, the
-/// archive is of another form, a line or file is damaged.
+/// Fills an empty notebook from an archive, in one transaction. Fault: the notebook is not empty,
+/// the archive is of another form, a line or file is damaged.
 [[nodiscard]] text::Checked<void> readArchive(Connection& connection, const std::string& folder);
 
 }  // namespace vialkeeper::db

@@ -13,8 +13,10 @@ namespace {
 
 /// One entry of a revision's `changes`. A changed row is told whole afterwards, and before in the
 /// columns that were different.
-std::string changeText(const std::string& table, std::int64_t n, const std::string& before, const std::string& after) {
-  return fmt::format(R"({{"after":{},"before":{},"n":{},"table":{}}})", after, before, n, canonicalText(table));
+std::string changeText(const std::string& table, std::int64_t n, const std::string& before,
+                       const std::string& after) {
+  return fmt::format(R"({{"after":{},"before":{},"n":{},"table":{}}})", after, before, n,
+                     canonicalText(table));
 }
 
 std::string shownCell(const Cell& cell) {
@@ -28,9 +30,10 @@ std::string shownCell(const Cell& cell) {
 
 const std::vector<std::string>& auditedTables() {
   static const std::vector<std::string> tables = {
-      "person", "substance", "substance_name", "lot",         "stock",    "vial_type",   "lamp",
-      "balance", "pipette",  "attachment",     "run",         "component", "event",      "dataset",
-      "dataset_block", "run_dataset", "analysis", "signing_key", "seal"};
+      "person",      "substance", "substance_name", "lot",     "stock",
+      "vial_type",   "lamp",      "balance",        "pipette", "attachment",
+      "run",         "component", "event",          "dataset", "dataset_block",
+      "run_dataset", "analysis",  "signing_key",    "seal"};
   return tables;
 }
 
@@ -50,16 +53,18 @@ std::int64_t AuditedWriter::insert(const std::string& table, Row row) {
     places.emplace_back("?");
     cells.push_back(cell);
   }
-  m_connection.run(fmt::format("INSERT INTO {} ({}) VALUES ({})", table, fmt::join(columns, ", "), fmt::join(places, ", ")),
+  m_connection.run(fmt::format("INSERT INTO {} ({}) VALUES ({})", table, fmt::join(columns, ", "),
+                               fmt::join(places, ", ")),
                    std::span<const Cell>(cells));
   const std::int64_t n = row.integer("n");
   m_changes.push_back(changeText(table, n, "null", canonicalRow(row)));
   return n;
 }
 
-text::Checked<void> AuditedWriter::update(const std::string& table, std::int64_t n, std::int64_t expectedVersion,
-                                          const Row& changed) {
-  const auto found = m_connection.rows(fmt::format("SELECT * FROM {} WHERE n = ?", table), {Cell{n}});
+text::Checked<void> AuditedWriter::update(const std::string& table, std::int64_t n,
+                                          std::int64_t expectedVersion, const Row& changed) {
+  const auto found =
+      m_connection.rows(fmt::format("SELECT * FROM {} WHERE n = ?", table), {Cell{n}});
   if (found.empty()) {
     return std::unexpected(text::Faults{{.kind = text::FaultKind::kNotebook,
                                          .file = m_connection.file(),
@@ -67,7 +72,8 @@ text::Checked<void> AuditedWriter::update(const std::string& table, std::int64_t
                                          .mend = "read it again"}});
   }
   const Row& present = found.front();
-  if (present.integer("version") != expectedVersion) return std::unexpected(conflict(table, present, changed));
+  if (present.integer("version") != expectedVersion)
+    return std::unexpected(conflict(table, present, changed));
   Row before;
   Row after = present;
   std::vector<std::string> assignments;
@@ -90,47 +96,52 @@ text::Checked<void> AuditedWriter::update(const std::string& table, std::int64_t
   return {};
 }
 
-text::Faults AuditedWriter::conflict(const std::string& table, const Row& present, const Row& changed) const {
+text::Faults AuditedWriter::conflict(const std::string& table, const Row& present,
+                                     const Row& changed) const {
   std::vector<std::string> differences;
   for (const auto& [column, cell] : changed.cells()) {
     if (isSame(present[column], cell)) continue;
-    differences.push_back(fmt::format("{} is now {}, yours is {}", column, shownCell(present[column]), shownCell(cell)));
+    differences.push_back(fmt::format("{} is now {}, yours is {}", column,
+                                      shownCell(present[column]), shownCell(cell)));
   }
   return {{.kind = text::FaultKind::kNotebook,
            .file = m_connection.file(),
            .field = fmt::format("{} {}", table, present.integer("n")),
-           .what = fmt::format("it was changed elsewhere since it was read{}{}", differences.empty() ? "" : ": ",
-                               fmt::join(differences, "; ")),
+           .what = fmt::format("it was changed elsewhere since it was read{}{}",
+                               differences.empty() ? "" : ": ", fmt::join(differences, "; ")),
            .mend = "look at both and enter yours again if it should stand"}};
 }
 
 void AuditedWriter::finish() {
   if (m_changes.empty()) return;
   const auto last = m_connection.rows("SELECT seq, hash FROM revision ORDER BY seq DESC LIMIT 1");
-  Row revision{{"seq", last.empty() ? std::int64_t{1} : last.front().integer("seq") + 1},
-               {"at_ms", std::int64_t{m_action.author.at.utc.time_since_epoch().count()}},
-               {"at_offset_min", std::int64_t{m_action.author.at.offset.count()}},
-               {"person", m_action.author.person},
-               {"action", m_action.name},
-               {"run_n", referenceOrNull(m_run)},
-               {"reason", textOrNull(m_action.reason)},
-               {"changes", fmt::format("[{}]", fmt::join(m_changes, ","))},
-               {"previous", Blob{last.empty() ? std::string(32, '\0') : last.front().bytes("hash")}}};
+  Row revision{
+      {"seq", last.empty() ? std::int64_t{1} : last.front().integer("seq") + 1},
+      {"at_ms", std::int64_t{m_action.author.at.utc.time_since_epoch().count()}},
+      {"at_offset_min", std::int64_t{m_action.author.at.offset.count()}},
+      {"person", m_action.author.person},
+      {"action", m_action.name},
+      {"run_n", referenceOrNull(m_run)},
+      {"reason", textOrNull(m_action.reason)},
+      {"changes", fmt::format("[{}]", fmt::join(m_changes, ","))},
+      {"previous", Blob{last.empty() ? std::string(32, '\0') : last.front().bytes("hash")}}};
   revision.set("hash", Blob{revisionHash(revision)});
   std::vector<Cell> cells;
-  for (const char* column : {"seq", "at_ms", "at_offset_min", "person", "action", "run_n", "reason", "changes",
-                             "previous", "hash"}) {
+  for (const char* column : {"seq", "at_ms", "at_offset_min", "person", "action", "run_n", "reason",
+                             "changes", "previous", "hash"}) {
     cells.push_back(revision[column]);
   }
-  m_connection.run("INSERT INTO revision VALUES (?, ?, ?, ?, ?, ?, ?, ?, ?, ?)", std::span<const Cell>(cells));
+  m_connection.run("INSERT INTO revision VALUES (?, ?, ?, ?, ?, ?, ?, ?, ?, ?)",
+                   std::span<const Cell>(cells));
   m_changes.clear();
 }
 
 std::string revisionHash(const Row& revision) {
-  // The tag keeps these hashes apart from all others; the previous hash has a fixed length, so nothing
-  // can move from one part to the next.
+  // The tag keeps these hashes apart from all others; the previous hash has a fixed length, so
+  // nothing can move from one part to the next.
   Row content;
-  for (const char* column : {"seq", "at_ms", "at_offset_min", "person", "action", "run_n", "reason", "changes"}) {
+  for (const char* column :
+       {"seq", "at_ms", "at_offset_min", "person", "action", "run_n", "reason", "changes"}) {
     content.set(column, revision[column]);
   }
   return sha256("vialkeeper-revision/1\n" + revision.bytes("previous") + canonicalRow(content));
@@ -139,7 +150,8 @@ std::string revisionHash(const Row& revision) {
 std::string newId(std::int64_t utc_ms) {
   std::string id(16, '\0');
   randombytes_buf(id.data(), id.size());
-  for (int i = 0; i < 6; ++i) id[static_cast<std::size_t>(i)] = static_cast<char>((utc_ms >> (8 * (5 - i))) & 0xFF);
+  for (int i = 0; i < 6; ++i)
+    id[static_cast<std::size_t>(i)] = static_cast<char>((utc_ms >> (8 * (5 - i))) & 0xFF);
   id[6] = static_cast<char>((id[6] & 0x0F) | 0x70);
   id[8] = static_cast<char>((id[8] & 0x3F) | 0x80);
   return id;

@@ -28,8 +28,8 @@ class AuditedWriter {
 
   /// Changes some columns of a row of which the caller has read `expectedVersion`.
   /// Fault: the notebook holds another version; the message shows what both would write.
-  [[nodiscard]] text::Checked<void> update(const std::string& table, std::int64_t n, std::int64_t expectedVersion,
-                                           const Row& changed);
+  [[nodiscard]] text::Checked<void> update(const std::string& table, std::int64_t n,
+                                           std::int64_t expectedVersion, const Row& changed);
 
   /// The run to which the action belongs, for the trail.
   void concerns(std::int64_t run) { m_run = run; }
@@ -38,7 +38,8 @@ class AuditedWriter {
   void finish();
 
  private:
-  [[nodiscard]] text::Faults conflict(const std::string& table, const Row& present, const Row& changed) const;
+  [[nodiscard]] text::Faults conflict(const std::string& table, const Row& present,
+                                      const Row& changed) const;
 
   Connection& m_connection;
   const app::Action& m_action;
@@ -46,7 +47,8 @@ class AuditedWriter {
   std::vector<std::string> m_changes;
 };
 
-/// The hash of a revision: SHA-256 over a tag, the previous hash, and the revision's canonical JSON.
+/// The hash of a revision: SHA-256 over a tag, the previous hash, and the revision's canonical
+/// JSON.
 [[nodiscard]] std::string revisionHash(const Row& revision);
 
 /// A UUIDv7 (RFC 9562), 16 bytes: the time, then random bits.

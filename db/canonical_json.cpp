@@ -17,7 +17,8 @@ constexpr std::size_t kLongestHex = 64;
 
 std::string blobText(const Blob& blob) {
   if (blob.bytes.size() <= kLongestHex) return fmt::format(R"({{"hex":"{}"}})", toHex(blob.bytes));
-  return fmt::format(R"({{"sha256":"{}","size":{}}})", toHex(sha256(blob.bytes)), blob.bytes.size());
+  return fmt::format(R"({{"sha256":"{}","size":{}}})", toHex(sha256(blob.bytes)),
+                     blob.bytes.size());
 }
 
 std::string cellText(const Cell& cell) {
@@ -39,13 +40,27 @@ std::string canonicalText(std::string_view text) {
   std::string quoted = "\"";
   for (const char c : text) {
     switch (c) {
-      case '"': quoted += "\\\""; break;
-      case '\\': quoted += "\\\\"; break;
-      case '\b': quoted += "\\b"; break;
-      case '\t': quoted += "\\t"; break;
-      case '\n': quoted += "\\n"; break;
-      case '\f': quoted += "\\f"; break;
-      case '\r': quoted += "\\r"; break;
+      case '"':
+        quoted += "\\\"";
+        break;
+      case '\\':
+        quoted += "\\\\";
+        break;
+      case '\b':
+        quoted += "\\b";
+        break;
+      case '\t':
+        quoted += "\\t";
+        break;
+      case '\n':
+        quoted += "\\n";
+        break;
+      case '\f':
+        quoted += "\\f";
+        break;
+      case '\r':
+        quoted += "\\r";
+        break;
       default:
         if (static_cast<unsigned char>(c) < 0x20) {
           quoted += fmt::format("\\u{:04x}", static_cast<unsigned>(static_cast<unsigned char>(c)));
@@ -60,7 +75,8 @@ std::string canonicalText(std::string_view text) {
 std::string canonicalNumber(double number) {
   if (!std::isfinite(number)) return "null";
   if (number == 0.0) return "0";
-  // Shortest digits and their decimal exponent, then set out by the rules of ECMA-262, Number::toString.
+  // Shortest digits and their decimal exponent, then set out by the rules of ECMA-262,
+  // Number::toString.
   std::string shortest = fmt::format("{}", std::abs(number));
   std::string digits;
   for (const char c : shortest.substr(0, shortest.find('e'))) {
@@ -84,7 +100,8 @@ std::string canonicalNumber(double number) {
   if (length <= n && n <= 21) {
     text = digits + std::string(static_cast<std::size_t>(n - length), '0');
   } else if (0 < n && n <= 21) {
-    text = digits.substr(0, static_cast<std::size_t>(n)) + "." + digits.substr(static_cast<std::size_t>(n));
+    text = digits.substr(0, static_cast<std::size_t>(n)) + "." +
+           digits.substr(static_cast<std::size_t>(n));
   } else if (-6 < n && n <= 0) {
     text = "0." + std::string(static_cast<std::size_t>(-n), '0') + digits;
   } else {

@@ -13,8 +13,8 @@ namespace vialkeeper::db {
 /// blocks, attachments by hash.
 [[nodiscard]] std::string ownRecordsText(Connection& connection, std::int64_t run);
 
-/// `{"format","links","own"}`: the own records, and the people, substances, lots and stocks that they
-/// name, as these are now.
+/// `{"format","links","own"}`: the own records, and the people, substances, lots and stocks that
+/// they name, as these are now.
 [[nodiscard]] std::string canonicalRunText(Connection& connection, std::int64_t run);
 
 }  // namespace vialkeeper::db

@@ -26,7 +26,8 @@ void require(bool ok, const char* what) {
 Connection::Connection(const std::string& file, Access access, bool create)
     : m_file(file),
       m_access(access),
-      m_database(std::make_unique<SQLite::Database>(file, openFlags(access, create), kBusyTimeout_ms)) {
+      m_database(
+          std::make_unique<SQLite::Database>(file, openFlags(access, create), kBusyTimeout_ms)) {
   configure();
 }
 
@@ -84,7 +85,8 @@ std::vector<Row> Connection::rows(const std::string& sql, std::span<const Cell> 
 
 Cell Connection::cell(const std::string& sql, std::initializer_list<Cell> cells) {
   const auto found = rows(sql, cells);
-  return found.empty() || found.front().cells().empty() ? Cell{} : found.front().cells().front().second;
+  return found.empty() || found.front().cells().empty() ? Cell{}
+                                                        : found.front().cells().front().second;
 }
 
 std::int64_t Connection::integer(const std::string& sql, std::initializer_list<Cell> cells) {
@@ -99,11 +101,20 @@ Row rowOf(const SQLite::Statement& statement) {
     const SQLite::Column column = const_cast<SQLite::Statement&>(statement).getColumn(i);
     Cell cell;
     switch (column.getType()) {
-      case SQLITE_INTEGER: cell = static_cast<std::int64_t>(column.getInt64()); break;
-      case SQLITE_FLOAT: cell = column.getDouble(); break;
-      case SQLITE_TEXT: cell = column.getString(); break;
-      case SQLITE_BLOB: cell = Blob{column.getString()}; break;
-      default: break;
+      case SQLITE_INTEGER:
+        cell = static_cast<std::int64_t>(column.getInt64());
+        break;
+      case SQLITE_FLOAT:
+        cell = column.getDouble();
+        break;
+      case SQLITE_TEXT:
+        cell = column.getString();
+        break;
+      case SQLITE_BLOB:
+        cell = Blob{column.getString()};
+        break;
+      default:
+        break;
     }
     row.set(column.getName(), std::move(cell));
   }
@@ -120,7 +131,8 @@ void bind(SQLite::Statement& statement, std::span<const Cell> cells) {
     } else if (const auto* text = std::get_if<std::string>(&cell)) {
       statement.bind(index, *text);
     } else if (const auto* blob = std::get_if<Blob>(&cell)) {
-      statement.bind(index, static_cast<const void*>(blob->bytes.data()), static_cast<int>(blob->bytes.size()));
+      statement.bind(index, static_cast<const void*>(blob->bytes.data()),
+                     static_cast<int>(blob->bytes.size()));
     } else {
       statement.bind(index);
     }
@@ -130,26 +142,41 @@ void bind(SQLite::Statement& statement, std::span<const Cell> cells) {
 
 text::Fault toFault(const SQLite::Exception& error, const std::string& file) {
   const auto fault = [&file](std::string what, std::string mend) {
-    return text::Fault{.kind = text::FaultKind::kNotebook, .file = file, .what = std::move(what), .mend = std::move(mend)};
+    return text::Fault{.kind = text::FaultKind::kNotebook,
+                       .file = file,
+                       .what = std::move(what),
+                       .mend = std::move(mend)};
   };
   switch (error.getErrorCode()) {
     case SQLITE_BUSY:
     case SQLITE_LOCKED: {
       const std::string holder = writerOf(file);
-      return fault("another program is writing to the notebook" + (holder.empty() ? "" : ": " + holder),
-                   "wait a moment and try again; nothing was changed");
+      return fault(
+          "another program is writing to the notebook" + (holder.empty() ? "" : ": " + holder),
+          "wait a moment and try again; nothing was changed");
     }
     case SQLITE_CORRUPT:
     case SQLITE_NOTADB:
       return fault("the notebook file is damaged or is no notebook",
                    "keep it as it is, run verify, and go back to a backup");
-    case SQLITE_FULL: return fault("the disk is full", "free some room; nothing was changed");
-    case SQLITE_READONLY: return fault("the notebook may not be written here", "check the permissions of file and folder");
-    case SQLITE_CANTOPEN: return fault("the notebook cannot be opened", "check that file and folder exist and may be read");
-    case SQLITE_IOERR: return fault("the disk reported an error", "check disk and share; nothing was changed");
-    case SQLITE_TOOBIG: return fault("a text or file is too large for the notebook", "keep it under 900 MB");
-    case SQLITE_CONSTRAINT: return fault(std::string("the notebook refuses this: ") + error.what(), "nothing was changed");
-    default: return fault(std::string("the notebook reported: ") + error.what(), "nothing was changed; run verify");
+    case SQLITE_FULL:
+      return fault("the disk is full", "free some room; nothing was changed");
+    case SQLITE_READONLY:
+      return fault("the notebook may not be written here",
+                   "check the permissions of file and folder");
+    case SQLITE_CANTOPEN:
+      return fault("the notebook cannot be opened",
+                   "check that file and folder exist and may be read");
+    case SQLITE_IOERR:
+      return fault("the disk reported an error", "check disk and share; nothing was changed");
+    case SQLITE_TOOBIG:
+      return fault("a text or file is too large for the notebook", "keep it under 900 MB");
+    case SQLITE_CONSTRAINT:
+      return fault(std::string("the notebook refuses this: ") + error.what(),
+                   "nothing was changed");
+    default:
+      return fault(std::string("the notebook reported: ") + error.what(),
+                   "nothing was changed; run verify");
   }
 }
 

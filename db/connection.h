@@ -21,24 +21,28 @@ inline constexpr std::int32_t kApplicationId = 0x564C4B50;
 
 enum class Access { kReadOnly, kReadWrite };
 
-/// One connection to a notebook file, set up as tech-facts B asks: every pragma's answer is read back.
-/// SQLite's exceptions do not leave `db`; use guarded() at its doors.
+/// One connection to a notebook file, set up as tech-facts B asks: every pragma's answer is read
+/// back. SQLite's exceptions do not leave `db`; use guarded() at its doors.
 class Connection {
  public:
   /// Opens an existing file, or creates it where `create` says so. Throws SQLite::Exception.
   Connection(const std::string& file, Access access, bool create);
 
   /// A prepared statement, kept for the next time, with its cells bound.
-  [[nodiscard]] SQLite::Statement& prepared(const std::string& sql, std::span<const Cell> cells = {});
+  [[nodiscard]] SQLite::Statement& prepared(const std::string& sql,
+                                            std::span<const Cell> cells = {});
   void run(const std::string& sql, std::span<const Cell> cells = {});
-  void run(const std::string& sql, std::initializer_list<Cell> cells) { run(sql, std::span(cells.begin(), cells.size())); }
+  void run(const std::string& sql, std::initializer_list<Cell> cells) {
+    run(sql, std::span(cells.begin(), cells.size()));
+  }
   [[nodiscard]] std::vector<Row> rows(const std::string& sql, std::span<const Cell> cells = {});
   [[nodiscard]] std::vector<Row> rows(const std::string& sql, std::initializer_list<Cell> cells) {
     return rows(sql, std::span(cells.begin(), cells.size()));
   }
   /// The first cell of the first row; monostate without one.
   [[nodiscard]] Cell cell(const std::string& sql, std::initializer_list<Cell> cells = {});
-  [[nodiscard]] std::int64_t integer(const std::string& sql, std::initializer_list<Cell> cells = {});
+  [[nodiscard]] std::int64_t integer(const std::string& sql,
+                                     std::initializer_list<Cell> cells = {});
 
   [[nodiscard]] SQLite::Database& database() { return *m_database; }
   [[nodiscard]] const std::string& file() const { return m_file; }

@@ -40,7 +40,8 @@ SqlText withinSql(const std::string& expression, const Interval& interval) {
 /// A list of any length as one value: SQLite's number of parameters is limited.
 SqlText amongSql(const std::string& expression, const std::vector<app::RowNumber>& numbers) {
   if (numbers.size() == 1) return {expression + " = ?", {std::int64_t{numbers.front()}}};
-  return {expression + " IN (SELECT value FROM json_each(?))", {fmt::format("[{}]", fmt::join(numbers, ","))}};
+  return {expression + " IN (SELECT value FROM json_each(?))",
+          {fmt::format("[{}]", fmt::join(numbers, ","))}};
 }
 
 SqlText roleSql(const std::string& role, const std::string& column) {
@@ -57,8 +58,8 @@ SqlText amountsSql(const SubstanceCondition& condition, const std::string& alias
   }
   if (condition.concentration_mol_L) {
     sql += " AND ";
-    sql +=
-        withinSql(fmt::format("coalesce({0}.charged_mol_l, {0}.planned_mol_l)", alias), *condition.concentration_mol_L);
+    sql += withinSql(fmt::format("coalesce({0}.charged_mol_l, {0}.planned_mol_l)", alias),
+                     *condition.concentration_mol_L);
   }
   return sql;
 }
@@ -89,8 +90,10 @@ SqlText probeSql(const SubstanceCondition& condition, const SqlPlace& place) {
 SqlText substanceSql(const SubstanceCondition& condition, const SqlPlace& place) {
   if (!condition.anySubstance && condition.substances.empty()) return {"0"};
   // Of any role and substance there is no stretch of an index.
-  if (place.isProbed || (condition.anySubstance && condition.role.empty())) return probeSql(condition, place);
-  SqlText sql{fmt::format("{}{} IN (SELECT p.run_n FROM component p WHERE ", place.isLed ? "+" : "", place.run)};
+  if (place.isProbed || (condition.anySubstance && condition.role.empty()))
+    return probeSql(condition, place);
+  SqlText sql{fmt::format("{}{} IN (SELECT p.run_n FROM component p WHERE ", place.isLed ? "+" : "",
+                          place.run)};
   sql += componentSql(condition, "p");
   sql += ")";
   return sql;
@@ -99,9 +102,9 @@ SqlText substanceSql(const SubstanceCondition& condition, const SqlPlace& place)
 SqlText wordsSql(const WordsCondition& words, const SqlPlace& place) {
   const std::string match = matchText(words);
   if (match.empty()) return {"1"};
-  return {
-      fmt::format("{}{} IN (SELECT rowid FROM run_search WHERE run_search MATCH ?)", place.isLed ? "+" : "", place.run),
-      {match}};
+  return {fmt::format("{}{} IN (SELECT rowid FROM run_search WHERE run_search MATCH ?)",
+                      place.isLed ? "+" : "", place.run),
+          {match}};
 }
 
 SqlText textFieldSql(const TextFieldCondition& condition) {
@@ -170,7 +173,8 @@ SqlText measureSql(const MeasureCondition& condition) {
 }
 
 /// Joined as a balanced tree, for SQLite limits the depth of an expression.
-SqlText joined(std::span<const FindCondition* const> conditions, std::string_view with, const SqlPlace& place) {
+SqlText joined(std::span<const FindCondition* const> conditions, std::string_view with,
+               const SqlPlace& place) {
   SqlText sql{"("};
   if (conditions.size() == 1) {
     sql += conditionSql(*conditions.front(), place);
@@ -193,13 +197,18 @@ std::vector<const FindCondition*> pointersTo(const app::FindConditions& conditio
 struct ConditionWriter {
   const SqlPlace& place;
 
-  SqlText operator()(const SubstanceCondition& condition) const { return substanceSql(condition, place); }
+  SqlText operator()(const SubstanceCondition& condition) const {
+    return substanceSql(condition, place);
+  }
   SqlText operator()(const WordsCondition& condition) const { return wordsSql(condition, place); }
   SqlText operator()(const TextFieldCondition& condition) const { return textFieldSql(condition); }
   SqlText operator()(const MeasureCondition& condition) const { return measureSql(condition); }
-  SqlText operator()(const app::AllOf& all) const { return allOfSql(pointersTo(all.conditions), place); }
+  SqlText operator()(const app::AllOf& all) const {
+    return allOfSql(pointersTo(all.conditions), place);
+  }
   SqlText operator()(const app::AnyOf& any) const {
-    return any.conditions.empty() ? SqlText{"0"} : joined(pointersTo(any.conditions), " OR ", place);
+    return any.conditions.empty() ? SqlText{"0"}
+                                  : joined(pointersTo(any.conditions), " OR ", place);
   }
   SqlText operator()(const app::NoneOf& none) const {
     SqlText sql = allOfSql(pointersTo(none.conditions), place);
@@ -239,10 +248,13 @@ SqlText allOfSql(std::span<const FindCondition* const> conditions, const SqlPlac
 }
 
 bool readsRun(const FindCondition& condition) {
-  const auto anyReads = [](const app::FindConditions& conditions) { return std::ranges::any_of(conditions, readsRun); };
+  const auto anyReads = [](const app::FindConditions& conditions) {
+    return std::ranges::any_of(conditions, readsRun);
+  };
   if (const auto* all = std::get_if<app::AllOf>(&condition.data)) return anyReads(all->conditions);
   if (const auto* any = std::get_if<app::AnyOf>(&condition.data)) return anyReads(any->conditions);
-  if (const auto* none = std::get_if<app::NoneOf>(&condition.data)) return anyReads(none->conditions);
+  if (const auto* none = std::get_if<app::NoneOf>(&condition.data))
+    return anyReads(none->conditions);
   return std::holds_alternative<TextFieldCondition>(condition.data) ||
          std::holds_alternative<MeasureCondition>(condition.data);
 }
@@ -259,8 +271,8 @@ std::string matchText(const WordsCondition& words) {
       match += c;
     }
     match += '"';
-    const bool isPrefix =
-        (i < words.prefix.size() && words.prefix[i]) || (words.lastIsPrefix && i + 1 == words.words.size());
+    const bool isPrefix = (i < words.prefix.size() && words.prefix[i]) ||
+                          (words.lastIsPrefix && i + 1 == words.words.size());
     if (isPrefix) match += '*';
   }
   return match;

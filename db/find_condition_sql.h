@@ -32,25 +32,29 @@ struct SqlText {
 
 /// Where an expression stands.
 struct SqlPlace {
-  std::string_view run;   ///< the run's number there: `r.n`, `c.run_n`
-  bool isLed = false;     ///< another table leads; SQLite is kept from turning that round
-  bool isProbed = false;  ///< few runs are asked: look each up, instead of gathering all that meet it
+  std::string_view run;  ///< the run's number there: `r.n`, `c.run_n`
+  bool isLed = false;    ///< another table leads; SQLite is kept from turning that round
+  bool isProbed =
+      false;  ///< few runs are asked: look each up, instead of gathering all that meet it
 };
 
 /// The condition as an expression; measures and text fields are read from `run r`.
 [[nodiscard]] SqlText conditionSql(const app::FindCondition& condition, const SqlPlace& place);
 
 /// All of them, as an expression; `1` where there are none.
-[[nodiscard]] SqlText allOfSql(std::span<const app::FindCondition* const> conditions, const SqlPlace& place);
+[[nodiscard]] SqlText allOfSql(std::span<const app::FindCondition* const> conditions,
+                               const SqlPlace& place);
 
 /// Whether the condition reads columns of the run itself.
 [[nodiscard]] bool readsRun(const app::FindCondition& condition);
 
-/// What the component `alias` has to be, as an expression over its own columns. The condition names a role
-/// or substances.
-[[nodiscard]] SqlText componentSql(const app::SubstanceCondition& condition, const std::string& alias);
+/// What the component `alias` has to be, as an expression over its own columns. The condition names
+/// a role or substances.
+[[nodiscard]] SqlText componentSql(const app::SubstanceCondition& condition,
+                                   const std::string& alias);
 
-/// The words in the language of FTS5's MATCH, each within quotation marks; empty where no word holds a letter or digit.
+/// The words in the language of FTS5's MATCH, each within quotation marks; empty where no word
+/// holds a letter or digit.
 [[nodiscard]] std::string matchText(const app::WordsCondition& words);
 
 }  // namespace vialkeeper::db

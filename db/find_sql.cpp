@@ -64,9 +64,13 @@ struct Lead {
   bool byWords = false;
   std::int64_t rows = kFew;  ///< how many runs it gives, kFew meaning that or more
 
-  [[nodiscard]] const SubstanceCondition& condition() const { return std::get<SubstanceCondition>(substance->data); }
+  [[nodiscard]] const SubstanceCondition& condition() const {
+    return std::get<SubstanceCondition>(substance->data);
+  }
   /// One stretch of an index, which gives the runs in their order.
-  [[nodiscard]] bool isInOrder() const { return substance != nullptr && condition().substances.size() == 1; }
+  [[nodiscard]] bool isInOrder() const {
+    return substance != nullptr && condition().substances.size() == 1;
+  }
 };
 
 SqlText countingSql(std::string_view from, const SqlText& where) {
@@ -79,17 +83,20 @@ SqlText countingSql(std::string_view from, const SqlText& where) {
 /// Without a count: solvents and gases are in nearly every run, additives and the like in few.
 std::int64_t likelyRows(const SubstanceCondition& condition) {
   static constexpr std::string_view kEverywhere[] = {"solvent", "gas"};
-  static constexpr std::string_view kCommon[] = {"", "substrate", "product", "photocatalyst", "catalyst", "standard"};
+  static constexpr std::string_view kCommon[] = {
+      "", "substrate", "product", "photocatalyst", "catalyst", "standard"};
   const bool isNarrowed = condition.loading_molPercent || condition.concentration_mol_L;
   if (std::ranges::find(kEverywhere, condition.role) != std::end(kEverywhere)) return 100 * kFew;
-  if (std::ranges::find(kCommon, condition.role) != std::end(kCommon)) return (isNarrowed ? 5 : 10) * kFew;
+  if (std::ranges::find(kCommon, condition.role) != std::end(kCommon))
+    return (isNarrowed ? 5 : 10) * kFew;
   return isNarrowed ? kFew : 2 * kFew;
 }
 
 Lead chooseLead(const Conjunction& all, const RowCounter& counter) {
   std::optional<Lead> best;
   // A condition by itself leads, whatever it finds.
-  const RowCounter rowsOf = all.others().size() + (all.match().empty() ? 0 : 1) > 1 ? counter : RowCounter();
+  const RowCounter rowsOf =
+      all.others().size() + (all.match().empty() ? 0 : 1) > 1 ? counter : RowCounter();
   const auto offer = [&best](Lead lead) {
     if (!best || lead.rows < best->rows) best = lead;
   };
@@ -97,12 +104,14 @@ Lead chooseLead(const Conjunction& all, const RowCounter& counter) {
     const auto* substance = std::get_if<SubstanceCondition>(&each->data);
     if (substance == nullptr || substance->anySubstance || substance->substances.empty()) continue;
     const std::int64_t rows =
-        rowsOf ? rowsOf(countingSql("component c", componentSql(*substance, "c"))) : likelyRows(*substance);
+        rowsOf ? rowsOf(countingSql("component c", componentSql(*substance, "c")))
+               : likelyRows(*substance);
     offer({.substance = each, .rows = rows});
   }
   if (!all.match().empty()) {
     const std::int64_t rows =
-        rowsOf ? rowsOf(countingSql("run_search", {"run_search MATCH ?", {all.match()}})) : 7 * kFew;
+        rowsOf ? rowsOf(countingSql("run_search", {"run_search MATCH ?", {all.match()}}))
+               : 7 * kFew;
     offer({.byWords = true, .rows = rows});
   }
   return best.value_or(Lead{.rows = 100 * kFew});
@@ -114,15 +123,16 @@ SqlText restSql(const Conjunction& all, const Lead& lead, const SqlPlace& place)
   std::erase(rest, lead.substance);
   SqlText sql = allOfSql(rest, place);
   if (!lead.byWords && !all.match().empty()) {
-    sql += fmt::format(" AND {}{} IN (SELECT rowid FROM run_search WHERE run_search MATCH ?)", place.isLed ? "+" : "",
-                       place.run);
+    sql += fmt::format(" AND {}{} IN (SELECT rowid FROM run_search WHERE run_search MATCH ?)",
+                       place.isLed ? "+" : "", place.run);
     sql.cells.emplace_back(all.match());
   }
   return sql;
 }
 
 bool restReadsRun(const Conjunction& all) {
-  return std::ranges::any_of(all.others(), [](const FindCondition* each) { return readsRun(*each); });
+  return std::ranges::any_of(all.others(),
+                             [](const FindCondition* each) { return readsRun(*each); });
 }
 
 /// A statement's middle: FROM and WHERE, and what names a run there.
@@ -135,33 +145,39 @@ struct Source {
 Source sourceByComponent(const Conjunction& all, const Lead& lead) {
   Source source{.text = {}, .run = "c.run_n", .mayRepeat = true};
   // CROSS JOIN: SQLite keeps the order of the tables.
-  source.text +=
-      restReadsRun(all) ? " FROM component c CROSS JOIN run r ON r.n = c.run_n WHERE " : " FROM component c WHERE ";
+  source.text += restReadsRun(all) ? " FROM component c CROSS JOIN run r ON r.n = c.run_n WHERE "
+                                   : " FROM component c WHERE ";
   source.text += componentSql(lead.condition(), "c");
   source.text += " AND ";
-  source.text += restSql(all, lead, {.run = source.run, .isLed = true, .isProbed = lead.rows < kFew});
+  source.text +=
+      restSql(all, lead, {.run = source.run, .isLed = true, .isProbed = lead.rows < kFew});
   return source;
 }
 
 Source sourceByWords(const Conjunction& all, const Lead& lead) {
   Source source{.text = {}, .run = "run_search.rowid"};
-  source.text += restReadsRun(all) ? " FROM run_search CROSS JOIN run r ON r.n = run_search.rowid" : " FROM run_search";
+  source.text += restReadsRun(all) ? " FROM run_search CROSS JOIN run r ON r.n = run_search.rowid"
+                                   : " FROM run_search";
   source.text += SqlText{" WHERE run_search MATCH ? AND ", {all.match()}};
-  source.text += restSql(all, lead, {.run = source.run, .isLed = true, .isProbed = lead.rows < kFew});
+  source.text +=
+      restSql(all, lead, {.run = source.run, .isLed = true, .isProbed = lead.rows < kFew});
   return source;
 }
 
-/// From the runs themselves; a lead, if there is one, is gathered first and each of its runs looked up.
+/// From the runs themselves; a lead, if there is one, is gathered first and each of its runs looked
+/// up.
 Source sourceByRun(const Conjunction& all, const Lead& lead) {
   Source source{.text = {" FROM run r WHERE "}, .run = "r.n"};
   const bool isLed = lead.byWords || lead.substance != nullptr;
   if (lead.byWords) {
-    source.text += SqlText{"r.n IN (SELECT rowid FROM run_search WHERE run_search MATCH ?) AND ", {all.match()}};
+    source.text += SqlText{"r.n IN (SELECT rowid FROM run_search WHERE run_search MATCH ?) AND ",
+                           {all.match()}};
   } else if (isLed) {
     source.text += conditionSql(*lead.substance, {.run = "r.n"});
     source.text += " AND ";
   }
-  source.text += restSql(all, lead, {.run = "r.n", .isLed = isLed, .isProbed = isLed && lead.rows < kFew});
+  source.text +=
+      restSql(all, lead, {.run = "r.n", .isLed = isLed, .isProbed = isLed && lead.rows < kFew});
   return source;
 }
 
@@ -199,7 +215,8 @@ SqlText selectByRank(const Source& source, const FindOptions& options) {
 }
 
 SqlText countSql(const Source& source) {
-  SqlText sql{source.mayRepeat ? fmt::format("SELECT count(DISTINCT {})", source.run) : "SELECT count(*)"};
+  SqlText sql{source.mayRepeat ? fmt::format("SELECT count(DISTINCT {})", source.run)
+                               : "SELECT count(*)"};
   sql += source.text;
   return sql;
 }
@@ -226,7 +243,8 @@ FindSql findSql(const app::FindQuery& query, const FindOptions& options, const R
   const Source source = lead.byWords       ? sourceByWords(all, lead)
                         : lead.isInOrder() ? sourceByComponent(all, lead)
                                            : sourceByRun(all, lead);
-  const std::string order = fmt::format("{} {}", source.run, options.order == FindOrder::kOldest ? "ASC" : "DESC");
+  const std::string order =
+      fmt::format("{} {}", source.run, options.order == FindOrder::kOldest ? "ASC" : "DESC");
   return {selectInOrder(source, order, options), countSql(source)};
 }
 

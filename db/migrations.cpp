@@ -50,16 +50,21 @@ void flushToDisk(const std::string& file) {
 
 int newestSchema() { return static_cast<int>(text::migrationFilesCount); }
 
-int schemaOf(Connection& connection) { return static_cast<int>(connection.integer("PRAGMA user_version")); }
+int schemaOf(Connection& connection) {
+  return static_cast<int>(connection.integer("PRAGMA user_version"));
+}
 
 text::Checked<void> migrate(Connection& connection, const std::string& stamp) {
   const int found = schemaOf(connection);
   if (found > 0 && found < newestSchema()) {
-    const std::string copy = fmt::format("{}.before-form-{}-{}", connection.file(), newestSchema(), stamp);
+    const std::string copy =
+        fmt::format("{}.before-form-{}-{}", connection.file(), newestSchema(), stamp);
     if (const auto copied = copyTo(connection, copy); !copied) {
-      return fault(connection.file(), "the notebook was not brought to the newer form, because no copy of it could be made: " +
-                                          copied.error().front().what,
-                   "make room beside the notebook or free the name, then open it again");
+      return fault(
+          connection.file(),
+          "the notebook was not brought to the newer form, because no copy of it could be made: " +
+              copied.error().front().what,
+          "make room beside the notebook or free the name, then open it again");
     }
   }
   for (int to = found + 1; to <= newestSchema(); ++to) step(connection, to);
@@ -68,7 +73,8 @@ text::Checked<void> migrate(Connection& connection, const std::string& stamp) {
 
 text::Checked<void> copyTo(Connection& connection, const std::string& file) {
   std::error_code ignored;
-  if (fs::exists(file, ignored)) return fault(file, "there is a file of this name already", "name another");
+  if (fs::exists(file, ignored))
+    return fault(file, "there is a file of this name already", "name another");
   const std::string temporary = file + ".part";
   fs::remove(temporary, ignored);
   try {
@@ -80,7 +86,8 @@ text::Checked<void> copyTo(Connection& connection, const std::string& file) {
     SQLite::Statement check(reopened, "PRAGMA integrity_check(1)");
     if (!check.executeStep() || check.getColumn(0).getString() != "ok") {
       fs::remove(temporary, ignored);
-      return fault(connection.file(), "the copy is not sound, so the notebook itself may be damaged", "run verify");
+      return fault(connection.file(),
+                   "the copy is not sound, so the notebook itself may be damaged", "run verify");
     }
   } catch (const SQLite::Exception& error) {
     fs::remove(temporary, ignored);
@@ -88,7 +95,8 @@ text::Checked<void> copyTo(Connection& connection, const std::string& file) {
   }
   flushToDisk(temporary);
   fs::rename(temporary, file, ignored);
-  if (ignored) return fault(file, "the copy could not get its name: " + ignored.message(), "check the folder");
+  if (ignored)
+    return fault(file, "the copy could not get its name: " + ignored.message(), "check the folder");
   const fs::path folder = fs::absolute(file).parent_path();
   flushToDisk(folder.string());
   return {};

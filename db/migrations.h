@@ -15,13 +15,14 @@ namespace vialkeeper::db {
 /// The form of the file that is open: 0 for an empty one.
 [[nodiscard]] int schemaOf(Connection& connection);
 
-/// Brings the file to the newest form, one transaction for each step. Before the first step of a file
-/// that holds anything, a copy is made beside it, named by form and time; without it nothing is done.
-/// `stamp` is part of that name: `20260304-142005`.
+/// Brings the file to the newest form, one transaction for each step. Before the first step of a
+/// file that holds anything, a copy is made beside it, named by form and time; without it nothing
+/// is done. `stamp` is part of that name: `20260304-142005`.
 [[nodiscard]] text::Checked<void> migrate(Connection& connection, const std::string& stamp);
 
-/// A verified copy of the open database: written under a temporary name, opened again, checked page by
-/// page, then renamed. Fault: a file of that name is there, the copy is not sound, the disk is full.
+/// A verified copy of the open database: written under a temporary name, opened again, checked page
+/// by page, then renamed. Fault: a file of that name is there, the copy is not sound, the disk is
+/// full.
 [[nodiscard]] text::Checked<void> copyTo(Connection& connection, const std::string& file);
 
 }  // namespace vialkeeper::db

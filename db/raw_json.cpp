@@ -54,7 +54,8 @@ std::vector<std::string_view> rawElements(std::string_view array) { return parts
 std::string_view rawMember(std::string_view object, std::string_view name) {
   for (const std::string_view member : parts(object, '{', '}')) {
     const bool here = member.size() > name.size() + 3 && member.front() == '"' &&
-                      member.substr(1, name.size()) == name && member.substr(1 + name.size(), 2) == "\":";
+                      member.substr(1, name.size()) == name &&
+                      member.substr(1 + name.size(), 2) == "\":";
     if (here) return member.substr(name.size() + 3);
   }
   return {};

@@ -5,8 +5,9 @@
 #include <string_view>
 #include <vector>
 
-/// Parts of a JSON text as they stand in it, byte for byte: what was hashed is hashed again, not what a
-/// parser would print. For texts that we wrote; on others the answers are empty, never a crash.
+/// Parts of a JSON text as they stand in it, byte for byte: what was hashed is hashed again, not
+/// what a parser would print. For texts that we wrote; on others the answers are empty, never a
+/// crash.
 namespace vialkeeper::db {
 
 /// The elements of an array.

@@ -31,7 +31,8 @@ std::vector<std::string> splitAtBlanks(const std::string& text) {
 }  // namespace
 
 units::Moment momentOf(const Row& row, const std::string& name) {
-  return {std::chrono::sys_time<std::chrono::milliseconds>{std::chrono::milliseconds{row.integer(name + "_ms")}},
+  return {std::chrono::sys_time<std::chrono::milliseconds>{
+              std::chrono::milliseconds{row.integer(name + "_ms")}},
           std::chrono::minutes{row.integer(name + "_offset_min")}};
 }
 
@@ -44,7 +45,9 @@ app::Person personOf(const Row& row) {
   return {row.integer("n"), row.integer("version"), row.text("code"), row.text("name")};
 }
 
-Row rowOf(const app::Person& person) { return {{"code", person.code}, {"name", textOrNull(person.name)}}; }
+Row rowOf(const app::Person& person) {
+  return {{"code", person.code}, {"name", textOrNull(person.name)}};
+}
 
 app::SubstanceRecord substanceOf(const Row& row) {
   return {.n = row.integer("n"),
@@ -179,30 +182,31 @@ Row rowOf(const app::RunRecord& run, const PersonNumber& number) {
 }
 
 app::ComponentRecord componentOf(const Row& row, const PersonCode& code) {
-  app::ComponentRecord component{.n = row.integer("n"),
-                                 .version = row.integer("version"),
-                                 .run = row.integer("run_n"),
-                                 .position = static_cast<int>(row.integer("position")),
-                                 .key = row.text("key"),
-                                 .role = row.text("role"),
-                                 .name = row.text("name"),
-                                 .substance = row.integer("substance_n"),
-                                 .lot = row.integer("lot_n"),
-                                 .stock = row.integer("stock_n"),
-                                 .planned_mmol = row.maybeReal("planned_mmol"),
-                                 .planned_molPercent = row.maybeReal("planned_mol_percent"),
-                                 .planned_mol_L = row.maybeReal("planned_mol_l"),
-                                 .target_mg = row.maybeReal("target_mg"),
-                                 .target_uL = row.maybeReal("target_ul"),
-                                 .actualText = row.text("actual_text"),
-                                 .actual_mg = row.maybeReal("actual_mg"),
-                                 .actual_uL = row.maybeReal("actual_ul"),
-                                 .weighed = {},
-                                 .weighedBy = row.isNull("weighed_by_n") ? "" : code(row.integer("weighed_by_n")),
-                                 .charged_mmol = row.maybeReal("charged_mmol"),
-                                 .uCharged_mmol = row.maybeReal("u_charged_mmol"),
-                                 .charged_molPercent = row.maybeReal("charged_mol_percent"),
-                                 .charged_mol_L = row.maybeReal("charged_mol_l")};
+  app::ComponentRecord component{
+      .n = row.integer("n"),
+      .version = row.integer("version"),
+      .run = row.integer("run_n"),
+      .position = static_cast<int>(row.integer("position")),
+      .key = row.text("key"),
+      .role = row.text("role"),
+      .name = row.text("name"),
+      .substance = row.integer("substance_n"),
+      .lot = row.integer("lot_n"),
+      .stock = row.integer("stock_n"),
+      .planned_mmol = row.maybeReal("planned_mmol"),
+      .planned_molPercent = row.maybeReal("planned_mol_percent"),
+      .planned_mol_L = row.maybeReal("planned_mol_l"),
+      .target_mg = row.maybeReal("target_mg"),
+      .target_uL = row.maybeReal("target_ul"),
+      .actualText = row.text("actual_text"),
+      .actual_mg = row.maybeReal("actual_mg"),
+      .actual_uL = row.maybeReal("actual_ul"),
+      .weighed = {},
+      .weighedBy = row.isNull("weighed_by_n") ? "" : code(row.integer("weighed_by_n")),
+      .charged_mmol = row.maybeReal("charged_mmol"),
+      .uCharged_mmol = row.maybeReal("u_charged_mmol"),
+      .charged_molPercent = row.maybeReal("charged_mol_percent"),
+      .charged_mol_L = row.maybeReal("charged_mol_l")};
   if (!row.isNull("weighed_ms")) component.weighed = momentOf(row, "weighed");
   return component;
 }
@@ -228,7 +232,9 @@ Row rowOf(const app::ComponentRecord& component, const PersonNumber& number) {
   row.set("weighed_ms", Cell{});
   row.set("weighed_offset_min", Cell{});
   if (component.weighed) setMoment(row, "weighed", *component.weighed);
-  row.set("weighed_by_n", component.weighedBy.empty() ? referenceOrNull(0) : referenceOrNull(number(component.weighedBy)));
+  row.set("weighed_by_n", component.weighedBy.empty()
+                              ? referenceOrNull(0)
+                              : referenceOrNull(number(component.weighedBy)));
   row.set("charged_mmol", numberOrNull(component.charged_mmol));
   row.set("u_charged_mmol", numberOrNull(component.uCharged_mmol));
   row.set("charged_mol_percent", numberOrNull(component.charged_molPercent));
@@ -297,15 +303,16 @@ app::DatasetRecord datasetOf(const Row& row) {
     const bool there = column.is_object() && column.contains(name) && column[name].is_string();
     return there ? column[name].get<std::string>() : std::string{};
   };
-  for (const auto& column : columns) dataset.columns.push_back({textIn(column, "name"), textIn(column, "unit")});
+  for (const auto& column : columns)
+    dataset.columns.push_back({textIn(column, "name"), textIn(column, "unit")});
   return dataset;
 }
 
 Row rowOf(const app::DatasetRecord& dataset) {
   std::string columns;
   for (const app::DatasetColumn& column : dataset.columns) {
-    columns += fmt::format(R"({}{{"name":{},"unit":{}}})", columns.empty() ? "" : ",", canonicalText(column.name),
-                           canonicalText(column.unit));
+    columns += fmt::format(R"({}{{"name":{},"unit":{}}})", columns.empty() ? "" : ",",
+                           canonicalText(column.name), canonicalText(column.unit));
   }
   return {{"code", dataset.code},
           {"kind", dataset.kind},

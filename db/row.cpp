@@ -74,7 +74,8 @@ bool isSame(const Cell& a, const Cell& b) {
   if (a.index() == b.index()) {
     // Bit by bit, so that a changed sign of zero or a NaN is a change.
     const auto* x = std::get_if<double>(&a);
-    return x != nullptr ? std::bit_cast<std::uint64_t>(*x) == std::bit_cast<std::uint64_t>(std::get<double>(b))
+    return x != nullptr ? std::bit_cast<std::uint64_t>(*x) ==
+                              std::bit_cast<std::uint64_t>(std::get<double>(b))
                         : a == b;
   }
   const auto* real = std::get_if<double>(&a);
@@ -82,7 +83,8 @@ bool isSame(const Cell& a, const Cell& b) {
   if (real != nullptr && whole != nullptr) return *real == static_cast<double>(*whole);
   const auto* otherReal = std::get_if<double>(&b);
   const auto* otherWhole = std::get_if<std::int64_t>(&a);
-  return otherReal != nullptr && otherWhole != nullptr && *otherReal == static_cast<double>(*otherWhole);
+  return otherReal != nullptr && otherWhole != nullptr &&
+         *otherReal == static_cast<double>(*otherWhole);
 }
 
 }  // namespace vialkeeper::db

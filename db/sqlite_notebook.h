@@ -10,16 +10,18 @@
 
 namespace vialkeeper::db {
 
-/// Makes a new notebook file. Fault: there is a file of that name, the folder is missing or read-only,
-/// locks do not work there.
+/// Makes a new notebook file. Fault: there is a file of that name, the folder is missing or
+/// read-only, locks do not work there.
 [[nodiscard]] text::Checked<std::unique_ptr<app::Notebook>> createNotebook(const std::string& file);
 
 enum class OpenFor { kReading, kWriting };
 
-/// Opens a notebook file. A file of an older form is brought to the newest after a copy was made beside
-/// it; a newer one, one that may not be written, or one on a folder where locks do not work opens for
-/// reading only, and says why. `stamp` names that copy. Fault: no such file, no notebook, damaged.
-[[nodiscard]] text::Checked<std::unique_ptr<app::Notebook>> openNotebook(const std::string& file, OpenFor use,
+/// Opens a notebook file. A file of an older form is brought to the newest after a copy was made
+/// beside it; a newer one, one that may not be written, or one on a folder where locks do not work
+/// opens for reading only, and says why. `stamp` names that copy. Fault: no such file, no notebook,
+/// damaged.
+[[nodiscard]] text::Checked<std::unique_ptr<app::Notebook>> openNotebook(const std::string& file,
+                                                                         OpenFor use,
                                                                          const std::string& stamp);
 
 }  // namespace vialkeeper::db

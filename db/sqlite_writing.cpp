@@ -18,7 +18,8 @@
 namespace vialkeeper::db {
 namespace {
 
-static_assert(std::endian::native == std::endian::little, "blocks are written as the machine holds them");
+static_assert(std::endian::native == std::endian::little,
+              "blocks are written as the machine holds them");
 
 std::unexpected<text::Faults> fault(std::string what, std::string mend) {
   return std::unexpected(text::Faults{{.what = std::move(what), .mend = std::move(mend)}});
@@ -65,9 +66,11 @@ void SqliteWriting::addNames(app::RowNumber substance, const app::SubstanceRecor
   for (const std::string& name : names) {
     const std::string folded = app::foldName(name);
     const auto known = m_connection.integer(
-        "SELECT count(*) FROM substance_name WHERE substance_n = ? AND name = ?", {Cell{substance}, Cell{name}});
+        "SELECT count(*) FROM substance_name WHERE substance_n = ? AND name = ?",
+        {Cell{substance}, Cell{name}});
     if (known == 0) {
-      (void)m_writer.insert("substance_name", {{"substance_n", substance}, {"name", name}, {"folded", folded}});
+      (void)m_writer.insert("substance_name",
+                            {{"substance_n", substance}, {"name", name}, {"folded", folded}});
     }
   }
 }
@@ -86,19 +89,23 @@ text::Checked<void> SqliteWriting::changeSubstance(const app::SubstanceRecord& s
 
 text::Checked<app::RowNumber> SqliteWriting::addCard(const app::ShelfCard& card) {
   const app::ShelfKindInfo& info = app::shelfKind(card.kind);
-  if (m_connection.integer(fmt::format("SELECT n FROM {} WHERE name = ?", info.table), {Cell{card.name}}) != 0) {
-    return fault(fmt::format("there is a {} called {} already", info.word, card.name), "choose another name");
+  if (m_connection.integer(fmt::format("SELECT n FROM {} WHERE name = ?", info.table),
+                           {Cell{card.name}}) != 0) {
+    return fault(fmt::format("there is a {} called {} already", info.word, card.name),
+                 "choose another name");
   }
   return m_writer.insert(std::string(info.table), rowOf(card));
 }
 
 text::Checked<void> SqliteWriting::changeCard(const app::ShelfCard& card) {
-  return m_writer.update(std::string(app::shelfKind(card.kind).table), card.n, card.version, rowOf(card));
+  return m_writer.update(std::string(app::shelfKind(card.kind).table), card.n, card.version,
+                         rowOf(card));
 }
 
 text::Checked<app::RowNumber> SqliteWriting::addAttachment(std::string_view bytes) {
   const std::string digest = sha256(bytes);
-  const auto known = m_connection.integer("SELECT n FROM attachment WHERE sha256 = ?", {Cell{Blob{digest}}});
+  const auto known =
+      m_connection.integer("SELECT n FROM attachment WHERE sha256 = ?", {Cell{Blob{digest}}});
   if (known != 0) return known;
   return m_writer.insert("attachment", {{"sha256", Blob{digest}},
                                         {"size", static_cast<std::int64_t>(bytes.size())},
@@ -116,11 +123,12 @@ text::Checked<std::string> SqliteWriting::nextRunCode(std::string_view person) {
   return fmt::format("{}-{:04}", person, last + 1);
 }
 
-text::Checked<app::RowNumber> SqliteWriting::addRun(const app::RunRecord& run,
-                                                    std::span<const app::ComponentRecord> components) {
+text::Checked<app::RowNumber> SqliteWriting::addRun(
+    const app::RunRecord& run, std::span<const app::ComponentRecord> components) {
   const auto number = [this](const std::string& code) { return personNumber(code); };
   if (m_connection.integer("SELECT n FROM run WHERE code = ?", {Cell{run.code}}) != 0) {
-    return fault(fmt::format("there is a run {} already", run.code), "leave the code out, the next free one is taken");
+    return fault(fmt::format("there is a run {} already", run.code),
+                 "leave the code out, the next free one is taken");
   }
   const app::RowNumber n = m_writer.insert("run", rowOf(run, number));
   m_writer.concerns(n);
@@ -149,12 +157,15 @@ text::Checked<void> SqliteWriting::changeComponent(const app::ComponentRecord& c
 text::Checked<app::RowNumber> SqliteWriting::addEvent(const app::EventRecord& event) {
   m_writer.concerns(event.run);
   if (event.supersedes != 0) {
-    const auto other = m_connection.integer("SELECT n FROM event WHERE supersedes_n = ?", {Cell{event.supersedes}});
-    if (other != 0) return fault("this entry has been corrected already", "correct the newer entry");
+    const auto other = m_connection.integer("SELECT n FROM event WHERE supersedes_n = ?",
+                                            {Cell{event.supersedes}});
+    if (other != 0)
+      return fault("this entry has been corrected already", "correct the newer entry");
   }
   const auto number = [this](const std::string& code) { return personNumber(code); };
   const app::RowNumber n = m_writer.insert("event", rowOf(event, number));
-  const bool words = event.kind == "observation" || event.kind == "addendum" || !event.note.empty() || event.supersedes != 0;
+  const bool words = event.kind == "observation" || event.kind == "addendum" ||
+                     !event.note.empty() || event.supersedes != 0;
   if (words) refreshWords(event.run);
   return n;
 }
@@ -164,9 +175,10 @@ text::Checked<std::string> SqliteWriting::nextDatasetCode() {
   return fmt::format("DS-{:04}", rows.empty() ? 1 : numberOf(rows.front().text("code")) + 1);
 }
 
-text::Checked<app::RowNumber> SqliteWriting::addDataset(const app::DatasetRecord& record,
-                                                        std::span<const std::vector<double>> values) {
-  if (values.size() != record.columns.size()) throw std::logic_error("addDataset: columns and values differ");
+text::Checked<app::RowNumber> SqliteWriting::addDataset(
+    const app::DatasetRecord& record, std::span<const std::vector<double>> values) {
+  if (values.size() != record.columns.size())
+    throw std::logic_error("addDataset: columns and values differ");
   const app::RowNumber n = m_writer.insert("dataset", rowOf(record));
   for (std::size_t c = 0; c < values.size(); ++c) {
     if (static_cast<std::int64_t>(values[c].size()) != record.rows) {
@@ -175,7 +187,8 @@ text::Checked<app::RowNumber> SqliteWriting::addDataset(const app::DatasetRecord
     const std::span<const double> column = values[c];
     for (std::int64_t block = 0; block * kBlockValues < record.rows; ++block) {
       const auto begin = static_cast<std::size_t>(block * kBlockValues);
-      const auto part = column.subspan(begin, std::min(static_cast<std::size_t>(kBlockValues), column.size() - begin));
+      const auto part = column.subspan(
+          begin, std::min(static_cast<std::size_t>(kBlockValues), column.size() - begin));
       (void)m_writer.insert("dataset_block", {{"dataset_n", n},
                                               {"column_index", static_cast<std::int64_t>(c)},
                                               {"block_index", block},
@@ -188,9 +201,10 @@ text::Checked<app::RowNumber> SqliteWriting::addDataset(const app::DatasetRecord
 
 text::Checked<void> SqliteWriting::linkDataset(app::RowNumber run, app::RowNumber dataset) {
   m_writer.concerns(run);
-  const auto known = m_connection.integer("SELECT n FROM run_dataset WHERE run_n = ? AND dataset_n = ?",
-                                          {Cell{run}, Cell{dataset}});
-  if (known != 0) return fault("this dataset is linked to the run already", "nothing is to be done");
+  const auto known = m_connection.integer(
+      "SELECT n FROM run_dataset WHERE run_n = ? AND dataset_n = ?", {Cell{run}, Cell{dataset}});
+  if (known != 0)
+    return fault("this dataset is linked to the run already", "nothing is to be done");
   (void)m_writer.insert("run_dataset", {{"run_n", run}, {"dataset_n", dataset}});
   return {};
 }
@@ -207,34 +221,41 @@ text::Checked<app::RowNumber> SqliteWriting::addSigningKey(const app::SigningKey
 
 text::Checked<app::RowNumber> SqliteWriting::addSeal(const app::SealRecord& seal) {
   m_writer.concerns(seal.run);
-  Row row{{"run_n", seal.run},
-          {"meaning", seal.meaning},
-          {"signing_key_n", seal.key},
-          {"canonical", seal.canonical},
-          {"sha256", Blob{seal.sha256}},
-          {"signature", Blob{seal.signature}}};
+  Row row{{"run_n", seal.run},           {"meaning", seal.meaning},
+          {"signing_key_n", seal.key},   {"canonical", seal.canonical},
+          {"sha256", Blob{seal.sha256}}, {"signature", Blob{seal.signature}}};
   setMoment(row, "signed", seal.signedAt);
   return m_writer.insert("seal", row);
 }
 
 void SqliteWriting::refreshWords(app::RowNumber run) {
   std::string observations;
-  for (const Row& row : m_connection.rows(
-           "SELECT raw, note, kind FROM event WHERE run_n = ? AND (kind IN ('observation', 'addendum') OR note IS NOT NULL) "
-           "AND n NOT IN (SELECT supersedes_n FROM event WHERE run_n = ? AND supersedes_n IS NOT NULL) ORDER BY at_ms, n",
-           {Cell{run}, Cell{run}})) {
+  for (const Row& row :
+       m_connection.rows("SELECT raw, note, kind FROM event WHERE run_n = ? AND (kind IN "
+                         "('observation', 'addendum') OR note IS NOT NULL) "
+                         "AND n NOT IN (SELECT supersedes_n FROM event WHERE run_n = ? AND "
+                         "supersedes_n IS NOT NULL) ORDER BY at_ms, n",
+                         {Cell{run}, Cell{run}})) {
     const std::string note = row.text("note");
     observations += (observations.empty() ? "" : "\n") + (note.empty() ? row.text("raw") : note);
   }
   const std::string columns = "run_n, code, title, aim, conclusion, observations";
   // The index forgets a text only if it is told the very words that it holds.
-  m_connection.run("INSERT INTO run_search(run_search, rowid, code, title, aim, conclusion, observations) "
-                   "SELECT 'delete', " + columns + " FROM run_words WHERE run_n = ?", {Cell{run}});
-  m_connection.run("INSERT OR REPLACE INTO run_words (" + columns + ") "
-                   "SELECT n, code, coalesce(title, ''), coalesce(aim, ''), coalesce(conclusion, ''), ? FROM run WHERE n = ?",
+  m_connection.run(
+      "INSERT INTO run_search(run_search, rowid, code, title, aim, conclusion, observations) "
+      "SELECT 'delete', " +
+          columns + " FROM run_words WHERE run_n = ?",
+      {Cell{run}});
+  m_connection.run("INSERT OR REPLACE INTO run_words (" + columns +
+                       ") "
+                       "SELECT n, code, coalesce(title, ''), coalesce(aim, ''), "
+                       "coalesce(conclusion, ''), ? FROM run WHERE n = ?",
                    {Cell{observations}, Cell{run}});
-  m_connection.run("INSERT INTO run_search(rowid, code, title, aim, conclusion, observations) "
-                   "SELECT " + columns + " FROM run_words WHERE run_n = ?", {Cell{run}});
+  m_connection.run(
+      "INSERT INTO run_search(rowid, code, title, aim, conclusion, observations) "
+      "SELECT " +
+          columns + " FROM run_words WHERE run_n = ?",
+      {Cell{run}});
 }
 
 }  // namespace vialkeeper::db

@@ -11,7 +11,8 @@ namespace vialkeeper::db {
 /// The writing half of a notebook, within one transaction that its maker holds.
 class SqliteWriting final : public app::Writing {
  public:
-  SqliteWriting(Connection& connection, AuditedWriter& writer) : m_connection(connection), m_writer(writer) {}
+  SqliteWriting(Connection& connection, AuditedWriter& writer)
+      : m_connection(connection), m_writer(writer) {}
 
   text::Checked<app::RowNumber> addPerson(const app::Person& person) override;
   text::Checked<app::RowNumber> addSubstance(const app::SubstanceRecord& substance) override;

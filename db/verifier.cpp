@@ -28,7 +28,8 @@ class Verifier {
     for (const std::string& table : auditedTables()) {
       step(table, [this, &table] { checkRecords(table); });
     }
-    for (const auto& [name, digest] : m_told) find(name, "the trail tells of it, but it is not there");
+    for (const auto& [name, digest] : m_told)
+      find(name, "the trail tells of it, but it is not there");
     step("attachments", [this] { checkAttachments(); });
     step("seals", [this] { checkSeals(); });
     return std::move(m_report);
@@ -37,7 +38,8 @@ class Verifier {
  private:
   void find(std::string where, std::string what) {
     constexpr std::size_t kMost = 1000;
-    if (m_report.findings.size() < kMost) m_report.findings.push_back({std::move(where), std::move(what)});
+    if (m_report.findings.size() < kMost)
+      m_report.findings.push_back({std::move(where), std::move(what)});
   }
 
   /// A step that damage cuts short is a finding; the next ones are still taken.
@@ -72,10 +74,12 @@ class Verifier {
       // A connection for reading cannot run the check; that is no damage.
       if (error.getErrorCode() != 8) find("full-text index", "does not match the runs' words");
     }
-    for (const Row& row : m_connection.rows(
-             "SELECT run.n AS n FROM run LEFT JOIN run_words ON run_n = run.n WHERE run_words.code IS NOT run.code OR "
-             "run_words.title IS NOT coalesce(run.title, '') OR run_words.aim IS NOT coalesce(run.aim, '') OR "
-             "run_words.conclusion IS NOT coalesce(run.conclusion, '')")) {
+    for (const Row& row :
+         m_connection.rows("SELECT run.n AS n FROM run LEFT JOIN run_words ON run_n = run.n WHERE "
+                           "run_words.code IS NOT run.code OR "
+                           "run_words.title IS NOT coalesce(run.title, '') OR run_words.aim IS NOT "
+                           "coalesce(run.aim, '') OR "
+                           "run_words.conclusion IS NOT coalesce(run.conclusion, '')")) {
       find(fmt::format("words of run {}", row.integer("n")), "differ from the run");
     }
   }
@@ -87,9 +91,11 @@ class Verifier {
     while (statement.executeStep()) {
       const Row revision = rowOf(statement);
       const std::string where = fmt::format("revision {}", revision.integer("seq"));
-      if (revision.integer("seq") != expected) find(where, fmt::format("revision {} is missing before it", expected));
+      if (revision.integer("seq") != expected)
+        find(where, fmt::format("revision {} is missing before it", expected));
       if (revision.bytes("previous") != previous) find(where, "does not follow the one before it");
-      if (revision.bytes("hash") != revisionHash(revision)) find(where, "was changed after it was written");
+      if (revision.bytes("hash") != revisionHash(revision))
+        find(where, "was changed after it was written");
       previous = revision.bytes("hash");
       expected = revision.integer("seq") + 1;
       ++m_report.revisions;
@@ -114,7 +120,8 @@ class Verifier {
   }
 
   void checkRecords(const std::string& table) {
-    SQLite::Statement statement(m_connection.database(), fmt::format("SELECT * FROM {} ORDER BY n", table));
+    SQLite::Statement statement(m_connection.database(),
+                                fmt::format("SELECT * FROM {} ORDER BY n", table));
     while (statement.executeStep()) {
       const Row row = rowOf(statement);
       const std::string name = fmt::format("{} {}", table, row.integer("n"));
@@ -122,7 +129,8 @@ class Verifier {
       if (told == m_told.end()) {
         find(name, "is there, but the trail does not tell of it");
       } else {
-        if (told->second != sha256(canonicalRow(row))) find(name, "differs from what the trail tells");
+        if (told->second != sha256(canonicalRow(row)))
+          find(name, "differs from what the trail tells");
         m_told.erase(told);
       }
       ++m_report.records;
@@ -130,27 +138,33 @@ class Verifier {
   }
 
   void checkAttachments() {
-    SQLite::Statement statement(m_connection.database(), "SELECT n, sha256, size, data FROM attachment ORDER BY n");
+    SQLite::Statement statement(m_connection.database(),
+                                "SELECT n, sha256, size, data FROM attachment ORDER BY n");
     while (statement.executeStep()) {
       const Row row = rowOf(statement);
       ++m_report.attachments;
       const std::string data = row.bytes("data");
-      if (sha256(data) != row.bytes("sha256") || static_cast<std::int64_t>(data.size()) != row.integer("size")) {
+      if (sha256(data) != row.bytes("sha256") ||
+          static_cast<std::int64_t>(data.size()) != row.integer("size")) {
         find(fmt::format("attachment {}", row.integer("n")), "its bytes do not match its hash");
       }
     }
   }
 
   void checkSeals() {
-    for (const Row& seal : m_connection.rows(
-             "SELECT seal.*, public_key, run.code AS code FROM seal JOIN signing_key ON signing_key.n = signing_key_n "
-             "JOIN run ON run.n = seal.run_n ORDER BY seal.n")) {
+    for (const Row& seal :
+         m_connection.rows("SELECT seal.*, public_key, run.code AS code FROM seal JOIN signing_key "
+                           "ON signing_key.n = signing_key_n "
+                           "JOIN run ON run.n = seal.run_n ORDER BY seal.n")) {
       ++m_report.seals;
       const std::string where = fmt::format("seal {} of {}", seal.integer("n"), seal.text("code"));
       const std::string canonical = seal.text("canonical");
-      if (sha256(canonical) != seal.bytes("sha256")) find(where, "its text does not match its hash");
-      const auto message = sealMessage(seal.text("meaning"), seal.integer("signed_ms"), seal.bytes("sha256"));
-      if (!isSignedBy(seal.bytes("public_key"), message, seal.bytes("signature"))) find(where, "its signature is not valid");
+      if (sha256(canonical) != seal.bytes("sha256"))
+        find(where, "its text does not match its hash");
+      const auto message =
+          sealMessage(seal.text("meaning"), seal.integer("signed_ms"), seal.bytes("sha256"));
+      if (!isSignedBy(seal.bytes("public_key"), message, seal.bytes("signature")))
+        find(where, "its signature is not valid");
       if (rawMember(canonical, "own") != ownRecordsText(m_connection, seal.integer("run_n"))) {
         find(where, "the run is not what was signed");
       }

@@ -45,8 +45,9 @@ std::string lockingFault(const std::string& notebook) {
   const std::string probe = fmt::format("{}-lock-{}", notebook, ::getpid());
   const int first = ::open(probe.c_str(), O_RDWR | O_CREAT | O_CLOEXEC, 0600);
   if (first < 0) {
-    return errno == EACCES || errno == EROFS || errno == EPERM ? "the folder may not be written"
-                                                               : "no file can be made in the folder";
+    return errno == EACCES || errno == EROFS || errno == EPERM
+               ? "the folder may not be written"
+               : "no file can be made in the folder";
   }
   const int second = ::open(probe.c_str(), O_RDWR | O_CLOEXEC);
   const bool firstLocked = lock(first);
@@ -54,7 +55,8 @@ std::string lockingFault(const std::string& notebook) {
   ::close(first);
   if (second >= 0) ::close(second);
   ::unlink(probe.c_str());
-  if (!firstLocked) return "the folder's file system does not lock files, so two writers could spoil the notebook";
+  if (!firstLocked)
+    return "the folder's file system does not lock files, so two writers could spoil the notebook";
   if (secondLocked) return "locks on the folder's file system do not keep a second writer out";
   return {};
 }

@@ -30,8 +30,8 @@ struct PdfDocument {
 [[nodiscard]] text::Checked<PdfDocument> printStockSheets(
     const std::vector<app::StockSheetContent>& contents, Paper paper);
 
-/// Labels of vials, one a page of 62 mm × 29 mm, the size of a common label roll (common practice, no
-/// source); pure black, for printers that know nothing else. Long texts are set smaller;
+/// Labels of vials, one a page of 62 mm × 29 mm, the size of a common label roll (common practice,
+/// no source); pure black, for printers that know nothing else. Long texts are set smaller;
 /// contents that still have no room are cut with an ellipsis, then the title after two lines and
 /// the person; the code, conditions, hazards and caution never.
 /// Fault: no content, a text for the printed code that is too long for a label, hazards and caution

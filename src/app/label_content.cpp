@@ -41,20 +41,22 @@ LabelContent vialLabel(const PlannedRun& run) {
       solvents.push_back(component.name);
     } else {
       const std::string ratio = ratioText(component, run.charge.components[i]);
-      contents.push_back(ratio.empty() ? component.name : fmt::format("{} {}", component.name, ratio));
+      contents.push_back(ratio.empty() ? component.name
+                                       : fmt::format("{} {}", component.name, ratio));
     }
   }
   std::vector<std::string> gases;
   for (const charge::EvolvedGas& gas : run.plan.gases) gases.push_back(speciesText(gas.species));
-  LabelContent label{.code = sheetCode(run),
-                     .title = run.plan.title,
-                     .qrText = run.plan.code.empty() ? "plan " + planMark(run.planText) : run.plan.code,
-                     .lines = {joined(contents, ", "), joined(solvents, "/")},
-                     .conditions = lightText(run.plan.irradiation),
-                     .hazards = hazardCodes(run.plan),
-                     .caution = gases.empty() ? "" : fmt::format("gives off {}: pressure", joined(gases, ", ")),
-                     .person = run.plan.chemist,
-                     .date = run.plan.date};
+  LabelContent label{
+      .code = sheetCode(run),
+      .title = run.plan.title,
+      .qrText = run.plan.code.empty() ? "plan " + planMark(run.planText) : run.plan.code,
+      .lines = {joined(contents, ", "), joined(solvents, "/")},
+      .conditions = lightText(run.plan.irradiation),
+      .hazards = hazardCodes(run.plan),
+      .caution = gases.empty() ? "" : fmt::format("gives off {}: pressure", joined(gases, ", ")),
+      .person = run.plan.chemist,
+      .date = run.plan.date};
   if (run.plan.seal) label.lines.back() += " under " + atmosphereText(*run.plan.seal);
   return label;
 }

@@ -21,11 +21,14 @@ std::expected<MolarMassAnswer, text::Fault> massOfFormula(std::string_view formu
   const std::string_view content = text::trimmed(formula);
   const auto composition = chem::parseFormula(content);
   if (!composition) {
-    return fault(fmt::format("{}: {}", text::quoted(content), whatWithPosition(composition.error(), content)),
+    return fault(fmt::format("{}: {}", text::quoted(content),
+                             whatWithPosition(composition.error(), content)),
                  composition.error().mend);
   }
   const auto mass = chem::molarMass(*composition);
-  if (!mass) return fault(fmt::format("{}: {}", text::quoted(content), mass.error().what), mass.error().mend);
+  if (!mass)
+    return fault(fmt::format("{}: {}", text::quoted(content), mass.error().what),
+                 mass.error().mend);
   return MolarMassAnswer{toHillFormula(*composition), *mass};
 }
 
@@ -34,7 +37,8 @@ std::expected<MolarMassAnswer, text::Fault> massOfSmiles(std::string_view smiles
   if (!engine) return fault(engine.error().what, engine.error().mend);
   const auto structure = (*engine)->read(smiles);
   if (!structure) {
-    return fault(fmt::format("{}: {}", text::quoted(smiles), structure.error().what), structure.error().mend);
+    return fault(fmt::format("{}: {}", text::quoted(smiles), structure.error().what),
+                 structure.error().mend);
   }
   return massOfFormula(structure->formula);
 }

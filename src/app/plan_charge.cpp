@@ -25,14 +25,16 @@ Checked<std::optional<units::Amount>> wantedAmount(const ChargeRequest& request,
   stats::Causes causes;
   text::Notices notices;
   const std::size_t limiting = plan.indexOf(plan.limiting);
-  const charge::Material material(plan, plan.components[limiting], substances.components[limiting], causes,
-                                  notices);
-  const auto amount = material.isGas() ? std::nullopt : material.amountInMass(request.scaleToMass->si());
+  const charge::Material material(plan, plan.components[limiting], substances.components[limiting],
+                                  causes, notices);
+  const auto amount =
+      material.isGas() ? std::nullopt : material.amountInMass(request.scaleToMass->si());
   if (amount) return units::Amount::fromMoles(amount->value());
-  return std::unexpected(Faults{{.file = plan.file,
-                                 .field = "component." + plan.limiting,
-                                 .what = "a mass of the limiting component says nothing about its amount",
-                                 .mend = "scale to an amount such as 0.5 mmol"}});
+  return std::unexpected(
+      Faults{{.file = plan.file,
+              .field = "component." + plan.limiting,
+              .what = "a mass of the limiting component says nothing about its amount",
+              .mend = "scale to an amount such as 0.5 mmol"}});
 }
 
 Checked<Plan> scaledAsAsked(const ChargeRequest& request, Plan plan, const Substances& substances) {
@@ -51,7 +53,8 @@ Checked<Plan> scaledAsAsked(const ChargeRequest& request, Plan plan, const Subst
                                  .mend = "add [vial] with its volume"}});
 }
 
-/// The weighed file's faults are told beside the plan's, so it is read as soon as the keys are known.
+/// The weighed file's faults are told beside the plan's, so it is read as soon as the keys are
+/// known.
 Checked<charge::Weighings> readWeighedFile(const ChargeRequest& request, const Plan& plan) {
   if (!request.weighedFile) return charge::Weighings{};
   auto bytes = readFile(*request.weighedFile);
@@ -67,7 +70,8 @@ Checked<PlannedRun> planCharge(const ChargeRequest& request) {
   return planCharge(*std::move(bytes), request.planFile, request);
 }
 
-Checked<PlannedRun> planCharge(std::string planText, const std::string& file, const ChargeRequest& request) {
+Checked<PlannedRun> planCharge(std::string planText, const std::string& file,
+                               const ChargeRequest& request) {
   auto plan = charge::readPlan(planText, file);
   if (!plan) return std::unexpected(plan.error());
   auto substances = charge::resolveSubstances(*plan, charge::structureModuleReader());
@@ -79,7 +83,8 @@ Checked<PlannedRun> planCharge(std::string planText, const std::string& file, co
 
   auto scaledPlan = scaledAsAsked(request, *std::move(plan), *substances);
   if (!scaledPlan) return std::unexpected(scaledPlan.error());
-  auto result = request.weighedFile ? charge::chargeAsWeighed(*scaledPlan, *substances, *weighings, request.retarget)
+  auto result = request.weighedFile ? charge::chargeAsWeighed(*scaledPlan, *substances, *weighings,
+                                                              request.retarget)
                                     : charge::computeCharge(*scaledPlan, *substances);
   if (!result) {
     for (text::Fault& fault : result.error()) {
@@ -87,7 +92,8 @@ Checked<PlannedRun> planCharge(std::string planText, const std::string& file, co
     }
     return std::unexpected(result.error());
   }
-  return PlannedRun{std::move(planText), *std::move(scaledPlan), *std::move(substances), *std::move(result)};
+  return PlannedRun{std::move(planText), *std::move(scaledPlan), *std::move(substances),
+                    *std::move(result)};
 }
 
 }  // namespace vialkeeper::app

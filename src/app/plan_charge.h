@@ -21,8 +21,9 @@ struct ChargeRequest {
   std::optional<std::string> weighedFile = {};
   charge::Retarget retarget = charge::Retarget::kNo;
   std::optional<units::Amount> scaleToAmount = {};  ///< of the limiting component
-  std::optional<units::Mass> scaleToMass = {};      ///< of the limiting component's material as supplied
-  std::optional<units::Volume> scaleToVial = {};    ///< brim-full volume of another vial
+  std::optional<units::Mass> scaleToMass =
+      {};  ///< of the limiting component's material as supplied
+  std::optional<units::Volume> scaleToVial = {};  ///< brim-full volume of another vial
 };
 
 /// A plan with its charge.

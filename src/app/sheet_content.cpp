@@ -52,7 +52,8 @@ SheetRow rowOf(const PlannedRun& run, std::size_t i) {
                .actual = {}};
   for (const text::Notice& notice : charge.notices) row.notices.push_back(notice.text);
   if (charge.charged) {
-    row.actual = charge.charged->mass ? shown(*charge.charged->mass, 4) : shown(*charge.charged->volume, 4);
+    row.actual =
+        charge.charged->mass ? shown(*charge.charged->mass, 4) : shown(*charge.charged->volume, 4);
   }
   return row;
 }
@@ -68,21 +69,27 @@ SchemeContent schemeOf(const PlannedRun& run) {
     } else if (component.isSolvent()) {
       solvents.push_back(component.name);
       if (component.amount.basis == Basis::kShare) parts.push_back(component.amount.asWritten);
-    } else if (component.role != charge::Role::kStandard && component.role != charge::Role::kProduct) {
+    } else if (component.role != charge::Role::kStandard &&
+               component.role != charge::Role::kProduct) {
       const std::string ratio = ratioText(component, run.charge.components[i]);
-      scheme.above.push_back(ratio.empty() ? component.name : fmt::format("{} ({})", component.name, ratio));
+      scheme.above.push_back(ratio.empty() ? component.name
+                                           : fmt::format("{} ({})", component.name, ratio));
     }
   }
   for (const charge::ProductPlan& product : run.plan.products) {
     scheme.products.push_back({product.identity.smiles, product.name});
   }
-  for (const charge::EvolvedGas& gas : run.plan.gases) scheme.gases.push_back(speciesText(gas.species));
+  for (const charge::EvolvedGas& gas : run.plan.gases)
+    scheme.gases.push_back(speciesText(gas.species));
   std::string liquid = fmt::format("{}", fmt::join(solvents, "/"));
-  if (parts.size() > 1 && parts.size() == solvents.size()) liquid += fmt::format(" {}", fmt::join(parts, ":"));
+  if (parts.size() > 1 && parts.size() == solvents.size())
+    liquid += fmt::format(" {}", fmt::join(parts, ":"));
   const ComponentCharge* limiting = run.charge.find(run.charge.limiting);
-  if (limiting->concentration) liquid += (liquid.empty() ? "" : ", ") + shown(*limiting->concentration);
+  if (limiting->concentration)
+    liquid += (liquid.empty() ? "" : ", ") + shown(*limiting->concentration);
   if (!liquid.empty()) scheme.below.push_back(liquid);
-  if (const std::string light = lightText(run.plan.irradiation); !light.empty()) scheme.below.push_back(light);
+  if (const std::string light = lightText(run.plan.irradiation); !light.empty())
+    scheme.below.push_back(light);
   return scheme;
 }
 
@@ -91,20 +98,23 @@ VialContent vialOf(const PlannedRun& run) {
   const double liquid_mL = run.charge.totalLiquid.millilitres();
   if (run.plan.vial) {
     const charge::VialPlan& plan = *run.plan.vial;
-    const double headspace_mL = plan.volume.millilitres() - plan.displaced.millilitres() - liquid_mL;
+    const double headspace_mL =
+        plan.volume.millilitres() - plan.displaced.millilitres() - liquid_mL;
     if (!plan.name.empty()) vial.lines.push_back(plan.name);
-    vial.lines.push_back(fmt::format("{:.2f} mL liquid, {:.0f} % of {:.3g} mL", liquid_mL, 100.0 * vial.fill,
-                                     plan.volume.millilitres()));
+    vial.lines.push_back(fmt::format("{:.2f} mL liquid, {:.0f} % of {:.3g} mL", liquid_mL,
+                                     100.0 * vial.fill, plan.volume.millilitres()));
     vial.lines.push_back(fmt::format("{:.2f} mL headspace", headspace_mL));
-    vial.lines.push_back(plan.ratedGauge ? fmt::format("rated {} gauge, used to {:.0f} %", shown(*plan.ratedGauge),
-                                                       100.0 * plan.derating)
-                                         : "no pressure rating known");
+    vial.lines.push_back(plan.ratedGauge
+                             ? fmt::format("rated {} gauge, used to {:.0f} %",
+                                           shown(*plan.ratedGauge), 100.0 * plan.derating)
+                             : "no pressure rating known");
   } else {
     vial.lines.push_back(fmt::format("{:.2f} mL liquid", liquid_mL));
   }
   if (run.plan.seal) {
-    vial.lines.push_back(fmt::format("closed under {} at {}, {} absolute", atmosphereText(*run.plan.seal),
-                                     shown(run.plan.seal->temperature), shown(run.plan.seal->pressure, 4)));
+    vial.lines.push_back(
+        fmt::format("closed under {} at {}, {} absolute", atmosphereText(*run.plan.seal),
+                    shown(run.plan.seal->temperature), shown(run.plan.seal->pressure, 4)));
   }
   const std::string light = lightText(run.plan.irradiation);
   if (!run.plan.irradiation.lamp.empty()) {
@@ -141,20 +151,21 @@ std::string planMark(std::string_view planText) {
 }
 
 SheetContent weighingSheet(const PlannedRun& run) {
-  SheetContent sheet{.title = run.plan.title.empty() ? "Untitled run" : run.plan.title,
-                     .code = sheetCode(run),
-                     .codeIsMark = run.plan.code.empty(),
-                     .qrText = run.plan.code.empty() ? "plan " + planMark(run.planText) : run.plan.code,
-                     .series = run.plan.series,
-                     .date = run.plan.date,
-                     .chemist = run.plan.chemist,
-                     .scheme = schemeOf(run),
-                     .rows = {},
-                     .notices = {},
-                     .vial = vialOf(run),
-                     .hazards = hazardsOf(run),
-                     .cautions = cautionsOf(run.plan),
-                     .footer = footerOf(run)};
+  SheetContent sheet{
+      .title = run.plan.title.empty() ? "Untitled run" : run.plan.title,
+      .code = sheetCode(run),
+      .codeIsMark = run.plan.code.empty(),
+      .qrText = run.plan.code.empty() ? "plan " + planMark(run.planText) : run.plan.code,
+      .series = run.plan.series,
+      .date = run.plan.date,
+      .chemist = run.plan.chemist,
+      .scheme = schemeOf(run),
+      .rows = {},
+      .notices = {},
+      .vial = vialOf(run),
+      .hazards = hazardsOf(run),
+      .cautions = cautionsOf(run.plan),
+      .footer = footerOf(run)};
   for (const std::size_t i : additionOrder(run)) sheet.rows.push_back(rowOf(run, i));
   for (const text::Notice& notice : run.charge.notices) sheet.notices.push_back(notice.text);
   return sheet;

@@ -27,20 +27,22 @@ struct SchemeContent {
   std::vector<std::string> above;  ///< catalysts and additives with their loadings, over the arrow
   std::vector<std::string> below;  ///< solvent, light, temperature, time, under the arrow
 
-  [[nodiscard]] bool isEmpty() const { return reactants.empty() || (products.empty() && gases.empty()); }
+  [[nodiscard]] bool isEmpty() const {
+    return reactants.empty() || (products.empty() && gases.empty());
+  }
 };
 
 /// One line of the table, in the order of addition.
 struct SheetRow {
   std::string name;
   std::string role;
-  std::string cas;        ///< empty where not known
-  std::string molarMass;  ///< `119.17 g/mol`; empty where not known
-  std::string supply;     ///< `solid, 98 %`, `stock 2.0 mM in acetonitrile`
-  std::string ratio;      ///< `1 equiv`, `5 mol%`, `9 parts`
-  std::string amount;     ///< `0.200 mmol`; empty where not known
-  std::string target;     ///< the number to aim at, `26.6`
-  std::string unit;       ///< `mg`
+  std::string cas;          ///< empty where not known
+  std::string molarMass;    ///< `119.17 g/mol`; empty where not known
+  std::string supply;       ///< `solid, 98 %`, `stock 2.0 mM in acetonitrile`
+  std::string ratio;        ///< `1 equiv`, `5 mol%`, `9 parts`
+  std::string amount;       ///< `0.200 mmol`; empty where not known
+  std::string target;       ///< the number to aim at, `26.6`
+  std::string unit;         ///< `mg`
   std::string alternative;  ///< of a neat liquid the same in the other unit, `= 25.8 µL`
   std::string tolerance;    ///< `± 0.5 mg`
   std::string device;       ///< `balance-0.01mg`; empty where none is named
@@ -56,7 +58,7 @@ struct ForecastContent {
 };
 
 struct VialContent {
-  double fill = 0.0;  ///< share of the vial below the liquid's surface, 0 to 1
+  double fill = 0.0;               ///< share of the vial below the liquid's surface, 0 to 1
   std::vector<std::string> lines;  ///< volumes, fill, atmosphere, lamp, temperature, time
   std::optional<ForecastContent> forecast;
 };
@@ -69,25 +71,25 @@ struct HazardContent {
 
 struct SheetContent {
   std::string title;
-  std::string code;      ///< the run's code, or the mark of the plan where it has none yet
+  std::string code;  ///< the run's code, or the mark of the plan where it has none yet
   bool codeIsMark = false;
   std::string qrText;
   std::string series;
-  std::string date;      ///< empty: a line to fill in
-  std::string chemist;   ///< empty: a line to fill in
+  std::string date;     ///< empty: a line to fill in
+  std::string chemist;  ///< empty: a line to fill in
   SchemeContent scheme;
   std::vector<SheetRow> rows;
   std::vector<std::string> notices;  ///< of the whole charge
   VialContent vial;
   std::vector<HazardContent> hazards;
   std::vector<std::string> cautions;
-  std::string footer;    ///< program, version, plan file
+  std::string footer;  ///< program, version, plan file
 };
 
 /// How to make one stock solution.
 struct StockSheetContent {
-  std::string title;     ///< `Stock 2.0 mM 4CzIPN in acetonitrile`
-  std::string forRun;    ///< code and title of the run it is for
+  std::string title;   ///< `Stock 2.0 mM 4CzIPN in acetonitrile`
+  std::string forRun;  ///< code and title of the run it is for
   std::string code;
   std::string qrText;
   std::string name;
@@ -96,8 +98,8 @@ struct StockSheetContent {
   std::string assay;
   std::string concentration;
   std::string solvent;
-  std::string flask;     ///< `10 mL volumetric flask, class A`
-  std::string target;    ///< mass to weigh, `15.8`
+  std::string flask;   ///< `10 mL volumetric flask, class A`
+  std::string target;  ///< mass to weigh, `15.8`
   std::string unit;
   std::string tolerance;
   std::string transfer;  ///< `200 µL into each vial`
@@ -115,10 +117,11 @@ struct LabelContent {
   std::string code;
   std::string title;
   std::string qrText;
-  std::vector<std::string> lines;  ///< contents in a few words: substrate, catalysts, solvent, atmosphere
-  std::string conditions;          ///< `440 nm, 35 °C, 20 h`
-  std::string hazards;             ///< codes of all components, each once: `H225 H302 H315`
-  std::string caution;             ///< one short line: `gives off H₂: pressure`
+  std::vector<std::string>
+      lines;               ///< contents in a few words: substrate, catalysts, solvent, atmosphere
+  std::string conditions;  ///< `440 nm, 35 °C, 20 h`
+  std::string hazards;     ///< codes of all components, each once: `H225 H302 H315`
+  std::string caution;     ///< one short line: `gives off H₂: pressure`
   std::string person;
   std::string date;
 };

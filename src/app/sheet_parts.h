@@ -19,16 +19,22 @@ struct TargetText {
   std::string tolerance;
 };
 
-/// Solids by mass, stocks, gases and solvents by volume, neat liquids by what their device measures.
-[[nodiscard]] TargetText targetText(const charge::ComponentPlan& plan, const charge::ComponentCharge& charge);
+/// Solids by mass, stocks, gases and solvents by volume, neat liquids by what their device
+/// measures.
+[[nodiscard]] TargetText targetText(const charge::ComponentPlan& plan,
+                                    const charge::ComponentCharge& charge);
 
 /// A mass with its tolerance, no finer than the balance's last digit.
-[[nodiscard]] TargetText massTarget(units::Mass mass, double tolerancePercent, const charge::Balance* balance);
+[[nodiscard]] TargetText massTarget(units::Mass mass, double tolerancePercent,
+                                    const charge::Balance* balance);
 
-[[nodiscard]] std::string molarMassText(const charge::Substance& substance);  ///< `119.17 g/mol`, or empty
-[[nodiscard]] std::string speciesText(const std::string& species);            ///< `H₂`
-[[nodiscard]] std::string atmosphereText(const charge::SealPlan& seal);       ///< `N₂`, `90 % N₂, 10 % O₂`
-[[nodiscard]] std::string lightText(const charge::IrradiationPlan& irradiation);  ///< `440 nm, 35 °C, 20 h`
+[[nodiscard]] std::string molarMassText(
+    const charge::Substance& substance);                            ///< `119.17 g/mol`, or empty
+[[nodiscard]] std::string speciesText(const std::string& species);  ///< `H₂`
+[[nodiscard]] std::string atmosphereText(
+    const charge::SealPlan& seal);  ///< `N₂`, `90 % N₂, 10 % O₂`
+[[nodiscard]] std::string lightText(
+    const charge::IrradiationPlan& irradiation);  ///< `440 nm, 35 °C, 20 h`
 
 /// The run's code, or `plan 3f9a2c1b`.
 [[nodiscard]] std::string sheetCode(const PlannedRun& run);

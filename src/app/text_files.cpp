@@ -45,16 +45,20 @@ std::unexpected<text::Faults> systemFault(const std::string& path, int error, bo
     case ENOENT:
       return writing ? fault(path, "the folder does not exist", "make it first or name another")
                      : fault(path, "there is no such file", "check the path");
-    case ENOTDIR: return fault(path, "a part of the path is not a folder", "check the path");
-    case EISDIR: return fault(path, "this is a folder, not a file", "name a file");
+    case ENOTDIR:
+      return fault(path, "a part of the path is not a folder", "check the path");
+    case EISDIR:
+      return fault(path, "this is a folder, not a file", "name a file");
     case EACCES:
     case EPERM:
     case EROFS:
       return fault(path, writing ? "no permission to write here" : "no permission to read the file",
                    "choose another place, or ask for the permission");
     case ENOSPC:
-    case EDQUOT: return fault(path, "the disk is full", "free some room; nothing was written");
-    default: return fault(path, std::strerror(error), "check the path and the disk");
+    case EDQUOT:
+      return fault(path, "the disk is full", "free some room; nothing was written");
+    default:
+      return fault(path, std::strerror(error), "check the path and the disk");
   }
 }
 
@@ -96,7 +100,8 @@ text::Checked<void> writeFile(const std::string& named, const std::string& bytes
   std::string path = named;
   if (::stat(named.c_str(), &status) == 0) {
     if (S_ISDIR(status.st_mode)) return systemFault(named, EISDIR, true);
-    if (!S_ISREG(status.st_mode)) return fault(named, "this is a device, not a file", "name a file");
+    if (!S_ISREG(status.st_mode))
+      return fault(named, "this is a device, not a file", "name a file");
     // Behind a link it is the file that is replaced, not the link.
     std::error_code unresolved;
     const auto resolved = std::filesystem::canonical(named, unresolved);
@@ -105,7 +110,8 @@ text::Checked<void> writeFile(const std::string& named, const std::string& bytes
   const std::string temporary = fmt::format("{}.part-{}", path, ::getpid());
   Descriptor file(::open(temporary.c_str(), O_WRONLY | O_CREAT | O_EXCL | O_CLOEXEC, 0666));
   if (!file.isOpen()) return systemFault(path, errno, true);
-  const bool written = writeAll(file.number(), bytes) && ::fsync(file.number()) == 0 && file.close();
+  const bool written =
+      writeAll(file.number(), bytes) && ::fsync(file.number()) == 0 && file.close();
   if (!written || ::rename(temporary.c_str(), path.c_str()) != 0) {
     const int error = errno;
     ::unlink(temporary.c_str());

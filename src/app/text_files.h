@@ -8,8 +8,8 @@
 
 namespace vialkeeper::app {
 
-/// The bytes of a file that a person named. Faults: there is no such file, it is a folder, it may not
-/// be read, it is larger than 64 MiB.
+/// The bytes of a file that a person named. Faults: there is no such file, it is a folder, it may
+/// not be read, it is larger than 64 MiB.
 [[nodiscard]] text::Checked<std::string> readFile(const std::string& path);
 
 /// Writes a file so that it is there whole or not at all: to a temporary name beside it, flushed to

@@ -33,7 +33,8 @@ class ChargeSolver {
                                 .role = plan.components[i].role,
                                 .name = plan.components[i].name,
                                 .substance = substances.components[i]};
-      m_materials.emplace_back(plan, plan.components[i], substances.components[i], m_causes, component.notices);
+      m_materials.emplace_back(plan, plan.components[i], substances.components[i], m_causes,
+                               component.notices);
       m_components.push_back(std::move(component));
     }
     m_planned_mol.resize(plan.components.size());
@@ -79,7 +80,8 @@ class ChargeSolver {
     const bool wantsDensity = m_materials[i].isNeatLiquid() && !m_materials[i].density();
     if (wantsDensity) {
       fault(i, "supply", fmt::format("the density of {} is not known", plan(i).name),
-            "give it, supply = { kind = \"liquid\", density = \"0.95 g/mL\" }; the solvent table does not hold it");
+            "give it, supply = { kind = \"liquid\", density = \"0.95 g/mL\" }; the solvent table "
+            "does not hold it");
     }
     if (!m_materials[i].molarMass() && !(wantsDensity && plan(i).isSolvent())) {
       fault(i, basis, fmt::format("the molar mass of {} is not known", plan(i).name),
@@ -87,18 +89,26 @@ class ChargeSolver {
     }
   }
 
-  /// Amount [mol] of a component whose basis stands on its own; nothing, with a fault, where it does not.
+  /// Amount [mol] of a component whose basis stands on its own; nothing, with a fault, where it
+  /// does not.
   std::optional<double> absoluteAmount(std::size_t i) {
     const AmountPlan& amount = plan(i).amount;
     std::optional<double> mol;
     switch (amount.basis) {
-      case Basis::kAmount: mol = amount.value; break;
-      case Basis::kMass: mol = valueOf(m_materials[i].amountInMass(amount.value)); break;
-      case Basis::kVolume: mol = valueOf(m_materials[i].amountInVolume(amount.value)); break;
+      case Basis::kAmount:
+        mol = amount.value;
+        break;
+      case Basis::kMass:
+        mol = valueOf(m_materials[i].amountInMass(amount.value));
+        break;
+      case Basis::kVolume:
+        mol = valueOf(m_materials[i].amountInVolume(amount.value));
+        break;
       case Basis::kConcentration:
         if (m_plan.liquid.total) mol = amount.value * m_plan.liquid.total->si();
         break;
-      default: break;
+      default:
+        break;
     }
     if (!mol) faultUnknown(i);
     return mol;
@@ -112,13 +122,26 @@ class ChargeSolver {
   void fixTarget(std::size_t i) {
     const AmountPlan& amount = plan(i).amount;
     switch (amount.basis) {
-      case Basis::kAmount: targetFromAmount(i, amount.value); break;
-      case Basis::kEquiv: targetFromAmount(i, amount.value * m_limiting_mol); break;
-      case Basis::kMolPercent: targetFromAmount(i, amount.value / 100.0 * m_limiting_mol); break;
-      case Basis::kConcentration: targetFromAmount(i, amount.value * m_total_m3); break;
-      case Basis::kMass: targetFromMass(i, amount.value); break;
-      case Basis::kVolume: targetFromVolume(i, amount.value); break;
-      case Basis::kShare: break;  // once all else is known
+      case Basis::kAmount:
+        targetFromAmount(i, amount.value);
+        break;
+      case Basis::kEquiv:
+        targetFromAmount(i, amount.value * m_limiting_mol);
+        break;
+      case Basis::kMolPercent:
+        targetFromAmount(i, amount.value / 100.0 * m_limiting_mol);
+        break;
+      case Basis::kConcentration:
+        targetFromAmount(i, amount.value * m_total_m3);
+        break;
+      case Basis::kMass:
+        targetFromMass(i, amount.value);
+        break;
+      case Basis::kVolume:
+        targetFromVolume(i, amount.value);
+        break;
+      case Basis::kShare:
+        break;  // once all else is known
     }
   }
 
@@ -159,7 +182,8 @@ class ChargeSolver {
   void setTarget(std::size_t i, std::optional<double> mass_kg, std::optional<double> volume_m3) {
     ComponentCharge& component = m_components[i];
     const Material& material = m_materials[i];
-    if (mass_kg && (material.isSolid() || material.isNeatLiquid())) component.targetMass = Mass::fromSi(*mass_kg);
+    if (mass_kg && (material.isSolid() || material.isNeatLiquid()))
+      component.targetMass = Mass::fromSi(*mass_kg);
     if (volume_m3 && !material.isSolid()) component.targetVolume = Volume::fromSi(*volume_m3);
     if (material.isGas()) return;
     const auto room = material.isSolid() ? material.volumeOfMass(mass_kg.value_or(0.0)) : volume_m3;
@@ -212,7 +236,8 @@ class ChargeSolver {
       const auto* stock = std::get_if<StockSupply>(&plan(i).supply);
       if (stock == nullptr || m_plan.solventOf(*stock) != solvent) continue;
       stocks += (stocks.empty() ? "" : ", ") + plan(i).key;
-      if (largest == solvent || m_components[i].liquidVolume > m_components[largest].liquidVolume) largest = i;
+      if (largest == solvent || m_components[i].liquidVolume > m_components[largest].liquidVolume)
+        largest = i;
     }
     fault(largest, toText(plan(largest).amount.basis),
           fmt::format("the stock {} brings {} more of {} than its share of {}", stocks,
@@ -233,7 +258,8 @@ class ChargeSolver {
 
   void faultTotal(double excess_m3) {
     faultLiquid(fmt::format("the liquids come to {} more than the total of {}",
-                            units::shown(Volume::fromSi(excess_m3)), units::shown(Volume::fromSi(m_total_m3))),
+                            units::shown(Volume::fromSi(excess_m3)),
+                            units::shown(Volume::fromSi(m_total_m3))),
                 "raise the total or lower the volumes");
   }
 
@@ -243,16 +269,20 @@ class ChargeSolver {
       if (component.liquidVolume) sum_m3 += component.liquidVolume->si();
     }
     if (!m_faults.empty()) return;
-    if (sum_m3 > m_total_m3 * (1.0 + 1e-9) + kVolumeRounding_m3) return faultTotal(sum_m3 - m_total_m3);
+    if (sum_m3 > m_total_m3 * (1.0 + 1e-9) + kVolumeRounding_m3)
+      return faultTotal(sum_m3 - m_total_m3);
     m_missing_m3 = m_total_m3 - sum_m3;
-    if (m_plan.vial && m_plan.vial->displaced.si() + m_total_m3 > m_plan.vial->volume.si() - kVolumeRounding_m3) {
-      faultLiquid(fmt::format("{} of liquid leave no headspace in a vial of {}", units::shown(Volume::fromSi(m_total_m3)),
-                              units::shown(m_plan.vial->volume)),
-                  "take a larger vial or less liquid");
+    if (m_plan.vial &&
+        m_plan.vial->displaced.si() + m_total_m3 > m_plan.vial->volume.si() - kVolumeRounding_m3) {
+      faultLiquid(
+          fmt::format("{} of liquid leave no headspace in a vial of {}",
+                      units::shown(Volume::fromSi(m_total_m3)), units::shown(m_plan.vial->volume)),
+          "take a larger vial or less liquid");
     }
   }
 
-  /// What the balance would show [kg]; of a stock, which has a volume for its target, by its density.
+  /// What the balance would show [kg]; of a stock, which has a volume for its target, by its
+  /// density.
   std::optional<double> weighedMass(std::size_t i) const {
     if (m_components[i].targetMass) return m_components[i].targetMass->si();
     const auto& volume = m_components[i].targetVolume;
@@ -270,9 +300,9 @@ class ChargeSolver {
       amount = m_materials[i].amountInMass(
           Uncertain(*mass_kg, device->balance()->standardUncertainty().si(), m_causes.add()));
     } else if (device != nullptr && device->pipette() != nullptr && component.targetVolume) {
-      amount = m_materials[i].amountInVolume(
-          Uncertain(component.targetVolume->si(),
-                    device->pipette()->standardUncertainty(*component.targetVolume).si(), m_causes.add()));
+      amount = m_materials[i].amountInVolume(Uncertain(
+          component.targetVolume->si(),
+          device->pipette()->standardUncertainty(*component.targetVolume).si(), m_causes.add()));
     }
     if (!amount) return Uncertain::unstated(*m_planned_mol[i], m_causes.addUnknown());
     return amount->mapped(*m_planned_mol[i], 1.0);
@@ -307,13 +337,14 @@ class ChargeSolver {
   }
 
   Charge assemble(bool retargeted) {
-    Charge charge{.limiting = m_plan.limiting,
-                  .limitingAmount = Amount::fromMoles(m_limiting_mol),
-                  .totalLiquid = Volume::fromSi(m_total_m3),
-                  .fill = m_plan.vial ? std::optional(m_total_m3 / m_plan.vial->volume.si()) : std::nullopt,
-                  .retargeted = retargeted,
-                  .components = std::move(m_components),
-                  .notices = {}};
+    Charge charge{
+        .limiting = m_plan.limiting,
+        .limitingAmount = Amount::fromMoles(m_limiting_mol),
+        .totalLiquid = Volume::fromSi(m_total_m3),
+        .fill = m_plan.vial ? std::optional(m_total_m3 / m_plan.vial->volume.si()) : std::nullopt,
+        .retargeted = retargeted,
+        .components = std::move(m_components),
+        .notices = {}};
     addNotices(m_plan, m_materials, Volume::fromSi(m_missing_m3), charge);
     return charge;
   }

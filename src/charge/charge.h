@@ -28,7 +28,8 @@ struct AsCharged {
   std::optional<stats::Uncertain> equiv = {};
   std::optional<stats::Uncertain> molPercent = {};
   std::optional<stats::Uncertain> concentration_mol_m3 = {};
-  std::optional<double> offTargetPercent = {};  ///< 100 (actual/target − 1); nothing for a target of zero
+  std::optional<double> offTargetPercent =
+      {};  ///< 100 (actual/target − 1); nothing for a target of zero
 };
 
 /// One component of the charge. Amounts carry the doubt that the device will give at the target.
@@ -44,8 +45,9 @@ struct ComponentCharge {
   std::optional<units::Mass> targetMass = {};      ///< solids and neat liquids
   std::optional<units::Volume> targetVolume = {};  ///< neat liquids, stocks and gases
   double tolerancePercent = 0.0;
-  std::optional<units::Volume> liquidVolume = {};  ///< room it takes in the liquid; nothing for gases
-  std::optional<units::Density> density = {};      ///< that was used, the plan's or the table's
+  std::optional<units::Volume> liquidVolume =
+      {};                                      ///< room it takes in the liquid; nothing for gases
+  std::optional<units::Density> density = {};  ///< that was used, the plan's or the table's
   std::string densitySource = {};
   std::optional<StockProposal> proposal = {};
   std::optional<AsCharged> charged = {};
@@ -68,12 +70,12 @@ struct Charge {
 ///
 /// Model (calculations.md 1): n = m w/M for neat material, n = c V for a stock, n = p V/(R T) for a
 /// gas. The liquid's volumes add up (ideal mixing); solids take no room unless their density is
-/// given. Shares divide the total less neat liquids, solvents of fixed volume, solids with a density
-/// and stocks in a solvent without a share; what stocks bring of a solvent counts towards its share.
-/// `limitingAmount`, where given, takes the place of the planned amount of the limiting component for
-/// everything that follows it: the re-target. The limiting component's own target stays.
-/// Faults: a molar mass or density that is needed and not known, stocks that bring more than the
-/// share of their solvent, volumes above the total, a liquid that leaves no headspace.
+/// given. Shares divide the total less neat liquids, solvents of fixed volume, solids with a
+/// density and stocks in a solvent without a share; what stocks bring of a solvent counts towards
+/// its share. `limitingAmount`, where given, takes the place of the planned amount of the limiting
+/// component for everything that follows it: the re-target. The limiting component's own target
+/// stays. Faults: a molar mass or density that is needed and not known, stocks that bring more than
+/// the share of their solvent, volumes above the total, a liquid that leaves no headspace.
 [[nodiscard]] text::Checked<Charge> computeCharge(
     const Plan& plan, const Substances& substances,
     std::optional<units::Amount> limitingAmount = std::nullopt);

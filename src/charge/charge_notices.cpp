@@ -32,10 +32,12 @@ struct Room {
   Volume volume;
 };
 
-std::optional<Room> largestRoom(const Plan& plan, const Charge& charge, std::span<const Volume> promised) {
+std::optional<Room> largestRoom(const Plan& plan, const Charge& charge,
+                                std::span<const Volume> promised) {
   std::optional<Room> best;
   for (std::size_t i = 0; i < plan.components.size(); ++i) {
-    if (plan.components[i].amount.basis != Basis::kShare || !charge.components[i].targetVolume) continue;
+    if (plan.components[i].amount.basis != Basis::kShare || !charge.components[i].targetVolume)
+      continue;
     const Volume left = *charge.components[i].targetVolume - promised[i];
     if (!best || left > best->volume) best = Room{i, left};
   }
@@ -43,16 +45,19 @@ std::optional<Room> largestRoom(const Plan& plan, const Charge& charge, std::spa
 }
 
 /// A weighing below the balance's minimum, and the stock solution that would avoid it. A proposal
-/// takes no more than half of the solvent that is still to be added, so that rinsing stays possible.
+/// takes no more than half of the solvent that is still to be added, so that rinsing stays
+/// possible.
 void noteMinimumWeight(const Plan& plan, const Material& material, std::size_t i, Charge& charge,
                        std::vector<Volume>& promised) {
   ComponentCharge& component = charge.components[i];
   const auto& device = plan.components[i].device;
   const Balance* balance = device ? device->balance() : nullptr;
-  if (balance == nullptr || !component.targetMass || !(*component.targetMass < balance->minimumWeight())) return;
+  if (balance == nullptr || !component.targetMass ||
+      !(*component.targetMass < balance->minimumWeight()))
+    return;
   note(component, "minimum-weight",
-       fmt::format("{} is below the least that {} may weigh to 0.1 %, {}", shown(*component.targetMass),
-                   device->name, shown(balance->minimumWeight())));
+       fmt::format("{} is below the least that {} may weigh to 0.1 %, {}",
+                   shown(*component.targetMass), device->name, shown(balance->minimumWeight())));
   const auto room = largestRoom(plan, charge, promised);
   if (!room || !component.amount_mol || !material.molarMass()) return;
   if (!(room->volume.si() > 0.0)) return;
@@ -66,7 +71,8 @@ void noteMinimumWeight(const Plan& plan, const Material& material, std::size_t i
   proposal.solventKey = plan.components[room->solvent].key;
   promised[room->solvent] = promised[room->solvent] + proposal.transfer;
   note(component, "stock-proposed",
-       fmt::format("make {:g} mL of a {} stock in {} ({} of {}) and take {} with {}; try first that it dissolves",
+       fmt::format("make {:g} mL of a {} stock in {} ({} of {}) and take {} with {}; try first "
+                   "that it dissolves",
                    proposal.flask.millilitres(), shown(proposal.concentration, 2),
                    plan.components[room->solvent].name, shown(proposal.stockMass), component.name,
                    shown(proposal.transfer), proposal.pipette));
@@ -74,7 +80,8 @@ void noteMinimumWeight(const Plan& plan, const Material& material, std::size_t i
 
 void notePipetteRange(const ComponentPlan& plan, ComponentCharge& component) {
   const Pipette* pipette = plan.device ? plan.device->pipette() : nullptr;
-  if (pipette == nullptr || !component.targetVolume || !(component.targetVolume->si() > 0.0)) return;
+  if (pipette == nullptr || !component.targetVolume || !(component.targetVolume->si() > 0.0))
+    return;
   if (*component.targetVolume < pipette->smallest) {
     note(component, "below-pipette-range",
          fmt::format("{} is below the least volume of {}, {}: take a smaller pipette",
@@ -91,10 +98,12 @@ void notePipetteRange(const ComponentPlan& plan, ComponentCharge& component) {
 void noteUndetermined(const ComponentPlan& plan, ComponentCharge& component) {
   if (component.amount_mol) return;
   note(component, "undetermined",
-       fmt::format("the molar mass of {} is not given, so its amount of substance is not known", plan.name));
+       fmt::format("the molar mass of {} is not given, so its amount of substance is not known",
+                   plan.name));
 }
 
-void noteWholeCharge(const Plan& plan, std::span<const Material> materials, Volume missing, Charge& charge) {
+void noteWholeCharge(const Plan& plan, std::span<const Material> materials, Volume missing,
+                     Charge& charge) {
   std::vector<std::string> solids;
   std::vector<std::string> liquids;
   std::vector<std::string> exact;
@@ -114,36 +123,43 @@ void noteWholeCharge(const Plan& plan, std::span<const Material> materials, Volu
   };
   if (charge.fill && *charge.fill > 0.5) {
     add("fill-above-half",
-        fmt::format("the liquid fills {:.0f} % of the vial; above half, little room is left for the gas",
-                    100.0 * *charge.fill),
+        fmt::format(
+            "the liquid fills {:.0f} % of the vial; above half, little room is left for the gas",
+            100.0 * *charge.fill),
         "liquid");
   }
   if (missing / charge.totalLiquid > 1e-6) {
     add("volume-not-filled",
-        fmt::format("{} of the total of {} are filled by no component", shown(missing), shown(charge.totalLiquid)),
+        fmt::format("{} of the total of {} are filled by no component", shown(missing),
+                    shown(charge.totalLiquid)),
         "liquid.total");
   }
   if (liquids.size() > 1) {
-    add("ideal-mixing", "volumes of liquids are taken to add up; mixing may change the total by some per cent",
+    add("ideal-mixing",
+        "volumes of liquids are taken to add up; mixing may change the total by some per cent",
         "liquid");
   }
   if (!solids.empty()) {
-    add("solids-take-no-room", fmt::format("solids without a density are taken to displace nothing: {}", joined(solids)),
+    add("solids-take-no-room",
+        fmt::format("solids without a density are taken to displace nothing: {}", joined(solids)),
         "liquid");
   }
   if (!exact.empty()) {
-    add("taken-as-exact", fmt::format("no uncertainty is given, so none is counted, for {}", joined(exact)), "");
+    add("taken-as-exact",
+        fmt::format("no uncertainty is given, so none is counted, for {}", joined(exact)), "");
   }
   if (!withoutDevice.empty()) {
     add("no-device",
-        fmt::format("no balance or pipette is named, so the uncertainty is not known, for {}", joined(withoutDevice)),
+        fmt::format("no balance or pipette is named, so the uncertainty is not known, for {}",
+                    joined(withoutDevice)),
         "");
   }
 }
 
 }  // namespace
 
-void addNotices(const Plan& plan, std::span<const Material> materials, Volume missing, Charge& charge) {
+void addNotices(const Plan& plan, std::span<const Material> materials, Volume missing,
+                Charge& charge) {
   std::vector<Volume> promised(materials.size(), Volume::fromSi(0.0));
   for (std::size_t i = 0; i < materials.size(); ++i) {
     noteUndetermined(plan.components[i], charge.components[i]);

@@ -9,9 +9,9 @@
 
 namespace vialkeeper::charge {
 
-/// Adds what a chemist should know of a charge before weighing: targets below the minimum weight with
-/// the stock that would do, pipettes out of range, a vial more than half full, what was assumed.
-/// `missing` is the part of the total that no component fills.
+/// Adds what a chemist should know of a charge before weighing: targets below the minimum weight
+/// with the stock that would do, pipettes out of range, a vial more than half full, what was
+/// assumed. `missing` is the part of the total that no component fills.
 void addNotices(const Plan& plan, std::span<const Material> materials, units::Volume missing,
                 Charge& charge);
 

@@ -47,7 +47,8 @@ units::MolarMass lastDigit(std::string_view written) {
   const std::size_t point = written.find('.');
   if (point == std::string_view::npos) return units::MolarMass::fromGramsPerMole(1.0);
   std::size_t places = 0;
-  for (std::size_t i = point + 1; i < written.size() && written[i] >= '0' && written[i] <= '9'; ++i) ++places;
+  for (std::size_t i = point + 1; i < written.size() && written[i] >= '0' && written[i] <= '9'; ++i)
+    ++places;
   return units::MolarMass::fromGramsPerMole(std::pow(10.0, -static_cast<double>(places)));
 }
 
@@ -59,9 +60,9 @@ Identity readIdentity(TomlSection& section) {
   if (identity.molarMass) identity.molarMassLastDigit = lastDigit(section.asWritten("molar_mass"));
   if (auto cas = section.text("cas")) {
     if (const auto checked = chem::checkCasNumber(*cas); !checked) {
-      section.fault("cas",
-                    fmt::format("{}: {}", text::quoted(*cas), whatWithPosition(checked.error(), *cas)),
-                    checked.error().mend);
+      section.fault(
+          "cas", fmt::format("{}: {}", text::quoted(*cas), whatWithPosition(checked.error(), *cas)),
+          checked.error().mend);
     } else {
       identity.cas = *cas;
     }
@@ -89,13 +90,15 @@ std::optional<AmountPlan> readAmount(TomlSection& section) {
   note(Basis::kConcentration, si(section.quantity<units::Concentration>("concentration")));
   note(Basis::kShare, section.number("share", kPositive));
   if (present.size() > 1) {
-    section.fault(present[1], fmt::format("the amount is fixed twice, by {} and {}", present[0], present[1]),
+    section.fault(present[1],
+                  fmt::format("the amount is fixed twice, by {} and {}", present[0], present[1]),
                   "keep one of them");
     return std::nullopt;
   }
   if (present.empty()) {
     section.fault("", "nothing fixes the amount",
-                  "give one of amount, mass, volume, equiv, mol_percent, concentration, or share for a solvent");
+                  "give one of amount, mass, volume, equiv, mol_percent, concentration, or share "
+                  "for a solvent");
   }
   return found.empty() ? std::nullopt : std::optional(found.front());
 }
@@ -115,16 +118,17 @@ LiquidSupply readLiquid(TomlSection& section) {
 }
 
 StockSupply readStock(TomlSection& section) {
-  StockSupply stock{
-      .concentration = section.quantity<units::Concentration>("concentration"),
-      .concentrationUncertainty = section.quantity<units::Concentration>("u_concentration", Range::kNonNegative),
-      .massFraction = section.number("mass_fraction", kAssay),
-      .density = section.quantity<units::Density>("density"),
-      .solvent = section.text("solvent").value_or("")};
+  StockSupply stock{.concentration = section.quantity<units::Concentration>("concentration"),
+                    .concentrationUncertainty = section.quantity<units::Concentration>(
+                        "u_concentration", Range::kNonNegative),
+                    .massFraction = section.number("mass_fraction", kAssay),
+                    .density = section.quantity<units::Density>("density"),
+                    .solvent = section.text("solvent").value_or("")};
   const bool concentration = section.has("concentration");
   const bool massFraction = section.has("mass_fraction");
   if (concentration && massFraction) {
-    section.fault("mass_fraction", "the stock's strength is given twice", "keep concentration or mass_fraction");
+    section.fault("mass_fraction", "the stock's strength is given twice",
+                  "keep concentration or mass_fraction");
   } else if (!concentration && !massFraction) {
     section.fault("", "the stock's strength is not given",
                   "give concentration = \"2.0 mM\", or mass_fraction with density");
@@ -132,15 +136,18 @@ StockSupply readStock(TomlSection& section) {
   if (massFraction && !section.has("density")) {
     section.missing("density", "a stock by mass_fraction needs the density of the solution");
   }
-  if (stock.solvent.empty()) section.missing("solvent", "name the solvent component the stock is made in");
+  if (stock.solvent.empty())
+    section.missing("solvent", "name the solvent component the stock is made in");
   return stock;
 }
 
 std::optional<GasSupply> readGas(TomlSection& section) {
   const auto pressure = section.quantity<units::Pressure>("pressure");
   const auto temperature = section.quantity<units::Temperature>("temperature");
-  if (!pressure) section.missing("pressure", "give the gas's absolute pressure, such as \"1.0 bar\"");
-  if (!temperature) section.missing("temperature", "give the gas's temperature, such as \"21 degC\"");
+  if (!pressure)
+    section.missing("pressure", "give the gas's absolute pressure, such as \"1.0 bar\"");
+  if (!temperature)
+    section.missing("temperature", "give the gas's temperature, such as \"21 degC\"");
   if (!pressure || !temperature) return std::nullopt;
   return GasSupply{*pressure, *temperature};
 }
@@ -153,9 +160,15 @@ std::optional<Supply> readGivenSupply(TomlSection section) {
     return supply;  // which other fields are right depends on it
   }
   switch (*kind) {
-    case 0: supply = readSolid(section); break;
-    case 1: supply = readLiquid(section); break;
-    case 2: supply = readStock(section); break;
+    case 0:
+      supply = readSolid(section);
+      break;
+    case 1:
+      supply = readLiquid(section);
+      break;
+    case 2:
+      supply = readStock(section);
+      break;
     default:
       if (const auto gas = readGas(section)) supply = *gas;
       break;
@@ -168,7 +181,9 @@ std::optional<Balance> readBalance(TomlSection& section) {
   const auto readability = section.quantity<units::Mass>("readability");
   const auto repeatability = section.quantity<units::Mass>("repeatability");
   if (!readability) section.missing("readability", "give the last digit, such as \"0.01 mg\"");
-  if (!repeatability) section.missing("repeatability", "give the standard deviation of a reading, such as \"0.02 mg\"");
+  if (!repeatability)
+    section.missing("repeatability",
+                    "give the standard deviation of a reading, such as \"0.02 mg\"");
   if (!readability || !repeatability) return std::nullopt;
   return Balance{*readability, *repeatability};
 }
@@ -179,7 +194,8 @@ std::optional<Pipette> readPipette(TomlSection& section) {
   const auto systematic = section.quantity<units::Volume>("systematic", Range::kNonNegative);
   const auto random = section.quantity<units::Volume>("random", Range::kNonNegative);
   if (!nominal) section.missing("nominal", "give the nominal volume, such as \"100 uL\"");
-  if (!systematic) section.missing("systematic", "give the limit of the systematic error, such as \"0.8 uL\"");
+  if (!systematic)
+    section.missing("systematic", "give the limit of the systematic error, such as \"0.8 uL\"");
   if (!random) section.missing("random", "give the limit of the random error, such as \"0.3 uL\"");
   if (!nominal || !systematic || !random) return std::nullopt;
   return Pipette{*nominal, smallest.value_or(0.1 * *nominal), *systematic, *random};
@@ -194,9 +210,11 @@ std::optional<Device> readInlineDevice(TomlSection section) {
   }
   std::optional<Device> device;
   if (*kind == 0) {
-    if (const auto balance = readBalance(section)) device = Device{name.value_or("balance"), *balance};
+    if (const auto balance = readBalance(section))
+      device = Device{name.value_or("balance"), *balance};
   } else {
-    if (const auto pipette = readPipette(section)) device = Device{name.value_or("pipette"), *pipette};
+    if (const auto pipette = readPipette(section))
+      device = Device{name.value_or("pipette"), *pipette};
   }
   section.finish();
   return device;
@@ -213,8 +231,9 @@ std::optional<Device> readDevice(TomlSection& section) {
   if (const Device* device = findDevice(*name)) return *device;
   std::string known;
   for (const Device& device : builtInDevices()) known += (known.empty() ? "" : ", ") + device.name;
-  section.fault("device", fmt::format("no device is called {}", text::quoted(*name)),
-                fmt::format("choose among {}, or describe one as {{ kind = \"balance\", … }}", known));
+  section.fault(
+      "device", fmt::format("no device is called {}", text::quoted(*name)),
+      fmt::format("choose among {}, or describe one as {{ kind = \"balance\", … }}", known));
   return std::nullopt;
 }
 
@@ -244,9 +263,10 @@ Supply defaultSupply(Role role) {
 }
 
 std::optional<Role> readRole(TomlSection& section) {
-  const auto role = section.choice(
-      "role", {"substrate", "partner", "photocatalyst", "cocatalyst", "additive", "acid", "base", "oxidant",
-               "reductant", "quencher", "standard", "product", "solvent", "gas", "other"});
+  const auto role =
+      section.choice("role", {"substrate", "partner", "photocatalyst", "cocatalyst", "additive",
+                              "acid", "base", "oxidant", "reductant", "quencher", "standard",
+                              "product", "solvent", "gas", "other"});
   if (!role) section.missing("role", "say what it does, for example role = \"acid\"");
   return role ? std::optional(static_cast<Role>(*role)) : std::nullopt;
 }
@@ -267,11 +287,13 @@ std::optional<ComponentPlan> readComponent(TomlSection section) {
     supply = readGivenSupply(*std::move(given));
   } else if (!supplyGiven && role) {
     supply = defaultSupply(*role);
-    if (*role == Role::kGas) section.missing("supply", "a gas needs supply = { kind = \"gas\", pressure, temperature }");
+    if (*role == Role::kGas)
+      section.missing("supply", "a gas needs supply = { kind = \"gas\", pressure, temperature }");
   }
   const auto perLimiting = section.number("per_limiting", kNonNegative);
   auto device = readDevice(section);
-  const auto tolerance = section.number("tolerance_percent", {.least = 0.0, .most = 100.0, .leastExcluded = true});
+  const auto tolerance =
+      section.number("tolerance_percent", {.least = 0.0, .most = 100.0, .leastExcluded = true});
   auto hazards = readHazards(section);
   section.finish();
   if (!key || !role || !name || !amount || !supply) return std::nullopt;

@@ -19,8 +19,9 @@ using units::Volume;
 std::vector<Device> readDevices() {
   std::vector<Device> devices;
   for (const auto& row : ReferenceTable::builtIn("balances.csv").rows()) {
-    devices.push_back({row.text("name"), Balance{Mass::fromMilligrams(row.required("readability_mg")),
-                                                 Mass::fromMilligrams(row.required("repeatability_mg"))}});
+    devices.push_back(
+        {row.text("name"), Balance{Mass::fromMilligrams(row.required("readability_mg")),
+                                   Mass::fromMilligrams(row.required("repeatability_mg"))}});
   }
   for (const auto& row : ReferenceTable::builtIn("pipettes.csv").rows()) {
     devices.push_back(
@@ -46,12 +47,11 @@ std::vector<Flask> readFlasks() {
 
 Mass Balance::standardUncertainty() const {
   const double rounding = stats::rectangular(readability.si() / 2.0);
-  return Mass::fromSi(std::sqrt(repeatability.si() * repeatability.si() + 2.0 * rounding * rounding));
+  return Mass::fromSi(
+      std::sqrt(repeatability.si() * repeatability.si() + 2.0 * rounding * rounding));
 }
 
-Mass Balance::minimumWeight() const {
-  return 2000.0 * std::max(repeatability, 0.41 * readability);
-}
+Mass Balance::minimumWeight() const { return 2000.0 * std::max(repeatability, 0.41 * readability); }
 
 int Pipette::strokesFor(Volume volume) const {
   // A volume that equals a whole number of strokes must not need one more through rounding.

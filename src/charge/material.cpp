@@ -16,8 +16,8 @@ Material::Material(const Plan& plan, const ComponentPlan& component, const Subst
                    stats::Causes& causes, text::Notices& notices)
     : m_supply(component.supply) {
   if (substance.molarMass) {
-    m_molarMass = Uncertain(substance.molarMass->value.si(), substance.molarMass->standardUncertainty.si(),
-                            causes.add());
+    m_molarMass = Uncertain(substance.molarMass->value.si(),
+                            substance.molarMass->standardUncertainty.si(), causes.add());
   }
   if (const auto* solid = std::get_if<SolidSupply>(&m_supply)) takeSolid(*solid, causes);
   if (const auto* liquid = std::get_if<LiquidSupply>(&m_supply)) {
@@ -39,8 +39,9 @@ void Material::takeSolid(const SolidSupply& solid, stats::Causes& causes) {
   }
 }
 
-void Material::takeLiquid(const Plan& plan, const ComponentPlan& component, const LiquidSupply& liquid,
-                          stats::Causes& causes, text::Notices& notices) {
+void Material::takeLiquid(const Plan& plan, const ComponentPlan& component,
+                          const LiquidSupply& liquid, stats::Causes& causes,
+                          text::Notices& notices) {
   takeAssay(liquid.assay, liquid.assayUncertainty, causes);
   if (!liquid.density) {
     takeTableDensity(plan, component, notices);
@@ -51,29 +52,36 @@ void Material::takeLiquid(const Plan& plan, const ComponentPlan& component, cons
                   : Uncertain(liquid.density->si());
   if (!liquid.densityUncertainty) m_takenAsExact.emplace_back("density");
   m_densitySource = "as given in the plan";
-  if (liquid.densityTemperature) m_densitySource += ", at " + units::shown(*liquid.densityTemperature);
+  if (liquid.densityTemperature)
+    m_densitySource += ", at " + units::shown(*liquid.densityTemperature);
 }
 
-void Material::takeTableDensity(const Plan& plan, const ComponentPlan& component, text::Notices& notices) {
+void Material::takeTableDensity(const Plan& plan, const ComponentPlan& component,
+                                text::Notices& notices) {
   const chem::Solvent* solvent = chem::findSolvent(component.name);
   if (solvent == nullptr) return;
   // Volumes are measured where the vial is closed.
-  const auto temperature = plan.seal ? plan.seal->temperature : units::Temperature::fromCelsius(20.0);
+  const auto temperature =
+      plan.seal ? plan.seal->temperature : units::Temperature::fromCelsius(20.0);
   const auto density = chem::densityAt(*solvent, temperature);
   if (!density) return;
   m_density = Uncertain(density->value.si());
-  m_densitySource = fmt::format("{} at {}: {}", solvent->name, units::shown(temperature), solvent->source);
+  m_densitySource =
+      fmt::format("{} at {}: {}", solvent->name, units::shown(temperature), solvent->source);
   const std::string at = "component." + component.key;
   if (solvent->recalled) {
-    notices.push_back({"recalled-value",
-                       fmt::format("the density of {} in the solvent table is from memory: check it", solvent->name),
-                       at});
+    notices.push_back(
+        {"recalled-value",
+         fmt::format("the density of {} in the solvent table is from memory: check it",
+                     solvent->name),
+         at});
   }
   if (!density->withinValidity) {
-    notices.push_back({"outside-validity",
-                       fmt::format("the density of {} is used at {}, outside the range of the solvent table",
-                                   solvent->name, units::shown(temperature)),
-                       at});
+    notices.push_back(
+        {"outside-validity",
+         fmt::format("the density of {} is used at {}, outside the range of the solvent table",
+                     solvent->name, units::shown(temperature)),
+         at});
   }
 }
 
@@ -87,9 +95,10 @@ void Material::takeStock(const StockSupply& stock, stats::Causes& causes) {
     m_takenAsExact.emplace_back("density");
     return;
   }
-  m_concentration = stock.concentrationUncertainty
-                        ? Uncertain(stock.concentration->si(), stock.concentrationUncertainty->si(), causes.add())
-                        : Uncertain(stock.concentration->si());
+  m_concentration =
+      stock.concentrationUncertainty
+          ? Uncertain(stock.concentration->si(), stock.concentrationUncertainty->si(), causes.add())
+          : Uncertain(stock.concentration->si());
   if (!stock.concentrationUncertainty) m_takenAsExact.emplace_back("concentration");
 }
 
@@ -103,7 +112,8 @@ std::optional<Uncertain> Material::amountInMass(const Uncertain& mass_kg) const 
 
 std::optional<Uncertain> Material::amountInVolume(const Uncertain& volume_m3) const {
   if (const auto* gas = std::get_if<GasSupply>(&m_supply)) {
-    return volume_m3 * (gas->pressure.pascals() / (units::kMolarGas_J_mol_K * gas->temperature.kelvin()));
+    return volume_m3 *
+           (gas->pressure.pascals() / (units::kMolarGas_J_mol_K * gas->temperature.kelvin()));
   }
   if (m_concentration) return *m_concentration * volume_m3;
   if (!m_density || !m_molarMass) return std::nullopt;
@@ -113,14 +123,16 @@ std::optional<Uncertain> Material::amountInVolume(const Uncertain& volume_m3) co
 std::optional<double> Material::massFor(double amount_mol) const {
   if (isGas() || !m_molarMass) return std::nullopt;
   if (m_concentration) {
-    return m_density ? std::optional(amount_mol / m_concentration->value() * m_density->value()) : std::nullopt;
+    return m_density ? std::optional(amount_mol / m_concentration->value() * m_density->value())
+                     : std::nullopt;
   }
   return amount_mol * m_molarMass->value() / m_assay.value();
 }
 
 std::optional<double> Material::volumeFor(double amount_mol) const {
   if (const auto* gas = std::get_if<GasSupply>(&m_supply)) {
-    return amount_mol * units::kMolarGas_J_mol_K * gas->temperature.kelvin() / gas->pressure.pascals();
+    return amount_mol * units::kMolarGas_J_mol_K * gas->temperature.kelvin() /
+           gas->pressure.pascals();
   }
   if (isSolid()) return std::nullopt;
   if (m_concentration) return amount_mol / m_concentration->value();

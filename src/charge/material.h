@@ -27,7 +27,8 @@ class Material {
   /// molar mass is not known, or for a stock its density.
   [[nodiscard]] std::optional<stats::Uncertain> amountInMass(const stats::Uncertain& mass_kg) const;
   /// Amount [mol] in a volume [m3]: of the liquid, the stock, or the gas at its own p and T.
-  [[nodiscard]] std::optional<stats::Uncertain> amountInVolume(const stats::Uncertain& volume_m3) const;
+  [[nodiscard]] std::optional<stats::Uncertain> amountInVolume(
+      const stats::Uncertain& volume_m3) const;
 
   /// Mass [kg] of a neat material that holds the amount [mol].
   [[nodiscard]] std::optional<double> massFor(double amount_mol) const;

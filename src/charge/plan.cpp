@@ -12,34 +12,56 @@ namespace vialkeeper::charge {
 
 std::string_view toText(Role role) {
   switch (role) {
-    case Role::kSubstrate: return "substrate";
-    case Role::kPartner: return "partner";
-    case Role::kPhotocatalyst: return "photocatalyst";
-    case Role::kCocatalyst: return "cocatalyst";
-    case Role::kAdditive: return "additive";
-    case Role::kAcid: return "acid";
-    case Role::kBase: return "base";
-    case Role::kOxidant: return "oxidant";
-    case Role::kReductant: return "reductant";
-    case Role::kQuencher: return "quencher";
-    case Role::kStandard: return "standard";
-    case Role::kProduct: return "product";
-    case Role::kSolvent: return "solvent";
-    case Role::kGas: return "gas";
-    case Role::kOther: return "other";
+    case Role::kSubstrate:
+      return "substrate";
+    case Role::kPartner:
+      return "partner";
+    case Role::kPhotocatalyst:
+      return "photocatalyst";
+    case Role::kCocatalyst:
+      return "cocatalyst";
+    case Role::kAdditive:
+      return "additive";
+    case Role::kAcid:
+      return "acid";
+    case Role::kBase:
+      return "base";
+    case Role::kOxidant:
+      return "oxidant";
+    case Role::kReductant:
+      return "reductant";
+    case Role::kQuencher:
+      return "quencher";
+    case Role::kStandard:
+      return "standard";
+    case Role::kProduct:
+      return "product";
+    case Role::kSolvent:
+      return "solvent";
+    case Role::kGas:
+      return "gas";
+    case Role::kOther:
+      return "other";
   }
   return "other";
 }
 
 std::string_view toText(Basis basis) {
   switch (basis) {
-    case Basis::kAmount: return "amount";
-    case Basis::kMass: return "mass";
-    case Basis::kVolume: return "volume";
-    case Basis::kEquiv: return "equiv";
-    case Basis::kMolPercent: return "mol_percent";
-    case Basis::kConcentration: return "concentration";
-    case Basis::kShare: return "share";
+    case Basis::kAmount:
+      return "amount";
+    case Basis::kMass:
+      return "mass";
+    case Basis::kVolume:
+      return "volume";
+    case Basis::kEquiv:
+      return "equiv";
+    case Basis::kMolPercent:
+      return "mol_percent";
+    case Basis::kConcentration:
+      return "concentration";
+    case Basis::kShare:
+      return "share";
   }
   return "amount";
 }

@@ -13,8 +13,8 @@
 #include "units/quantity.h"
 #include "units/toml_section.h"
 
-/// A plan as its author gave it: nothing here is computed. Text is kept where people will want to see
-/// what was typed; every section remembers its place in the file for later faults.
+/// A plan as its author gave it: nothing here is computed. Text is kept where people will want to
+/// see what was typed; every section remembers its place in the file for later faults.
 namespace vialkeeper::charge {
 
 enum class Role {
@@ -56,7 +56,8 @@ struct Identity {
   std::string smiles = {};
   std::string formula = {};
   std::optional<units::MolarMass> molarMass = {};
-  units::MolarMass molarMassLastDigit = units::MolarMass::fromGramsPerMole(0.0);  ///< one unit of the last digit written
+  units::MolarMass molarMassLastDigit =
+      units::MolarMass::fromGramsPerMole(0.0);  ///< one unit of the last digit written
   std::string cas = {};
 
   [[nodiscard]] bool isEmpty() const { return smiles.empty() && formula.empty() && !molarMass; }
@@ -198,7 +199,9 @@ struct Plan {
   [[nodiscard]] const ComponentPlan* find(std::string_view key) const;
   /// Its place in `components`; the key must be there.
   [[nodiscard]] std::size_t indexOf(std::string_view key) const;
-  [[nodiscard]] const ComponentPlan& limitingComponent() const { return components[indexOf(limiting)]; }
+  [[nodiscard]] const ComponentPlan& limitingComponent() const {
+    return components[indexOf(limiting)];
+  }
   /// The place of a stock's solvent in `components`, or nothing where it is none of them.
   [[nodiscard]] std::optional<std::size_t> solventOf(const StockSupply& stock) const;
 };

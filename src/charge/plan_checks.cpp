@@ -35,7 +35,8 @@ class PlanChecker {
   }
 
  private:
-  void fault(const units::SectionPlace& place, std::string_view field, std::string what, std::string mend) {
+  void fault(const units::SectionPlace& place, std::string_view field, std::string what,
+             std::string mend) {
     const std::string dot = place.path.empty() || field.empty() ? "" : ".";
     m_faults.push_back({.file = m_plan.file,
                         .line = place.lineOf(field),
@@ -45,7 +46,8 @@ class PlanChecker {
   }
 
   [[nodiscard]] bool isWritten(std::string_view key) const {
-    return std::ranges::any_of(m_keys, [&](const WrittenKey& k) { return !k.product && k.key == key; });
+    return std::ranges::any_of(m_keys,
+                               [&](const WrittenKey& k) { return !k.product && k.key == key; });
   }
 
   void checkKeys() {
@@ -126,7 +128,8 @@ class PlanChecker {
       fault(component.place, "mass", "the mass of a stock solution needs its density",
             "give the volume, or the density in the supply");
     }
-    if (basis == Basis::kShare && component.isSolvent() && !std::holds_alternative<LiquidSupply>(component.supply)) {
+    if (basis == Basis::kShare && component.isSolvent() &&
+        !std::holds_alternative<LiquidSupply>(component.supply)) {
       fault(component.place, "share", "a share is filled up with a neat liquid",
             "leave the supply out or make it of kind liquid");
     }
@@ -138,7 +141,8 @@ class PlanChecker {
     if (m_plan.solventOf(*stock) || chem::findSolvent(stock->solvent) != nullptr) return;
     if (isWritten(stock->solvent) && m_plan.find(stock->solvent) == nullptr) return;  // unreadable
     fault(component.place, "supply",
-          fmt::format("the stock's solvent {} is no solvent of this plan", text::quoted(stock->solvent)),
+          fmt::format("the stock's solvent {} is no solvent of this plan",
+                      text::quoted(stock->solvent)),
           "name a solvent component by key or name, or a solvent of the table");
   }
 
@@ -146,7 +150,8 @@ class PlanChecker {
     if (!component.device) return;
     const bool pipette = component.device->pipette() != nullptr;
     if (pipette && std::holds_alternative<SolidSupply>(component.supply)) {
-      fault(component.place, "device", "a solid cannot be measured with a pipette", "name a balance");
+      fault(component.place, "device", "a solid cannot be measured with a pipette",
+            "name a balance");
     } else if (!pipette && std::holds_alternative<GasSupply>(component.supply)) {
       fault(component.place, "device", "a gas is not weighed here", "leave the device out");
     }

@@ -18,9 +18,9 @@ struct WrittenKey {
   bool product = false;
 };
 
-/// What does not fit together in a plan: repeated keys, a limiting component that is not there or not
-/// absolute, a stock whose solvent is unknown, a basis that the supply cannot serve.
-/// Entries that could not be read are known by their keys alone and draw no further faults.
+/// What does not fit together in a plan: repeated keys, a limiting component that is not there or
+/// not absolute, a stock whose solvent is unknown, a basis that the supply cannot serve. Entries
+/// that could not be read are known by their keys alone and draw no further faults.
 void checkPlan(const Plan& plan, std::span<const WrittenKey> keys, text::Faults& faults);
 
 }  // namespace vialkeeper::charge

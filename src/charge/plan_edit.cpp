@@ -27,7 +27,8 @@ std::unexpected<text::Faults> fault(std::string_view path, std::string what, std
       text::Faults{{.field = std::string(path), .what = std::move(what), .mend = std::move(mend)}});
 }
 
-/// The section that a path means: its fields, the line of its header (0 for the top), and its field.
+/// The section that a path means: its fields, the line of its header (0 for the top), and its
+/// field.
 struct Target {
   const TomlTable* table = nullptr;
   int headerLine = 0;
@@ -36,7 +37,8 @@ struct Target {
 };
 
 const TomlValue* memberOf(const TomlTable& table, std::string_view name) {
-  const auto found = std::ranges::find_if(table, [name](const auto& entry) { return entry.first == name; });
+  const auto found =
+      std::ranges::find_if(table, [name](const auto& entry) { return entry.first == name; });
   return found == table.end() ? nullptr : &found->second;
 }
 
@@ -66,16 +68,22 @@ const TomlValue* componentOf(const TomlTable& root, std::string_view key) {
 
 text::Checked<Target> targetOf(const TomlTable& root, std::string_view path) {
   const auto parts = splitPath(path);
-  if (std::ranges::any_of(parts, &std::string::empty)) return fault(path, "this is no path of a field", "write for example component.acid.mol_percent");
+  if (std::ranges::any_of(parts, &std::string::empty))
+    return fault(path, "this is no path of a field",
+                 "write for example component.acid.mol_percent");
   if (parts.size() == 1) return Target{&root, 0, parts[0], false};
   const bool component = parts[0] == "component";
   const std::size_t wanted = component ? 3 : 2;
-  if (parts.size() > wanted) return fault(path, "a part of an inline table cannot be set alone", "edit the plan's text");
-  if (parts.size() < wanted) return fault(path, "this path names no field", "write for example component.acid.mol_percent");
+  if (parts.size() > wanted)
+    return fault(path, "a part of an inline table cannot be set alone", "edit the plan's text");
+  if (parts.size() < wanted)
+    return fault(path, "this path names no field", "write for example component.acid.mol_percent");
   const TomlValue* section = component ? componentOf(root, parts[1]) : memberOf(root, parts[0]);
   const auto* table = section != nullptr ? std::get_if<TomlTable>(&section->data) : nullptr;
   if (table == nullptr) {
-    return fault(path, fmt::format("the plan has no {} {}", component ? "component" : "section", text::quoted(component ? parts[1] : parts[0])),
+    return fault(path,
+                 fmt::format("the plan has no {} {}", component ? "component" : "section",
+                             text::quoted(component ? parts[1] : parts[0])),
                  "check the name");
   }
   return Target{table, section->line, parts.back(), component};
@@ -98,7 +106,8 @@ int lineToInsertAfter(const Target& target) {
   if (target.headerLine == 0) {
     // Fields of the top stand before the first section.
     for (const auto& [name, value] : *target.table) {
-      const bool section = std::holds_alternative<TomlTable>(value.data) || std::holds_alternative<text::TomlArray>(value.data);
+      const bool section = std::holds_alternative<TomlTable>(value.data) ||
+                           std::holds_alternative<text::TomlArray>(value.data);
       if (!section) line = std::max(line, value.line);
     }
   }
@@ -107,8 +116,10 @@ int lineToInsertAfter(const Target& target) {
 
 }  // namespace
 
-text::Checked<std::string> withField(std::string_view planText, std::string_view path, std::string_view value) {
-  if (text::oneLine(value) != value) return fault(path, "the value holds line breaks or control characters", "give one plain line");
+text::Checked<std::string> withField(std::string_view planText, std::string_view path,
+                                     std::string_view value) {
+  if (text::oneLine(value) != value)
+    return fault(path, "the value holds line breaks or control characters", "give one plain line");
   const text::TomlDocument document = text::readToml(planText, "plan");
   if (!document.faults.empty()) return std::unexpected(document.faults);
   const auto target = targetOf(document.root, path);
@@ -127,10 +138,12 @@ text::Checked<std::string> withField(std::string_view planText, std::string_view
   for (const auto& [name, present] : *target->table) {
     const bool otherBasis = basis && std::ranges::find(kBases, name) != kBases.end();
     if (name != target->field && !otherBasis) continue;
-    const bool simple = !std::holds_alternative<TomlTable>(present.data) && !std::holds_alternative<text::TomlArray>(present.data);
+    const bool simple = !std::holds_alternative<TomlTable>(present.data) &&
+                        !std::holds_alternative<text::TomlArray>(present.data);
     const auto index = static_cast<std::size_t>(present.line - 1);
     const bool ownLine = index < lines.size() && text::trimmed(lines[index]).starts_with(name);
-    if (!simple || !ownLine) return fault(path, "this field does not stand on a line of its own", "edit the plan's text");
+    if (!simple || !ownLine)
+      return fault(path, "this field does not stand on a line of its own", "edit the plan's text");
     lines[index] = replaced == 0 ? line : std::string{};
     replaced = present.line;
   }

@@ -44,9 +44,10 @@ void readFormat(TomlSection& root) {
   } else if (*format != kFormat) {
     const bool newer = format->starts_with("vialkeeper-plan/");
     root.fault("format",
-               newer ? fmt::format("{} is another version of the plan format than this program knows",
-                                   text::quoted(*format))
-                     : fmt::format("{} is no plan format", text::quoted(*format)),
+               newer
+                   ? fmt::format("{} is another version of the plan format than this program knows",
+                                 text::quoted(*format))
+                   : fmt::format("{} is no plan format", text::quoted(*format)),
                newer ? fmt::format("use a newer program, or write the plan as {}", kFormat)
                      : fmt::format("write format = \"{}\"", kFormat));
   }
@@ -62,7 +63,8 @@ void readHead(TomlSection& root, Plan& plan) {
     if (const auto day = units::readIsoDate(*date); day) {
       plan.date = *date;
     } else {
-      root.fault("date", fmt::format("{}: {}", text::quoted(*date), whatWithPosition(day.error(), *date)),
+      root.fault("date",
+                 fmt::format("{}: {}", text::quoted(*date), whatWithPosition(day.error(), *date)),
                  day.error().mend);
     }
   }
@@ -78,7 +80,8 @@ void readEvolvedGases(TomlSection& reaction, Plan& plan) {
     if (!species) {
       entry.missing("species", "name the gas, for example species = \"H2\"");
     } else if (!isSpecies(*species)) {
-      entry.fault("species", fmt::format("{} is no gas of the table", text::quoted(*species)), speciesAdvice());
+      entry.fault("species", fmt::format("{} is no gas of the table", text::quoted(*species)),
+                  speciesAdvice());
     } else if (std::ranges::find(plan.gases, *species, &EvolvedGas::species) != plan.gases.end()) {
       entry.fault("species", fmt::format("{} is listed twice", *species), "list every gas once");
     } else {
@@ -95,7 +98,8 @@ void readReaction(TomlSection& root, Plan& plan, std::vector<WrittenKey>& keys) 
     return;
   }
   plan.limiting = reaction->text("limiting").value_or("");
-  if (plan.limiting.empty()) reaction->missing("limiting", "name the key of the limiting component");
+  if (plan.limiting.empty())
+    reaction->missing("limiting", "name the key of the limiting component");
   for (TomlSection& entry : reaction->sections("products")) {
     keys.push_back({entry.asWritten("key"), entry.place().path, entry.place().lineOf("key"), true});
     if (auto product = readProduct(entry)) plan.products.push_back(*std::move(product));
@@ -113,10 +117,12 @@ void readVial(TomlSection& root, Plan& plan) {
   const auto uncertainty = vial->quantity<Volume>("u_volume", Range::kNonNegative);
   const auto displaced = vial->quantity<Volume>("displaced", Range::kNonNegative);
   const auto rated = vial->quantity<Pressure>("rated_gauge");
-  const auto derating = vial->number("derating", {.least = 0.0, .most = 1.0, .leastExcluded = true});
+  const auto derating =
+      vial->number("derating", {.least = 0.0, .most = 1.0, .leastExcluded = true});
   if (!volume) vial->missing("volume", "give the brim-full volume of the closed vial");
   if (volume && displaced && *displaced >= *volume) {
-    vial->fault("displaced", "stir bar and probe displace more than the vial holds", "check both volumes");
+    vial->fault("displaced", "stir bar and probe displace more than the vial holds",
+                "check both volumes");
   }
   vial->finish();
   if (!volume) return;
@@ -143,7 +149,8 @@ Mixture readSpeciesNumbers(TomlSection table, Bounds bounds) {
 Mixture readAtmosphere(TomlSection& seal) {
   const text::TomlValue* value = seal.value("atmosphere");
   if (value == nullptr) {
-    seal.missing("atmosphere", "write \"N2\", \"Ar\", \"air\" or fractions such as { N2 = 0.9, O2 = 0.1 }");
+    seal.missing("atmosphere",
+                 "write \"N2\", \"Ar\", \"air\" or fractions such as { N2 = 0.9, O2 = 0.1 }");
     return {};
   }
   if (std::holds_alternative<text::TomlTable>(value->data)) {
@@ -152,7 +159,8 @@ Mixture readAtmosphere(TomlSection& seal) {
     for (const auto& [species, fraction] : mixture) sum += fraction;
     const bool allRead = mixture.size() == std::get<text::TomlTable>(value->data).size();
     if (allRead && std::abs(sum - 1.0) > 1e-6) {
-      seal.fault("atmosphere", fmt::format("the fractions sum to {:.6g}", sum), "make them sum to 1");
+      seal.fault("atmosphere", fmt::format("the fractions sum to {:.6g}", sum),
+                 "make them sum to 1");
     }
     return mixture;
   }
@@ -189,28 +197,32 @@ void readSeal(TomlSection& root, Plan& plan) {
 void readIrradiation(TomlSection& root, Plan& plan) {
   auto irradiation = root.section("irradiation");
   if (!irradiation) return;
-  plan.irradiation = {.lamp = irradiation->text("lamp").value_or(""),
-                      .wavelength = irradiation->quantity<units::Length>("wavelength"),
-                      .temperature = irradiation->quantity<units::Temperature>("temperature"),
-                      .duration = irradiation->quantity<units::Duration>("duration", Range::kNonNegative)};
+  plan.irradiation = {
+      .lamp = irradiation->text("lamp").value_or(""),
+      .wavelength = irradiation->quantity<units::Length>("wavelength"),
+      .temperature = irradiation->quantity<units::Temperature>("temperature"),
+      .duration = irradiation->quantity<units::Duration>("duration", Range::kNonNegative)};
   irradiation->finish();
 }
 
 void readLiquid(TomlSection& root, Plan& plan) {
   auto liquid = root.section("liquid");
   if (!liquid) {
-    root.missing("liquid", "add [liquid] with total = \"2.0 mL\" or limiting_concentration = \"0.1 mol/L\"");
+    root.missing("liquid",
+                 "add [liquid] with total = \"2.0 mL\" or limiting_concentration = \"0.1 mol/L\"");
     return;
   }
   plan.liquid.total = liquid->quantity<Volume>("total");
-  plan.liquid.limitingConcentration = liquid->quantity<units::Concentration>("limiting_concentration");
+  plan.liquid.limitingConcentration =
+      liquid->quantity<units::Concentration>("limiting_concentration");
   const bool both = liquid->has("total") && liquid->has("limiting_concentration");
   const bool neither = !liquid->has("total") && !liquid->has("limiting_concentration");
   if (both) {
     liquid->fault("limiting_concentration", "the volume of the liquid is fixed twice",
                   "keep total or limiting_concentration");
   } else if (neither) {
-    liquid->fault("", "nothing fixes the volume of the liquid", "give total or limiting_concentration");
+    liquid->fault("", "nothing fixes the volume of the liquid",
+                  "give total or limiting_concentration");
   }
   for (TomlSection& point : liquid->sections("vapour_pressure")) {
     const auto temperature = point.quantity<units::Temperature>("temperature");
@@ -222,7 +234,8 @@ void readLiquid(TomlSection& root, Plan& plan) {
   }
   if (auto ostwald = liquid->section("ostwald")) {
     plan.liquid.ostwaldGiven = true;
-    plan.liquid.ostwald = readSpeciesNumbers(*std::move(ostwald), {.least = 0.0, .most = kInfinity});
+    plan.liquid.ostwald =
+        readSpeciesNumbers(*std::move(ostwald), {.least = 0.0, .most = kInfinity});
   }
   liquid->finish();
   plan.liquid.place = liquid->place();
@@ -232,19 +245,23 @@ void readInstruments(TomlSection& root, Plan& plan) {
   auto instruments = root.section("instruments");
   if (!instruments) return;
   InstrumentsPlan& given = plan.instruments;
-  given.pressure = instruments->quantity<Pressure>("u_pressure", Range::kNonNegative).value_or(given.pressure);
+  given.pressure =
+      instruments->quantity<Pressure>("u_pressure", Range::kNonNegative).value_or(given.pressure);
   given.pressureShared = instruments->quantity<Pressure>("u_pressure_shared", Range::kNonNegative)
                              .value_or(given.pressureShared);
-  given.temperature_K =
-      instruments->kelvinDifference("u_temperature", Range::kNonNegative).value_or(given.temperature_K);
+  given.temperature_K = instruments->kelvinDifference("u_temperature", Range::kNonNegative)
+                            .value_or(given.temperature_K);
   instruments->finish();
 }
 
 void readComponents(TomlSection& root, Plan& plan, std::vector<WrittenKey>& keys) {
-  if (!root.has("component")) root.missing("component", "add a [[component]] for everything that goes in");
+  if (!root.has("component"))
+    root.missing("component", "add a [[component]] for everything that goes in");
   for (TomlSection& entry : root.sections("component")) {
-    keys.push_back({entry.asWritten("key"), entry.place().path, entry.place().lineOf("key"), false});
-    if (auto component = readComponent(std::move(entry))) plan.components.push_back(*std::move(component));
+    keys.push_back(
+        {entry.asWritten("key"), entry.place().path, entry.place().lineOf("key"), false});
+    if (auto component = readComponent(std::move(entry)))
+      plan.components.push_back(*std::move(component));
   }
 }
 
@@ -252,9 +269,10 @@ void readComponents(TomlSection& root, Plan& plan, std::vector<WrittenKey>& keys
 
 text::Checked<Plan> readPlan(std::string_view bytes, const std::string& file) {
   if (bytes.size() > kLargestFile) {
-    return std::unexpected(Faults{{.file = file,
-                                   .what = "the file is larger than 1 MiB",
-                                   .mend = "a plan is a short text; check that this is the right file"}});
+    return std::unexpected(
+        Faults{{.file = file,
+                .what = "the file is larger than 1 MiB",
+                .mend = "a plan is a short text; check that this is the right file"}});
   }
   text::TomlDocument document = text::readToml(bytes, file);
   Faults faults = std::move(document.faults);

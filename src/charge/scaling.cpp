@@ -20,9 +20,12 @@ bool isAbsolute(Basis basis) {
 std::string written(const AmountPlan& amount) {
   constexpr int kDigits = 6;
   switch (amount.basis) {
-    case Basis::kAmount: return units::shown(units::Amount::fromSi(amount.value), kDigits);
-    case Basis::kMass: return units::shown(units::Mass::fromSi(amount.value), kDigits);
-    default: return units::shown(units::Volume::fromSi(amount.value), kDigits);
+    case Basis::kAmount:
+      return units::shown(units::Amount::fromSi(amount.value), kDigits);
+    case Basis::kMass:
+      return units::shown(units::Mass::fromSi(amount.value), kDigits);
+    default:
+      return units::shown(units::Volume::fromSi(amount.value), kDigits);
   }
 }
 

@@ -13,7 +13,8 @@ namespace {
 const Device* pipetteFor(units::Volume volume) {
   for (const Device& device : builtInDevices()) {
     const Pipette* pipette = device.pipette();
-    if (pipette != nullptr && volume >= 0.2 * pipette->nominal && volume <= pipette->nominal) return &device;
+    if (pipette != nullptr && volume >= 0.2 * pipette->nominal && volume <= pipette->nominal)
+      return &device;
   }
   return nullptr;
 }
@@ -25,8 +26,8 @@ bool isBetter(const StockProposal& a, const StockProposal& b) {
   return a.concentration < b.concentration;
 }
 
-/// Round concentrations from 0.1 mM to 1 mol/L: below, no flask holds a weighable mass; above, little
-/// dissolves.
+/// Round concentrations from 0.1 mM to 1 mol/L: below, no flask holds a weighable mass; above,
+/// little dissolves.
 std::vector<units::Concentration> roundConcentrations() {
   std::vector<units::Concentration> list;
   for (const double decade_mM : {0.1, 1.0, 10.0, 100.0}) {
@@ -47,7 +48,8 @@ std::optional<StockProposal> proposeStock(const StockRequest& request) {
     const Device* pipette = transfer > request.room ? nullptr : pipetteFor(transfer);
     if (pipette == nullptr) continue;
     for (const Flask& flask : flasks()) {
-      const units::Mass mass = (concentration * flask.nominal).moles() * request.suppliedMassPerMole;
+      const units::Mass mass =
+          (concentration * flask.nominal).moles() * request.suppliedMassPerMole;
       if (mass < request.minimumWeight || transfer > flask.nominal) continue;
       StockProposal candidate{.solventKey = {},
                               .concentration = concentration,

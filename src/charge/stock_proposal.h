@@ -15,22 +15,22 @@ struct StockProposal {
   std::string solventKey;  ///< the solvent component whose share it would come out of
   units::Concentration concentration;
   units::Volume flask;
-  units::Mass stockMass;    ///< to weigh into the flask
-  units::Volume transfer;   ///< of the stock, into the vial
+  units::Mass stockMass;   ///< to weigh into the flask
+  units::Volume transfer;  ///< of the stock, into the vial
   std::string pipette;
 };
 
 /// What a proposal must serve.
 struct StockRequest {
-  units::Amount amount;              ///< wanted in the vial
-  units::Mass suppliedMassPerMole;   ///< M/w for one mole: what is weighed for 1 mol
-  units::Mass minimumWeight;         ///< of the balance the stock is weighed on
-  units::Volume room;                ///< most that the transfer may take of its solvent
+  units::Amount amount;             ///< wanted in the vial
+  units::Mass suppliedMassPerMole;  ///< M/w for one mole: what is weighed for 1 mol
+  units::Mass minimumWeight;        ///< of the balance the stock is weighed on
+  units::Volume room;               ///< most that the transfer may take of its solvent
 };
 
-/// The stock that costs the least material, and among those the most dilute: a round concentration in
-/// a standard flask, weighed above the minimum weight, of which the transfer lies between 20 % and
-/// 100 % of a pipette's nominal volume and within the room. Nothing where none satisfies all.
+/// The stock that costs the least material, and among those the most dilute: a round concentration
+/// in a standard flask, weighed above the minimum weight, of which the transfer lies between 20 %
+/// and 100 % of a pipette's nominal volume and within the room. Nothing where none satisfies all.
 [[nodiscard]] std::optional<StockProposal> proposeStock(const StockRequest& request);
 
 }  // namespace vialkeeper::charge

@@ -28,9 +28,11 @@ class SubstanceResolver {
   Substance resolve(const Identity& identity, const units::SectionPlace& place) {
     m_place = &place;
     Substance substance;
-    const auto fromFormula = identity.formula.empty() ? std::nullopt : readFormula(identity.formula);
-    const auto fromSmiles =
-        identity.smiles.empty() ? std::nullopt : readStructure(identity.smiles, substance.canonicalSmiles);
+    const auto fromFormula =
+        identity.formula.empty() ? std::nullopt : readFormula(identity.formula);
+    const auto fromSmiles = identity.smiles.empty()
+                                ? std::nullopt
+                                : readStructure(identity.smiles, substance.canonicalSmiles);
     if (fromFormula && fromSmiles && *fromFormula != *fromSmiles) {
       fault("smiles",
             fmt::format("the structure is {} but the formula says {}", toHillFormula(*fromSmiles),
@@ -38,7 +40,8 @@ class SubstanceResolver {
             "correct the one that is wrong");
       return substance;
     }
-    if (fromSmiles || fromFormula) takeComposition(fromSmiles ? *fromSmiles : *fromFormula, substance);
+    if (fromSmiles || fromFormula)
+      takeComposition(fromSmiles ? *fromSmiles : *fromFormula, substance);
     if (identity.molarMass) takeMolarMass(identity, substance);
     return substance;
   }
@@ -56,7 +59,8 @@ class SubstanceResolver {
     auto composition = chem::parseFormula(formula);
     if (composition) return *std::move(composition);
     fault("formula",
-          fmt::format("{}: {}", text::quoted(formula), whatWithPosition(composition.error(), formula)),
+          fmt::format("{}: {}", text::quoted(formula),
+                      whatWithPosition(composition.error(), formula)),
           composition.error().mend);
     return std::nullopt;
   }
@@ -86,7 +90,8 @@ class SubstanceResolver {
     substance.molarMassSource = fmt::format("{} from {}", substance.formula, kWeightsSource);
   }
 
-  /// A molar mass from a label is rounded; it agrees within its last digit and 0.01 % for old tables.
+  /// A molar mass from a label is rounded; it agrees within its last digit and 0.01 % for old
+  /// tables.
   void takeMolarMass(const Identity& identity, Substance& substance) {
     const double given = identity.molarMass->gramsPerMole();
     const double lastDigit = identity.molarMassLastDigit.gramsPerMole();
@@ -94,13 +99,13 @@ class SubstanceResolver {
       const double computed = substance.molarMass->value.gramsPerMole();
       if (std::abs(computed - given) <= 0.5 * lastDigit + 1e-4 * computed) return;
       fault("molar_mass",
-            fmt::format("{} has {:.3f} g/mol but {} g/mol is given", substance.formula, computed, given),
+            fmt::format("{} has {:.3f} g/mol but {} g/mol is given", substance.formula, computed,
+                        given),
             "correct the one that is wrong; a salt or hydrate counts as supplied");
       return;
     }
-    substance.molarMass = {
-        *identity.molarMass,
-        units::MolarMass::fromGramsPerMole(stats::rectangular(0.5 * lastDigit))};
+    substance.molarMass = {*identity.molarMass,
+                           units::MolarMass::fromGramsPerMole(stats::rectangular(0.5 * lastDigit))};
     substance.molarMassSource = "as given in the plan";
   }
 
@@ -115,7 +120,8 @@ Identity identityOf(const ComponentPlan& component) {
   const bool liquid = std::holds_alternative<LiquidSupply>(component.supply);
   if (!component.identity.isEmpty() || !liquid) return component.identity;
   Identity identity = component.identity;
-  if (const chem::Solvent* known = chem::findSolvent(component.name)) identity.formula = known->formula;
+  if (const chem::Solvent* known = chem::findSolvent(component.name))
+    identity.formula = known->formula;
   return identity;
 }
 

@@ -21,7 +21,7 @@ struct Substance {
   std::string formula = {};          ///< Hill; empty where only a molar mass was given
   std::string canonicalSmiles = {};  ///< empty where no structure was given
   std::optional<chem::MolarMassEstimate> molarMass = {};  ///< nothing where nothing was given
-  std::string molarMassSource = {};  ///< for people who ask where it is from
+  std::string molarMassSource = {};                       ///< for people who ask where it is from
 };
 
 /// The substances of a plan, in the order of its components and products.

@@ -13,11 +13,14 @@ using units::shown;
 
 std::string basisStep(const Plan& plan, const Charge& charge, const ComponentPlan& component,
                       const std::string& amount) {
-  const std::string limiting = fmt::format("{} ({}, limiting)", shown(charge.limitingAmount), charge.limiting);
+  const std::string limiting =
+      fmt::format("{} ({}, limiting)", shown(charge.limitingAmount), charge.limiting);
   const std::string& written = component.amount.asWritten;
   switch (component.amount.basis) {
-    case Basis::kEquiv: return fmt::format("{} = {} equiv × {}", amount, written, limiting);
-    case Basis::kMolPercent: return fmt::format("{} = {} mol% × {}", amount, written, limiting);
+    case Basis::kEquiv:
+      return fmt::format("{} = {} equiv × {}", amount, written, limiting);
+    case Basis::kMolPercent:
+      return fmt::format("{} = {} mol% × {}", amount, written, limiting);
     case Basis::kConcentration:
       return fmt::format("{} = {} × {} (liquid)", amount, written, shown(charge.totalLiquid));
     case Basis::kShare: {
@@ -26,42 +29,51 @@ std::string basisStep(const Plan& plan, const Charge& charge, const ComponentPla
         if (other.amount.basis == Basis::kShare) parts += other.amount.value;
       }
       return fmt::format(
-          "{} of {} parts of the liquid ({}) less neat liquids and stocks in other solvents; what stocks "
+          "{} of {} parts of the liquid ({}) less neat liquids and stocks in other solvents; what "
+          "stocks "
           "bring of it is taken off",
           written, parts, shown(charge.totalLiquid));
     }
-    default: return fmt::format("{} as planned ({})", amount.empty() ? written : amount, written);
+    default:
+      return fmt::format("{} as planned ({})", amount.empty() ? written : amount, written);
   }
 }
 
-std::string assayFactor(double assay) { return assay == 1.0 ? "" : fmt::format(" ÷ {} (assay)", assay); }
+std::string assayFactor(double assay) {
+  return assay == 1.0 ? "" : fmt::format(" ÷ {} (assay)", assay);
+}
 
 /// The target from the amount; empty where the target was given itself.
-std::string targetStep(const ComponentPlan& component, const ComponentCharge& charge, const std::string& amount) {
+std::string targetStep(const ComponentPlan& component, const ComponentCharge& charge,
+                       const std::string& amount) {
   const Basis basis = component.amount.basis;
-  if (basis == Basis::kMass || basis == Basis::kVolume || basis == Basis::kShare || amount.empty()) return {};
-  const std::string M = charge.substance.molarMass
-                            ? fmt::format("{:.2f} g/mol", charge.substance.molarMass->value.gramsPerMole())
-                            : "";
+  if (basis == Basis::kMass || basis == Basis::kVolume || basis == Basis::kShare || amount.empty())
+    return {};
+  const std::string M =
+      charge.substance.molarMass
+          ? fmt::format("{:.2f} g/mol", charge.substance.molarMass->value.gramsPerMole())
+          : "";
   if (std::holds_alternative<SolidSupply>(component.supply)) {
     return fmt::format("{} = {} × {}{}", shown(*charge.targetMass), amount, M,
                        assayFactor(std::get<SolidSupply>(component.supply).assay));
   }
   if (const auto* liquid = std::get_if<LiquidSupply>(&component.supply)) {
     const std::string mass = shown(*charge.targetMass);
-    return fmt::format("{} = {} × {}{}; {} = {} ÷ {:.4g} g/mL", mass, amount, M, assayFactor(liquid->assay),
-                       shown(*charge.targetVolume), mass, charge.density->gramsPerMillilitre());
+    return fmt::format("{} = {} × {}{}; {} = {} ÷ {:.4g} g/mL", mass, amount, M,
+                       assayFactor(liquid->assay), shown(*charge.targetVolume), mass,
+                       charge.density->gramsPerMillilitre());
   }
   if (const auto* stock = std::get_if<StockSupply>(&component.supply)) {
     if (stock->concentration) {
-      return fmt::format("{} = {} ÷ {}", shown(*charge.targetVolume), amount, shown(*stock->concentration));
+      return fmt::format("{} = {} ÷ {}", shown(*charge.targetVolume), amount,
+                         shown(*stock->concentration));
     }
     return fmt::format("{} = {} × {} ÷ ({} × {:.4g} g/mL)", shown(*charge.targetVolume), amount, M,
                        *stock->massFraction, stock->density->gramsPerMillilitre());
   }
   const auto& gas = std::get<GasSupply>(component.supply);
-  return fmt::format("{} = {} × R × {} ÷ {}", shown(*charge.targetVolume), amount, shown(gas.temperature),
-                     shown(gas.pressure));
+  return fmt::format("{} = {} × R × {} ÷ {}", shown(*charge.targetVolume), amount,
+                     shown(gas.temperature), shown(gas.pressure));
 }
 
 std::string deviceStep(const ComponentPlan& component, const ComponentCharge& charge) {
@@ -70,12 +82,14 @@ std::string deviceStep(const ComponentPlan& component, const ComponentCharge& ch
   if (!u) return {};
   const std::string amount = shown(units::Amount::fromMoles(*u), 2);
   if (const Balance* balance = component.device->balance()) {
-    return fmt::format("u = {}: {}, repeatability {:g} mg, readability {:g} mg", amount, component.device->name,
-                       balance->repeatability.milligrams(), balance->readability.milligrams());
+    return fmt::format("u = {}: {}, repeatability {:g} mg, readability {:g} mg", amount,
+                       component.device->name, balance->repeatability.milligrams(),
+                       balance->readability.milligrams());
   }
   const Pipette* pipette = component.device->pipette();
-  return fmt::format("u = {}: {}, ISO 8655 limits {} systematic, {} random", amount, component.device->name,
-                     shown(pipette->systematicLimit), shown(pipette->randomLimit));
+  return fmt::format("u = {}: {}, ISO 8655 limits {} systematic, {} random", amount,
+                     component.device->name, shown(pipette->systematicLimit),
+                     shown(pipette->randomLimit));
 }
 
 std::string percentText(double fraction) { return fmt::format("{:.4g} %", 100.0 * fraction); }
@@ -85,15 +99,17 @@ std::string percentText(double fraction) { return fmt::format("{:.4g} %", 100.0 
 std::vector<std::string> trailOf(const Plan& plan, const Charge& charge, std::string_view key) {
   const ComponentPlan& component = *plan.find(key);
   const ComponentCharge& result = *charge.find(key);
-  const std::string amount =
-      result.amount_mol ? shown(units::Amount::fromMoles(result.amount_mol->value())) : std::string{};
+  const std::string amount = result.amount_mol
+                                 ? shown(units::Amount::fromMoles(result.amount_mol->value()))
+                                 : std::string{};
   std::vector<std::string> steps{basisStep(plan, charge, component, amount)};
   const auto add = [&steps](std::string step) {
     if (!step.empty()) steps.push_back(std::move(step));
   };
   add(targetStep(component, result, amount));
   add(deviceStep(component, result));
-  if (!result.substance.molarMassSource.empty()) add("molar mass: " + result.substance.molarMassSource);
+  if (!result.substance.molarMassSource.empty())
+    add("molar mass: " + result.substance.molarMassSource);
   if (!result.densitySource.empty()) add("density: " + result.densitySource);
   return steps;
 }
@@ -109,7 +125,8 @@ std::string supplyText(const Plan& plan, const ComponentPlan& component) {
     const auto solvent = plan.solventOf(*stock);
     const std::string name = solvent ? plan.components[*solvent].name : stock->solvent;
     return fmt::format("stock {} in {}",
-                       stock->concentration ? shown(*stock->concentration) : percentText(*stock->massFraction) + " w/w",
+                       stock->concentration ? shown(*stock->concentration)
+                                            : percentText(*stock->massFraction) + " w/w",
                        name);
   }
   const auto& gas = std::get<GasSupply>(component.supply);
@@ -118,10 +135,12 @@ std::string supplyText(const Plan& plan, const ComponentPlan& component) {
 
 std::string ratioText(const ComponentPlan& component, const ComponentCharge& charge) {
   if (component.amount.basis == Basis::kShare) {
-    return fmt::format("{} {}", component.amount.asWritten, component.amount.value == 1.0 ? "part" : "parts");
+    return fmt::format("{} {}", component.amount.asWritten,
+                       component.amount.value == 1.0 ? "part" : "parts");
   }
   if (component.isSolvent() || !charge.equiv) return {};
-  const bool catalytic = component.role == Role::kPhotocatalyst || component.role == Role::kCocatalyst ||
+  const bool catalytic = component.role == Role::kPhotocatalyst ||
+                         component.role == Role::kCocatalyst ||
                          component.amount.basis == Basis::kMolPercent;
   if (catalytic && *charge.molPercent < 100.0) {
     return units::toSignificant(*charge.molPercent, 3) + " mol%";

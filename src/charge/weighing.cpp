@@ -37,7 +37,10 @@ class WeighingReader {
 
  private:
   void fault(int line, std::string field, std::string what, std::string mend) {
-    m_faults.push_back({.file = m_file, .line = line, .field = std::move(field), .what = std::move(what),
+    m_faults.push_back({.file = m_file,
+                        .line = line,
+                        .field = std::move(field),
+                        .what = std::move(what),
                         .mend = std::move(mend)});
   }
 
@@ -48,11 +51,14 @@ class WeighingReader {
       } else if (header.cells[i] == "actual") {
         m_actualColumn = i;
       } else {
-        fault(header.line, header.cells[i], "this column is not known here", "the columns are key and actual");
+        fault(header.line, header.cells[i], "this column is not known here",
+              "the columns are key and actual");
       }
     }
-    if (!m_keyColumn) fault(header.line, "key", "the column is missing", "begin with the row key,actual");
-    if (!m_actualColumn) fault(header.line, "actual", "the column is missing", "begin with the row key,actual");
+    if (!m_keyColumn)
+      fault(header.line, "key", "the column is missing", "begin with the row key,actual");
+    if (!m_actualColumn)
+      fault(header.line, "actual", "the column is missing", "begin with the row key,actual");
     return m_faults.empty();
   }
 
@@ -61,22 +67,26 @@ class WeighingReader {
     const std::string& written = row.cells[*m_actualColumn];
     const ComponentPlan* component = m_plan.find(key);
     if (component == nullptr) {
-      fault(row.line, "key", fmt::format("the plan has no component {}", text::quoted(key)), advice(key));
+      fault(row.line, "key", fmt::format("the plan has no component {}", text::quoted(key)),
+            advice(key));
     } else if (const auto earlier = std::ranges::find(m_weighings, key, &Weighing::key);
                earlier != m_weighings.end()) {
-      fault(row.line, key, fmt::format("this component was recorded on line {} already", earlier->line),
+      fault(row.line, key,
+            fmt::format("this component was recorded on line {} already", earlier->line),
             "keep one row for each component");
       return;
     }
     const auto read = units::readQuantityOf({units::Kind::kMass, units::Kind::kVolume}, written,
                                             units::Dialect::kFile);
     if (!read) {
-      fault(row.line, key, fmt::format("{}: {}", text::quoted(written), whatWithPosition(read.error(), written)),
+      fault(row.line, key,
+            fmt::format("{}: {}", text::quoted(written), whatWithPosition(read.error(), written)),
             read.error().mend);
       return;
     }
     if (component == nullptr) return;
-    Weighing weighing{.key = key, .actual = Mass::fromSi(read->si), .asWritten = written, .line = row.line};
+    Weighing weighing{
+        .key = key, .actual = Mass::fromSi(read->si), .asWritten = written, .line = row.line};
     if (read->kind == units::Kind::kVolume) weighing.actual = Volume::fromSi(read->si);
     if (const auto recordable = checkRecordable(*component, weighing.actual); !recordable) {
       fault(row.line, key, fmt::format("{}: {}", text::quoted(written), recordable.error().what),
@@ -129,7 +139,8 @@ class WeighedCharge {
       ComponentCharge& component = charge.components[m_plan.indexOf(m_weighings[w].key)];
       AsCharged charged;
       if (const auto* mass = std::get_if<Mass>(&m_weighings[w].actual)) charged.mass = *mass;
-      if (const auto* volume = std::get_if<Volume>(&m_weighings[w].actual)) charged.volume = *volume;
+      if (const auto* volume = std::get_if<Volume>(&m_weighings[w].actual))
+        charged.volume = *volume;
       charged.offTargetPercent = offTarget(component, charged);
       if (const auto& amount = m_amounts[w]) {
         charged.amount_mol = amount;
@@ -161,7 +172,8 @@ class WeighedCharge {
     const std::size_t i = m_plan.indexOf(weighing.key);
     m_recorded.push_back(recorded(m_plan.components[i], weighing.actual));
     const bool mass = std::holds_alternative<Mass>(weighing.actual);
-    return mass ? m_materials[i].amountInMass(m_recorded.back()) : m_materials[i].amountInVolume(m_recorded.back());
+    return mass ? m_materials[i].amountInMass(m_recorded.back())
+                : m_materials[i].amountInVolume(m_recorded.back());
   }
 
   /// The planned total with every recorded liquid in place of its planned volume [m3].
@@ -183,10 +195,12 @@ class WeighedCharge {
     const auto& planned = charge.components[m_plan.indexOf(m_plan.limiting)].amount_mol;
     const double value = charge.limitingAmount.moles();
     const auto u = planned ? planned->standardUncertainty() : std::nullopt;
-    return u ? Uncertain(value, *u, m_causes.add()) : Uncertain::unstated(value, m_causes.addUnknown());
+    return u ? Uncertain(value, *u, m_causes.add())
+             : Uncertain::unstated(value, m_causes.addUnknown());
   }
 
-  static std::optional<double> offTarget(const ComponentCharge& component, const AsCharged& charged) {
+  static std::optional<double> offTarget(const ComponentCharge& component,
+                                         const AsCharged& charged) {
     std::optional<double> ratio;
     if (charged.mass && component.targetMass) ratio = *charged.mass / *component.targetMass;
     if (charged.volume && component.targetVolume) ratio = *charged.volume / *component.targetVolume;
@@ -197,14 +211,16 @@ class WeighedCharge {
     return ratio && std::isfinite(*ratio) ? std::optional(100.0 * (*ratio - 1.0)) : std::nullopt;
   }
 
-  static void noteDevice(const ComponentPlan& plan, const AsCharged& charged, ComponentCharge& component) {
+  static void noteDevice(const ComponentPlan& plan, const AsCharged& charged,
+                         ComponentCharge& component) {
     if (!plan.device) return;
-    const bool fits = charged.mass ? plan.device->balance() != nullptr : plan.device->pipette() != nullptr;
+    const bool fits =
+        charged.mass ? plan.device->balance() != nullptr : plan.device->pipette() != nullptr;
     if (fits) return;
     component.notices.push_back(
         {"other-device",
-         fmt::format("{} was recorded by {}, but its device is {}: the uncertainty is not known", plan.name,
-                     charged.mass ? "mass" : "volume", plan.device->name),
+         fmt::format("{} was recorded by {}, but its device is {}: the uncertainty is not known",
+                     plan.name, charged.mass ? "mass" : "volume", plan.device->name),
          "component." + plan.key});
   }
 
@@ -222,10 +238,12 @@ std::expected<void, text::TextFault> checkRecordable(const ComponentPlan& compon
                                                      const std::variant<Mass, Volume>& actual) {
   const bool mass = std::holds_alternative<Mass>(actual);
   if (!mass && std::holds_alternative<SolidSupply>(component.supply)) {
-    return text::textFault(0, 0, "a solid is recorded by mass", "give what the balance showed, such as 12.3 mg");
+    return text::textFault(0, 0, "a solid is recorded by mass",
+                           "give what the balance showed, such as 12.3 mg");
   }
   if (mass && std::holds_alternative<GasSupply>(component.supply)) {
-    return text::textFault(0, 0, "a gas is recorded by volume", "give its volume at the supply's pressure");
+    return text::textFault(0, 0, "a gas is recorded by volume",
+                           "give its volume at the supply's pressure");
   }
   const auto* stock = std::get_if<StockSupply>(&component.supply);
   if (mass && stock != nullptr && !stock->density) {
@@ -235,7 +253,8 @@ std::expected<void, text::TextFault> checkRecordable(const ComponentPlan& compon
   return {};
 }
 
-text::Checked<Weighings> readWeighings(std::string_view bytes, const std::string& file, const Plan& plan) {
+text::Checked<Weighings> readWeighings(std::string_view bytes, const std::string& file,
+                                       const Plan& plan) {
   const auto table = text::readCsv(bytes, file);
   if (!table) return std::unexpected(table.error());
   return WeighingReader(file, plan).read(*table);
@@ -243,16 +262,18 @@ text::Checked<Weighings> readWeighings(std::string_view bytes, const std::string
 
 text::Checked<Charge> chargeAsWeighed(const Plan& plan, const Substances& substances,
                                       const Weighings& weighings, Retarget retarget) {
-  // The planned charge is worked out first: what is wrong with the plan must not hide behind a weighing.
+  // The planned charge is worked out first: what is wrong with the plan must not hide behind a
+  // weighing.
   auto charge = computeCharge(plan, substances);
   if (!charge) return charge;
   WeighedCharge weighed(plan, substances, weighings);
   if (retarget == Retarget::kYes) {
     const auto limiting = weighed.limitingAmount();
     if (!limiting) {
-      return std::unexpected(Faults{{.field = plan.limiting,
-                                     .what = "the limiting component was not weighed, so nothing can follow it",
-                                     .mend = "record it first, or leave the re-target out"}});
+      return std::unexpected(
+          Faults{{.field = plan.limiting,
+                  .what = "the limiting component was not weighed, so nothing can follow it",
+                  .mend = "record it first, or leave the re-target out"}});
     }
     charge = computeCharge(plan, substances, units::Amount::fromMoles(limiting->value()));
     if (!charge) return charge;

@@ -16,8 +16,8 @@ struct AtomicWeight {
 /// Standard atomic weight of an element; nothing where it has none (Tc, Pm, Po and heavier but Th,
 /// Pa, U). Where the standard weight is an interval the conventional value is used.
 /// The published bounds are taken as a rectangular distribution, u = half width/√3.
-/// Source: Prohaska et al., Pure Appl. Chem. 94 (2022) 573, doi 10.1515/pac-2019-0603; reading of the
-/// bounds: Possolo et al., Pure Appl. Chem. 90 (2018) 395 (from memory).
+/// Source: Prohaska et al., Pure Appl. Chem. 94 (2022) 573, doi 10.1515/pac-2019-0603; reading of
+/// the bounds: Possolo et al., Pure Appl. Chem. 90 (2018) 395 (from memory).
 [[nodiscard]] std::optional<AtomicWeight> standardAtomicWeight(std::string_view symbol);
 
 /// Relative mass of a nuclide, `("C", 13)`; nothing where the table does not hold it.

@@ -42,13 +42,37 @@ struct Spelling {
 };
 
 constexpr auto kSpellings = std::to_array<Spelling>({
-    {"₀", '0'}, {"₁", '1'}, {"₂", '2'}, {"₃", '3'}, {"₄", '4'}, {"₅", '5'}, {"₆", '6'}, {"₇", '7'},
-    {"₈", '8'}, {"₉", '9'}, {"·", '*'}, {"∙", '*'}, {"⋅", '*'}, {"•", '*'}, {"−", '-'}, {"–", '-'},
+    {"₀", '0'},
+    {"₁", '1'},
+    {"₂", '2'},
+    {"₃", '3'},
+    {"₄", '4'},
+    {"₅", '5'},
+    {"₆", '6'},
+    {"₇", '7'},
+    {"₈", '8'},
+    {"₉", '9'},
+    {"·", '*'},
+    {"∙", '*'},
+    {"⋅", '*'},
+    {"•", '*'},
+    {"−", '-'},
+    {"–", '-'},
 });
 
 constexpr auto kSuperscripts = std::to_array<Spelling>({
-    {"⁰", '0'}, {"¹", '1'}, {"²", '2'}, {"³", '3'}, {"⁴", '4'}, {"⁵", '5'}, {"⁶", '6'}, {"⁷", '7'},
-    {"⁸", '8'}, {"⁹", '9'}, {"⁺", '+'}, {"⁻", '-'},
+    {"⁰", '0'},
+    {"¹", '1'},
+    {"²", '2'},
+    {"³", '3'},
+    {"⁴", '4'},
+    {"⁵", '5'},
+    {"⁶", '6'},
+    {"⁷", '7'},
+    {"⁸", '8'},
+    {"⁹", '9'},
+    {"⁺", '+'},
+    {"⁻", '-'},
 });
 
 PlainText toPlain(std::string_view formula) {
@@ -94,7 +118,8 @@ class FormulaReader {
     }
     Composition composition;
     if (auto charge = takeCharge()) composition.charge = *charge;
-    if (m_end == 0) return textFault(0, m_formula.size(), "a charge without atoms", "name the elements");
+    if (m_end == 0)
+      return textFault(0, m_formula.size(), "a charge without atoms", "name the elements");
     while (true) {
       const auto part = readPart();
       if (!part) return std::unexpected(part.error());
@@ -103,7 +128,8 @@ class FormulaReader {
       ++m_at;  // readPart stops at the end or at a joining point
     }
     for (const auto& [kind, count] : composition.atoms) {
-      if (count > kMostAtoms) return fault(0, m_end, "more than a million atoms", "check the numbers");
+      if (count > kMostAtoms)
+        return fault(0, m_end, "more than a million atoms", "check the numbers");
     }
     return composition;
   }
@@ -202,11 +228,13 @@ class FormulaReader {
       const char c = peek();
       if (c == '*' || c == '.') {
         if (depth == 0) return atoms;
-        return fault(m_at, m_at + 1, "a joining point inside brackets", "close the bracket before it");
+        return fault(m_at, m_at + 1, "a joining point inside brackets",
+                     "close the bracket before it");
       }
       if (c == ')' || c == ']' || c == '}') {
         if (depth > 0) return atoms;
-        return fault(m_at, m_at + 1, fmt::format("'{}' closes no bracket", c), "remove it or open one");
+        return fault(m_at, m_at + 1, fmt::format("'{}' closes no bracket", c),
+                     "remove it or open one");
       }
       Reading item = c == '(' || c == '[' || c == '{' ? readBracket(depth) : readElement(0);
       if (!item) return item;
@@ -219,7 +247,8 @@ class FormulaReader {
     const std::size_t opened = m_at;
     const char open = peek();
     const char close = open == '(' ? ')' : open == '[' ? ']' : '}';
-    if (depth + 1 > kDeepest) return fault(m_at, m_at + 1, "brackets nested too deeply", "simplify it");
+    if (depth + 1 > kDeepest)
+      return fault(m_at, m_at + 1, "brackets nested too deeply", "simplify it");
     ++m_at;
     Atoms inside;
     if (isDigit(peek())) {
@@ -303,8 +332,8 @@ std::string toText(const AtomKind& kind) {
   return fmt::format("[{}{}]", kind.massNumber, kind.symbol);
 }
 
-/// The formula with its charge, marked with `^` wherever a bare sign would be read otherwise (azide,
-/// `N3^-`, is not N with three charges).
+/// The formula with its charge, marked with `^` wherever a bare sign would be read otherwise
+/// (azide, `N3^-`, is not N with three charges).
 std::string withCharge(const std::string& hill, const Composition& composition) {
   if (composition.charge == 0) return hill;
   const char sign = composition.charge > 0 ? '+' : '-';
@@ -353,8 +382,9 @@ std::expected<MolarMassEstimate, TextFault> molarMass(const Composition& composi
                        "give the molar mass of the material instead");
     }
     if (!weight) {
-      return textFault(0, 0, fmt::format("no mass is known for the nuclide {}{}", kind.massNumber, kind.symbol),
-                       "check the mass number, or give the molar mass of the material instead");
+      return textFault(
+          0, 0, fmt::format("no mass is known for the nuclide {}{}", kind.massNumber, kind.symbol),
+          "check the mass number, or give the molar mass of the material instead");
     }
     sum += count * weight->value;
     variance += std::pow(count * weight->standardUncertainty, 2);

@@ -32,14 +32,14 @@ struct Composition {
 /// `.` with a factor in front (`CaSO4·0.5H2O`), isotopes `D`, `T`, `[13C]` (also `[13CH3]`),
 /// subscript and superscript digits, and a trailing charge `+`, `-`, `2+`, `^2-`.
 /// Without `^` one digit before the sign is the charge behind a lone element or a square bracket
-/// (`Ca2+`, `[Fe(CN)6]4-`) and counts atoms elsewhere (`NH4+`, `PF6-`); of two digits the second is the
-/// charge (`SO42-`) unless it is not 2 to 4, or carbon or hydrogen stands before (`C8H12+`).
+/// (`Ca2+`, `[Fe(CN)6]4-`) and counts atoms elsewhere (`NH4+`, `PF6-`); of two digits the second is
+/// the charge (`SO42-`) unless it is not 2 to 4, or carbon or hydrogen stands before (`C8H12+`).
 /// Faults point at the character: an unknown element, an open or stray bracket, a count of zero or
 /// above 10^6, nesting deeper than 64, a text longer than 1000 bytes.
 [[nodiscard]] std::expected<Composition, text::TextFault> parseFormula(std::string_view formula);
 
-/// The composition in Hill's order: carbon, hydrogen (with D and T), then by symbol; by symbol alone
-/// without carbon. Nuclides other than D and T stand in brackets behind their element.
+/// The composition in Hill's order: carbon, hydrogen (with D and T), then by symbol; by symbol
+/// alone without carbon. Nuclides other than D and T stand in brackets behind their element.
 /// Source: Hill, J. Am. Chem. Soc. 22 (1900) 478.
 [[nodiscard]] std::string toHillFormula(const Composition& composition);
 

@@ -41,7 +41,8 @@ double ReferenceTable::Row::required(std::string_view column) const {
                                      m_table->m_csv.rows[m_index].line, column));
 }
 
-text::Checked<ReferenceTable> ReferenceTable::read(std::string_view bytes, const std::string& file) {
+text::Checked<ReferenceTable> ReferenceTable::read(std::string_view bytes,
+                                                   const std::string& file) {
   constexpr std::string_view kFormat = "vialkeeper-reference/1 ";
   auto table = text::readCsv(bytes, file, text::CsvComments::kBeforeHeader);
   if (!table) return std::unexpected(table.error());

@@ -83,7 +83,8 @@ const Solvent* findSolvent(std::string_view nameOrCas) {
   const std::string wanted = text::asciiLowered(text::trimmed(nameOrCas));
   const auto matches = [&](const Solvent& solvent) {
     const auto same = [&](const std::string& name) { return text::asciiLowered(name) == wanted; };
-    return same(solvent.name) || solvent.cas == wanted || std::ranges::any_of(solvent.synonyms, same);
+    return same(solvent.name) || solvent.cas == wanted ||
+           std::ranges::any_of(solvent.synonyms, same);
   };
   const auto found = std::ranges::find_if(solvents(), matches);
   return found == solvents().end() ? nullptr : &*found;
@@ -102,7 +103,8 @@ std::optional<DensityAt> densityAt(const Solvent& solvent, units::Temperature te
   return std::nullopt;
 }
 
-std::optional<VapourPressure> vapourPressure(const Solvent& solvent, units::Temperature temperature) {
+std::optional<VapourPressure> vapourPressure(const Solvent& solvent,
+                                             units::Temperature temperature) {
   static const std::vector<AntoineSet> sets = readAntoineSets();
   const double T = temperature.kelvin();
   const AntoineSet* best = nullptr;

@@ -38,8 +38,8 @@ struct DensityAt {
 };
 
 /// Density of the liquid [g/mL] at a temperature: linear through the values at 20 and 25 °C, or the
-/// one that is known. Valid from 15 to 30 °C; with one value, within 3 K of it. Nothing if the table
-/// has none.
+/// one that is known. Valid from 15 to 30 °C; with one value, within 3 K of it. Nothing if the
+/// table has none.
 [[nodiscard]] std::optional<DensityAt> densityAt(const Solvent& solvent,
                                                  units::Temperature temperature);
 
@@ -52,8 +52,8 @@ struct VapourPressure {
   bool recalled = false;
 };
 
-/// Vapour pressure of the pure solvent: among the sets whose range holds the temperature the first in
-/// preference; outside all ranges the set that ends nearest, marked as outside its validity.
+/// Vapour pressure of the pure solvent: among the sets whose range holds the temperature the first
+/// in preference; outside all ranges the set that ends nearest, marked as outside its validity.
 /// Nothing where the table has no set for the solvent.
 /// \f$ \log_{10}(p/\mathrm{bar}) = A - B/(T/\mathrm{K} + C) \f$
 [[nodiscard]] std::optional<VapourPressure> vapourPressure(const Solvent& solvent,

@@ -55,8 +55,8 @@ class Pattern {
 
 /// Reads, draws and searches structures. Implemented by three modules over RDKit and libinchi; the
 /// one that reads is loaded by structureEngine(), those that draw (three times as slow to load) and
-/// search by the first drawing, fingerprint or pattern. A SMILES has at most 10 000 characters and 1000 atoms; blanks around it do not
-/// count. Not safe for use from two threads at once.
+/// search by the first drawing, fingerprint or pattern. A SMILES has at most 10 000 characters and
+/// 1000 atoms; blanks around it do not count. Not safe for use from two threads at once.
 class StructureEngine {
  public:
   StructureEngine() = default;

@@ -51,13 +51,15 @@ Json proposalJson(const charge::StockProposal& proposal) {
           {"pipette", proposal.pipette}};
 }
 
-Json componentJson(const app::PlannedRun& run, const charge::ComponentCharge& component, bool withWeighed) {
+Json componentJson(const app::PlannedRun& run, const charge::ComponentCharge& component,
+                   bool withWeighed) {
   const auto& mass = component.substance.molarMass;
   Json json;
   json["key"] = component.key;
   json["role"] = toText(component.role);
   json["name"] = component.name;
-  json["formula"] = component.substance.formula.empty() ? Json(nullptr) : Json(component.substance.formula);
+  json["formula"] =
+      component.substance.formula.empty() ? Json(nullptr) : Json(component.substance.formula);
   json["molar_mass_g_mol"] = mass ? Json(mass->value.gramsPerMole()) : Json(nullptr);
   json["amount_mmol"] = valueOf(component.amount_mol, kMillimolesPerMole);
   json["u_amount_mmol"] = uncertaintyOf(component.amount_mol, kMillimolesPerMole);
@@ -65,12 +67,14 @@ Json componentJson(const app::PlannedRun& run, const charge::ComponentCharge& co
   json["mol_percent"] = orNull(component.molPercent);
   json["concentration_mol_L"] =
       component.concentration ? Json(component.concentration->molPerLitre()) : Json(nullptr);
-  json["target_mass_mg"] = component.targetMass ? Json(component.targetMass->milligrams()) : Json(nullptr);
+  json["target_mass_mg"] =
+      component.targetMass ? Json(component.targetMass->milligrams()) : Json(nullptr);
   json["target_volume_uL"] =
       component.targetVolume ? Json(component.targetVolume->microlitres()) : Json(nullptr);
   json["tolerance_percent"] = component.tolerancePercent;
   if (component.proposal) json["proposed_stock"] = proposalJson(*component.proposal);
-  if (withWeighed) json["charged"] = component.charged ? chargedJson(*component.charged) : Json(nullptr);
+  if (withWeighed)
+    json["charged"] = component.charged ? chargedJson(*component.charged) : Json(nullptr);
   json["trail"] = charge::trailOf(run.plan, run.charge, component.key);
   json["notices"] = noticesJson(component.notices);
   return json;

@@ -19,12 +19,14 @@ using units::shown;
 std::string headLines(const app::PlannedRun& run) {
   const charge::Charge& charge = run.charge;
   std::string head = text::oneLine(run.plan.title.empty() ? "Untitled run" : run.plan.title);
-  if (!run.plan.series.empty()) head += fmt::format("  (series {})", text::oneLine(run.plan.series));
-  head += fmt::format("\nlimiting {}, {}{} · liquid {} mL", charge.limiting, shown(charge.limitingAmount),
-                      charge.retargeted ? " as weighed" : "",
+  if (!run.plan.series.empty())
+    head += fmt::format("  (series {})", text::oneLine(run.plan.series));
+  head += fmt::format("\nlimiting {}, {}{} · liquid {} mL", charge.limiting,
+                      shown(charge.limitingAmount), charge.retargeted ? " as weighed" : "",
                       units::toSignificant(charge.totalLiquid.millilitres(), 3));
   if (run.plan.vial) {
-    head += fmt::format(" in {:.3g} mL, {:.0f} % full", run.plan.vial->volume.millilitres(), 100.0 * *charge.fill);
+    head += fmt::format(" in {:.3g} mL, {:.0f} % full", run.plan.vial->volume.millilitres(),
+                        100.0 * *charge.fill);
   }
   return head + "\n\n";
 }
@@ -47,7 +49,9 @@ std::string withUncertainty(const Uncertain& number) {
   if (!u || *u == 0.0) return units::toSignificant(number.value(), 4);
   const std::string uText = units::toSignificant(*u, 2);
   const std::size_t point = uText.find('.');
-  const std::size_t places = point == std::string::npos || uText.find('e') != std::string::npos ? 0 : uText.size() - point - 1;
+  const std::size_t places = point == std::string::npos || uText.find('e') != std::string::npos
+                                 ? 0
+                                 : uText.size() - point - 1;
   return fmt::format("{:.{}f} ± {}", number.value(), places, uText);
 }
 
@@ -55,7 +59,9 @@ std::vector<std::string> weighedCells(const ComponentCharge& component) {
   if (!component.charged) return {"", "", ""};
   const charge::AsCharged& charged = *component.charged;
   return {charged.mass ? shown(*charged.mass, 4) : shown(*charged.volume, 4),
-          charged.equiv && component.role != charge::Role::kSolvent ? withUncertainty(*charged.equiv) : "",
+          charged.equiv && component.role != charge::Role::kSolvent
+              ? withUncertainty(*charged.equiv)
+              : "",
           charged.offTargetPercent ? fmt::format("{:+.1f} %", *charged.offTargetPercent) : ""};
 }
 
@@ -119,7 +125,8 @@ std::string trailLines(const app::PlannedRun& run) {
 }  // namespace
 
 std::string chargeTable(const app::PlannedRun& run, bool withWeighed, bool withTrail) {
-  return headLines(run) + table(run, withWeighed) + noticeLines(run.charge) + (withTrail ? trailLines(run) : "");
+  return headLines(run) + table(run, withWeighed) + noticeLines(run.charge) +
+         (withTrail ? trailLines(run) : "");
 }
 
 }  // namespace vialkeeper::cli

@@ -8,7 +8,8 @@
 
 namespace vialkeeper::cli {
 
-/// The charge for people: a head line, the table, the notices, and on demand where each number is from.
+/// The charge for people: a head line, the table, the notices, and on demand where each number is
+/// from.
 [[nodiscard]] std::string chargeTable(const app::PlannedRun& run, bool withWeighed, bool withTrail);
 
 }  // namespace vialkeeper::cli

@@ -62,10 +62,12 @@ Fault reworded(const CLI::ParseError& error, std::string hint) {
         return usageFault(said.substr(0, end), "this is missing", std::move(hint));
       }
       break;
-    case CLI::ExitCodes::ArgumentMismatch:  // "--pdf: 1 required TEXT missing", "--pdf: At Most 1 required but …"
+    case CLI::ExitCodes::ArgumentMismatch:  // "--pdf: 1 required TEXT missing", "--pdf: At Most 1
+                                            // required but …"
       if (const std::size_t end = said.find(": "); end != std::string::npos) {
         const bool repeated = said.find("At Most") != std::string::npos;
-        return repeated ? usageFault(said.substr(0, end), "this option is given more than once", "keep one of them")
+        return repeated ? usageFault(said.substr(0, end), "this option is given more than once",
+                                     "keep one of them")
                         : usageFault(said.substr(0, end), "its value is missing", std::move(hint));
       }
       break;
@@ -75,7 +77,8 @@ Fault reworded(const CLI::ParseError& error, std::string hint) {
                           "this option takes no value", std::move(hint));
       }
       break;
-    default: break;
+    default:
+      break;
   }
   return usageFault("", said, std::move(hint));
 }
@@ -86,10 +89,11 @@ Faults parserFaults(const CLI::App& program, const CLI::ParseError& error) {
   if (error.get_exit_code() == static_cast<int>(CLI::ExitCodes::ExtrasError)) {
     Faults faults;
     for (const std::string& extra : program.remaining(true)) {
-      if (!verbGiven && faults.empty() && !extra.starts_with('-')) return {unknownVerb(program, extra)};
+      if (!verbGiven && faults.empty() && !extra.starts_with('-'))
+        return {unknownVerb(program, extra)};
       const bool option = extra.starts_with('-');
-      faults.push_back(usageFault(extra, option ? "this option is not known" : "one argument too many",
-                                  helpHint(program)));
+      faults.push_back(usageFault(
+          extra, option ? "this option is not known" : "one argument too many", helpHint(program)));
     }
     if (!faults.empty()) return faults;
   }
@@ -107,21 +111,25 @@ Faults parserFaults(const CLI::App& program, const CLI::ParseError& error) {
 }
 
 void describe(CLI::App& program, CommonOptions& common) {
-  program.description("Vialkeeper: a record for light-driven, hydrogen-evolving reactions in sealed vials.");
+  program.description(
+      "Vialkeeper: a record for light-driven, hydrogen-evolving reactions in sealed vials.");
   program.set_version_flag("--version", "vialkeeper " VIALKEEPER_VERSION);
   program.add_option("--book", common.book, "the notebook file (or VIALKEEPER_BOOK)");
   program.add_option("--person", common.person, "who works, by initials (or VIALKEEPER_PERSON)");
   program.add_flag("--json", common.json, "print one JSON object in place of a table");
   program.require_subcommand(1);
   program.fallthrough();
-  program.footer("Exit status: 0 done, 1 the input is at fault, 2 the command line, 3 the notebook.");
+  program.footer(
+      "Exit status: 0 done, 1 the input is at fault, 2 the command line, 3 the notebook.");
 }
 
 std::vector<Verb> allVerbs(CLI::App& program) {
   std::vector<Verb> verbs;
-  for (const auto make : {massVerb, chargeVerb, sheetVerb, createVerb, shelfVerb, addVerb, cloneVerb, runsVerb,
-                          findVerb, showVerb, weighVerb, logVerb, correctVerb, resultVerb, compareVerb, labelVerb,
-                          importVerb, exportVerb, backupVerb, verifyVerb, keyVerb, sealVerb, countersignVerb}) {
+  for (const auto make :
+       {massVerb,    chargeVerb, sheetVerb,   createVerb, shelfVerb,      addVerb,
+        cloneVerb,   runsVerb,   findVerb,    showVerb,   weighVerb,      logVerb,
+        correctVerb, resultVerb, compareVerb, labelVerb,  importVerb,     exportVerb,
+        backupVerb,  verifyVerb, keyVerb,     sealVerb,   countersignVerb}) {
     verbs.push_back(make(program));
   }
   return verbs;
@@ -129,7 +137,8 @@ std::vector<Verb> allVerbs(CLI::App& program) {
 
 }  // namespace
 
-int run(std::span<const std::string> arguments, std::ostream& out, std::ostream& err, Surroundings& around) {
+int run(std::span<const std::string> arguments, std::ostream& out, std::ostream& err,
+        Surroundings& around) {
   CLI::App program;
   program.name("vialkeeper");
   CommonOptions common;
@@ -150,7 +159,8 @@ int run(std::span<const std::string> arguments, std::ostream& out, std::ostream&
     if (!result) return report(result.error(), err);
     out << *result;
     if (out.flush()) return 0;
-    return report({{.what = "the output could not be written", .mend = "check the disk or the pipe"}}, err);
+    return report(
+        {{.what = "the output could not be written", .mend = "check the disk or the pipe"}}, err);
   }
   return 2;
 }

@@ -10,8 +10,8 @@
 
 namespace vialkeeper::cli {
 
-/// The value as text, two blanks a level, with a line end. Numbers have the shortest form that reads
-/// back the same; infinities and NaN, which JSON lacks, are null. Fields keep their order.
+/// The value as text, two blanks a level, with a line end. Numbers have the shortest form that
+/// reads back the same; infinities and NaN, which JSON lacks, are null. Fields keep their order.
 [[nodiscard]] std::string toJsonText(const nlohmann::ordered_json& value);
 
 /// A number, or null where there is none.

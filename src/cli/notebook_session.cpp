@@ -29,8 +29,10 @@ text::Checked<std::unique_ptr<app::Notebook>> open(const CommonOptions& common, 
 
 text::Checked<std::string> bookFile(const CommonOptions& common) {
   if (!common.book.empty()) return common.book;
-  if (const auto named = common.around->environment("VIALKEEPER_BOOK"); named && !named->empty()) return *named;
-  return std::unexpected(text::Faults{usageFault("--book", "no notebook is named", "add --book FILE.vialbook, or set VIALKEEPER_BOOK")});
+  if (const auto named = common.around->environment("VIALKEEPER_BOOK"); named && !named->empty())
+    return *named;
+  return std::unexpected(text::Faults{usageFault(
+      "--book", "no notebook is named", "add --book FILE.vialbook, or set VIALKEEPER_BOOK")});
 }
 
 std::optional<std::string> namedPerson(const CommonOptions& common) {
@@ -60,7 +62,8 @@ text::Checked<NotebookSession> NotebookSession::forRebuilding(const CommonOption
   const auto file = bookFile(common);
   if (!file) return std::unexpected(file.error());
   std::error_code ignored;
-  auto notebook = std::filesystem::exists(*file, ignored) ? open(common, db::OpenFor::kWriting) : db::createNotebook(*file);
+  auto notebook = std::filesystem::exists(*file, ignored) ? open(common, db::OpenFor::kWriting)
+                                                          : db::createNotebook(*file);
   if (!notebook) return std::unexpected(notebook.error());
   return NotebookSession(*std::move(notebook), common.around->clock, "");
 }

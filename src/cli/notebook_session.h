@@ -18,8 +18,8 @@ class NotebookSession {
   /// For changing: also who works, by --person or VIALKEEPER_PERSON, or the only one there is.
   [[nodiscard]] static text::Checked<NotebookSession> forWriting(const CommonOptions& common);
 
-  /// For filling an empty notebook from an archive, which brings its own people; the file is made if it
-  /// is not there.
+  /// For filling an empty notebook from an archive, which brings its own people; the file is made
+  /// if it is not there.
   [[nodiscard]] static text::Checked<NotebookSession> forRebuilding(const CommonOptions& common);
 
   [[nodiscard]] app::Notebook& notebook() { return *m_notebook; }

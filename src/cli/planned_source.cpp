@@ -14,15 +14,17 @@ bool isRunCode(const std::string& source, const CommonOptions& common) {
   return bookFile(common).has_value() && !std::filesystem::exists(source, ignored);
 }
 
-text::Checked<app::PlannedRun> plannedFrom(const std::string& source, app::ChargeRequest request, const CommonOptions& common) {
+text::Checked<app::PlannedRun> plannedFrom(const std::string& source, app::ChargeRequest request,
+                                           const CommonOptions& common) {
   if (!isRunCode(source, common)) {
     request.planFile = source;
     return app::planCharge(request);
   }
   if (request.weighedFile || request.scaleToAmount || request.scaleToMass || request.scaleToVial) {
-    return std::unexpected(text::Faults{usageFault(request.weighedFile ? "--weighed" : "--scale-to",
-                                                   "a run of the notebook has its own weighings and scale",
-                                                   "record with weigh, or clone the run with --set")});
+    return std::unexpected(
+        text::Faults{usageFault(request.weighedFile ? "--weighed" : "--scale-to",
+                                "a run of the notebook has its own weighings and scale",
+                                "record with weigh, or clone the run with --set")});
   }
   auto session = NotebookSession::forReading(common);
   if (!session) return std::unexpected(session.error());

@@ -12,9 +12,10 @@ namespace vialkeeper::cli {
 /// Whether the word names a run of the notebook: one is named, and no file of that name is there.
 [[nodiscard]] bool isRunCode(const std::string& source, const CommonOptions& common);
 
-/// The charge of a plan file, or of a run of the notebook with what is recorded of it. What the request
-/// asks besides (a weighed file, another scale) is for plan files only.
-[[nodiscard]] text::Checked<app::PlannedRun> plannedFrom(const std::string& source, app::ChargeRequest request,
+/// The charge of a plan file, or of a run of the notebook with what is recorded of it. What the
+/// request asks besides (a weighed file, another scale) is for plan files only.
+[[nodiscard]] text::Checked<app::PlannedRun> plannedFrom(const std::string& source,
+                                                         app::ChargeRequest request,
                                                          const CommonOptions& common);
 
 }  // namespace vialkeeper::cli

@@ -14,7 +14,8 @@ using Json = nlohmann::ordered_json;
 
 /// The number of the entry with that row number, or null.
 Json numberJson(std::span<const app::NumberedEvent> all, app::RowNumber n) {
-  const auto found = std::ranges::find_if(all, [n](const app::NumberedEvent& entry) { return entry.event.n == n; });
+  const auto found = std::ranges::find_if(
+      all, [n](const app::NumberedEvent& entry) { return entry.event.n == n; });
   return n == 0 || found == all.end() ? Json(nullptr) : Json(found->number);
 }
 
@@ -90,7 +91,11 @@ Json toJson(const app::DatasetRecord& dataset) {
   for (const app::DatasetColumn& column : dataset.columns) {
     columns.push_back({{"name", column.name}, {"unit", textOrNullJson(column.unit)}});
   }
-  return {{"code", dataset.code}, {"kind", dataset.kind}, {"file", dataset.rawName}, {"rows", dataset.rows}, {"columns", columns}};
+  return {{"code", dataset.code},
+          {"kind", dataset.kind},
+          {"file", dataset.rawName},
+          {"rows", dataset.rows},
+          {"columns", columns}};
 }
 
 Json toJson(const app::SubstanceRecord& substance) {

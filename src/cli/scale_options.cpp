@@ -14,8 +14,10 @@
 namespace vialkeeper::cli {
 namespace {
 
-text::Fault unreadable(const char* option, const std::string& written, const text::TextFault& fault) {
-  return usageFault(option, fmt::format("{}: {}", text::quoted(written), whatWithPosition(fault, written)),
+text::Fault unreadable(const char* option, const std::string& written,
+                       const text::TextFault& fault) {
+  return usageFault(option,
+                    fmt::format("{}: {}", text::quoted(written), whatWithPosition(fault, written)),
                     fault.mend);
 }
 
@@ -31,8 +33,8 @@ void addScaleOptions(CLI::App& parser, ScaleOptions& options) {
 text::Faults readScale(const ScaleOptions& options, app::ChargeRequest& request) {
   text::Faults faults;
   if (options.scaleTo) {
-    const auto read = units::readQuantityOf({units::Kind::kAmount, units::Kind::kMass}, *options.scaleTo,
-                                            units::Dialect::kFile);
+    const auto read = units::readQuantityOf({units::Kind::kAmount, units::Kind::kMass},
+                                            *options.scaleTo, units::Dialect::kFile);
     if (!read) {
       faults.push_back(unreadable("--scale-to", *options.scaleTo, read.error()));
     } else if (read->kind == units::Kind::kAmount) {
@@ -42,7 +44,8 @@ text::Faults readScale(const ScaleOptions& options, app::ChargeRequest& request)
     }
   }
   if (options.scaleToVial) {
-    const auto read = units::readQuantity<units::Volume>(*options.scaleToVial, units::Dialect::kFile);
+    const auto read =
+        units::readQuantity<units::Volume>(*options.scaleToVial, units::Dialect::kFile);
     if (read) {
       request.scaleToVial = *read;
     } else {
@@ -50,7 +53,8 @@ text::Faults readScale(const ScaleOptions& options, app::ChargeRequest& request)
     }
   }
   if (options.scaleTo && options.scaleToVial) {
-    faults.push_back(usageFault("--scale-to-vial", "the scale is given twice", "keep --scale-to or --scale-to-vial"));
+    faults.push_back(usageFault("--scale-to-vial", "the scale is given twice",
+                                "keep --scale-to or --scale-to-vial"));
   }
   return faults;
 }

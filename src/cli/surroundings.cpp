@@ -22,7 +22,8 @@ Surroundings& processSurroundings() {
   static Surroundings surroundings{clock,
                                    [](const std::string& name) -> std::optional<std::string> {
                                      const char* value = std::getenv(name.c_str());
-                                     return value != nullptr ? std::optional<std::string>(value) : std::nullopt;
+                                     return value != nullptr ? std::optional<std::string>(value)
+                                                             : std::nullopt;
                                    },
                                    std::cin};
   return surroundings;

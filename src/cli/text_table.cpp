@@ -13,7 +13,9 @@ std::size_t widthOf(const std::string& cell) { return text::characterIndex(cell,
 
 }  // namespace
 
-void TextTable::addColumn(std::string title, Align align) { m_columns.push_back({std::move(title), align}); }
+void TextTable::addColumn(std::string title, Align align) {
+  m_columns.push_back({std::move(title), align});
+}
 
 void TextTable::addRow(std::vector<std::string> cells) {
   for (std::string& cell : cells) cell = text::oneLine(cell);

@@ -61,7 +61,8 @@ struct Verb {
 [[nodiscard]] Verb countersignVerb(CLI::App& program);
 
 /// A fault of the command line itself, at the option of that name.
-[[nodiscard]] inline text::Fault usageFault(std::string option, std::string what, std::string mend) {
+[[nodiscard]] inline text::Fault usageFault(std::string option, std::string what,
+                                            std::string mend) {
   return {.kind = text::FaultKind::kUsage,
           .field = std::move(option),
           .what = std::move(what),

@@ -42,11 +42,17 @@ text::Checked<std::vector<app::PlanOverride>> overridesOf(const std::vector<std:
 
 std::string answer(const app::AddedRun& added, const CommonOptions& common) {
   if (common.json) {
-    return toJsonText({{"run", toJson(added.run)}, {"new_substances", added.newSubstances}, {"notices", noticesJson(added.notices)}});
+    return toJsonText({{"run", toJson(added.run)},
+                       {"new_substances", added.newSubstances},
+                       {"notices", noticesJson(added.notices)}});
   }
-  std::string text = fmt::format("{}: {}\n", added.run.code, added.run.title.empty() ? "untitled" : text::oneLine(added.run.title));
-  for (const std::string& name : added.newSubstances) text += fmt::format("  new on the shelf: {}\n", text::oneLine(name));
-  for (const text::Notice& notice : added.notices) text += fmt::format("! {}\n", text::oneLine(notice.text));
+  std::string text =
+      fmt::format("{}: {}\n", added.run.code,
+                  added.run.title.empty() ? "untitled" : text::oneLine(added.run.title));
+  for (const std::string& name : added.newSubstances)
+    text += fmt::format("  new on the shelf: {}\n", text::oneLine(name));
+  for (const text::Notice& notice : added.notices)
+    text += fmt::format("! {}\n", text::oneLine(notice.text));
   return text;
 }
 
@@ -79,7 +85,10 @@ VerbResult runClone(const AddOptions& options, const CommonOptions& common) {
 }
 
 void addCommon(CLI::App& parser, AddOptions& options) {
-  parser.add_option("--set", options.set, "a field that is set otherwise: component.acid.mol_percent=10")->take_all();
+  parser
+      .add_option("--set", options.set,
+                  "a field that is set otherwise: component.acid.mol_percent=10")
+      ->take_all();
   parser.add_option("--title", options.title, "in place of the plan's title");
 }
 

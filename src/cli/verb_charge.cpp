@@ -40,7 +40,8 @@ VerbResult runCharge(const ChargeOptions& options, const CommonOptions& common) 
   const auto run = plannedFrom(options.plan, request, common);
   if (!run) return std::unexpected(run.error());
   const bool weighed = request.weighedFile.has_value() || ofNotebook;
-  return common.json ? toJsonText(toJson(*run, weighed)) : chargeTable(*run, weighed, options.trail);
+  return common.json ? toJsonText(toJson(*run, weighed))
+                     : chargeTable(*run, weighed, options.trail);
 }
 
 }  // namespace
@@ -48,9 +49,12 @@ VerbResult runCharge(const ChargeOptions& options, const CommonOptions& common) 
 Verb chargeVerb(CLI::App& program) {
   auto options = std::make_shared<ChargeOptions>();
   CLI::App* parser = program.add_subcommand("charge", "What to weigh and pipette for a plan");
-  parser->add_option("PLAN", options->plan, "a plan file, or with --book the code of a run")->required();
-  parser->add_option("--weighed", options->weighed, "CSV of key,actual: what was weighed and pipetted");
-  parser->add_flag("--retarget", options->retarget, "let all else follow the limiting component as weighed");
+  parser->add_option("PLAN", options->plan, "a plan file, or with --book the code of a run")
+      ->required();
+  parser->add_option("--weighed", options->weighed,
+                     "CSV of key,actual: what was weighed and pipetted");
+  parser->add_flag("--retarget", options->retarget,
+                   "let all else follow the limiting component as weighed");
   parser->add_flag("--trail", options->trail, "say where each number is from");
   addScaleOptions(*parser, options->scale);
   return {parser, [options](const CommonOptions& common) { return runCharge(*options, common); }};

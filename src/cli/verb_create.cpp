@@ -21,22 +21,27 @@ VerbResult runCreate(const std::string& name, const CommonOptions& common) {
   if (!file) return std::unexpected(file.error());
   const auto initials = namedPerson(common);
   if (!initials) {
-    return std::unexpected(text::Faults{usageFault("--person", "nobody is named", "say who keeps the notebook: --person KW")});
+    return std::unexpected(text::Faults{
+        usageFault("--person", "nobody is named", "say who keeps the notebook: --person KW")});
   }
   if (!app::areInitials(*initials)) {
-    return std::unexpected(text::Faults{usageFault("--person", fmt::format("{} are no initials", text::quoted(*initials)),
-                                                   "use 1 to 8 capital letters and digits, such as KW")});
+    return std::unexpected(text::Faults{
+        usageFault("--person", fmt::format("{} are no initials", text::quoted(*initials)),
+                   "use 1 to 8 capital letters and digits, such as KW")});
   }
   auto notebook = db::createNotebook(*file);
   if (!notebook) return std::unexpected(notebook.error());
   const app::Desk desk{**notebook, common.around->clock, *initials};
-  const auto done = (*notebook)->act(desk.action("create"), [&](app::Writing& writing) -> text::Checked<void> {
-    const auto n = writing.addPerson({.code = *initials, .name = name});
-    if (!n) return std::unexpected(n.error());
-    return {};
-  });
+  const auto done =
+      (*notebook)->act(desk.action("create"), [&](app::Writing& writing) -> text::Checked<void> {
+        const auto n = writing.addPerson({.code = *initials, .name = name});
+        if (!n) return std::unexpected(n.error());
+        return {};
+      });
   if (!done) return std::unexpected(done.error());
-  if (common.json) return toJsonText({{"file", *file}, {"person", *initials}, {"notices", nlohmann::ordered_json::array()}});
+  if (common.json)
+    return toJsonText(
+        {{"file", *file}, {"person", *initials}, {"notices", nlohmann::ordered_json::array()}});
   return fmt::format("{}: a new notebook, kept by {}\n", *file, *initials);
 }
 

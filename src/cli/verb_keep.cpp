@@ -40,7 +40,10 @@ VerbResult runVerify(const CommonOptions& common) {
   if (!report->findings.empty()) {
     text::Faults faults;
     for (const app::Finding& finding : report->findings) {
-      faults.push_back({.kind = text::FaultKind::kNotebook, .file = *bookFile(common), .field = finding.where, .what = finding.what,
+      faults.push_back({.kind = text::FaultKind::kNotebook,
+                        .file = *bookFile(common),
+                        .field = finding.where,
+                        .what = finding.what,
                         .mend = "keep the file as it is and go back to a backup"});
     }
     return std::unexpected(std::move(faults));
@@ -53,8 +56,8 @@ VerbResult runVerify(const CommonOptions& common) {
                        {"seals", report->seals},
                        {"notices", Json::array()}});
   }
-  return fmt::format("sound: {} revisions, {} records, {} attachments, {} seals\n", report->revisions, report->records,
-                     report->attachments, report->seals);
+  return fmt::format("sound: {} revisions, {} records, {} attachments, {} seals\n",
+                     report->revisions, report->records, report->attachments, report->seals);
 }
 
 struct ExportOptions {
@@ -65,9 +68,10 @@ struct ExportOptions {
 
 VerbResult runExport(const ExportOptions& options, const CommonOptions& common) {
   if (options.all == !options.runs.empty()) {
-    return std::unexpected(text::Faults{usageFault(options.all ? "--all" : "RUN",
-                                                   options.all ? "runs are named besides --all" : "nothing is named to export",
-                                                   "name runs, or give --all")});
+    return std::unexpected(text::Faults{
+        usageFault(options.all ? "--all" : "RUN",
+                   options.all ? "runs are named besides --all" : "nothing is named to export",
+                   "name runs, or give --all")});
   }
   auto session = NotebookSession::forReading(common);
   if (!session) return std::unexpected(session.error());
@@ -75,7 +79,9 @@ VerbResult runExport(const ExportOptions& options, const CommonOptions& common) 
                                 : app::exportRuns(session->notebook(), options.runs, options.to);
   if (!done) return std::unexpected(done.error());
   if (common.json) return toJsonText({{"folder", options.to}, {"notices", Json::array()}});
-  return fmt::format("{}: {}\n", options.to, options.all ? "the whole notebook" : fmt::format("{} runs", options.runs.size()));
+  return fmt::format(
+      "{}: {}\n", options.to,
+      options.all ? "the whole notebook" : fmt::format("{} runs", options.runs.size()));
 }
 
 struct ImportOptions {
@@ -91,7 +97,9 @@ VerbResult importArchive(const ImportOptions& options, const CommonOptions& comm
   if (!done) return std::unexpected(done.error());
   const auto summary = session->notebook().summary();
   if (!summary) return std::unexpected(summary.error());
-  if (common.json) return toJsonText({{"runs", summary->runs}, {"revisions", summary->revisions}, {"notices", Json::array()}});
+  if (common.json)
+    return toJsonText(
+        {{"runs", summary->runs}, {"revisions", summary->revisions}, {"notices", Json::array()}});
   return fmt::format("{} runs, {} revisions\n", summary->runs, summary->revisions);
 }
 
@@ -102,24 +110,33 @@ VerbResult importData(const ImportOptions& options, const CommonOptions& common)
   if (!session) return std::unexpected(session.error());
   const auto run = app::runOfCode(session->notebook(), options.run);
   if (!run) return std::unexpected(run.error());
-  const auto imported = app::importDataset(session->desk(), *run, *bytes, options.file, options.kind);
+  const auto imported =
+      app::importDataset(session->desk(), *run, *bytes, options.file, options.kind);
   if (!imported) return std::unexpected(imported.error());
-  if (common.json) return toJsonText({{"dataset", toJson(imported->record)}, {"notices", noticesJson(imported->notices)}});
-  std::string answer = fmt::format("{}: {} rows, linked to {}\n", imported->record.code, imported->record.rows, run->code);
-  for (const text::Notice& notice : imported->notices) answer += "! " + text::oneLine(notice.text) + "\n";
+  if (common.json)
+    return toJsonText(
+        {{"dataset", toJson(imported->record)}, {"notices", noticesJson(imported->notices)}});
+  std::string answer = fmt::format("{}: {} rows, linked to {}\n", imported->record.code,
+                                   imported->record.rows, run->code);
+  for (const text::Notice& notice : imported->notices)
+    answer += "! " + text::oneLine(notice.text) + "\n";
   return answer;
 }
 
 VerbResult runImport(const ImportOptions& options, const CommonOptions& common) {
   std::error_code ignored;
-  const bool archive = std::filesystem::exists(std::filesystem::path(options.file) / "notebook.json", ignored);
+  const bool archive =
+      std::filesystem::exists(std::filesystem::path(options.file) / "notebook.json", ignored);
   if (options.kind.empty() && options.run.empty() && archive) return importArchive(options, common);
   text::Faults faults;
   if (options.kind.empty()) {
-    faults.push_back(usageFault("--as", "what the file holds is not said",
-                                "choose course, quench, decay, pressure or headspace; an archive folder needs no --as"));
+    faults.push_back(usageFault(
+        "--as", "what the file holds is not said",
+        "choose course, quench, decay, pressure or headspace; an archive folder needs no --as"));
   }
-  if (options.run.empty()) faults.push_back(usageFault("--run", "the run it belongs to is not named", "add --run KW-0042"));
+  if (options.run.empty())
+    faults.push_back(
+        usageFault("--run", "the run it belongs to is not named", "add --run KW-0042"));
   if (!faults.empty()) return std::unexpected(std::move(faults));
   return importData(options, common);
 }
@@ -134,13 +151,15 @@ Verb backupVerb(CLI::App& program) {
 }
 
 Verb verifyVerb(CLI::App& program) {
-  CLI::App* parser = program.add_subcommand("verify", "Check the notebook: pages, references, chain, records, files, seals");
+  CLI::App* parser = program.add_subcommand(
+      "verify", "Check the notebook: pages, references, chain, records, files, seals");
   return {parser, [](const CommonOptions& common) { return runVerify(common); }};
 }
 
 Verb exportVerb(CLI::App& program) {
   auto options = std::make_shared<ExportOptions>();
-  CLI::App* parser = program.add_subcommand("export", "Runs, or the whole notebook, as plain files");
+  CLI::App* parser =
+      program.add_subcommand("export", "Runs, or the whole notebook, as plain files");
   parser->add_option("RUN", options->runs, "the codes of runs");
   parser->add_flag("--all", options->all, "the whole notebook, so that import makes the same one");
   parser->add_option("--to", options->to, "a new folder")->required();
@@ -149,7 +168,8 @@ Verb exportVerb(CLI::App& program) {
 
 Verb importVerb(CLI::App& program) {
   auto options = std::make_shared<ImportOptions>();
-  CLI::App* parser = program.add_subcommand("import", "A data file for a run, or an archive into a new notebook");
+  CLI::App* parser =
+      program.add_subcommand("import", "A data file for a run, or an archive into a new notebook");
   parser->add_option("FILE", options->file, "a CSV, or the folder of export --all")->required();
   parser->add_option("--as", options->kind, "course, quench, decay, pressure, headspace");
   parser->add_option("--run", options->run, "the run the data belong to");

@@ -30,9 +30,14 @@ VerbResult runLabel(const LabelOptions& options, const CommonOptions& common) {
   }
   const auto document = exports::printVialLabels(labels);
   if (!document) return std::unexpected(document.error());
-  if (const auto written = app::writeFile(options.pdf, document->bytes); !written) return std::unexpected(written.error());
-  if (common.json) return toJsonText({{"pages", document->pages}, {"file", options.pdf}, {"notices", nlohmann::ordered_json::array()}});
-  return fmt::format("{}: {} {}\n", options.pdf, document->pages, document->pages == 1 ? "label" : "labels");
+  if (const auto written = app::writeFile(options.pdf, document->bytes); !written)
+    return std::unexpected(written.error());
+  if (common.json)
+    return toJsonText({{"pages", document->pages},
+                       {"file", options.pdf},
+                       {"notices", nlohmann::ordered_json::array()}});
+  return fmt::format("{}: {} {}\n", options.pdf, document->pages,
+                     document->pages == 1 ? "label" : "labels");
 }
 
 }  // namespace

@@ -36,25 +36,33 @@ VerbResult write(const LogOptions& options, const CommonOptions& common, bool co
   if (!session) return std::unexpected(session.error());
   const auto run = app::runOfCode(session->notebook(), options.run);
   if (!run) return std::unexpected(run.error());
-  const auto logged = correcting ? app::correctEvent(session->desk(), *run, options.event, requestOf(options))
-                                 : app::logLine(session->desk(), *run, requestOf(options));
+  const auto logged =
+      correcting ? app::correctEvent(session->desk(), *run, options.event, requestOf(options))
+                 : app::logLine(session->desk(), *run, requestOf(options));
   if (!logged) return std::unexpected(logged.error());
   text::Notices notices;
-  if (logged->late) notices.push_back({"late-entry", "the entry is written down more than a day after it happened", "at"});
+  if (logged->late)
+    notices.push_back(
+        {"late-entry", "the entry is written down more than a day after it happened", "at"});
   if (common.json) {
     const auto events = app::numberedEvents(session->notebook(), *run);
     if (!events) return std::unexpected(events.error());
-    return toJsonText({{"run", run->code}, {"read_as", logged->sentence}, {"event", toJson(logged->entry, *events)}, {"notices", noticesJson(notices)}});
+    return toJsonText({{"run", run->code},
+                       {"read_as", logged->sentence},
+                       {"event", toJson(logged->entry, *events)},
+                       {"notices", noticesJson(notices)}});
   }
-  std::string answer = fmt::format("{} entry {}: {}, {}\n", run->code, logged->entry.number, text::oneLine(logged->sentence),
-                                   toIsoText(logged->entry.event.at).substr(0, 16));
+  std::string answer =
+      fmt::format("{} entry {}: {}, {}\n", run->code, logged->entry.number,
+                  text::oneLine(logged->sentence), toIsoText(logged->entry.event.at).substr(0, 16));
   for (const text::Notice& notice : notices) answer += "! " + notice.text + "\n";
   return answer;
 }
 
 void addCommon(CLI::App& parser, LogOptions& options) {
   parser.add_option("TEXT", options.text, "for example: p 0.42 bar 35 C (docs/log.md)")->required();
-  parser.add_option("--at", options.at, "when it happened: 14:20, 20 min ago, 2026-03-04T14:20+01:00");
+  parser.add_option("--at", options.at,
+                    "when it happened: 14:20, 20 min ago, 2026-03-04T14:20+01:00");
   parser.add_option("--reason", options.reason, "why, where the run's state asks for it");
   parser.add_flag("--yes", options.yes, "keep a line that looks like a slip as an observation");
 }
@@ -66,12 +74,14 @@ Verb logVerb(CLI::App& program) {
   CLI::App* parser = program.add_subcommand("log", "Log what happens to a vial");
   parser->add_option("RUN", options->run, "the code of a run, KW-0042")->required();
   addCommon(*parser, *options);
-  return {parser, [options](const CommonOptions& common) { return write(*options, common, false); }};
+  return {parser,
+          [options](const CommonOptions& common) { return write(*options, common, false); }};
 }
 
 Verb correctVerb(CLI::App& program) {
   auto options = std::make_shared<LogOptions>();
-  CLI::App* parser = program.add_subcommand("correct", "Put a new entry in the place of a wrong one");
+  CLI::App* parser =
+      program.add_subcommand("correct", "Put a new entry in the place of a wrong one");
   parser->add_option("RUN", options->run, "the code of a run, KW-0042")->required();
   parser->add_option("EVENT", options->event, "the entry's number, as show tells it")->required();
   addCommon(*parser, *options);

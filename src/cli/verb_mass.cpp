@@ -24,11 +24,14 @@ VerbResult runMass(const MassOptions& options, const CommonOptions& common) {
   const bool byFormula = options.formulaOption->count() > 0;
   const bool bySmiles = options.smilesOption->count() > 0;
   if (byFormula == bySmiles) {
-    return std::unexpected(text::Faults{usageFault(
-        "", byFormula ? "a formula and a SMILES are both given" : "neither a formula nor a SMILES is given",
-        "give one: vialkeeper mass FORMULA, or vialkeeper mass --smiles S")});
+    return std::unexpected(text::Faults{
+        usageFault("",
+                   byFormula ? "a formula and a SMILES are both given"
+                             : "neither a formula nor a SMILES is given",
+                   "give one: vialkeeper mass FORMULA, or vialkeeper mass --smiles S")});
   }
-  const auto answer = byFormula ? app::massOfFormula(options.formula) : app::massOfSmiles(options.smiles);
+  const auto answer =
+      byFormula ? app::massOfFormula(options.formula) : app::massOfSmiles(options.smiles);
   if (!answer) {
     text::Fault fault = answer.error();
     if (bySmiles) fault.kind = text::FaultKind::kUsage;  // an option's value that cannot be read
@@ -52,8 +55,10 @@ VerbResult runMass(const MassOptions& options, const CommonOptions& common) {
 Verb massVerb(CLI::App& program) {
   auto options = std::make_shared<MassOptions>();
   CLI::App* parser = program.add_subcommand("mass", "Molar mass of a formula or a structure");
-  options->formulaOption = parser->add_option("FORMULA", options->formula, "for example C8H9N or CuSO4·5H2O");
-  options->smilesOption = parser->add_option("--smiles", options->smiles, "a structure, for example C1Cc2ccccc2N1");
+  options->formulaOption =
+      parser->add_option("FORMULA", options->formula, "for example C8H9N or CuSO4·5H2O");
+  options->smilesOption =
+      parser->add_option("--smiles", options->smiles, "a structure, for example C1Cc2ccccc2N1");
   return {parser, [options](const CommonOptions& common) { return runMass(*options, common); }};
 }
 

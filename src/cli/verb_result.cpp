@@ -29,20 +29,24 @@ VerbResult runResult(const ResultOptions& options, const CommonOptions& common) 
   if (!run) return std::unexpected(run.error());
   const auto changed = app::recordResult(session->desk(), *run, options.request);
   if (!changed) return std::unexpected(changed.error());
-  if (common.json) return toJsonText({{"run", toJson(*changed)}, {"notices", nlohmann::ordered_json::array()}});
-  return fmt::format("{}: {}{}\n", changed->code, toText(changed->state),
-                     changed->yield_percent ? fmt::format(", yield {:.3g} %", *changed->yield_percent) : "");
+  if (common.json)
+    return toJsonText({{"run", toJson(*changed)}, {"notices", nlohmann::ordered_json::array()}});
+  return fmt::format(
+      "{}: {}{}\n", changed->code, toText(changed->state),
+      changed->yield_percent ? fmt::format(", yield {:.3g} %", *changed->yield_percent) : "");
 }
 
 nlohmann::ordered_json differencesJson(const std::vector<app::Difference>& differences) {
   auto list = nlohmann::ordered_json::array();
-  for (const app::Difference& difference : differences) list.push_back({{"what", difference.what}, {"values", difference.values}});
+  for (const app::Difference& difference : differences)
+    list.push_back({{"what", difference.what}, {"values", difference.values}});
   return list;
 }
 
 VerbResult runCompare(const std::vector<std::string>& codes, const CommonOptions& common) {
   if (codes.size() < 2) {
-    return std::unexpected(text::Faults{usageFault("RUN", "one run alone cannot be compared", "name two runs or more")});
+    return std::unexpected(text::Faults{
+        usageFault("RUN", "one run alone cannot be compared", "name two runs or more")});
   }
   auto session = NotebookSession::forReading(common);
   if (!session) return std::unexpected(session.error());
@@ -83,7 +87,8 @@ VerbResult runCompare(const std::vector<std::string>& codes, const CommonOptions
 
 Verb resultVerb(CLI::App& program) {
   auto options = std::make_shared<ResultOptions>();
-  CLI::App* parser = program.add_subcommand("result", "Record results, the conclusion, and the run's next state");
+  CLI::App* parser =
+      program.add_subcommand("result", "Record results, the conclusion, and the run's next state");
   app::ResultRequest& request = options->request;
   parser->add_option("RUN", options->run, "the code of a run, KW-0042")->required();
   parser->add_option("--yield", request.yield, "\"71 %\" or \"71 ± 2 %\"");
@@ -91,7 +96,8 @@ Verb resultVerb(CLI::App& program) {
   parser->add_option("--conclusion", request.conclusion, "what was learnt");
   parser->add_option("--aim", request.aim, "what the run is for");
   parser->add_option("--title", request.title, "a new title");
-  parser->add_option("--state", request.state, "planned, charged, irradiating, worked-up, closed (docs/run-life.md)");
+  parser->add_option("--state", request.state,
+                     "planned, charged, irradiating, worked-up, closed (docs/run-life.md)");
   parser->add_option("--reason", request.reason, "why, where the run's state asks for it");
   return {parser, [options](const CommonOptions& common) { return runResult(*options, common); }};
 }

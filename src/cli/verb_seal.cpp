@@ -23,8 +23,8 @@ struct SealOptions {
   std::string passphraseFile;
 };
 
-/// The passphrase: the first line of a file, or of standard input. It never stands on the command line,
-/// where other users of the machine could read it.
+/// The passphrase: the first line of a file, or of standard input. It never stands on the command
+/// line, where other users of the machine could read it.
 text::Checked<std::string> passphrase(const SealOptions& options, const CommonOptions& common) {
   std::string line;
   if (options.passphraseFile.empty()) {
@@ -36,13 +36,16 @@ text::Checked<std::string> passphrase(const SealOptions& options, const CommonOp
   }
   if (!line.empty() && line.back() == '\r') line.pop_back();
   if (!line.empty()) return line;
-  return std::unexpected(text::Faults{usageFault("--passphrase-file", "no passphrase is given",
-                                                 "type it on standard input, or name a file that holds it")});
+  return std::unexpected(
+      text::Faults{usageFault("--passphrase-file", "no passphrase is given",
+                              "type it on standard input, or name a file that holds it")});
 }
 
-using Work = text::Checked<void> (*)(const app::Desk&, app::Signer&, const app::RunRecord&, const std::string&);
+using Work = text::Checked<void> (*)(const app::Desk&, app::Signer&, const app::RunRecord&,
+                                     const std::string&);
 
-VerbResult signRun(const SealOptions& options, const CommonOptions& common, Work work, const char* done) {
+VerbResult signRun(const SealOptions& options, const CommonOptions& common, Work work,
+                   const char* done) {
   auto session = NotebookSession::forWriting(common);
   if (!session) return std::unexpected(session.error());
   const auto run = app::runOfCode(session->notebook(), options.run);
@@ -53,7 +56,10 @@ VerbResult signRun(const SealOptions& options, const CommonOptions& common, Work
   const auto signedRun = work(session->desk(), signer, *run, *words);
   if (!signedRun) return std::unexpected(signedRun.error());
   if (common.json) {
-    return toJsonText({{"run", run->code}, {"person", session->desk().person}, {"done", done}, {"notices", nlohmann::ordered_json::array()}});
+    return toJsonText({{"run", run->code},
+                       {"person", session->desk().person},
+                       {"done", done},
+                       {"notices", nlohmann::ordered_json::array()}});
   }
   return fmt::format("{}: {} by {}\n", run->code, done, session->desk().person);
 }
@@ -66,20 +72,26 @@ VerbResult newKey(const SealOptions& options, const CommonOptions& common) {
   db::SodiumSigner signer;
   const auto made = app::makeSigningKey(session->desk(), signer, *words);
   if (!made) return std::unexpected(made.error());
-  if (common.json) return toJsonText({{"person", session->desk().person}, {"notices", nlohmann::ordered_json::array()}});
-  return fmt::format("{} has a new signing key; without its passphrase nobody can sign with it\n", session->desk().person);
+  if (common.json)
+    return toJsonText(
+        {{"person", session->desk().person}, {"notices", nlohmann::ordered_json::array()}});
+  return fmt::format("{} has a new signing key; without its passphrase nobody can sign with it\n",
+                     session->desk().person);
 }
 
 void addPassphrase(CLI::App& parser, SealOptions& options) {
-  parser.add_option("--passphrase-file", options.passphraseFile, "a file whose first line is the passphrase; else standard input");
+  parser.add_option("--passphrase-file", options.passphraseFile,
+                    "a file whose first line is the passphrase; else standard input");
 }
 
-Verb signing(CLI::App& program, const char* name, const char* description, Work work, const char* done) {
+Verb signing(CLI::App& program, const char* name, const char* description, Work work,
+             const char* done) {
   auto options = std::make_shared<SealOptions>();
   CLI::App* parser = program.add_subcommand(name, description);
   parser->add_option("RUN", options->run, "the code of a run, KW-0042")->required();
   addPassphrase(*parser, *options);
-  return {parser, [=](const CommonOptions& common) { return signRun(*options, common, work, done); }};
+  return {parser,
+          [=](const CommonOptions& common) { return signRun(*options, common, work, done); }};
 }
 
 }  // namespace
@@ -95,11 +107,13 @@ Verb keyVerb(CLI::App& program) {
 }
 
 Verb sealVerb(CLI::App& program) {
-  return signing(program, "seal", "Sign a closed run; from then on it takes addenda only", app::sealRun, "sealed");
+  return signing(program, "seal", "Sign a closed run; from then on it takes addenda only",
+                 app::sealRun, "sealed");
 }
 
 Verb countersignVerb(CLI::App& program) {
-  return signing(program, "countersign", "Sign a sealed run as a witness", app::countersignRun, "countersigned");
+  return signing(program, "countersign", "Sign a sealed run as a witness", app::countersignRun,
+                 "countersigned");
 }
 
 }  // namespace vialkeeper::cli

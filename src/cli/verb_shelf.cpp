@@ -35,8 +35,9 @@ bool isSubstance(const std::string& kind) { return kind == "substance" || kind =
 
 text::Checked<const app::ShelfKindInfo*> kindOf(const std::string& word) {
   if (const app::ShelfKindInfo* info = app::findShelfKind(word)) return info;
-  return std::unexpected(text::Faults{usageFault("KIND", fmt::format("{} is no kind of card", text::quoted(word)),
-                                                 "choose substance, lot, stock, vial, lamp, balance or pipette")});
+  return std::unexpected(
+      text::Faults{usageFault("KIND", fmt::format("{} is no kind of card", text::quoted(word)),
+                              "choose substance, lot, stock, vial, lamp, balance or pipette")});
 }
 
 text::Checked<app::TypedFields> fieldsOf(const std::vector<std::string>& set) {
@@ -44,8 +45,9 @@ text::Checked<app::TypedFields> fieldsOf(const std::vector<std::string>& set) {
   for (const std::string& each : set) {
     const std::size_t equals = each.find('=');
     if (equals == std::string::npos || equals == 0) {
-      return std::unexpected(text::Faults{usageFault("--set", fmt::format("{} sets nothing", text::quoted(each)),
-                                                     "write for example --set \"volume=11.6 mL\"")});
+      return std::unexpected(
+          text::Faults{usageFault("--set", fmt::format("{} sets nothing", text::quoted(each)),
+                                  "write for example --set \"volume=11.6 mL\"")});
     }
     fields.emplace_back(each.substr(0, equals), each.substr(equals + 1));
   }
@@ -96,10 +98,13 @@ VerbResult listSubstances(app::Notebook& notebook, const CommonOptions& common) 
   table.addColumn("g/mol", kRight);
   for (const app::SubstanceRecord& substance : *substances) {
     list.push_back(toJson(substance));
-    table.addRow({substance.name, substance.formula, substance.cas, fmt::format("{}", fmt::join(substance.synonyms, "; ")),
-                  substance.molarMass_g_mol ? fmt::format("{:.2f}", *substance.molarMass_g_mol) : ""});
+    table.addRow(
+        {substance.name, substance.formula, substance.cas,
+         fmt::format("{}", fmt::join(substance.synonyms, "; ")),
+         substance.molarMass_g_mol ? fmt::format("{:.2f}", *substance.molarMass_g_mol) : ""});
   }
-  return common.json ? toJsonText({{"substances", std::move(list)}, {"notices", Json::array()}}) : table.toText();
+  return common.json ? toJsonText({{"substances", std::move(list)}, {"notices", Json::array()}})
+                     : table.toText();
 }
 
 VerbResult listCards(const std::string& word, const CommonOptions& common) {
@@ -113,14 +118,17 @@ VerbResult listCards(const std::string& word, const CommonOptions& common) {
   Json list = Json::array();
   TextTable table;
   table.addColumn("name", TextTable::Align::kLeft);
-  for (const app::ShelfField& field : (*kind)->fields) table.addColumn(std::string(field.name), TextTable::Align::kLeft);
+  for (const app::ShelfField& field : (*kind)->fields)
+    table.addColumn(std::string(field.name), TextTable::Align::kLeft);
   for (const app::ShelfCard& card : *cards) {
     list.push_back(cardJson(card));
     std::vector<std::string> cells{card.name};
-    for (const app::ShelfField& field : (*kind)->fields) cells.push_back(app::shownField(card, field));
+    for (const app::ShelfField& field : (*kind)->fields)
+      cells.push_back(app::shownField(card, field));
     table.addRow(std::move(cells));
   }
-  return common.json ? toJsonText({{"cards", std::move(list)}, {"notices", Json::array()}}) : table.toText();
+  return common.json ? toJsonText({{"cards", std::move(list)}, {"notices", Json::array()}})
+                     : table.toText();
 }
 
 VerbResult showSubstance(const std::string& name, const CommonOptions& common) {
@@ -129,9 +137,11 @@ VerbResult showSubstance(const std::string& name, const CommonOptions& common) {
   const auto match = app::lookUpSubstance(session->notebook(), name);
   if (!match) return std::unexpected(match.error());
   if (match->same.empty()) {
-    return app::askedFault("name", fmt::format("{} is not on the shelf", text::quoted(name)),
-                           match->nearMisses.empty() ? "see shelf list substance"
-                                                     : fmt::format("did you mean {}?", fmt::join(match->nearMisses, ", ")));
+    return app::askedFault(
+        "name", fmt::format("{} is not on the shelf", text::quoted(name)),
+        match->nearMisses.empty()
+            ? "see shelf list substance"
+            : fmt::format("did you mean {}?", fmt::join(match->nearMisses, ", ")));
   }
   if (common.json) {
     Json list = Json::array();
@@ -140,11 +150,17 @@ VerbResult showSubstance(const std::string& name, const CommonOptions& common) {
   }
   std::string text;
   for (const app::SubstanceRecord& substance : match->same) {
-    text += fmt::format("{}  {}  {}\n", text::oneLine(substance.name), substance.formula, substance.cas);
-    if (!substance.synonyms.empty()) text += fmt::format("  also {}\n", text::oneLine(fmt::format("{}", fmt::join(substance.synonyms, "; "))));
-    if (substance.molarMass_g_mol) text += fmt::format("  {:.3f} g/mol\n", *substance.molarMass_g_mol);
-    if (!substance.canonicalSmiles.empty()) text += fmt::format("  {}\n  {}\n", substance.canonicalSmiles, substance.inchiKey);
-    if (!substance.hazards.empty()) text += fmt::format("  {}\n", fmt::join(substance.hazards, " "));
+    text += fmt::format("{}  {}  {}\n", text::oneLine(substance.name), substance.formula,
+                        substance.cas);
+    if (!substance.synonyms.empty())
+      text += fmt::format("  also {}\n",
+                          text::oneLine(fmt::format("{}", fmt::join(substance.synonyms, "; "))));
+    if (substance.molarMass_g_mol)
+      text += fmt::format("  {:.3f} g/mol\n", *substance.molarMass_g_mol);
+    if (!substance.canonicalSmiles.empty())
+      text += fmt::format("  {}\n  {}\n", substance.canonicalSmiles, substance.inchiKey);
+    if (!substance.hazards.empty())
+      text += fmt::format("  {}\n", fmt::join(substance.hazards, " "));
     if (!substance.note.empty()) text += fmt::format("  {}\n", text::oneLine(substance.note));
   }
   return text;
@@ -157,7 +173,9 @@ VerbResult importCards(const ShelfOptions& options, const CommonOptions& common)
   if (!session) return std::unexpected(session.error());
   const auto result = app::importShelf(session->desk(), options.kind, *bytes, options.file);
   if (!result) return std::unexpected(result.error());
-  if (common.json) return toJsonText({{"added", result->added}, {"known", result->known}, {"notices", Json::array()}});
+  if (common.json)
+    return toJsonText(
+        {{"added", result->added}, {"known", result->known}, {"notices", Json::array()}});
   return fmt::format("{} added, {} were on the shelf already\n", result->added, result->known);
 }
 
@@ -165,10 +183,12 @@ VerbResult importCards(const ShelfOptions& options, const CommonOptions& common)
 
 Verb shelfVerb(CLI::App& program) {
   auto options = std::make_shared<ShelfOptions>();
-  CLI::App* parser = program.add_subcommand("shelf", "Substances, lots, stocks, vials, lamps, balances, pipettes");
+  CLI::App* parser =
+      program.add_subcommand("shelf", "Substances, lots, stocks, vials, lamps, balances, pipettes");
   parser->require_subcommand(1);
   CLI::App* add = parser->add_subcommand("add", "Put a card on the shelf");
-  add->add_option("KIND", options->kind, "substance, lot, stock, vial, lamp, balance, pipette")->required();
+  add->add_option("KIND", options->kind, "substance, lot, stock, vial, lamp, balance, pipette")
+      ->required();
   add->add_option("NAME", options->name, "the name you call it by")->required();
   add->add_option("--set", options->set, "a field: \"volume=11.6 mL\"")->take_all();
   app::SubstanceDraft& draft = options->draft;
@@ -190,7 +210,8 @@ Verb shelfVerb(CLI::App& program) {
   return {parser, [=](const CommonOptions& common) -> VerbResult {
             if (add->parsed()) return addCardOrSubstance(*options, common);
             if (list->parsed()) return listCards(options->kind, common);
-            return show->parsed() ? showSubstance(options->name, common) : importCards(*options, common);
+            return show->parsed() ? showSubstance(options->name, common)
+                                  : importCards(*options, common);
           }};
 }
 

@@ -75,7 +75,8 @@ std::string jsonText(const Shown& shown, bool withHistory) {
   for (const auto& dataset : shown.datasets) json["datasets"].push_back(toJson(dataset));
   json["seals"] = nlohmann::ordered_json::array();
   for (const auto& seal : shown.seals) {
-    json["seals"].push_back({{"person", seal.person}, {"meaning", seal.meaning}, {"at", toIsoText(seal.signedAt)}});
+    json["seals"].push_back(
+        {{"person", seal.person}, {"meaning", seal.meaning}, {"at", toIsoText(seal.signedAt)}});
   }
   if (withHistory) json["history"] = historyJson(shown.history);
   json["notices"] = nlohmann::ordered_json::array();
@@ -85,7 +86,9 @@ std::string jsonText(const Shown& shown, bool withHistory) {
 std::string eventLine(const app::NumberedEvent& entry) {
   const app::EventRecord& event = entry.event;
   const bool late = event.at.utc != event.logged.utc;
-  std::string line = fmt::format("{:>4}  {}  {:<13}  {}", entry.number, toIsoText(event.at).substr(0, 16), event.kind, text::oneLine(event.raw));
+  std::string line =
+      fmt::format("{:>4}  {}  {:<13}  {}", entry.number, toIsoText(event.at).substr(0, 16),
+                  event.kind, text::oneLine(event.raw));
   if (event.supersededBy != 0) line += "  (corrected)";
   if (late) line += fmt::format("  (written down {})", toIsoText(event.logged).substr(0, 16));
   return line + fmt::format("  {}\n", event.person);
@@ -93,7 +96,8 @@ std::string eventLine(const app::NumberedEvent& entry) {
 
 std::string peopleText(const Shown& shown, bool withHistory) {
   const app::RunRecord& run = shown.run;
-  std::string text = fmt::format("{}  {}  {}\n", run.code, toText(run.state), text::oneLine(run.title));
+  std::string text =
+      fmt::format("{}  {}  {}\n", run.code, toText(run.state), text::oneLine(run.title));
   text += fmt::format("{} by {}", toIsoText(run.created).substr(0, 16), run.person);
   if (!run.series.empty()) text += ", series " + text::oneLine(run.series);
   text += "\n";
@@ -104,27 +108,35 @@ std::string peopleText(const Shown& shown, bool withHistory) {
   TextTable table;
   using enum TextTable::Align;
   for (const char* title : {"key", "role", "component"}) table.addColumn(title, kLeft);
-  for (const char* title : {"mmol", "mol%", "recorded", "mol% as charged"}) table.addColumn(title, kRight);
-  const auto number = [](const std::optional<double>& value) { return value ? fmt::format("{:.4g}", *value) : std::string{}; };
+  for (const char* title : {"mmol", "mol%", "recorded", "mol% as charged"})
+    table.addColumn(title, kRight);
+  const auto number = [](const std::optional<double>& value) {
+    return value ? fmt::format("{:.4g}", *value) : std::string{};
+  };
   for (const app::ComponentRecord& component : shown.components) {
     table.addRow({component.key, component.role, component.name, number(component.planned_mmol),
-                  number(component.planned_molPercent), component.actualText, number(component.charged_molPercent)});
+                  number(component.planned_molPercent), component.actualText,
+                  number(component.charged_molPercent)});
   }
   text += "\n" + table.toText();
   if (!shown.events.empty()) text += "\n";
   for (const app::NumberedEvent& entry : shown.events) text += eventLine(entry);
   for (const app::DatasetRecord& dataset : shown.datasets) {
-    text += fmt::format("\n{}  {}  {} rows from {}", dataset.code, dataset.kind, dataset.rows, text::oneLine(dataset.rawName));
+    text += fmt::format("\n{}  {}  {} rows from {}", dataset.code, dataset.kind, dataset.rows,
+                        text::oneLine(dataset.rawName));
   }
   if (!shown.datasets.empty()) text += "\n";
   for (const app::SealRecord& seal : shown.seals) {
-    text += fmt::format("\nsigned by {} as {} on {}\n", seal.person, seal.meaning, toIsoText(seal.signedAt));
+    text += fmt::format("\nsigned by {} as {} on {}\n", seal.person, seal.meaning,
+                        toIsoText(seal.signedAt));
   }
   if (!withHistory) return text;
   text += "\n";
   for (const app::RevisionRecord& revision : shown.history) {
-    text += fmt::format("revision {}  {}  {}  {}{}\n", revision.seq, toIsoText(revision.at), revision.person, revision.action,
-                        revision.reason.empty() ? "" : "  because " + text::oneLine(revision.reason));
+    text +=
+        fmt::format("revision {}  {}  {}  {}{}\n", revision.seq, toIsoText(revision.at),
+                    revision.person, revision.action,
+                    revision.reason.empty() ? "" : "  because " + text::oneLine(revision.reason));
   }
   return text;
 }
@@ -148,7 +160,8 @@ Verb showVerb(CLI::App& program) {
   auto options = std::make_shared<ShowOptions>();
   CLI::App* parser = program.add_subcommand("show", "Everything about a run");
   parser->add_option("RUN", options->run, "the code of a run, KW-0042")->required();
-  parser->add_flag("--history", options->history, "also every change: who, when, what, before and after");
+  parser->add_flag("--history", options->history,
+                   "also every change: who, when, what, before and after");
   return {parser, [options](const CommonOptions& common) { return runShow(*options, common); }};
 }
 

@@ -25,10 +25,12 @@ struct WeighOptions {
   bool retarget = false;
 };
 
-text::Faults questionsAsFaults(const std::string& key, const std::vector<app::SlipQuestion>& questions) {
+text::Faults questionsAsFaults(const std::string& key,
+                               const std::vector<app::SlipQuestion>& questions) {
   text::Faults faults;
   for (const app::SlipQuestion& question : questions) {
-    faults.push_back({.field = key, .what = question.what, .mend = question.ask + " If it is right, add --yes"});
+    faults.push_back(
+        {.field = key, .what = question.what, .mend = question.ask + " If it is right, add --yes"});
   }
   return faults;
 }
@@ -38,9 +40,11 @@ VerbResult runWeigh(const WeighOptions& options, const CommonOptions& common) {
   if (!session) return std::unexpected(session.error());
   const auto run = app::runOfCode(session->notebook(), options.run);
   if (!run) return std::unexpected(run.error());
-  auto weighed = app::weighComponent(session->desk(), *run, options.key, options.quantity, options.yes, options.reason);
+  auto weighed = app::weighComponent(session->desk(), *run, options.key, options.quantity,
+                                     options.yes, options.reason);
   if (!weighed) return std::unexpected(weighed.error());
-  if (!weighed->questions.empty()) return std::unexpected(questionsAsFaults(options.key, weighed->questions));
+  if (!weighed->questions.empty())
+    return std::unexpected(questionsAsFaults(options.key, weighed->questions));
   if (options.retarget) {
     auto retargeted = app::loadRun(session->notebook(), weighed->sheet.run, charge::Retarget::kYes);
     if (!retargeted) return std::unexpected(retargeted.error());
@@ -56,13 +60,16 @@ VerbResult runWeigh(const WeighOptions& options, const CommonOptions& common) {
 
 Verb weighVerb(CLI::App& program) {
   auto options = std::make_shared<WeighOptions>();
-  CLI::App* parser = program.add_subcommand("weigh", "Record what was weighed or pipetted for a component");
+  CLI::App* parser =
+      program.add_subcommand("weigh", "Record what was weighed or pipetted for a component");
   parser->add_option("RUN", options->run, "the code of a run, KW-0042")->required();
   parser->add_option("KEY", options->key, "the component's key")->required();
-  parser->add_option("QUANTITY", options->quantity, "what the balance or pipette gave, \"26.9 mg\"")->required();
+  parser->add_option("QUANTITY", options->quantity, "what the balance or pipette gave, \"26.9 mg\"")
+      ->required();
   parser->add_option("--reason", options->reason, "why, where the run's state asks for it");
   parser->add_flag("--yes", options->yes, "the quantity is right though it looks like a slip");
-  parser->add_flag("--retarget", options->retarget, "show the targets that follow the limiting component as weighed");
+  parser->add_flag("--retarget", options->retarget,
+                   "show the targets that follow the limiting component as weighed");
   return {parser, [options](const CommonOptions& common) { return runWeigh(*options, common); }};
 }
 

@@ -46,10 +46,10 @@ void Uncertain::combine(double scale, const Uncertain& other, double otherScale)
   auto mine = m_shares.begin();
   auto theirs = other.m_shares.begin();
   while (mine != m_shares.end() || theirs != other.m_shares.end()) {
-    const bool takeMine = theirs == other.m_shares.end() ||
-                          (mine != m_shares.end() && mine->cause <= theirs->cause);
-    const bool takeTheirs = mine == m_shares.end() ||
-                            (theirs != other.m_shares.end() && theirs->cause <= mine->cause);
+    const bool takeMine =
+        theirs == other.m_shares.end() || (mine != m_shares.end() && mine->cause <= theirs->cause);
+    const bool takeTheirs =
+        mine == m_shares.end() || (theirs != other.m_shares.end() && theirs->cause <= mine->cause);
     const Cause cause = takeMine ? mine->cause : theirs->cause;
     const double a = takeMine ? scale * (mine++)->u : 0.0;
     const double b = takeTheirs ? otherScale * (theirs++)->u : 0.0;

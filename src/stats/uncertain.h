@@ -9,8 +9,8 @@
 
 namespace vialkeeper::stats {
 
-/// A cause of doubt: one reading, one pipette stroke, one molar mass. Causes are independent of each
-/// other; what shares a cause is correlated through it.
+/// A cause of doubt: one reading, one pipette stroke, one molar mass. Causes are independent of
+/// each other; what shares a cause is correlated through it.
 class Cause {
  public:
   /// A cause whose standard uncertainty nobody stated.
@@ -36,9 +36,9 @@ class Causes {
 
 /// A number with its doubt, carried through a calculation by linear propagation.
 ///
-/// Each value keeps its signed first-order share of every cause, \f$ (\partial f/\partial x_i) u_i \f$,
-/// so that a cause that enters twice is added before it is squared: a ratio of a quantity to itself
-/// has no doubt, and two results of one balance reading are correlated as they must be.
+/// Each value keeps its signed first-order share of every cause, \f$ (\partial f/\partial x_i) u_i
+/// \f$, so that a cause that enters twice is added before it is squared: a ratio of a quantity to
+/// itself has no doubt, and two results of one balance reading are correlated as they must be.
 /// Model: JCGM 100:2008 (GUM), 5.1.2 and, through shared causes, 5.2.2.
 /// Valid where the model is close to linear over ±2u; the caller knows where it is not.
 class Uncertain {

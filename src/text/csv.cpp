@@ -94,7 +94,9 @@ class CsvScanner {
       }
     }
     m_cutShort = true;
-    m_faults.push_back({.file = m_file, .line = openedOn, .what = "a quotation mark is never closed",
+    m_faults.push_back({.file = m_file,
+                        .line = openedOn,
+                        .what = "a quotation mark is never closed",
                         .mend = "close it at the end of its cell"});
     return cell;
   }
@@ -123,11 +125,16 @@ void checkHeader(const CsvRow& header, const std::string& file, Faults& faults) 
   std::set<std::string_view> seen;
   for (const std::string& name : header.cells) {
     if (name.empty()) {
-      faults.push_back({.file = file, .line = header.line, .what = "a column without a name",
+      faults.push_back({.file = file,
+                        .line = header.line,
+                        .what = "a column without a name",
                         .mend = "name every column in the first row"});
     } else if (!seen.insert(name).second) {
-      faults.push_back({.file = file, .line = header.line, .field = name,
-                        .what = "this column stands twice", .mend = "keep one of them"});
+      faults.push_back({.file = file,
+                        .line = header.line,
+                        .field = name,
+                        .what = "this column stands twice",
+                        .mend = "keep one of them"});
     }
   }
 }
@@ -136,11 +143,13 @@ void checkCellCounts(const CsvTable& table, const std::string& file, Faults& fau
   const std::size_t wanted = table.header.cells.size();
   for (const CsvRow& row : table.rows) {
     if (row.cells.size() == wanted) continue;
-    faults.push_back(
-        {.file = file, .line = row.line,
-         .what = fmt::format("{} {} where the header has {}", row.cells.size(), row.cells.size() == 1 ? "cell" : "cells", wanted),
-         .mend = row.cells.size() < wanted ? "add the missing cells, empty ones too"
-                                           : "quote a cell that holds a comma, or remove the surplus"});
+    faults.push_back({.file = file,
+                      .line = row.line,
+                      .what = fmt::format("{} {} where the header has {}", row.cells.size(),
+                                          row.cells.size() == 1 ? "cell" : "cells", wanted),
+                      .mend = row.cells.size() < wanted
+                                  ? "add the missing cells, empty ones too"
+                                  : "quote a cell that holds a comma, or remove the surplus"});
   }
 }
 
@@ -167,7 +176,8 @@ Checked<CsvTable> readCsv(std::string_view bytes, const std::string& file, CsvCo
     }
   }
   if (table.header.cells.empty()) {
-    faults.push_back({.file = file, .what = "the file holds no table",
+    faults.push_back({.file = file,
+                      .what = "the file holds no table",
                       .mend = "begin with a row of column names"});
   }
   checkHeader(table.header, file, faults);

@@ -26,10 +26,10 @@ struct CsvTable {
 /// Which lines that begin with # are comments.
 enum class CsvComments { kNone, kBeforeHeader };
 
-/// Reads a comma-separated table: RFC 4180 quotes (a quoted cell may hold line breaks), blanks round
-/// unquoted cells ignored, CRLF, LF and a UTF-8 byte-order mark accepted, empty lines skipped.
-/// Faults, all told at once: NUL, other encodings, an open quote, text beside a quoted cell, a row
-/// with too few or too many cells, a repeated or empty column name, no header.
+/// Reads a comma-separated table: RFC 4180 quotes (a quoted cell may hold line breaks), blanks
+/// round unquoted cells ignored, CRLF, LF and a UTF-8 byte-order mark accepted, empty lines
+/// skipped. Faults, all told at once: NUL, other encodings, an open quote, text beside a quoted
+/// cell, a row with too few or too many cells, a repeated or empty column name, no header.
 [[nodiscard]] Checked<CsvTable> readCsv(std::string_view bytes, const std::string& file,
                                         CsvComments comments = CsvComments::kNone);
 

@@ -39,8 +39,8 @@ std::string joinLines(const std::vector<std::string>& lines) {
   return fmt::format("{}", fmt::join(lines, "\n"));
 }
 
-/// Number of the line with a dotted key too deep to follow, or 0. The parser and the tree that it makes
-/// descend one call per part, so that a key of some thousand parts would overrun the stack.
+/// Number of the line with a dotted key too deep to follow, or 0. The parser and the tree that it
+/// makes descend one call per part, so that a key of some thousand parts would overrun the stack.
 int lineOfEndlessKey(const std::vector<std::string>& lines) {
   for (std::size_t i = 0; i < lines.size(); ++i) {
     int dots = 0;
@@ -114,7 +114,8 @@ class LineRepair {
     if (content.starts_with('[')) {
       // The fields below stay out of the sections above.
       const bool array = content.starts_with("[[");
-      line = fmt::format(R"({}"\u0001{}"{})", array ? "[[" : "[", m_touched.size(), array ? "]]" : "]");
+      line = fmt::format(R"({}"\u0001{}"{})", array ? "[[" : "[", m_touched.size(),
+                         array ? "]]" : "]");
       return true;
     }
     const auto key = keyOfLine(line);
@@ -213,7 +214,9 @@ TomlDocument readToml(std::string_view bytes, const std::string& file) {
   }
   std::vector<std::string> lines = splitLines(withoutByteOrderMark(bytes));
   if (const int line = lineOfEndlessKey(lines)) {
-    document.faults.push_back({.file = file, .line = line, .what = "a key of too many parts",
+    document.faults.push_back({.file = file,
+                               .line = line,
+                               .what = "a key of too many parts",
                                .mend = "write sections as [name] and fields as name = value"});
     document.complete = false;
     return document;

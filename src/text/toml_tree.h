@@ -26,7 +26,8 @@ struct TomlMoment {};
 /// A TOML value with the line it stands on, free of the parser's own types.
 struct TomlValue {
   int line = 0;
-  std::variant<std::string, double, std::int64_t, bool, TomlArray, TomlTable, TomlMoment, Unreadable>
+  std::variant<std::string, double, std::int64_t, bool, TomlArray, TomlTable, TomlMoment,
+               Unreadable>
       data;
 };
 
@@ -37,8 +38,8 @@ struct TomlDocument {
   bool complete = true;  ///< false where so much was unreadable that missing fields mean nothing
 };
 
-/// Parses TOML and goes on behind a fault: an unreadable or repeated line is told, set aside, and the
-/// rest is read again, so that all faults of a file come out in one go.
+/// Parses TOML and goes on behind a fault: an unreadable or repeated line is told, set aside, and
+/// the rest is read again, so that all faults of a file come out in one go.
 [[nodiscard]] TomlDocument readToml(std::string_view bytes, const std::string& file);
 
 }  // namespace vialkeeper::text

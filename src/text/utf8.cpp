@@ -44,10 +44,14 @@ bool isInvisibleControl(char32_t value) {
 
 std::string escaped(char32_t value) {
   switch (value) {
-    case '\n': return "\\n";
-    case '\r': return "\\r";
-    case '\t': return "\\t";
-    default: break;
+    case '\n':
+      return "\\n";
+    case '\r':
+      return "\\r";
+    case '\t':
+      return "\\t";
+    default:
+      break;
   }
   const auto number = static_cast<unsigned>(value);
   return value < 0x100 ? fmt::format("\\x{:02X}", number) : fmt::format("\\u{:04X}", number);
@@ -68,7 +72,8 @@ CodePoint codePointAt(std::string_view text, std::size_t offset) {
   const std::size_t length = std::max<std::size_t>(sequenceLength(text, offset), 1);
   constexpr std::array<unsigned, 5> kLeadMask = {0, 0x7F, 0x1F, 0x0F, 0x07};
   char32_t value = byteAt(text, offset) & kLeadMask[length];
-  for (std::size_t i = 1; i < length; ++i) value = (value << 6U) | (byteAt(text, offset + i) & 0x3FU);
+  for (std::size_t i = 1; i < length; ++i)
+    value = (value << 6U) | (byteAt(text, offset + i) & 0x3FU);
   return {value, length};
 }
 
@@ -135,8 +140,9 @@ std::string quoted(std::string_view text) {
 
 std::string asciiLowered(std::string_view text) {
   std::string lowered(text);
-  std::ranges::transform(lowered, lowered.begin(),
-                         [](char c) { return c >= 'A' && c <= 'Z' ? static_cast<char>(c + 32) : c; });
+  std::ranges::transform(lowered, lowered.begin(), [](char c) {
+    return c >= 'A' && c <= 'Z' ? static_cast<char>(c + 32) : c;
+  });
   return lowered;
 }
 

@@ -42,7 +42,8 @@ struct Cursor {
 using Unread = std::unexpected<TextFault>;
 
 Unread unreadable(const Cursor& cursor) {
-  return textFault(cursor.at, cursor.text.size() - cursor.at, "this is no date and time of ISO 8601", kForm);
+  return textFault(cursor.at, cursor.text.size() - cursor.at,
+                   "this is no date and time of ISO 8601", kForm);
 }
 
 std::expected<year_month_day, TextFault> scanDate(Cursor& cursor) {
@@ -53,9 +54,11 @@ std::expected<year_month_day, TextFault> scanDate(Cursor& cursor) {
   const bool dash2 = m && cursor.skip('-');
   const auto d = dash2 ? cursor.digits(2) : std::nullopt;
   if (!d) return textFault(cursor.at, 1, "this is no date of ISO 8601", "write it as 2026-03-04");
-  const year_month_day date{year{*y}, month{static_cast<unsigned>(*m)}, day{static_cast<unsigned>(*d)}};
+  const year_month_day date{year{*y}, month{static_cast<unsigned>(*m)},
+                            day{static_cast<unsigned>(*d)}};
   if (!date.ok()) {
-    return textFault(begin, cursor.at - begin, "there is no such day in the calendar", "check month and day");
+    return textFault(begin, cursor.at - begin, "there is no such day in the calendar",
+                     "check month and day");
   }
   return date;
 }
@@ -84,7 +87,8 @@ std::expected<milliseconds, TextFault> scanTimeOfDay(Cursor& cursor) {
     }
   }
   if (*h > 23 || *m > 59 || s > 59) {
-    return textFault(begin, cursor.at - begin, "there is no such time of day", "write 00:00:00 to 23:59:59");
+    return textFault(begin, cursor.at - begin, "there is no such time of day",
+                     "write 00:00:00 to 23:59:59");
   }
   return hours{*h} + minutes{*m} + seconds{s} + milliseconds{ms};
 }
@@ -95,14 +99,14 @@ std::expected<minutes, TextFault> scanOffset(Cursor& cursor) {
   const bool east = cursor.skip('+');
   if (!east && !cursor.skip('-')) {
     return textFault(begin, cursor.text.size() - begin, "the offset from UTC is missing",
-                 "end with Z or an offset such as +01:00");
+                     "end with Z or an offset such as +01:00");
   }
   const auto h = cursor.digits(2);
   if (h) (void)cursor.skip(':');
   const auto m = h ? cursor.digits(2) : std::nullopt;
   if (!m || *h > 14 || *m > 59) {
     return textFault(begin, cursor.text.size() - begin, "this is no offset from UTC",
-                 "write an offset such as +01:00");
+                     "write an offset such as +01:00");
   }
   const minutes offset = hours{*h} + minutes{*m};
   return east ? offset : -offset;
@@ -127,7 +131,8 @@ std::expected<year_month_day, TextFault> readIsoDate(std::string_view text) {
   Cursor cursor{text};
   auto date = scanDate(cursor);
   if (date && cursor.at != text.size()) {
-    return textFault(cursor.at, text.size() - cursor.at, "more follows after the date", "write it as 2026-03-04");
+    return textFault(cursor.at, text.size() - cursor.at, "more follows after the date",
+                     "write it as 2026-03-04");
   }
   return date;
 }
@@ -137,13 +142,14 @@ std::string toIsoText(const Moment& moment) {
   const auto midnight = floor<days>(local);
   const year_month_day date{midnight};
   const hh_mm_ss time{local - midnight};
-  std::string text = fmt::format("{:04}-{:02}-{:02}T{:02}:{:02}:{:02}", static_cast<int>(date.year()),
-                                 static_cast<unsigned>(date.month()), static_cast<unsigned>(date.day()),
-                                 time.hours().count(), time.minutes().count(), time.seconds().count());
+  std::string text =
+      fmt::format("{:04}-{:02}-{:02}T{:02}:{:02}:{:02}", static_cast<int>(date.year()),
+                  static_cast<unsigned>(date.month()), static_cast<unsigned>(date.day()),
+                  time.hours().count(), time.minutes().count(), time.seconds().count());
   if (time.subseconds().count() != 0) text += fmt::format(".{:03}", time.subseconds().count());
   const auto offset = abs(moment.offset);
-  return text + fmt::format("{}{:02}:{:02}", moment.offset < minutes{0} ? '-' : '+', offset / hours{1},
-                            (offset % hours{1}).count());
+  return text + fmt::format("{}{:02}:{:02}", moment.offset < minutes{0} ? '-' : '+',
+                            offset / hours{1}, (offset % hours{1}).count());
 }
 
 }  // namespace vialkeeper::units

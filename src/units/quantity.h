@@ -218,7 +218,9 @@ class Duration : public ScalarQuantity<Duration, Kind::kDuration> {
 [[nodiscard]] constexpr Volume operator/(Amount n, Concentration c) {
   return Volume::fromSi(n.si() / c.si());
 }
-[[nodiscard]] constexpr Mass operator*(Amount n, MolarMass M) { return Mass::fromSi(n.si() * M.si()); }
+[[nodiscard]] constexpr Mass operator*(Amount n, MolarMass M) {
+  return Mass::fromSi(n.si() * M.si());
+}
 [[nodiscard]] constexpr Amount operator/(Mass m, MolarMass M) {
   return Amount::fromSi(m.si() / M.si());
 }

@@ -91,10 +91,11 @@ Reading<void> checkSeparators(const Cursor& cursor, std::size_t begin, Dialect d
   const bool commaFirst = comma != std::string_view::npos && (dialect == Dialect::kFile || !second);
   const std::size_t place = commaFirst ? begin + comma : cursor.at;
   if (dialect == Dialect::kFile && cursor.text[place] == ',') {
-    return textFault(place, 1, "a comma in a number", "write a decimal point and no group separators");
+    return textFault(place, 1, "a comma in a number",
+                     "write a decimal point and no group separators");
   }
   return textFault(place, 1, "a second decimal sign in one number",
-               "write one decimal sign and no group separators");
+                   "write one decimal sign and no group separators");
 }
 
 /// Reads digits with at most one decimal sign; the cursor then stands behind the number.
@@ -111,7 +112,8 @@ Reading<double> scanNumber(Cursor& cursor, Dialect dialect) {
   }
   if (digits == 0) {
     cursor.at = begin;
-    return textFault(begin, cursor.text.size() - begin, "no number here", "begin with a number, such as 12.3");
+    return textFault(begin, cursor.text.size() - begin, "no number here",
+                     "begin with a number, such as 12.3");
   }
   skipExponent(cursor);
   if (auto separators = checkSeparators(cursor, begin, dialect); !separators) {
@@ -124,8 +126,9 @@ Reading<double> scanNumber(Cursor& cursor, Dialect dialect) {
   double value = 0.0;
   const auto [end, error] = std::from_chars(plain.data(), plain.data() + plain.size(), value);
   if (error != std::errc{} || end != plain.data() + plain.size() || !std::isfinite(value)) {
-    return textFault(begin, cursor.at - begin, fmt::format("the number {} cannot be held", text::quoted(plain)),
-                 "write a number between 1e-300 and 1e300");
+    return textFault(begin, cursor.at - begin,
+                     fmt::format("the number {} cannot be held", text::quoted(plain)),
+                     "write a number between 1e-300 and 1e300");
   }
   return value;
 }
@@ -157,8 +160,9 @@ Reading<const Unit*> scanUnit(Cursor& cursor, Kinds kinds, Dialect dialect) {
     return textFault(begin, 0, "the unit is missing", unitAdvice(kinds, dialect));
   }
   if (const Unit* unit = findUnit(symbol, dialect)) return unit;
-  return textFault(begin, symbol.size(), fmt::format("unit {} is not known here", text::quoted(symbol)),
-               caseHint(symbol, kinds, dialect) + unitAdvice(kinds, dialect));
+  return textFault(begin, symbol.size(),
+                   fmt::format("unit {} is not known here", text::quoted(symbol)),
+                   caseHint(symbol, kinds, dialect) + unitAdvice(kinds, dialect));
 }
 
 bool isWanted(Kind kind, Kinds kinds) {
@@ -176,12 +180,13 @@ Reading<ReadQuantity> scanQuantity(Cursor& cursor, Kinds kinds, Dialect dialect)
   if (!unit) return std::unexpected(unit.error());
   if (!isWanted((*unit)->kind, kinds)) {
     return textFault(unitAt, text::trimmed(cursor.text.substr(unitAt, cursor.at - unitAt)).size(),
-                 fmt::format("{} is {}, but {} is wanted", (*unit)->symbol, nameOf((*unit)->kind),
-                             kindList(kinds)),
-                 unitAdvice(kinds, dialect));
+                     fmt::format("{} is {}, but {} is wanted", (*unit)->symbol,
+                                 nameOf((*unit)->kind), kindList(kinds)),
+                     unitAdvice(kinds, dialect));
   }
   const double si = *number * (*unit)->numerator / (*unit)->denominator + (*unit)->offset;
-  if (!std::isfinite(si)) return textFault(begin, cursor.at - begin, "a value too large to hold", "give a smaller one");
+  if (!std::isfinite(si))
+    return textFault(begin, cursor.at - begin, "a value too large to hold", "give a smaller one");
   return ReadQuantity{(*unit)->kind, si, *number, (*unit)->symbol};
 }
 
@@ -192,13 +197,14 @@ Reading<ReadQuantity> readWhole(std::string_view text, Kinds kinds, Dialect dial
   while (read && !cursor.atEnd()) {
     if (dialect != Dialect::kPerson || read->kind != Kind::kDuration) {
       return textFault(cursor.at, text.size() - cursor.at, "more follows after the quantity",
-                   "give one number with one unit");
+                       "give one number with one unit");
     }
     const std::size_t begin = cursor.at;
     const auto more = scanQuantity(cursor, kinds, dialect);
     if (!more) return more;
     if (more->kind != Kind::kDuration) {
-      return textFault(begin, cursor.at - begin, "only time spans are added up", "give one quantity");
+      return textFault(begin, cursor.at - begin, "only time spans are added up",
+                       "give one quantity");
     }
     read->si += more->si;
     cursor.skipBlanks();
@@ -211,11 +217,13 @@ Reading<ReadQuantity> checkRange(const ReadQuantity& read, std::string_view text
   const std::size_t length = text.size() - begin;
   if (read.kind == Kind::kTemperature) {
     if (read.si > 0.0) return read;
-    return textFault(begin, length, "a temperature at or below absolute zero", "give one above 0 K");
+    return textFault(begin, length, "a temperature at or below absolute zero",
+                     "give one above 0 K");
   }
   if (range == Range::kPositive && !(read.si > 0.0)) {
-    return textFault(begin, length, read.number < 0.0 ? "a negative value" : "zero, or too small to hold",
-                 "give a value above zero");
+    return textFault(begin, length,
+                     read.number < 0.0 ? "a negative value" : "zero, or too small to hold",
+                     "give a value above zero");
   }
   if (range == Range::kNonNegative && read.si < 0.0) {
     return textFault(begin, length, "a negative value", "give zero or a value above");
@@ -232,7 +240,7 @@ std::expected<double, TextFault> readNumber(std::string_view text, Dialect diale
   cursor.skipBlanks();
   if (number && !cursor.atEnd()) {
     return textFault(cursor.at, text.size() - cursor.at, "more follows after the number",
-                 "give a bare number");
+                     "give a bare number");
   }
   return number;
 }
@@ -252,10 +260,12 @@ std::expected<double, TextFault> readKelvinDifference(std::string_view text, Ran
   const auto read = readWhole(text, std::array{Kind::kTemperature}, Dialect::kFile);
   if (!read) return std::unexpected(read.error());
   if (read->symbol != "K") {
-    return textFault(0, text.size(), "a difference of temperature is given in K", "write for example 0.5 K");
+    return textFault(0, text.size(), "a difference of temperature is given in K",
+                     "write for example 0.5 K");
   }
   if (read->number < 0.0 || (range == Range::kPositive && read->number == 0.0)) {
-    return textFault(0, text.size(), "a difference that is not above zero", "write for example 0.5 K");
+    return textFault(0, text.size(), "a difference that is not above zero",
+                     "write for example 0.5 K");
   }
   return read->number;
 }

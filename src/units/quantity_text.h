@@ -16,8 +16,8 @@ namespace vialkeeper::units {
 /// A quantity as it was understood.
 struct ReadQuantity {
   Kind kind;
-  double si;               ///< coherent SI; for the ratios the bare number (5 for `5 mol%`)
-  double number;           ///< as written
+  double si;                ///< coherent SI; for the ratios the bare number (5 for `5 mol%`)
+  double number;            ///< as written
   std::string_view symbol;  ///< of the unit as the table spells it
 };
 

@@ -51,15 +51,19 @@ std::string shown(Temperature temperature) {
   return fmt::format("{} °C", degC == 0.0 ? 0.0 : degC);
 }
 
-std::string shown(Pressure pressure, int digits) { return toSignificant(pressure.bar(), digits) + " bar"; }
+std::string shown(Pressure pressure, int digits) {
+  return toSignificant(pressure.bar(), digits) + " bar";
+}
 
 std::string shown(Duration duration) {
   auto seconds = std::llround(duration.seconds());
   if (seconds >= 3600) seconds = 60 * std::llround(duration.seconds() / 60.0);
   const long long hours = seconds / 3600;
   const long long minutes = seconds % 3600 / 60;
-  if (hours > 0) return minutes == 0 ? fmt::format("{} h", hours) : fmt::format("{} h {} min", hours, minutes);
-  return seconds % 60 == 0 ? fmt::format("{} min", minutes) : fmt::format("{} min {} s", minutes, seconds % 60);
+  if (hours > 0)
+    return minutes == 0 ? fmt::format("{} h", hours) : fmt::format("{} h {} min", hours, minutes);
+  return seconds % 60 == 0 ? fmt::format("{} min", minutes)
+                           : fmt::format("{} min {} s", minutes, seconds % 60);
 }
 
 }  // namespace vialkeeper::units

@@ -13,7 +13,7 @@ namespace vialkeeper::units {
 /// below 1e-4 and from 1e7.
 [[nodiscard]] std::string toSignificant(double value, int digits);
 
-[[nodiscard]] std::string shown(Mass mass, int digits = 3);          ///< mg; g from 10 g, µg below 0.1 mg
+[[nodiscard]] std::string shown(Mass mass, int digits = 3);  ///< mg; g from 10 g, µg below 0.1 mg
 [[nodiscard]] std::string shown(Volume volume, int digits = 3);      ///< µL; mL from 10 mL
 [[nodiscard]] std::string shown(Amount amount, int digits = 3);      ///< mmol; µmol below 1 µmol
 [[nodiscard]] std::string shown(Concentration c, int digits = 3);    ///< mol/L; mM below 0.1 mol/L

@@ -17,10 +17,11 @@ namespace {
 
 std::string boundsText(const Bounds& bounds) {
   if (std::isinf(bounds.most)) {
-    return fmt::format("give a number {} {}", bounds.leastExcluded ? "above" : "not below", bounds.least);
+    return fmt::format("give a number {} {}", bounds.leastExcluded ? "above" : "not below",
+                       bounds.least);
   }
-  return fmt::format("give a number {} {} and {} {}", bounds.leastExcluded ? "above" : "from", bounds.least,
-                     bounds.mostExcluded ? "below" : "at most", bounds.most);
+  return fmt::format("give a number {} {} and {} {}", bounds.leastExcluded ? "above" : "from",
+                     bounds.least, bounds.mostExcluded ? "below" : "at most", bounds.most);
 }
 
 bool isWithin(double value, const Bounds& bounds) {
@@ -31,13 +32,15 @@ bool isWithin(double value, const Bounds& bounds) {
 
 std::optional<double> asNumber(const text::TomlValue& value) {
   if (const auto* real = std::get_if<double>(&value.data)) return *real;
-  if (const auto* integer = std::get_if<std::int64_t>(&value.data)) return static_cast<double>(*integer);
+  if (const auto* integer = std::get_if<std::int64_t>(&value.data))
+    return static_cast<double>(*integer);
   return std::nullopt;
 }
 
 bool isListOfTables(const text::TomlValue& value) {
   const auto* list = std::get_if<text::TomlArray>(&value.data);
-  return list != nullptr && !list->empty() && std::holds_alternative<text::TomlTable>(list->front().data);
+  return list != nullptr && !list->empty() &&
+         std::holds_alternative<text::TomlTable>(list->front().data);
 }
 
 /// Levenshtein distance: the fewest letters to add, drop or change.
@@ -64,7 +67,8 @@ int SectionPlace::lineOf(std::string_view field) const {
 }
 
 bool SectionPlace::holds(std::string_view field) const {
-  return std::ranges::any_of(fieldLines, [field](const auto& entry) { return entry.first == field; });
+  return std::ranges::any_of(fieldLines,
+                             [field](const auto& entry) { return entry.first == field; });
 }
 
 TomlSection::TomlSection(const text::TomlTable& table, std::string file, SectionPlace place,
@@ -138,7 +142,8 @@ std::optional<double> TomlSection::number(std::string_view field, Bounds bounds)
   if (value == nullptr) return std::nullopt;
   const auto number = asNumber(*value);
   if (!number) {
-    fault(field, "this is not a bare number", boundsText(bounds) + ", without unit or quotation marks");
+    fault(field, "this is not a bare number",
+          boundsText(bounds) + ", without unit or quotation marks");
     return std::nullopt;
   }
   if (!std::isfinite(*number) || !isWithin(*number, bounds)) {
@@ -160,11 +165,13 @@ std::optional<ReadQuantity> TomlSection::quantityOf(std::initializer_list<Kind> 
                                                     std::string_view field, Range range) {
   const std::string unit = unitsOf(*kinds.begin(), Dialect::kFile);
   const bool temperature = *kinds.begin() == Kind::kTemperature;
-  const std::string* written = takeText(field, (temperature ? "21 " : "2.0 ") + unit.substr(0, unit.find(',')));
+  const std::string* written =
+      takeText(field, (temperature ? "21 " : "2.0 ") + unit.substr(0, unit.find(',')));
   if (written == nullptr) return std::nullopt;
   const auto read = readQuantityOf(kinds, *written, Dialect::kFile, range);
   if (read) return *read;
-  fault(field, fmt::format("{}: {}", text::quoted(*written), whatWithPosition(read.error(), *written)),
+  fault(field,
+        fmt::format("{}: {}", text::quoted(*written), whatWithPosition(read.error(), *written)),
         read.error().mend);
   return std::nullopt;
 }
@@ -174,7 +181,8 @@ std::optional<double> TomlSection::kelvinDifference(std::string_view field, Rang
   if (written == nullptr) return std::nullopt;
   const auto read = readKelvinDifference(*written, range);
   if (read) return *read;
-  fault(field, fmt::format("{}: {}", text::quoted(*written), whatWithPosition(read.error(), *written)),
+  fault(field,
+        fmt::format("{}: {}", text::quoted(*written), whatWithPosition(read.error(), *written)),
         read.error().mend);
   return std::nullopt;
 }
@@ -191,7 +199,8 @@ std::optional<std::vector<std::string>> TomlSection::texts(std::string_view fiel
     }
   }
   if (array == nullptr || list.size() != array->size()) {
-    fault(field, "this is not a list of texts", "write texts in quotation marks between [ and ], with commas");
+    fault(field, "this is not a list of texts",
+          "write texts in quotation marks between [ and ], with commas");
     return std::nullopt;
   }
   return list;
@@ -202,10 +211,12 @@ std::optional<TomlSection> TomlSection::section(std::string_view field) {
   if (value == nullptr) return std::nullopt;
   const auto* table = std::get_if<text::TomlTable>(&value->data);
   if (table == nullptr) {
-    fault(field, "a section is wanted here", fmt::format("write [{}] or {} = {{ … }}", field, field));
+    fault(field, "a section is wanted here",
+          fmt::format("write [{}] or {} = {{ … }}", field, field));
     return std::nullopt;
   }
-  const std::string path = m_place.path.empty() ? std::string(field) : m_place.path + "." + std::string(field);
+  const std::string path =
+      m_place.path.empty() ? std::string(field) : m_place.path + "." + std::string(field);
   return TomlSection(*table, m_file, {.path = path, .line = value->line}, *m_faults);
 }
 
@@ -215,7 +226,8 @@ std::vector<TomlSection> TomlSection::sections(std::string_view field) {
   if (value == nullptr) return list;
   const auto* array = std::get_if<text::TomlArray>(&value->data);
   if (array == nullptr) {
-    fault(field, "a list of sections is wanted here", fmt::format("write [[{}]] above each", field));
+    fault(field, "a list of sections is wanted here",
+          fmt::format("write [[{}]] above each", field));
     return list;
   }
   const std::string prefix = m_place.path.empty() ? "" : m_place.path + ".";
@@ -260,14 +272,16 @@ void TomlSection::finish() {
   for (const auto& [name, value] : *m_table) {
     if (std::ranges::find(m_known, name) != m_known.end()) continue;
     const auto nearest = nearestName(name, m_known);
-    const bool isTable = std::holds_alternative<text::TomlTable>(value.data) || isListOfTables(value);
+    const bool isTable =
+        std::holds_alternative<text::TomlTable>(value.data) || isListOfTables(value);
     fault(name, isTable ? "this section is not known here" : "this field is not known here",
           nearest ? fmt::format("did you mean {}?", *nearest)
                   : fmt::format("known here are {}", fmt::join(m_known, ", ")));
   }
 }
 
-std::optional<std::string> nearestName(std::string_view name, const std::vector<std::string>& known) {
+std::optional<std::string> nearestName(std::string_view name,
+                                       const std::vector<std::string>& known) {
   std::optional<std::string> best;
   std::size_t least = 3;
   for (const std::string& candidate : known) {

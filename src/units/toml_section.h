@@ -22,7 +22,8 @@ struct Bounds {
   bool mostExcluded = false;
 };
 
-/// Where a section and its fields stood, kept with what was read so that later checks can point there.
+/// Where a section and its fields stood, kept with what was read so that later checks can point
+/// there.
 struct SectionPlace {
   std::string path;  ///< `component.amine`
   int line = 0;

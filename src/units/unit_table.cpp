@@ -98,9 +98,8 @@ bool isAllowed(const Unit& unit, Dialect dialect) {
 
 const Unit* findUnit(std::string_view symbol, Dialect dialect) {
   const std::string plain = folded(symbol);
-  const auto found = std::ranges::find_if(kUnits, [&](const Unit& unit) {
-    return unit.symbol == plain && isAllowed(unit, dialect);
-  });
+  const auto found = std::ranges::find_if(
+      kUnits, [&](const Unit& unit) { return unit.symbol == plain && isAllowed(unit, dialect); });
   return found == kUnits.end() ? nullptr : &*found;
 }
 
@@ -118,24 +117,42 @@ std::string unitsOf(Kind kind, Dialect dialect) {
 
 std::string_view nameOf(Kind kind) {
   switch (kind) {
-    case kMass: return "a mass";
-    case kAmount: return "an amount of substance";
-    case kVolume: return "a volume";
-    case kPressure: return "a pressure";
-    case kTemperature: return "a temperature";
-    case kConcentration: return "a concentration";
-    case kDensity: return "a density";
-    case kDuration: return "a time span";
-    case kLength: return "a length";
-    case kMolarMass: return "a molar mass";
-    case kSecondOrderRate: return "a second-order rate constant";
-    case kMolarAbsorptivity: return "a molar absorption coefficient";
-    case kPower: return "a power";
-    case kIrradiance: return "an irradiance";
-    case kEquivalents: return "equivalents";
-    case kMolPercent: return "mol%";
-    case kParts: return "parts by volume";
-    case kPercent: return "a percentage";
+    case kMass:
+      return "a mass";
+    case kAmount:
+      return "an amount of substance";
+    case kVolume:
+      return "a volume";
+    case kPressure:
+      return "a pressure";
+    case kTemperature:
+      return "a temperature";
+    case kConcentration:
+      return "a concentration";
+    case kDensity:
+      return "a density";
+    case kDuration:
+      return "a time span";
+    case kLength:
+      return "a length";
+    case kMolarMass:
+      return "a molar mass";
+    case kSecondOrderRate:
+      return "a second-order rate constant";
+    case kMolarAbsorptivity:
+      return "a molar absorption coefficient";
+    case kPower:
+      return "a power";
+    case kIrradiance:
+      return "an irradiance";
+    case kEquivalents:
+      return "equivalents";
+    case kMolPercent:
+      return "mol%";
+    case kParts:
+      return "parts by volume";
+    case kPercent:
+      return "a percentage";
   }
   return "a quantity";
 }

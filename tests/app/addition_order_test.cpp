@@ -17,7 +17,8 @@ std::string orderOf(const std::string& plan) {
 }
 
 std::string listed(const std::string& list) {
-  return replaced(sheetPlan(), "series = \"bases\"\n", "series = \"bases\"\naddition_order = " + list + "\n");
+  return replaced(sheetPlan(), "series = \"bases\"\n",
+                  "series = \"bases\"\naddition_order = " + list + "\n");
 }
 
 constexpr const char* kGas = R"([[component]]
@@ -41,8 +42,9 @@ TEST_CASE("solids come first, then neat liquids, stocks, solvents and gases", "[
 TEST_CASE("what the plan lists goes before the rule, the rest follows it", "[app][sheet]") {
   CHECK(orderOf(listed("[\"water\", \"nickel\"]")) == "water nickel amine lutidine standard mecn ");
   CHECK(orderOf(listed("[]")) == "amine lutidine standard nickel mecn water ");
-  CHECK(orderOf(listed("[\"water\", \"mecn\", \"standard\", \"amine\", \"lutidine\", \"nickel\"]")) ==
-        "water mecn standard amine lutidine nickel ");
+  CHECK(
+      orderOf(listed("[\"water\", \"mecn\", \"standard\", \"amine\", \"lutidine\", \"nickel\"]")) ==
+      "water mecn standard amine lutidine nickel ");
 }
 
 TEST_CASE("the sheet's rows stand in the order of addition", "[app][sheet]") {

@@ -9,13 +9,16 @@ using namespace vialkeeper::tests;
 
 namespace {
 
-std::vector<std::string> cautionsOf(const std::string& plan) { return app::weighingSheet(planned(plan)).cautions; }
+std::vector<std::string> cautionsOf(const std::string& plan) {
+  return app::weighingSheet(planned(plan)).cautions;
+}
 
 constexpr const char* kGases = "gases = [ { species = \"H2\" } ]\n";
 
 }  // namespace
 
-TEST_CASE("hydrogen and the pressure that it builds call for their cautions", "[app][sheet][cautions]") {
+TEST_CASE("hydrogen and the pressure that it builds call for their cautions",
+          "[app][sheet][cautions]") {
   const auto cautions = cautionsOf(sheetPlan());
   CHECK(anyHolds(cautions, "builds up pressure"));
   CHECK(anyHolds(cautions, "Hydrogen burns in air"));
@@ -24,10 +27,12 @@ TEST_CASE("hydrogen and the pressure that it builds call for their cautions", "[
   const auto still = cautionsOf(replaced(sheetPlan(), kGases, ""));
   CHECK(!anyHolds(still, "builds up pressure"));
   CHECK(!anyHolds(still, "Hydrogen"));
-  const auto nitrogen = cautionsOf(replaced(sheetPlan(), kGases, "gases = [ { species = \"N2\" } ]\n"));
+  const auto nitrogen =
+      cautionsOf(replaced(sheetPlan(), kGases, "gases = [ { species = \"N2\" } ]\n"));
   CHECK(anyHolds(nitrogen, "builds up pressure"));
   CHECK(!anyHolds(nitrogen, "Hydrogen"));
-  CHECK(anyHolds(cautionsOf(replaced(sheetPlan(), kGases, "gases = [ { species = \"CO\" } ]\n")), "Carbon monoxide"));
+  CHECK(anyHolds(cautionsOf(replaced(sheetPlan(), kGases, "gases = [ { species = \"CO\" } ]\n")),
+                 "Carbon monoxide"));
 }
 
 TEST_CASE("a vial without a rating is told where gas is given off", "[app][sheet][cautions]") {
@@ -39,16 +44,20 @@ TEST_CASE("a vial without a rating is told where gas is given off", "[app][sheet
 TEST_CASE("hydrogen under a headspace with oxygen is told", "[app][sheet][cautions]") {
   for (const char* atmosphere : {"\"air\"", "{ N2 = 0.9, O2 = 0.1 }"}) {
     INFO(atmosphere);
-    const std::string plan = replaced(sheetPlan(), "atmosphere = \"N2\"", std::string("atmosphere = ") + atmosphere);
+    const std::string plan =
+        replaced(sheetPlan(), "atmosphere = \"N2\"", std::string("atmosphere = ") + atmosphere);
     CHECK(anyHolds(cautionsOf(plan), "The headspace holds oxygen"));
     CHECK(!anyHolds(cautionsOf(replaced(plan, kGases, "")), "The headspace holds oxygen"));
   }
-  CHECK(!anyHolds(cautionsOf(replaced(sheetPlan(), "\"N2\"", "{ N2 = 1.0, O2 = 0.0 }")), "holds oxygen"));
+  CHECK(!anyHolds(cautionsOf(replaced(sheetPlan(), "\"N2\"", "{ N2 = 1.0, O2 = 0.0 }")),
+                  "holds oxygen"));
 }
 
-TEST_CASE("UV and visible light call for different goggles, darkness for none", "[app][sheet][cautions]") {
+TEST_CASE("UV and visible light call for different goggles, darkness for none",
+          "[app][sheet][cautions]") {
   const auto at = [](const std::string& wavelength) {
-    return cautionsOf(replaced(sheetPlan(), "wavelength = \"440 nm\"", "wavelength = \"" + wavelength + "\""));
+    return cautionsOf(
+        replaced(sheetPlan(), "wavelength = \"440 nm\"", "wavelength = \"" + wavelength + "\""));
   };
   CHECK(anyHolds(at("440 nm"), "Bright light harms the eyes"));
   CHECK(anyHolds(at("400 nm"), "Bright light harms the eyes"));

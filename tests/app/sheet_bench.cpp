@@ -104,7 +104,8 @@ app::SheetRow rowOf(const app::SheetContent& sheet, std::string_view name) {
 }
 
 bool anyHolds(const std::vector<std::string>& texts, std::string_view words) {
-  return std::ranges::any_of(texts, [words](const std::string& text) { return text.find(words) != std::string::npos; });
+  return std::ranges::any_of(
+      texts, [words](const std::string& text) { return text.find(words) != std::string::npos; });
 }
 
 }  // namespace vialkeeper::tests

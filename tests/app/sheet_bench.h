@@ -15,10 +15,12 @@ namespace vialkeeper::tests {
 [[nodiscard]] const std::string& sheetPlan();
 
 /// The text with the one place where `what` stands changed into `by`; it must stand there once.
-[[nodiscard]] std::string replaced(const std::string& text, std::string_view what, std::string_view by);
+[[nodiscard]] std::string replaced(const std::string& text, std::string_view what,
+                                   std::string_view by);
 
 /// The charge of a plan's text, which must be sound.
-[[nodiscard]] app::PlannedRun planned(const std::string& planText, const app::ChargeRequest& request = {});
+[[nodiscard]] app::PlannedRun planned(const std::string& planText,
+                                      const app::ChargeRequest& request = {});
 
 /// The sheet's row of that substance.
 [[nodiscard]] app::SheetRow rowOf(const app::SheetContent& sheet, std::string_view name);

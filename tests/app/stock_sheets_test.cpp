@@ -9,15 +9,18 @@ using namespace vialkeeper::tests;
 
 namespace {
 
-constexpr const char* kStock = "supply = { kind = \"stock\", concentration = \"0.10 mol/L\", solvent = \"water\" }\n"
-                               "device = \"pipette-100uL\"\n";
+constexpr const char* kStock =
+    "supply = { kind = \"stock\", concentration = \"0.10 mol/L\", solvent = \"water\" }\n"
+    "device = \"pipette-100uL\"\n";
 
 }  // namespace
 
-// 1 mL of 0.10 mol/L holds 0.1 mmol × 237.68 g/mol = 23.768 mg, less than the 40 mg that the finest balance
-// weighs to 0.1 %; 2 mL hold 47.54 mg. A vial takes 200 µL, so 2 mL serve ten.
-TEST_CASE("a stock of the plan has a sheet with flask, mass and transfer", "[app][stock][identity]") {
-  const auto sheets = app::stockSheets(planned(replaced(sheetPlan(), "device = \"balance-0.1mg\"\n", "")));
+// 1 mL of 0.10 mol/L holds 0.1 mmol × 237.68 g/mol = 23.768 mg, less than the 40 mg that the finest
+// balance weighs to 0.1 %; 2 mL hold 47.54 mg. A vial takes 200 µL, so 2 mL serve ten.
+TEST_CASE("a stock of the plan has a sheet with flask, mass and transfer",
+          "[app][stock][identity]") {
+  const auto sheets =
+      app::stockSheets(planned(replaced(sheetPlan(), "device = \"balance-0.1mg\"\n", "")));
   REQUIRE(sheets.size() == 1);
   const auto& sheet = sheets.front();
   CHECK(sheet.title == "Stock solution: nickel(II) chloride hexahydrate in water");
@@ -55,11 +58,13 @@ TEST_CASE("a stock that is only proposed says so and counts the assay", "[app][s
 }
 
 TEST_CASE("the stock of a component with hazards carries them", "[app][stock]") {
-  const std::string plan = replaced(sheetPlan(), kStock, std::string(kStock) + "hazards = [\"H317\"]\n");
+  const std::string plan =
+      replaced(sheetPlan(), kStock, std::string(kStock) + "hazards = [\"H317\"]\n");
   const auto sheets = app::stockSheets(planned(plan));
   REQUIRE(!sheets.empty());
   REQUIRE(sheets.front().hazards.size() == 1);
-  CHECK(anyHolds(sheets.front().hazards.front().statements, "H317 May cause an allergic skin reaction"));
+  CHECK(anyHolds(sheets.front().hazards.front().statements,
+                 "H317 May cause an allergic skin reaction"));
 }
 
 TEST_CASE("a plan that neither has nor needs a stock has no stock sheet", "[app][stock]") {

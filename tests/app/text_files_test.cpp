@@ -25,7 +25,8 @@ text::Fault onlyFault(const Result& result) {
   return result.error().front();
 }
 
-/// Lets no file of this process grow beyond some bytes, as a full disk would; for the life of the object.
+/// Lets no file of this process grow beyond some bytes, as a full disk would; for the life of the
+/// object.
 class FileSizeLimit {
  public:
   explicit FileSizeLimit(rlim_t bytes) {
@@ -97,7 +98,8 @@ TEST_CASE("a write that cannot begin leaves all as it was", "[app][files]") {
   const auto before = folder.contents();
   CHECK(onlyFault(writeFile(folder.path("nowhere/a"), "new")).what == "the folder does not exist");
   CHECK(onlyFault(writeFile(folder.path("runs"), "new")).what == "this is a folder, not a file");
-  CHECK(onlyFault(writeFile(folder.path("a/b"), "new")).what == "a part of the path is not a folder");
+  CHECK(onlyFault(writeFile(folder.path("a/b"), "new")).what ==
+        "a part of the path is not a folder");
   CHECK(onlyFault(writeFile("", "new")).kind == text::FaultKind::kInput);
   CHECK(folder.contents() == before);
 }

@@ -2,8 +2,8 @@
 // SPDX-License-Identifier: GPL-3.0-or-later
 #include <catch2/catch.hpp>
 
-#include "support/scratch_folder.h"
 #include "app/sheet_bench.h"
+#include "support/scratch_folder.h"
 
 using namespace vialkeeper;
 using namespace vialkeeper::tests;
@@ -14,13 +14,15 @@ app::SheetContent sheetOf(const std::string& plan) { return app::weighingSheet(p
 
 /// The row of the indoline on another balance.
 app::SheetRow amineOn(const std::string& balance) {
-  return rowOf(sheetOf(replaced(sheetPlan(), "device = \"balance-0.01mg\"\n", balance)), "indoline");
+  return rowOf(sheetOf(replaced(sheetPlan(), "device = \"balance-0.01mg\"\n", balance)),
+               "indoline");
 }
 
 }  // namespace
 
 // 0.400 mmol × 119.167 g/mol ÷ 0.98 = 48.640 mg, and 2 % of it 0.9728 mg
-TEST_CASE("a target is rounded to the balance's last digit, its tolerance down to it", "[app][sheet][identity]") {
+TEST_CASE("a target is rounded to the balance's last digit, its tolerance down to it",
+          "[app][sheet][identity]") {
   const auto fine = amineOn("device = \"balance-0.01mg\"\n");
   CHECK(fine.target == "48.64");
   CHECK(fine.unit == "mg");
@@ -32,7 +34,8 @@ TEST_CASE("a target is rounded to the balance's last digit, its tolerance down t
   const auto coarse = amineOn("device = \"balance-1mg\"\n");
   CHECK(coarse.target == "49");
   CHECK(coarse.tolerance == "± 1 mg");  // 2 % would be finer than the balance reads
-  const auto inlined = amineOn("device = { kind = \"balance\", readability = \"2 mg\", repeatability = \"2 mg\" }\n");
+  const auto inlined = amineOn(
+      "device = { kind = \"balance\", readability = \"2 mg\", repeatability = \"2 mg\" }\n");
   CHECK(inlined.target == "49");
   CHECK(inlined.device == "balance");
   const auto none = amineOn("");
@@ -46,7 +49,8 @@ TEST_CASE("a component's own tolerance is printed", "[app][sheet]") {
   CHECK(rowOf(sheetOf(plan), "indoline").tolerance == "± 0.24 mg");
 }
 
-TEST_CASE("stocks and solvents are measured by volume, neat liquids by what their device measures", "[app][sheet]") {
+TEST_CASE("stocks and solvents are measured by volume, neat liquids by what their device measures",
+          "[app][sheet]") {
   const auto sheet = sheetOf(sheetPlan());
   const auto stock = rowOf(sheet, "nickel(II) chloride hexahydrate");
   CHECK(stock.target == "200.0");
@@ -78,9 +82,11 @@ TEST_CASE("stocks and solvents are measured by volume, neat liquids by what thei
   CHECK(rowOf(sheet, "water").ratio == "1 part");
 }
 
-TEST_CASE("the notices of a component stand in its row, those of the charge below", "[app][sheet]") {
+TEST_CASE("the notices of a component stand in its row, those of the charge below",
+          "[app][sheet]") {
   const auto sheet = sheetOf(sheetPlan());
-  CHECK(anyHolds(rowOf(sheet, "dodecane").notices, "below the least that balance-0.1mg may weigh to 0.1 %, 200 mg"));
+  CHECK(anyHolds(rowOf(sheet, "dodecane").notices,
+                 "below the least that balance-0.1mg may weigh to 0.1 %, 200 mg"));
   CHECK(anyHolds(rowOf(sheet, "2,6-lutidine").notices, "takes 2 equal strokes"));
   CHECK(rowOf(sheet, "indoline").notices.empty());
   CHECK(anyHolds(sheet.notices, "volumes of liquids are taken to add up"));
@@ -88,7 +94,8 @@ TEST_CASE("the notices of a component stand in its row, those of the charge belo
 
 TEST_CASE("what was recorded stands in the box, else it is empty", "[app][sheet]") {
   const ScratchFolder folder;
-  const app::ChargeRequest request{.weighedFile = folder.write("w.csv", "key,actual\namine,48.91 mg\nnickel,198 uL\n")};
+  const app::ChargeRequest request{
+      .weighedFile = folder.write("w.csv", "key,actual\namine,48.91 mg\nnickel,198 uL\n")};
   const auto sheet = app::weighingSheet(planned(sheetPlan(), request));
   CHECK(rowOf(sheet, "indoline").actual == "48.91 mg");
   CHECK(rowOf(sheet, "nickel(II) chloride hexahydrate").actual == "198.0 µL");
@@ -101,12 +108,14 @@ TEST_CASE("the head names the run, the foot the plan file", "[app][sheet]") {
   CHECK(sheet.series == "bases");
   CHECK(sheet.date.empty());
   CHECK(sheet.chemist.empty());
-  CHECK_THAT(sheet.footer, Catch::Matchers::StartsWith("Vialkeeper ") && Catch::Matchers::EndsWith(" · plan.toml"));
-  const auto dated =
-      sheetOf(replaced(sheetPlan(), "series = ", "date = \"2026-02-28\"\nchemist = \"bench 4\"\nseries = "));
+  CHECK_THAT(sheet.footer, Catch::Matchers::StartsWith("Vialkeeper ") &&
+                               Catch::Matchers::EndsWith(" · plan.toml"));
+  const auto dated = sheetOf(replaced(
+      sheetPlan(), "series = ", "date = \"2026-02-28\"\nchemist = \"bench 4\"\nseries = "));
   CHECK(dated.date == "2026-02-28");
   CHECK(dated.chemist == "bench 4");
-  CHECK(sheetOf(replaced(sheetPlan(), "title = \"Indoline dehydrogenation\"\n", "")).title == "Untitled run");
+  CHECK(sheetOf(replaced(sheetPlan(), "title = \"Indoline dehydrogenation\"\n", "")).title ==
+        "Untitled run");
 }
 
 TEST_CASE("the scheme has reactants, products, gas, loadings and conditions", "[app][sheet]") {
@@ -117,9 +126,10 @@ TEST_CASE("the scheme has reactants, products, gas, loadings and conditions", "[
   REQUIRE(scheme.products.size() == 1);
   CHECK(scheme.products[0].label == "indole");
   CHECK(scheme.gases == std::vector<std::string>{"H₂"});
-  CHECK(scheme.above ==
-        std::vector<std::string>{"nickel(II) chloride hexahydrate (5.00 mol%)", "2,6-lutidine (0.500 equiv)"});
-  CHECK(scheme.below == std::vector<std::string>{"acetonitrile/water 4:1, 0.200 mol/L", "440 nm, 35 °C, 20 h"});
+  CHECK(scheme.above == std::vector<std::string>{"nickel(II) chloride hexahydrate (5.00 mol%)",
+                                                 "2,6-lutidine (0.500 equiv)"});
+  CHECK(scheme.below ==
+        std::vector<std::string>{"acetonitrile/water 4:1, 0.200 mol/L", "440 nm, 35 °C, 20 h"});
 }
 
 TEST_CASE("the vial's box tells volumes, rating, gas and light", "[app][sheet]") {
@@ -134,7 +144,9 @@ TEST_CASE("the vial's box tells volumes, rating, gas and light", "[app][sheet]")
                           "LED 440, 440 nm, 35 °C, 20 h",
                       });
   CHECK(!vial.forecast);
-  CHECK(anyHolds(sheetOf(replaced(sheetPlan(), "duration = \"20 h\"", "duration = \"0 h\"")).vial.lines, "no light"));
+  CHECK(anyHolds(
+      sheetOf(replaced(sheetPlan(), "duration = \"20 h\"", "duration = \"0 h\"")).vial.lines,
+      "no light"));
 }
 
 TEST_CASE("hazard statements stand in the order of addition with their wording", "[app][sheet]") {
@@ -143,6 +155,6 @@ TEST_CASE("hazard statements stand in the order of addition with their wording",
   CHECK(hazards[0].name == "indoline");
   CHECK(hazards[0].statements == std::vector<std::string>{"H315 Causes skin irritation", "H999"});
   CHECK(hazards[1].name == "acetonitrile");
-  CHECK(hazards[1].statements ==
-        std::vector<std::string>{"H225 Highly flammable liquid and vapour", "H319 Causes serious eye irritation"});
+  CHECK(hazards[1].statements == std::vector<std::string>{"H225 Highly flammable liquid and vapour",
+                                                          "H319 Causes serious eye irritation"});
 }

@@ -20,7 +20,8 @@ struct Printed {
   double half;
 };
 
-/// The first number of the answer to these inputs in tests/reference/worked-examples.csv (OpenStax Chemistry 2e).
+/// The first number of the answer to these inputs in tests/reference/worked-examples.csv (OpenStax
+/// Chemistry 2e).
 Printed printed(const std::string& inputs) {
   static const tests::ReferenceData table("worked-examples.csv");
   for (const auto& row : table.rows()) {
@@ -31,7 +32,8 @@ Printed printed(const std::string& inputs) {
     const std::string digits = answer.substr(0, length);
     const std::size_t e = digits.find('e');
     const std::size_t point = digits.find('.');
-    const auto places = point == std::string::npos ? 0 : static_cast<int>(std::min(e, digits.size()) - point) - 1;
+    const auto places =
+        point == std::string::npos ? 0 : static_cast<int>(std::min(e, digits.size()) - point) - 1;
     const int exponent = e == std::string::npos ? 0 : std::stoi(digits.substr(e + 1));
     return {value, 0.5 * std::pow(10.0, exponent - places)};
   }
@@ -47,7 +49,8 @@ void checkPrinted(double value, const std::string& inputs) {
 
 }  // namespace
 
-TEST_CASE("dissolving a weighed solid gives the molarity that the textbook prints", "[charge][published]") {
+TEST_CASE("dissolving a weighed solid gives the molarity that the textbook prints",
+          "[charge][published]") {
   const auto charge = chargeOf(planText("total = \"0.500 L\"", {R"(key="a"
 role="acid"
 name="acetic acid"
@@ -60,20 +63,24 @@ share=1)"}));
   checkPrinted(at(charge, "a").concentration->molPerLitre(), "25.2 g CH3CO2H (60.052) in 0.500 L");
 }
 
-TEST_CASE("diluting a stock gives the molarity and the volume that the textbook prints", "[charge][published]") {
+TEST_CASE("diluting a stock gives the molarity and the volume that the textbook prints",
+          "[charge][published]") {
   const std::string water = "key=\"w\"\nrole=\"solvent\"\nname=\"water\"\nshare=1";
   const std::string stock = R"(key="a"
 role="substrate"
 name="copper nitrate"
 supply={kind="stock", solvent="w", concentration=)";
-  const auto diluted = chargeOf(planText("total=\"1.80 L\"", {stock + "\"5.00 M\"}\nvolume=\"0.850 L\"", water}));
+  const auto diluted =
+      chargeOf(planText("total=\"1.80 L\"", {stock + "\"5.00 M\"}\nvolume=\"0.850 L\"", water}));
   checkPrinted(at(diluted, "a").concentration->molPerLitre(), "0.850 L of 5.00 M to 1.80 L");
   CHECK(at(diluted, "w").targetVolume->litres() == Approx(0.95).epsilon(1e-12));
-  const auto needed = chargeOf(planText("total=\"5.00 L\"", {stock + "\"1.59 M\"}\nconcentration=\"0.100 M\"", water}));
+  const auto needed = chargeOf(
+      planText("total=\"5.00 L\"", {stock + "\"1.59 M\"}\nconcentration=\"0.100 M\"", water}));
   checkPrinted(at(needed, "a").targetVolume->litres(), "volume of 1.59 M for 5.00 L of 0.100 M");
 }
 
-TEST_CASE("mass to mass by stoichiometric numbers gives what the textbook prints", "[charge][published]") {
+TEST_CASE("mass to mass by stoichiometric numbers gives what the textbook prints",
+          "[charge][published]") {
   struct Example {
     const char* limiting;
     const char* mass;
@@ -86,17 +93,21 @@ TEST_CASE("mass to mass by stoichiometric numbers gives what the textbook prints
                         Example{"Fe2O3", "25.13 g", "CO", 3.0, "25.13 g Fe2O3 needs CO (1:3)"},
                         Example{"C8H18", "702 g", "O2", 12.5, "702 g C8H18 needs O2 (2:25)"}}) {
     const auto charge = chargeOf(planText(
-        "total=\"10 L\"", {std::string("key=\"a\"\nrole=\"substrate\"\nname=\"a\"\nformula=\"") + e.limiting + "\"\nmass=\"" + e.mass + "\"",
-                           std::string("key=\"b\"\nrole=\"partner\"\nname=\"b\"\nformula=\"") + e.other +
-                               "\"\nequiv=" + std::to_string(e.equiv)}));
+        "total=\"10 L\"", {std::string("key=\"a\"\nrole=\"substrate\"\nname=\"a\"\nformula=\"") +
+                               e.limiting + "\"\nmass=\"" + e.mass + "\"",
+                           std::string("key=\"b\"\nrole=\"partner\"\nname=\"b\"\nformula=\"") +
+                               e.other + "\"\nequiv=" + std::to_string(e.equiv)}));
     checkPrinted(at(charge, "b").targetMass->grams(), e.inputs);
   }
 }
 
 TEST_CASE("gallium and acid give the hydrogen that the textbook prints", "[charge][published]") {
-  // 2 Ga give 3 H2. Printed 0.191 mol and 4.94 L; the volume is 4.946 with the book's own rounded amount kept whole.
-  const auto charge = chargeOf(planText("total=\"1 L\"", {"key=\"a\"\nrole=\"substrate\"\nname=\"gallium\"\nformula=\"Ga\"\nmass=\"8.88 g\"",
-                                                          R"(key="h"
+  // 2 Ga give 3 H2. Printed 0.191 mol and 4.94 L; the volume is 4.946 with the book's own rounded
+  // amount kept whole.
+  const auto charge = chargeOf(
+      planText("total=\"1 L\"",
+               {"key=\"a\"\nrole=\"substrate\"\nname=\"gallium\"\nformula=\"Ga\"\nmass=\"8.88 g\"",
+                R"(key="h"
 role="gas"
 name="hydrogen"
 formula="H2"
@@ -108,11 +119,14 @@ supply={kind="gas", pressure="723 mmHg", temperature="27 degC"})"}));
   CHECK_FALSE(at(charge, "h").targetMass);
 }
 
-TEST_CASE("silicon and nitrogen meet in the amounts that the textbook prints", "[charge][published]") {
+TEST_CASE("silicon and nitrogen meet in the amounts that the textbook prints",
+          "[charge][published]") {
   // OpenStax m68714: 2.00 g Si are 0.0712 mol, 1.50 g N2 0.0535 mol, and make 0.0237 mol Si3N4.
-  const auto charge = chargeOf(planText("total=\"1 L\"", {"key=\"a\"\nrole=\"substrate\"\nname=\"Si\"\nformula=\"Si\"\nmass=\"2.00 g\"",
-                                                          "key=\"n\"\nrole=\"partner\"\nname=\"N2\"\nformula=\"N2\"\nmass=\"1.50 g\"",
-                                                          "key=\"p\"\nrole=\"product\"\nname=\"p\"\nformula=\"Si3N4\"\nequiv=0.3333333333333"}));
+  const auto charge = chargeOf(planText(
+      "total=\"1 L\"",
+      {"key=\"a\"\nrole=\"substrate\"\nname=\"Si\"\nformula=\"Si\"\nmass=\"2.00 g\"",
+       "key=\"n\"\nrole=\"partner\"\nname=\"N2\"\nformula=\"N2\"\nmass=\"1.50 g\"",
+       "key=\"p\"\nrole=\"product\"\nname=\"p\"\nformula=\"Si3N4\"\nequiv=0.3333333333333"}));
   CHECK(charge.limitingAmount.moles() == Approx(0.0712).margin(5e-5));
   CHECK(at(charge, "n").amount_mol->value() == Approx(0.0535).margin(5e-5));
   CHECK(at(charge, "p").amount_mol->value() == Approx(0.0237).margin(5e-5));

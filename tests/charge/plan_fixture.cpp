@@ -14,7 +14,8 @@ namespace {
 
 /// No test of the core loads the structure module.
 std::expected<chem::Structure, chem::StructureFault> noStructures(std::string_view) {
-  return std::unexpected(chem::StructureFault{.what = "no structures here", .mend = "give a formula"});
+  return std::unexpected(
+      chem::StructureFault{.what = "no structures here", .mend = "give a formula"});
 }
 
 template <class T>
@@ -28,7 +29,8 @@ T required(text::Checked<T> checked) {
 
 }  // namespace
 
-std::string planText(std::string_view liquid, const std::vector<std::string>& components, std::string_view head) {
+std::string planText(std::string_view liquid, const std::vector<std::string>& components,
+                     std::string_view head) {
   std::string text = "format = \"vialkeeper-plan/1\"\n[reaction]\nlimiting = \"a\"\n[liquid]\n";
   text += std::string(liquid) + "\n" + std::string(head) + "\n";
   for (const std::string& component : components) text += "[[component]]\n" + component + "\n";
@@ -64,7 +66,8 @@ text::Faults faultsOfPlan(const std::string& text) {
   return charge.error();
 }
 
-charge::Charge weighed(const charge::Plan& plan, const std::vector<Recorded>& recorded, charge::Retarget retarget) {
+charge::Charge weighed(const charge::Plan& plan, const std::vector<Recorded>& recorded,
+                       charge::Retarget retarget) {
   charge::Weighings weighings;
   for (const Recorded& entry : recorded) {
     weighings.push_back({.key = entry.key, .actual = entry.actual, .asWritten = {}, .line = 0});

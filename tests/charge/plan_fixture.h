@@ -14,12 +14,14 @@
 #include "support/sample_plan.h"
 #include "text/fault.h"
 
-/// Plans for tests, written as their authors write them. No structures: every substance has a formula.
+/// Plans for tests, written as their authors write them. No structures: every substance has a
+/// formula.
 namespace vialkeeper::tests {
 
 /// A plan of these components with `[liquid]` as given and the first component's key limiting.
 /// `head` stands behind the liquid section, for a vial or a seal.
-[[nodiscard]] std::string planText(std::string_view liquid, const std::vector<std::string>& components,
+[[nodiscard]] std::string planText(std::string_view liquid,
+                                   const std::vector<std::string>& components,
                                    std::string_view head = {});
 
 /// Reads, resolves and computes; a fault on the way fails the test and shows it.
@@ -35,7 +37,8 @@ struct Recorded {
   std::string key;
   std::variant<units::Mass, units::Volume> actual;
 };
-[[nodiscard]] charge::Charge weighed(const charge::Plan& plan, const std::vector<Recorded>& recorded,
+[[nodiscard]] charge::Charge weighed(const charge::Plan& plan,
+                                     const std::vector<Recorded>& recorded,
                                      charge::Retarget retarget = charge::Retarget::kNo);
 
 /// The component of that key; the test fails where it is missing.

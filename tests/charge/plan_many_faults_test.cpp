@@ -107,7 +107,10 @@ TEST_CASE("an empty file lacks its format, reaction, liquid and components", "[p
 
 TEST_CASE("a plan in another encoding or of more than a mebibyte is refused as a whole", "[plan]") {
   using namespace std::string_literals;
-  for (const auto& text : {"\xFF\xFE" "f\0"s, "format = \"\0\""s, "title = \"5 \xB5L\"\n"s, std::string((1U << 20U) + 1, ' ')}) {
+  for (const auto& text :
+       {"\xFF\xFE"
+        "f\0"s,
+        "format = \"\0\""s, "title = \"5 \xB5L\"\n"s, std::string((1U << 20U) + 1, ' ')}) {
     CHECK(placesOf(text).size() == 1);
   }
   CHECK(readPlan("\xEF\xBB\xBF" + tests::samplePlanText(), "p"));
@@ -116,13 +119,16 @@ TEST_CASE("a plan in another encoding or of more than a mebibyte is refused as a
   CHECK(readPlan(crlf, "p"));
 }
 
-TEST_CASE("3,000 mutated plans are read or refused with places, and those read are charged or refused", "[plan][identity]") {
+TEST_CASE(
+    "3,000 mutated plans are read or refused with places, and those read are charged or refused",
+    "[plan][identity]") {
   const std::string sample = tests::samplePlanText();
   std::mt19937_64 random(31);
   std::size_t good = 0;
   std::size_t refused = 0;
   for (int round = 0; round < 3000; ++round) {
-    const std::string text = tests::mutated(round % 3 == 0 ? tests::randomPlanText(random() % 50) : sample, random);
+    const std::string text =
+        tests::mutated(round % 3 == 0 ? tests::randomPlanText(random() % 50) : sample, random);
     const auto lines = 1 + std::ranges::count(text, '\n');
     const auto plan = readPlan(text, "p.toml");
     if (!plan) {
@@ -139,9 +145,10 @@ TEST_CASE("3,000 mutated plans are read or refused with places, and those read a
       continue;
     }
     ++good;
-    const auto substances = charge::resolveSubstances(*plan, [](std::string_view) -> std::expected<chem::Structure, chem::StructureFault> {
-      return std::unexpected(chem::StructureFault{"no structures here", "give a formula"});
-    });
+    const auto substances = charge::resolveSubstances(
+        *plan, [](std::string_view) -> std::expected<chem::Structure, chem::StructureFault> {
+          return std::unexpected(chem::StructureFault{"no structures here", "give a formula"});
+        });
     if (!substances) continue;
     const auto charge = charge::computeCharge(*plan, *substances);
     if (!charge) {

@@ -25,7 +25,8 @@ TEST_CASE("the head, vial, seal, irradiation and instruments of a plan are read"
   CHECK(plan.vial->ratedGauge->bar() == Approx(2.0));
   CHECK(plan.vial->derating == 0.5);
   REQUIRE(plan.seal);
-  CHECK(plan.seal->atmosphere == std::vector<std::pair<std::string, double>>{{"N2", 0.9}, {"O2", 0.1}});
+  CHECK(plan.seal->atmosphere ==
+        std::vector<std::pair<std::string, double>>{{"N2", 0.9}, {"O2", 0.1}});
   CHECK(plan.seal->temperature.celsius() == Approx(21.0));
   CHECK(plan.seal->pressure.bar() == Approx(1.013));
   CHECK(plan.seal->saturated);
@@ -109,7 +110,8 @@ equiv = 1
   CHECK_FALSE(plan.vial->ratedGauge);
   CHECK(plan.seal->saturated);
   CHECK(plan.seal->ambient.pascals() == 101325.0);
-  CHECK(plan.seal->atmosphere == std::vector<std::pair<std::string, double>>{{"N2", 0.7808}, {"O2", 0.2095}, {"Ar", 0.0097}});
+  CHECK(plan.seal->atmosphere == std::vector<std::pair<std::string, double>>{
+                                     {"N2", 0.7808}, {"O2", 0.2095}, {"Ar", 0.0097}});
   CHECK(plan.instruments.pressure.bar() == Approx(0.005));
   CHECK(plan.instruments.pressureShared.si() == 0.0);
   CHECK(plan.instruments.temperature_K == 0.5);
@@ -126,23 +128,35 @@ equiv = 1
 }
 
 TEST_CASE("every role is read by its word and written back as it", "[plan]") {
-  for (const char* role : {"substrate", "partner", "photocatalyst", "cocatalyst", "additive", "acid", "base", "oxidant", "reductant",
-                           "quencher", "standard", "product", "solvent", "gas", "other"}) {
+  for (const char* role :
+       {"substrate", "partner", "photocatalyst", "cocatalyst", "additive", "acid", "base",
+        "oxidant", "reductant", "quencher", "standard", "product", "solvent", "gas", "other"}) {
     INFO(role);
-    const std::string supply = std::string(role) == "gas" ? "\nsupply={kind=\"gas\", pressure=\"1 bar\", temperature=\"20 degC\"}" : "";
+    const std::string supply =
+        std::string(role) == "gas"
+            ? "\nsupply={kind=\"gas\", pressure=\"1 bar\", temperature=\"20 degC\"}"
+            : "";
     const Plan plan = readGoodPlan(tests::planText(
-        "total=\"2 mL\"", {"key=\"a\"\nrole=\"substrate\"\nname=\"a\"\nformula=\"CH4\"\namount=\"1 mmol\"",
-                           std::string("key=\"b\"\nrole=\"") + role + "\"\nname=\"methanol\"\nformula=\"CH4O\"\nequiv=1" + supply}));
+        "total=\"2 mL\"",
+        {"key=\"a\"\nrole=\"substrate\"\nname=\"a\"\nformula=\"CH4\"\namount=\"1 mmol\"",
+         std::string("key=\"b\"\nrole=\"") + role +
+             "\"\nname=\"methanol\"\nformula=\"CH4O\"\nequiv=1" + supply}));
     CHECK(toText(plan.find("b")->role) == role);
   }
 }
 
 TEST_CASE("every supply is read with all of its fields", "[plan]") {
   const auto supplyOf = [](const std::string& supply, const std::string& role = "other") {
-    return readGoodPlan(tests::planText("total=\"2 mL\"", {"key=\"a\"\nrole=\"" + role + "\"\nname=\"a\"\nformula=\"CH4\"\namount=\"1 mmol\"\nsupply=" + supply}))
-        .find("a")->supply;
+    return readGoodPlan(
+               tests::planText(
+                   "total=\"2 mL\"",
+                   {"key=\"a\"\nrole=\"" + role +
+                    "\"\nname=\"a\"\nformula=\"CH4\"\namount=\"1 mmol\"\nsupply=" + supply}))
+        .find("a")
+        ->supply;
   };
-  const auto solid = std::get<SolidSupply>(supplyOf(R"({kind="solid", assay=0.5, u_assay=0.01, density="2 g/mL"})"));
+  const auto solid = std::get<SolidSupply>(
+      supplyOf(R"({kind="solid", assay=0.5, u_assay=0.01, density="2 g/mL"})"));
   CHECK(solid.assay == 0.5);
   CHECK(solid.assayUncertainty == 0.01);
   CHECK(solid.density->gramsPerMillilitre() == Approx(2.0));
@@ -155,31 +169,38 @@ TEST_CASE("every supply is read with all of its fields", "[plan]") {
       R"({kind="stock", concentration="1 M", u_concentration="0.01 M", density="1.1 g/mL", solvent="water"})"));
   CHECK(stock.concentrationUncertainty->molPerLitre() == Approx(0.01));
   CHECK(stock.solvent == "water");
-  const auto byMass = std::get<StockSupply>(supplyOf(R"({kind="stock", mass_fraction=0.1, density="1.1 g/mL", solvent="water"})"));
+  const auto byMass = std::get<StockSupply>(
+      supplyOf(R"({kind="stock", mass_fraction=0.1, density="1.1 g/mL", solvent="water"})"));
   CHECK(byMass.massFraction == 0.1);
   CHECK_FALSE(byMass.concentration);
-  const auto gas = std::get<GasSupply>(supplyOf(R"({kind="gas", pressure="2 bar", temperature="300 K"})", "gas"));
+  const auto gas = std::get<GasSupply>(
+      supplyOf(R"({kind="gas", pressure="2 bar", temperature="300 K"})", "gas"));
   CHECK(gas.pressure.bar() == Approx(2.0));
   CHECK(gas.temperature.kelvin() == 300.0);
 }
 
 TEST_CASE("measured vapour pressures and Ostwald coefficients are read", "[plan]") {
   const Plan plan = readGoodPlan(tests::planText(
-      "total=\"2 mL\"\nvapour_pressure=[{temperature=\"21 degC\", pressure=\"9.9 kPa\"}, {temperature=\"35 degC\", pressure=\"18.2 kPa\"}]\n"
+      "total=\"2 mL\"\nvapour_pressure=[{temperature=\"21 degC\", pressure=\"9.9 kPa\"}, "
+      "{temperature=\"35 degC\", pressure=\"18.2 kPa\"}]\n"
       "ostwald={H2=0.08, N2=0.0}",
       {"key=\"a\"\nrole=\"substrate\"\nname=\"a\"\nformula=\"CH4\"\namount=\"1 mmol\""}));
   REQUIRE(plan.liquid.vapourPressure.size() == 2);
   CHECK(plan.liquid.vapourPressure[1].pressure.pascals() == Approx(18200.0));
   CHECK(plan.liquid.ostwaldGiven);
-  CHECK(plan.liquid.ostwald == std::vector<std::pair<std::string, double>>{{"H2", 0.08}, {"N2", 0.0}});
+  CHECK(plan.liquid.ostwald ==
+        std::vector<std::pair<std::string, double>>{{"H2", 0.08}, {"N2", 0.0}});
 }
 
 TEST_CASE("an order of addition and a pipette of one's own are read", "[plan]") {
-  const Plan plan = readGoodPlan("addition_order = [\"b\", \"a\"]\n" +
-                                 tests::planText("total=\"2 mL\"",
-                                                 {"key=\"a\"\nrole=\"substrate\"\nname=\"a\"\nformula=\"CH4\"\namount=\"1 mmol\"",
-                                                  "key=\"b\"\nrole=\"solvent\"\nname=\"water\"\nshare=1\ndevice={kind=\"pipette\", name=\"P300\", "
-                                                  "nominal=\"300 uL\", systematic=\"1.8 uL\", random=\"0.6 uL\"}"}));
+  const Plan plan = readGoodPlan(
+      "addition_order = [\"b\", \"a\"]\n" +
+      tests::planText(
+          "total=\"2 mL\"",
+          {"key=\"a\"\nrole=\"substrate\"\nname=\"a\"\nformula=\"CH4\"\namount=\"1 mmol\"",
+           "key=\"b\"\nrole=\"solvent\"\nname=\"water\"\nshare=1\ndevice={kind=\"pipette\", "
+           "name=\"P300\", "
+           "nominal=\"300 uL\", systematic=\"1.8 uL\", random=\"0.6 uL\"}"}));
   CHECK(plan.additionOrder == std::vector<std::string>{"b", "a"});
   const Pipette* pipette = plan.find("b")->device->pipette();
   REQUIRE(pipette != nullptr);

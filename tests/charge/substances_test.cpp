@@ -13,7 +13,9 @@ using namespace vialkeeper;
 namespace {
 
 charge::Plan planOf(const std::string& identity) {
-  return tests::readGoodPlan(tests::planText("total=\"2 mL\"", {"key=\"a\"\nrole=\"substrate\"\nname=\"a\"\namount=\"1 mmol\"\n" + identity}));
+  return tests::readGoodPlan(tests::planText(
+      "total=\"2 mL\"",
+      {"key=\"a\"\nrole=\"substrate\"\nname=\"a\"\namount=\"1 mmol\"\n" + identity}));
 }
 
 /// A reader that knows two molecules.
@@ -25,7 +27,8 @@ std::expected<chem::Structure, chem::StructureFault> twoMolecules(std::string_vi
   } else if (smiles == "O") {
     structure.formula = "H2O";
   } else {
-    return std::unexpected(chem::StructureFault{.what = "an unclosed ring (character 2)", .mend = "close it"});
+    return std::unexpected(
+        chem::StructureFault{.what = "an unclosed ring (character 2)", .mend = "close it"});
   }
   return structure;
 }
@@ -55,14 +58,19 @@ TEST_CASE("a structure and a formula that disagree are a fault that shows both",
   CHECK(faults[0].what == "the structure is C2H6O but the formula says CH4O");
 }
 
-TEST_CASE("a molar mass agrees within its last digit and the spread of old tables, or is a fault", "[charge]") {
-  // Ethanol 46.069: 46.1 and 46 are roundings of it, 46.07(4) the old value; 46.2 and 47.07 are another thing.
+TEST_CASE("a molar mass agrees within its last digit and the spread of old tables, or is a fault",
+          "[charge]") {
+  // Ethanol 46.069: 46.1 and 46 are roundings of it, 46.07(4) the old value; 46.2 and 47.07 are
+  // another thing.
   for (const char* given : {"46.069", "46.07", "46.1", "46", "46.0684"}) {
     INFO(given);
-    CHECK(charge::resolveSubstances(planOf("formula=\"C2H6O\"\nmolar_mass=\"" + std::string(given) + " g/mol\""), twoMolecules));
+    CHECK(charge::resolveSubstances(
+        planOf("formula=\"C2H6O\"\nmolar_mass=\"" + std::string(given) + " g/mol\""),
+        twoMolecules));
   }
   for (const char* given : {"46.08", "46.2", "47.07", "46.05"}) {
-    const auto faults = faultsOf("formula=\"C2H6O\"\nmolar_mass=\"" + std::string(given) + " g/mol\"");
+    const auto faults =
+        faultsOf("formula=\"C2H6O\"\nmolar_mass=\"" + std::string(given) + " g/mol\"");
     REQUIRE(faults.size() == 1);
     CHECK(faults[0].field == "component.a.molar_mass");
     CHECK(faults[0].what.find("46.069 g/mol but") != std::string::npos);
@@ -71,8 +79,10 @@ TEST_CASE("a molar mass agrees within its last digit and the spread of old table
 
 TEST_CASE("a molar mass alone is as exact as its last digit", "[charge]") {
   const auto u = [](const char* given) {
-    return charge::resolveSubstances(planOf("molar_mass=\"" + std::string(given) + " g/mol\""), twoMolecules)
-        ->components[0].molarMass->standardUncertainty.gramsPerMole();
+    return charge::resolveSubstances(planOf("molar_mass=\"" + std::string(given) + " g/mol\""),
+                                     twoMolecules)
+        ->components[0]
+        .molarMass->standardUncertainty.gramsPerMole();
   };
   CHECK(u("119.17") == Approx(0.005 / std::sqrt(3.0)).epsilon(1e-12));
   CHECK(u("119.2") == Approx(0.05 / std::sqrt(3.0)).epsilon(1e-12));
@@ -81,8 +91,10 @@ TEST_CASE("a molar mass alone is as exact as its last digit", "[charge]") {
 
 TEST_CASE("the unreadable descriptions of all substances are told together", "[charge]") {
   const auto plan = tests::readGoodPlan(tests::planText(
-      "total=\"2 mL\"", {"key=\"a\"\nrole=\"substrate\"\nname=\"a\"\namount=\"1 mmol\"\nformula=\"C8Xh9\"",
-                         "key=\"b\"\nrole=\"other\"\nname=\"b\"\nequiv=1\nsmiles=\"C1CC\"", "key=\"c\"\nrole=\"other\"\nname=\"c\"\nequiv=1\nformula=\"Tc2O7\""}));
+      "total=\"2 mL\"",
+      {"key=\"a\"\nrole=\"substrate\"\nname=\"a\"\namount=\"1 mmol\"\nformula=\"C8Xh9\"",
+       "key=\"b\"\nrole=\"other\"\nname=\"b\"\nequiv=1\nsmiles=\"C1CC\"",
+       "key=\"c\"\nrole=\"other\"\nname=\"c\"\nequiv=1\nformula=\"Tc2O7\""}));
   const auto substances = charge::resolveSubstances(plan, twoMolecules);
   REQUIRE_FALSE(substances);
   REQUIRE(substances.error().size() == 3);
@@ -93,8 +105,10 @@ TEST_CASE("the unreadable descriptions of all substances are told together", "[c
 }
 
 TEST_CASE("a solvent is known by its name alone", "[charge]") {
-  const auto plan = tests::readGoodPlan(tests::planText("total=\"2 mL\"", {"key=\"a\"\nrole=\"substrate\"\nname=\"a\"\namount=\"1 mmol\"\nformula=\"CH4\"",
-                                                                          "key=\"s\"\nrole=\"solvent\"\nname=\"MeCN\"\nshare=1"}));
+  const auto plan = tests::readGoodPlan(tests::planText(
+      "total=\"2 mL\"",
+      {"key=\"a\"\nrole=\"substrate\"\nname=\"a\"\namount=\"1 mmol\"\nformula=\"CH4\"",
+       "key=\"s\"\nrole=\"solvent\"\nname=\"MeCN\"\nshare=1"}));
   const auto substances = charge::resolveSubstances(plan, twoMolecules);
   REQUIRE(substances);
   CHECK(substances->components[1].formula == "C2H3N");

@@ -11,11 +11,12 @@ using chem::checkCasNumber;
 
 namespace {
 
-/// Numbers in print with their check sums: cas.org (107-07-3, 33), newradargas.com (7732-18-5, 105), a CAS client
-/// services mail (71-23-8, 38), harveyl888.github.io (64-17-5, 45), ccl.net (67-64-1, 61; 106-97-8, 48),
-/// henrys-law.org (1333-74-0, 7782-44-7, 7727-37-9, 7440-59-7).
-const std::vector<std::string> kPrinted = {"107-07-3", "7732-18-5", "71-23-8",   "64-17-5",   "67-64-1",  "106-97-8",
-                                           "1333-74-0", "7782-44-7", "7727-37-9", "7440-59-7", "50-00-0"};
+/// Numbers in print with their check sums: cas.org (107-07-3, 33), newradargas.com (7732-18-5,
+/// 105), a CAS client services mail (71-23-8, 38), harveyl888.github.io (64-17-5, 45), ccl.net
+/// (67-64-1, 61; 106-97-8, 48), henrys-law.org (1333-74-0, 7782-44-7, 7727-37-9, 7440-59-7).
+const std::vector<std::string> kPrinted = {"107-07-3",  "7732-18-5", "71-23-8",   "64-17-5",
+                                           "67-64-1",   "106-97-8",  "1333-74-0", "7782-44-7",
+                                           "7727-37-9", "7440-59-7", "50-00-0"};
 
 }  // namespace
 
@@ -43,8 +44,10 @@ TEST_CASE("bad CAS numbers in print are refused, each with its place", "[chem][p
 }
 
 TEST_CASE("what has not the form of a CAS number is refused", "[chem]") {
-  for (const char* number : {"", "-", "--", "64-17", "64-17-", "64--5", "-17-5", "64-17-55", "12345678-18-5", "6-17-5", "64-17-5-1",
-                             "64-17-x", "64 17 5", " 64-17-5", "64-17-5 ", "64\u201117\u20115", "6417-5", "ab-cd-e", "64-175"}) {
+  for (const char* number :
+       {"", "-", "--", "64-17", "64-17-", "64--5", "-17-5", "64-17-55", "12345678-18-5", "6-17-5",
+        "64-17-5-1", "64-17-x", "64 17 5", " 64-17-5", "64-17-5 ", "64\u201117\u20115", "6417-5",
+        "ab-cd-e", "64-175"}) {
     INFO(number);
     const auto checked = checkCasNumber(number);
     REQUIRE_FALSE(checked);
@@ -52,9 +55,11 @@ TEST_CASE("what has not the form of a CAS number is refused", "[chem]") {
   }
 }
 
-TEST_CASE("every wrong digit is found, and every swap of unequal neighbours within a group", "[chem][identity]") {
-  // A digit's place is 1 to 9, and a change by d shows unless place x d is a multiple of 10: at the even places a change by
-  // 5 and at place 5 an even change go unseen. Neighbours differ by 1 in place, so every swap shows.
+TEST_CASE("every wrong digit is found, and every swap of unequal neighbours within a group",
+          "[chem][identity]") {
+  // A digit's place is 1 to 9, and a change by d shows unless place x d is a multiple of 10: at the
+  // even places a change by 5 and at place 5 an even change go unseen. Neighbours differ by 1 in
+  // place, so every swap shows.
   for (const std::string& number : kPrinted) {
     int place = 0;
     for (std::size_t i = number.size() - 2; i-- > 0;) {

@@ -89,8 +89,9 @@ std::string changed(const std::string& text, std::string_view what, std::string_
   return std::string(text).replace(at, what.size(), by);
 }
 
-void checkOneFault(const ScratchFolder& folder, const std::vector<std::string>& arguments, int status,
-                   const std::string& place, const std::string& tells, const std::string& mend) {
+void checkOneFault(const ScratchFolder& folder, const std::vector<std::string>& arguments,
+                   int status, const std::string& place, const std::string& tells,
+                   const std::string& mend) {
   const auto before = folder.contents();
   const Ran ran = run(arguments);
   const std::string line = folder.withoutPath(ran.err);
@@ -101,7 +102,8 @@ void checkOneFault(const ScratchFolder& folder, const std::vector<std::string>& 
   CHECK_THAT(line, Catch::Matchers::StartsWith(place.empty() ? std::string{} : place + ": "));
   const std::size_t told = line.find(tells);
   CHECK(told != std::string::npos);
-  CHECK((told != std::string::npos && line.find(": " + mend, told + tells.size()) != std::string::npos));
+  CHECK((told != std::string::npos &&
+         line.find(": " + mend, told + tells.size()) != std::string::npos));
   CHECK(folder.contents() == before);
 }
 
@@ -112,7 +114,8 @@ void checkPlanFaults(std::span<const PlanFault> faults) {
     CHECK(names.insert(fault.name).second);
     const ScratchFolder folder;
     const std::string plan = folder.write("plan.toml", changed(soundPlan(), fault.what, fault.by));
-    checkOneFault(folder, {"charge", plan}, 1, std::string("plan.toml:") + fault.place, fault.tells, fault.mend);
+    checkOneFault(folder, {"charge", plan}, 1, std::string("plan.toml:") + fault.place, fault.tells,
+                  fault.mend);
   }
 }
 

@@ -29,7 +29,8 @@ struct Ran {
 [[nodiscard]] const std::string& soundPlan();
 
 /// The text with the one place where `what` stands changed into `by`; it must stand there once.
-[[nodiscard]] std::string changed(const std::string& text, std::string_view what, std::string_view by);
+[[nodiscard]] std::string changed(const std::string& text, std::string_view what,
+                                  std::string_view by);
 
 /// One change that spoils the sound plan, and the fault that must be told of it.
 struct PlanFault {
@@ -41,12 +42,13 @@ struct PlanFault {
   const char* mend;   ///< words of how to mend it
 };
 
-/// Runs `charge` on every spoilt plan: status 1, one line with its place, what and how in this order,
-/// nothing on standard output, nothing written.
+/// Runs `charge` on every spoilt plan: status 1, one line with its place, what and how in this
+/// order, nothing on standard output, nothing written.
 void checkPlanFaults(std::span<const PlanFault> faults);
 
 /// The same for any command in a folder that holds its files.
-void checkOneFault(const ScratchFolder& folder, const std::vector<std::string>& arguments, int status,
-                   const std::string& place, const std::string& tells, const std::string& mend);
+void checkOneFault(const ScratchFolder& folder, const std::vector<std::string>& arguments,
+                   int status, const std::string& place, const std::string& tells,
+                   const std::string& mend);
 
 }  // namespace vialkeeper::tests

@@ -130,7 +130,7 @@ TEST_CASE("a demonstration's runs are found by everything that they are looked f
 TEST_CASE("duplicates of a demonstration scatter, but by no more than chemistry does", "[demo][identity]") {
   const auto notebook = demo().notebook();
   std::vector<double> yields;
-  for (const app::FoundRun& entry : found(*notebook, R"(substrate:indoline acid:"pivalic acid" 9..11 mol% cocatalyst:NiBr2 4.5..5.5 mol% photocatalyst:4CzIPN 0.9..1.1 mol% solvent:water wavelength:440 limiting:0.2)")) {
+  for (const app::FoundRun& entry : found(*notebook, R"(substrate:indoline acid:"pivalic acid" 9..11 mol% cocatalyst:NiBr2 4.5..5.5 mol% photocatalyst:4CzIPN 0.9..1.1 mol% solvent:water wavelength:440 limiting:0.2 mmol)")) {
     if (entry.run.yield_percent) yields.push_back(*entry.run.yield_percent);
   }
   REQUIRE(yields.size() >= 3);
@@ -152,7 +152,9 @@ TEST_CASE("a demonstration's trail looks like work: who did what in the order of
   std::size_t superseded = 0;
   std::size_t late = 0;
   for (const app::FoundRun& entry : found(*notebook, "")) {
-    for (const app::EventRecord& event : *notebook->events(entry.run.n)) {
+    const auto events = notebook->events(entry.run.n);
+    REQUIRE(events);
+    for (const app::EventRecord& event : *events) {
       superseded += event.supersededBy != 0 ? 1U : 0U;
       late += event.logged.utc - event.at.utc > std::chrono::hours(5) ? 1U : 0U;
     }

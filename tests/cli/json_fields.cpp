@@ -40,7 +40,8 @@ void checkOneObject(const std::string& out) {
   CHECK(out.ends_with("}\n"));
   static const std::regex number(R"(-?[0-9][0-9.eE+-]*)");
   const std::string bare = withoutTexts(out);
-  for (auto it = std::sregex_iterator(bare.begin(), bare.end(), number); it != std::sregex_iterator(); ++it) {
+  for (auto it = std::sregex_iterator(bare.begin(), bare.end(), number);
+       it != std::sregex_iterator(); ++it) {
     const std::string written = it->str();
     const double value = std::strtod(written.c_str(), nullptr);
     INFO(written);

@@ -18,11 +18,12 @@ struct MassCase {
 
 }  // namespace
 
-// Source: IUPAC/CIAAW abridged standard atomic weights 2021, five digits (Pure Appl. Chem. 94 (2022) 573,
-// Table 1): H 1.0080, C 12.011, N 14.007, O 15.999, S 32.06, Cl 35.45, Ni 58.693, Cu 63.546; deuterium and
-// carbon-13 by their atomic masses (AME2020) 2.014102 and 13.003355. Summed by hand; the margin is half a
-// unit in the last digit that the sum holds.
-TEST_CASE("mass answers with Hill formula, molar mass and its uncertainty", "[cli][json][mass][published]") {
+// Source: IUPAC/CIAAW abridged standard atomic weights 2021, five digits (Pure Appl. Chem. 94
+// (2022) 573, Table 1): H 1.0080, C 12.011, N 14.007, O 15.999, S 32.06, Cl 35.45, Ni 58.693,
+// Cu 63.546; deuterium and carbon-13 by their atomic masses (AME2020) 2.014102 and 13.003355.
+// Summed by hand; the margin is half a unit in the last digit that the sum holds.
+TEST_CASE("mass answers with Hill formula, molar mass and its uncertainty",
+          "[cli][json][mass][published]") {
   const MassCase cases[] = {
       {"C8H9N", "C8H9N", 8 * 12.011 + 9 * 1.008 + 14.007, 0.005},
       {"D2O", "D2O", 2 * 2.014102 + 15.999, 0.001},
@@ -55,7 +56,8 @@ TEST_CASE("mass answers with Hill formula, molar mass and its uncertainty", "[cl
   }
 }
 
-TEST_CASE("a trailing charge is read in every spelling and takes or leaves electrons", "[cli][json][mass][identity]") {
+TEST_CASE("a trailing charge is read in every spelling and takes or leaves electrons",
+          "[cli][json][mass][identity]") {
   const double neutral = run({"mass", "Fe", "--json"}).json()["molar_mass_g_mol"].get<double>();
   for (const char* written : {"Fe2+", "Fe^2+", "Fe\u00B2\u207A"}) {
     INFO(written);
@@ -71,7 +73,8 @@ TEST_CASE("a trailing charge is read in every spelling and takes or leaves elect
   }
 }
 
-TEST_CASE("the option --json may stand before or behind the verb and the bytes stay the same", "[cli][json][mass]") {
+TEST_CASE("the option --json may stand before or behind the verb and the bytes stay the same",
+          "[cli][json][mass]") {
   const Ran behind = run({"mass", "CuSO4·5H2O", "--json"});
   CHECK(run({"--json", "mass", "CuSO4·5H2O"}).out == behind.out);
   CHECK(run({"mass", "--json", "CuSO4·5H2O"}).out == behind.out);

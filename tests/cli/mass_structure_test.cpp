@@ -8,8 +8,10 @@
 using namespace vialkeeper::tests;
 
 TEST_CASE("a structure has the mass of its formula", "[cli][json][mass][structures][identity]") {
-  const std::pair<const char*, const char*> pairs[] = {
-      {"C1Cc2ccccc2N1", "C8H9N"}, {"[2H]O[2H]", "D2O"}, {"CC(C)(C)C(=O)O", "C5H10O2"}, {"[NH4+].[Cl-]", "NH4Cl"}};
+  const std::pair<const char*, const char*> pairs[] = {{"C1Cc2ccccc2N1", "C8H9N"},
+                                                       {"[2H]O[2H]", "D2O"},
+                                                       {"CC(C)(C)C(=O)O", "C5H10O2"},
+                                                       {"[NH4+].[Cl-]", "NH4Cl"}};
   for (const auto& [smiles, formula] : pairs) {
     INFO(smiles);
     const Ran bySmiles = run({"mass", "--smiles", smiles, "--json"});
@@ -23,7 +25,8 @@ TEST_CASE("a structure that cannot be is the fault of --smiles", "[cli][faults][
   const ScratchFolder folder;
   checkOneFault(folder, {"mass", "--smiles", "C1CC"}, 2, "--smiles", "'C1CC': ring 1 at position 2",
                 "write the same number");
-  checkOneFault(folder, {"mass", "--smiles", "C(C)(C)(C)(C)C"}, 2, "--smiles", "has more bonds", "check its bonds");
-  checkOneFault(folder, {"mass", "--smiles", "[Tc]"}, 2, "--smiles", "Tc has no standard atomic weight",
-                "give the molar mass");
+  checkOneFault(folder, {"mass", "--smiles", "C(C)(C)(C)(C)C"}, 2, "--smiles", "has more bonds",
+                "check its bonds");
+  checkOneFault(folder, {"mass", "--smiles", "[Tc]"}, 2, "--smiles",
+                "Tc has no standard atomic weight", "give the molar mass");
 }

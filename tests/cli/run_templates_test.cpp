@@ -1,9 +1,9 @@
 // SPDX-FileCopyrightText: The Vialkeeper developers
 // SPDX-License-Identifier: GPL-3.0-or-later
+#include <fmt/format.h>
 #include <algorithm>
 #include <catch2/catch.hpp>
 #include <filesystem>
-#include <fmt/format.h>
 
 #include "charge/plan_reader.h"
 #include "chem/hazard_statements.h"
@@ -17,7 +17,8 @@ namespace {
 
 std::vector<std::string> runTemplates() {
   std::vector<std::string> files;
-  for (const auto& entry : std::filesystem::directory_iterator(VIALKEEPER_SOURCE_DIR "/templates/runs")) {
+  for (const auto& entry :
+       std::filesystem::directory_iterator(VIALKEEPER_SOURCE_DIR "/templates/runs")) {
     if (entry.path().extension() == ".toml") files.push_back(entry.path().string());
   }
   std::ranges::sort(files);
@@ -45,14 +46,16 @@ std::string weighedAsPlanned(const nlohmann::json& charge) {
   for (const auto& each : charge["components"]) {
     const bool byVolume = !each["target_volume_uL"].is_null();
     csv += fmt::format("{},{} {}\n", each["key"].get<std::string>(),
-                       each[byVolume ? "target_volume_uL" : "target_mass_mg"].get<double>(), byVolume ? "uL" : "mg");
+                       each[byVolume ? "target_volume_uL" : "target_mass_mg"].get<double>(),
+                       byVolume ? "uL" : "mg");
   }
   return csv;
 }
 
 }  // namespace
 
-TEST_CASE("there are run templates, and each says in its first lines that it is invented", "[templates]") {
+TEST_CASE("there are run templates, and each says in its first lines that it is invented",
+          "[templates]") {
   const auto files = runTemplates();
   CHECK(files.size() >= 7);
   for (const std::string& file : files) {
@@ -63,7 +66,8 @@ TEST_CASE("there are run templates, and each says in its first lines that it is 
   }
 }
 
-TEST_CASE("every run template passes the charge, scaled and weighed too", "[templates][structures]") {
+TEST_CASE("every run template passes the charge, scaled and weighed too",
+          "[templates][structures]") {
   for (const std::string& file : runTemplates()) {
     INFO(file);
     const auto planned = chargeOf({file});
@@ -81,7 +85,8 @@ TEST_CASE("every run template passes the charge, scaled and weighed too", "[temp
     for (const auto& each : weighed["components"]) {
       INFO(each["key"]);
       CHECK(each["charged"]["off_target_percent"].get<double>() == Approx(0.0).margin(1e-9));
-      CHECK(each["charged"]["amount_mmol"].get<double>() == Approx(each["amount_mmol"].get<double>()).epsilon(1e-9));
+      CHECK(each["charged"]["amount_mmol"].get<double>() ==
+            Approx(each["amount_mmol"].get<double>()).epsilon(1e-9));
     }
   }
 }
@@ -110,20 +115,23 @@ TEST_CASE("every run template has title, series, vial rating, devices and hazard
   }
 }
 
-TEST_CASE("no run template fills its vial more than half or takes a number from memory", "[templates][structures]") {
+TEST_CASE("no run template fills its vial more than half or takes a number from memory",
+          "[templates][structures]") {
   for (const std::string& file : runTemplates()) {
     INFO(file);
     const auto json = chargeOf({file});
     std::string codes = noticeCodes(json);
     for (const auto& each : json["components"]) codes += noticeCodes(each);
-    for (const char* unwanted : {"fill-above-half", "volume-not-filled", "recalled-value", "outside-validity",
-                                 "no-device", "taken-as-exact", "below-pipette-range", "undetermined"}) {
+    for (const char* unwanted :
+         {"fill-above-half", "volume-not-filled", "recalled-value", "outside-validity", "no-device",
+          "taken-as-exact", "below-pipette-range", "undetermined"}) {
       CHECK_THAT(codes, !Catch::Matchers::Contains(unwanted));
     }
   }
 }
 
-TEST_CASE("the same-excess pair has one excess and the same catalysts", "[templates][structures][identity]") {
+TEST_CASE("the same-excess pair has one excess and the same catalysts",
+          "[templates][structures][identity]") {
   const std::string folder = VIALKEEPER_SOURCE_DIR "/templates/runs/";
   const auto standard = chargeOf({folder + "same-excess-standard.toml"});
   const auto second = chargeOf({folder + "same-excess-second.toml"});
@@ -151,7 +159,8 @@ TEST_CASE("the four vials of the screen differ in their acid alone", "[templates
     for (std::size_t i = 0; i < plan.components.size(); ++i) {
       const auto& component = plan.components[i];
       CHECK(component.amount.value == first.components[i].amount.value);
-      CHECK((component.isSolvent() || std::holds_alternative<charge::StockSupply>(component.supply)));
+      CHECK(
+          (component.isSolvent() || std::holds_alternative<charge::StockSupply>(component.supply)));
       if (component.key != "acid") CHECK(component.name == first.components[i].name);
     }
     acids.push_back(plan.find("acid")->name);

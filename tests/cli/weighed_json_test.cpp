@@ -11,10 +11,11 @@ namespace {
 
 constexpr const char* kWeighed = "key,actual\namine,26.9 mg\nnickel,98 uL\nwater,105 uL\n";
 
-nlohmann::json chargeOf(const std::vector<std::string>& options = {}, const std::string& csv = kWeighed) {
+nlohmann::json chargeOf(const std::vector<std::string>& options = {},
+                        const std::string& csv = kWeighed) {
   const ScratchFolder folder;
-  std::vector<std::string> arguments = {"--json", "charge", folder.write("plan.toml", soundPlan()), "--weighed",
-                                        folder.write("w.csv", csv)};
+  std::vector<std::string> arguments = {"--json", "charge", folder.write("plan.toml", soundPlan()),
+                                        "--weighed", folder.write("w.csv", csv)};
   arguments.insert(arguments.end(), options.begin(), options.end());
   const Ran ran = run(arguments);
   INFO(ran.err);
@@ -35,8 +36,8 @@ TEST_CASE("what was weighed has charged, the others null", "[cli][json][weighed]
     const auto& charged = component(json, key)["charged"];
     REQUIRE(charged.is_object());
     checkNumbers(charged, "amount_mmol equiv mol_percent concentration_mol_L off_target_percent");
-    for (const char* field :
-         {"mass_mg", "volume_uL", "u_amount_mmol", "u_equiv", "u_mol_percent", "u_concentration_mol_L"}) {
+    for (const char* field : {"mass_mg", "volume_uL", "u_amount_mmol", "u_equiv", "u_mol_percent",
+                              "u_concentration_mol_L"}) {
       CHECK(charged.contains(field));
     }
   }
@@ -55,25 +56,33 @@ TEST_CASE("as charged follows from what was recorded", "[cli][json][weighed][ide
   CHECK(amine["equiv"].get<double>() == 1.0);
   CHECK(amine["u_equiv"].get<double>() == 0.0);
   const double target_mg = component(json, "amine")["target_mass_mg"].get<double>();
-  CHECK(amine["off_target_percent"].get<double>() == Approx(100.0 * (26.9 / target_mg - 1.0)).epsilon(1e-9));
+  CHECK(amine["off_target_percent"].get<double>() ==
+        Approx(100.0 * (26.9 / target_mg - 1.0)).epsilon(1e-9));
 
   const auto& nickel = component(json, "nickel")["charged"];
   CHECK(nickel["amount_mmol"].get<double>() == Approx(0.0098).epsilon(1e-12));
   CHECK(nickel["equiv"].get<double>() == Approx(0.0098 / kAmine_mmol).epsilon(1e-5));
-  CHECK(nickel["mol_percent"].get<double>() == Approx(100.0 * nickel["equiv"].get<double>()).epsilon(1e-12));
+  CHECK(nickel["mol_percent"].get<double>() ==
+        Approx(100.0 * nickel["equiv"].get<double>()).epsilon(1e-12));
   CHECK(nickel["off_target_percent"].get<double>() == Approx(-2.0).epsilon(1e-9));
-  // recorded volumes take the place of the planned: 2 µL less of the stock, 5 µL more of water than 100 µL
+  // recorded volumes take the place of the planned: 2 µL less of the stock, 5 µL more of water than
+  // 100 µL
   CHECK(nickel["concentration_mol_L"].get<double>() == Approx(0.0098 / 2.003).epsilon(1e-9));
-  CHECK(component(json, "nickel")["target_volume_uL"].get<double>() == Approx(100.0).epsilon(1e-12));
+  CHECK(component(json, "nickel")["target_volume_uL"].get<double>() ==
+        Approx(100.0).epsilon(1e-12));
 }
 
-TEST_CASE("after a re-target everything that follows the limiting component follows what was weighed",
-          "[cli][json][weighed][identity]") {
+TEST_CASE(
+    "after a re-target everything that follows the limiting component follows what was weighed",
+    "[cli][json][weighed][identity]") {
   const auto json = chargeOf({"--retarget"});
   CHECK(json["limiting_amount_mmol"].get<double>() == Approx(kAmine_mmol).epsilon(1e-5));
-  CHECK(json["total_liquid_mL"].get<double>() == Approx(2.0).epsilon(1e-12));  // it is given, so it stays
-  CHECK(component(json, "acid")["amount_mmol"].get<double>() == Approx(0.1 * kAmine_mmol).epsilon(1e-5));
-  CHECK(component(json, "nickel")["target_volume_uL"].get<double>() == Approx(500.0 * kAmine_mmol).epsilon(1e-5));
+  CHECK(json["total_liquid_mL"].get<double>() ==
+        Approx(2.0).epsilon(1e-12));  // it is given, so it stays
+  CHECK(component(json, "acid")["amount_mmol"].get<double>() ==
+        Approx(0.1 * kAmine_mmol).epsilon(1e-5));
+  CHECK(component(json, "nickel")["target_volume_uL"].get<double>() ==
+        Approx(500.0 * kAmine_mmol).epsilon(1e-5));
   const auto plain = chargeOf();
   CHECK(component(json, "amine")["target_mass_mg"] == component(plain, "amine")["target_mass_mg"]);
   CHECK(component(json, "nickel")["charged"]["off_target_percent"].get<double>() ==
@@ -82,7 +91,8 @@ TEST_CASE("after a re-target everything that follows the limiting component foll
 
 TEST_CASE("weighing and scale go together", "[cli][json][weighed][scale]") {
   const auto json = chargeOf({"--scale-to", "0.4 mmol"});
-  CHECK(component(json, "nickel")["charged"]["off_target_percent"].get<double>() == Approx(-51.0).epsilon(1e-9));
+  CHECK(component(json, "nickel")["charged"]["off_target_percent"].get<double>() ==
+        Approx(-51.0).epsilon(1e-9));
   CHECK(component(json, "acid")["charged"].is_null());
 }
 
@@ -91,12 +101,15 @@ TEST_CASE("a weighed file without rows weighs nothing", "[cli][json][weighed]") 
   for (const auto& each : json["components"]) CHECK(each["charged"].is_null());
 }
 
-TEST_CASE("a quantity by the wrong device is recorded without uncertainty and told", "[cli][json][weighed]") {
+TEST_CASE("a quantity by the wrong device is recorded without uncertainty and told",
+          "[cli][json][weighed]") {
   const ScratchFolder folder;
   const std::string plan = folder.write(
-      "plan.toml", changed(soundPlan(), "supply = { kind = \"solid\", assay = 0.98 }",
-                           "supply = { kind = \"liquid\", density = \"1.063 g/mL\", assay = 0.98 }"));
-  const Ran ran = run({"--json", "charge", plan, "--weighed", folder.write("w.csv", "key,actual\namine,23 uL\n")});
+      "plan.toml",
+      changed(soundPlan(), "supply = { kind = \"solid\", assay = 0.98 }",
+              "supply = { kind = \"liquid\", density = \"1.063 g/mL\", assay = 0.98 }"));
+  const Ran ran = run(
+      {"--json", "charge", plan, "--weighed", folder.write("w.csv", "key,actual\namine,23 uL\n")});
   REQUIRE(ran.status == 0);
   const auto json = ran.json();
   const auto& amine = component(json, "amine");

@@ -22,8 +22,8 @@ using tests::ScratchFolder;
 
 namespace {
 
-/// In a process of its own: logs `entry FIRST`, `entry FIRST+1`, … and acknowledges each on the pipe once
-/// it is accepted. Ends with `_exit`, so that nothing of the test framework runs in it.
+/// In a process of its own: logs `entry FIRST`, `entry FIRST+1`, … and acknowledges each on the
+/// pipe once it is accepted. Ends with `_exit`, so that nothing of the test framework runs in it.
 [[noreturn]] void logAndAcknowledge(const std::string& file, int first, int count, int pipe) {
   auto notebook = db::openNotebook(file, db::OpenFor::kWriting, "child");
   if (!notebook) ::_exit(2);
@@ -82,7 +82,8 @@ std::vector<int> entriesIn(app::Notebook& notebook) {
 
 }  // namespace
 
-TEST_CASE("after 200 kills in mid-write every acknowledged entry is there and the chain is whole", "[db][safety][identity]") {
+TEST_CASE("after 200 kills in mid-write every acknowledged entry is there and the chain is whole",
+          "[db][safety][identity]") {
   std::mt19937_64 random(20260304);
   int kills = 0;
   int survivors = 0;
@@ -101,7 +102,8 @@ TEST_CASE("after 200 kills in mid-write every acknowledged entry is there and th
       for (const int number : acknowledged(child.pipe)) promised.insert(number);
       const auto notebook = tests::opened(file);
       const std::vector<int> kept = entriesIn(*notebook);
-      for (const int number : promised) REQUIRE(std::find(kept.begin(), kept.end(), number) != kept.end());
+      for (const int number : promised)
+        REQUIRE(std::find(kept.begin(), kept.end(), number) != kept.end());
       // At most the one entry in flight may be there without its acknowledgement, for each kill.
       REQUIRE(kept.size() <= promised.size() + static_cast<std::size_t>(attempt) + 1);
       REQUIRE(tests::findings(*notebook).empty());
@@ -147,7 +149,8 @@ TEST_CASE("two writers at once lose nothing and keep their order", "[db][safety]
   CHECK(tests::findings(*notebook).empty());
 }
 
-TEST_CASE("a disk that takes no more bytes is told in a sentence and leaves the file whole", "[db][safety]") {
+TEST_CASE("a disk that takes no more bytes is told in a sentence and leaves the file whole",
+          "[db][safety]") {
   const ScratchFolder folder;
   const std::string file = folder.path("full.vialbook");
   tests::makeSmallNotebook(file, 3);
@@ -180,7 +183,8 @@ TEST_CASE("a disk that takes no more bytes is told in a sentence and leaves the 
   told.resize(static_cast<std::size_t>(count));
   CHECK(statusOf(pid) == 0);
   INFO(told);
-  CHECK((told.find("the disk is full") != std::string::npos || told.find("the disk reported an error") != std::string::npos));
+  CHECK((told.find("the disk is full") != std::string::npos ||
+         told.find("the disk reported an error") != std::string::npos));
   CHECK(told.find("nothing was changed") != std::string::npos);
   const auto notebook = tests::opened(file);
   CHECK(tests::findings(*notebook).empty());

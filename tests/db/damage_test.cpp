@@ -34,7 +34,8 @@ void execute(const std::string& file, const std::string& sql) {
 
 }  // namespace
 
-TEST_CASE("600 flipped bytes never crash, and none that changes a record goes unnoticed", "[db][safety][identity]") {
+TEST_CASE("600 flipped bytes never crash, and none that changes a record goes unnoticed",
+          "[db][safety][identity]") {
   const ScratchFolder folder;
   const std::string good = folder.path("good.vialbook");
   tests::makeSmallNotebook(good, 40);
@@ -69,17 +70,18 @@ TEST_CASE("600 flipped bytes never crash, and none that changes a record goes un
 }
 
 TEST_CASE("verify finds what another SQLite tool did", "[db][safety]") {
-  const auto tampering = GENERATE(as<std::string>{},
-                                  "UPDATE component SET planned_mmol = 0.3",
-                                  "DROP TRIGGER event_is_kept; UPDATE event SET raw = 'note nothing seen' WHERE n = 1",
-                                  "DROP TRIGGER event_stays; DELETE FROM event WHERE n = 2",
-                                  "DROP TRIGGER revision_stays; DELETE FROM revision WHERE seq = 2",
-                                  "DROP TRIGGER revision_stays; DELETE FROM revision WHERE seq = (SELECT max(seq) FROM revision)",
-                                  "DROP TRIGGER revision_is_kept; UPDATE revision SET person = 'XX' WHERE seq = 1",
-                                  "DROP TRIGGER attachment_is_kept; UPDATE attachment SET data = x'00'",
-                                  "UPDATE run SET yield_percent = 99",
-                                  "INSERT INTO lamp (n, id, name) VALUES (1, x'01', 'another')",
-                                  "UPDATE run_words SET title = 'other words'");
+  const auto tampering =
+      GENERATE(as<std::string>{}, "UPDATE component SET planned_mmol = 0.3",
+               "DROP TRIGGER event_is_kept; UPDATE event SET raw = 'note nothing seen' WHERE n = 1",
+               "DROP TRIGGER event_stays; DELETE FROM event WHERE n = 2",
+               "DROP TRIGGER revision_stays; DELETE FROM revision WHERE seq = 2",
+               "DROP TRIGGER revision_stays; DELETE FROM revision WHERE seq = (SELECT max(seq) "
+               "FROM revision)",
+               "DROP TRIGGER revision_is_kept; UPDATE revision SET person = 'XX' WHERE seq = 1",
+               "DROP TRIGGER attachment_is_kept; UPDATE attachment SET data = x'00'",
+               "UPDATE run SET yield_percent = 99",
+               "INSERT INTO lamp (n, id, name) VALUES (1, x'01', 'another')",
+               "UPDATE run_words SET title = 'other words'");
   const ScratchFolder folder;
   const std::string file = folder.path("tampered.vialbook");
   tests::makeSmallNotebook(file, 3);
@@ -93,15 +95,18 @@ TEST_CASE("triggers refuse to change or delete the trail, events and raw files",
   const ScratchFolder folder;
   const std::string file = folder.path("kept.vialbook");
   tests::makeSmallNotebook(file, 2);
-  const auto sql = GENERATE(as<std::string>{}, "UPDATE revision SET person = 'XX'", "DELETE FROM revision", "UPDATE event SET raw = ''",
-                            "DELETE FROM event", "UPDATE attachment SET data = x'00'", "DELETE FROM attachment", "DELETE FROM run",
-                            "DELETE FROM component", "REPLACE INTO revision SELECT * FROM revision");
+  const auto sql =
+      GENERATE(as<std::string>{}, "UPDATE revision SET person = 'XX'", "DELETE FROM revision",
+               "UPDATE event SET raw = ''", "DELETE FROM event",
+               "UPDATE attachment SET data = x'00'", "DELETE FROM attachment", "DELETE FROM run",
+               "DELETE FROM component", "REPLACE INTO revision SELECT * FROM revision");
   INFO(sql);
   CHECK_THROWS_AS(execute(file, "PRAGMA recursive_triggers = ON; " + sql), SQLite::Exception);
   CHECK(tests::findings(*tests::opened(file)).empty());
 }
 
-TEST_CASE("a second writer who read an older version is told both and overwrites nothing", "[db][safety]") {
+TEST_CASE("a second writer who read an older version is told both and overwrites nothing",
+          "[db][safety]") {
   const ScratchFolder folder;
   const std::string file = folder.path("conflict.vialbook");
   tests::makeSmallNotebook(file, 0);
@@ -121,13 +126,15 @@ TEST_CASE("a second writer who read an older version is told both and overwrites
 
 TEST_CASE("makes the stored notebook of the first form", "[.make-v0001]") {
   // Run once when the form was released; the file is kept and never made again.
-  tests::makeSmallNotebook(std::string(VIALKEEPER_SOURCE_DIR) + "/tests/data/schema/v0001.vialbook", 3);
+  tests::makeSmallNotebook(std::string(VIALKEEPER_SOURCE_DIR) + "/tests/data/schema/v0001.vialbook",
+                           3);
 }
 
 TEST_CASE("a notebook of the first form still opens and is sound", "[db][migration]") {
   const ScratchFolder folder;
   const std::string file = folder.path("v0001.vialbook");
-  std::filesystem::copy_file(std::string(VIALKEEPER_SOURCE_DIR) + "/tests/data/schema/v0001.vialbook", file);
+  std::filesystem::copy_file(
+      std::string(VIALKEEPER_SOURCE_DIR) + "/tests/data/schema/v0001.vialbook", file);
   const auto notebook = tests::opened(file);
   CHECK(notebook->readOnlyReason().empty());
   CHECK(tests::findings(*notebook).empty());
@@ -144,7 +151,8 @@ TEST_CASE("a notebook of a future form opens for reading only and says why", "[d
   const auto notebook = tests::opened(file);
   CHECK(notebook->readOnlyReason().find("newer Vialkeeper") != std::string::npos);
   tests::SteppingClock clock;
-  const auto logged = app::logLine({*notebook, clock, "KW"}, tests::runOf(*notebook), {.line = "note too late"});
+  const auto logged =
+      app::logLine({*notebook, clock, "KW"}, tests::runOf(*notebook), {.line = "note too late"});
   REQUIRE_FALSE(logged);
   CHECK(logged.error().front().kind == text::FaultKind::kNotebook);
 }
@@ -159,7 +167,8 @@ TEST_CASE("what is no notebook is refused with a sentence", "[db]") {
   };
   write(folder.path("empty"), "");
   write(folder.path("text"), std::string(500, 'a'));
-  SQLite::Database(folder.path("other"), SQLite::OPEN_READWRITE | SQLite::OPEN_CREATE).exec("CREATE TABLE t(x)");
+  SQLite::Database(folder.path("other"), SQLite::OPEN_READWRITE | SQLite::OPEN_CREATE)
+      .exec("CREATE TABLE t(x)");
   std::filesystem::create_directory(std::filesystem::path(folder.path("")) / "folder");
   CHECK(told("missing") == "there is no such notebook");
   CHECK(told("empty") == "the file is empty");
@@ -184,7 +193,8 @@ TEST_CASE("an archive rebuilds the notebook to the last revision and record", "[
   REQUIRE(tests::opened(rebuilt)->exportAll(folder.path("again")));
   for (const auto& entry : std::filesystem::recursive_directory_iterator(folder.path("archive"))) {
     if (!entry.is_regular_file()) continue;
-    const auto twin = std::filesystem::path(folder.path("")) / "again" / std::filesystem::relative(entry.path(), folder.path("archive"));
+    const auto twin = std::filesystem::path(folder.path("")) / "again" /
+                      std::filesystem::relative(entry.path(), folder.path("archive"));
     INFO(twin);
     CHECK(bytesOf(twin.string()) == bytesOf(entry.path().string()));
   }

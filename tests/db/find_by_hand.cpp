@@ -13,7 +13,8 @@ namespace {
 
 bool isWithin(const std::optional<double>& value, const app::Interval& interval) {
   if (!value) return false;
-  return (!interval.least || *value >= *interval.least) && (!interval.most || *value <= *interval.most);
+  return (!interval.least || *value >= *interval.least) &&
+         (!interval.most || *value <= *interval.most);
 }
 
 bool hasRole(const std::string& role, const std::string& wanted) {
@@ -23,16 +24,21 @@ bool hasRole(const std::string& role, const std::string& wanted) {
 
 bool meets(const SampleRun& sample, const app::SubstanceCondition& condition) {
   return std::ranges::any_of(sample.components, [&](const app::ComponentRecord& component) {
-    const bool isOne = condition.anySubstance ||
-                       std::ranges::find(condition.substances, component.substance) != condition.substances.end();
-    const auto concentration = component.charged_mol_L ? component.charged_mol_L : component.planned_mol_L;
+    const bool isOne =
+        condition.anySubstance ||
+        std::ranges::find(condition.substances, component.substance) != condition.substances.end();
+    const auto concentration =
+        component.charged_mol_L ? component.charged_mol_L : component.planned_mol_L;
     return isOne && hasRole(component.role, condition.role) &&
-           (!condition.loading_molPercent || isWithin(component.loading_molPercent(), *condition.loading_molPercent)) &&
-           (!condition.concentration_mol_L || isWithin(concentration, *condition.concentration_mol_L));
+           (!condition.loading_molPercent ||
+            isWithin(component.loading_molPercent(), *condition.loading_molPercent)) &&
+           (!condition.concentration_mol_L ||
+            isWithin(concentration, *condition.concentration_mol_L));
   });
 }
 
-bool holdsPhrase(const std::vector<std::string>& text, const std::vector<std::string>& phrase, bool isPrefix) {
+bool holdsPhrase(const std::vector<std::string>& text, const std::vector<std::string>& phrase,
+                 bool isPrefix) {
   for (std::size_t from = 0; from + phrase.size() <= text.size(); ++from) {
     bool isHere = true;
     for (std::size_t i = 0; isHere && i < phrase.size(); ++i) {
@@ -50,8 +56,8 @@ bool meets(const SampleRun& sample, const app::WordsCondition& condition) {
     if (phrase.empty()) continue;
     const bool isPrefix = (i < condition.prefix.size() && condition.prefix[i]) ||
                           (condition.lastIsPrefix && i + 1 == condition.words.size());
-    const bool isThere =
-        std::ranges::any_of(sample.tokens, [&](const auto& text) { return holdsPhrase(text, phrase, isPrefix); });
+    const bool isThere = std::ranges::any_of(
+        sample.tokens, [&](const auto& text) { return holdsPhrase(text, phrase, isPrefix); });
     if (!isThere) return false;
   }
   return true;
@@ -59,7 +65,8 @@ bool meets(const SampleRun& sample, const app::WordsCondition& condition) {
 
 bool meets(const SampleRun& sample, const app::TextFieldCondition& condition) {
   using Field = app::TextFieldCondition::Field;
-  constexpr std::array<const char*, 6> kStates = {"planned", "charged", "irradiating", "worked-up", "closed", "sealed"};
+  constexpr std::array<const char*, 6> kStates = {"planned",   "charged", "irradiating",
+                                                  "worked-up", "closed",  "sealed"};
   const std::string held = [&]() -> std::string {
     switch (condition.field) {
       case Field::kCode:
@@ -110,18 +117,19 @@ bool meets(const SampleRun& sample, const app::MeasureCondition& condition) {
 }
 
 bool meets(const SampleRun& sample, const app::AllOf& all) {
-  return std::ranges::all_of(all.conditions,
-                             [&](const app::FindCondition& each) { return testing::meets(sample, each); });
+  return std::ranges::all_of(
+      all.conditions, [&](const app::FindCondition& each) { return testing::meets(sample, each); });
 }
 
 bool meets(const SampleRun& sample, const app::AnyOf& any) {
-  return std::ranges::any_of(any.conditions,
-                             [&](const app::FindCondition& each) { return testing::meets(sample, each); });
+  return std::ranges::any_of(
+      any.conditions, [&](const app::FindCondition& each) { return testing::meets(sample, each); });
 }
 
 bool meets(const SampleRun& sample, const app::NoneOf& none) {
-  return !std::ranges::all_of(none.conditions,
-                              [&](const app::FindCondition& each) { return testing::meets(sample, each); });
+  return !std::ranges::all_of(none.conditions, [&](const app::FindCondition& each) {
+    return testing::meets(sample, each);
+  });
 }
 
 }  // namespace
@@ -133,7 +141,8 @@ std::vector<std::string> tokensOf(std::string_view text) {
   for (std::size_t at = 0; at < text.size();) {
     const auto [value, length] = text::codePointAt(text, at);
     const char c = text[at];
-    const bool isPart = value >= 0x80 || (c >= '0' && c <= '9') || (c >= 'A' && c <= 'Z') || (c >= 'a' && c <= 'z');
+    const bool isPart =
+        value >= 0x80 || (c >= '0' && c <= '9') || (c >= 'A' && c <= 'Z') || (c >= 'a' && c <= 'z');
     if (isPart && !isOpen) found.emplace_back();
     if (isPart) found.back() += app::foldName(text.substr(at, length));
     isOpen = isPart;

@@ -12,16 +12,17 @@
 namespace vialkeeper::testing {
 namespace {
 
-constexpr std::array<std::string_view, 12> kRoles = {"substrate", "photocatalyst", "cocatalyst", "additive",
-                                                     "acid",      "base",          "solvent",    "standard",
-                                                     "quencher",  "gas",           "product",    "other"};
+constexpr std::array<std::string_view, 12> kRoles = {
+    "substrate", "photocatalyst", "cocatalyst", "additive", "acid",    "base",
+    "solvent",   "standard",      "quencher",   "gas",      "product", "other"};
 constexpr std::array<std::string_view, 3> kPeople = {"KW", "KWL", "AB"};
-constexpr std::array<std::string_view, 5> kSeries = {"", "acid additives", "Acid Additives", "nickel screen",
-                                                     "same excess"};
+constexpr std::array<std::string_view, 5> kSeries = {"", "acid additives", "Acid Additives",
+                                                     "nickel screen", "same excess"};
 constexpr std::array<std::string_view, 28> kWords = {
-    "film",   "grey",   "amber",   "ambient", "black",  "turned", "slowly", "grün",    "grun", "résidu",
-    "residu", "4CzIPN", "4-CzIPN", "clear",   "cloudy", "leak",   "septum", "pivalic", "acid", "Ni(bpy)",
-    "C++",    "NEAR",   "AND",     "or",      "3:1",    "0.42",   "bar",    "it's"};
+    "film",   "grey", "amber",  "ambient", "black",  "turned",  "slowly",
+    "grün",   "grun", "résidu", "residu",  "4CzIPN", "4-CzIPN", "clear",
+    "cloudy", "leak", "septum", "pivalic", "acid",   "Ni(bpy)", "C++",
+    "NEAR",   "AND",  "or",     "3:1",     "0.42",   "bar",     "it's"};
 constexpr std::int64_t kSubstances = 40;
 
 void bind(SQLite::Statement& statement, const std::vector<db::Cell>& cells) {
@@ -76,7 +77,8 @@ class Inventor {
     run.yield_percent = number(0, 100, 1);
     run.conversion_percent = number(0, 100, 1);
     const std::size_t components = 3 + below(7);
-    for (std::size_t i = 0; i < components; ++i) sample.components.push_back(component(static_cast<int>(i)));
+    for (std::size_t i = 0; i < components; ++i)
+      sample.components.push_back(component(static_cast<int>(i)));
     for (int i = 0; i < 4; ++i) sample.texts.push_back(words(below(7)));
     return sample;
   }
@@ -102,7 +104,8 @@ class Inventor {
   }
   std::string words(std::uint64_t count) {
     std::string text;
-    for (std::uint64_t i = 0; i < count; ++i) text += (i > 0 ? " " : "") + std::string(kWords[below(kWords.size())]);
+    for (std::uint64_t i = 0; i < count; ++i)
+      text += (i > 0 ? " " : "") + std::string(kWords[below(kWords.size())]);
     return text;
   }
   std::mt19937_64 m_random;
@@ -121,13 +124,15 @@ SampleNotebook::SampleNotebook(std::size_t runs, std::uint64_t seed)
     : m_database(":memory:", SQLite::OPEN_READWRITE | SQLite::OPEN_CREATE) {
   m_database.exec(migration());
   m_database.exec("PRAGMA foreign_keys = ON; BEGIN");
-  m_database.exec("INSERT INTO attachment(n, id, sha256, size, data) VALUES (1, x'01', x'01', 0, x'')");
+  m_database.exec(
+      "INSERT INTO attachment(n, id, sha256, size, data) VALUES (1, x'01', x'01', 0, x'')");
   for (std::size_t i = 0; i < kPeople.size(); ++i) {
-    m_database.exec(
-        fmt::format("INSERT INTO person(n, id, code) VALUES ({0}, randomblob(16), '{1}')", i + 1, kPeople[i]));
+    m_database.exec(fmt::format(
+        "INSERT INTO person(n, id, code) VALUES ({0}, randomblob(16), '{1}')", i + 1, kPeople[i]));
   }
   for (std::int64_t i = 1; i <= kSubstances; ++i) {
-    m_database.exec(fmt::format("INSERT INTO substance(n, id, name) VALUES ({0}, randomblob(16), 'substance {0}')", i));
+    m_database.exec(fmt::format(
+        "INSERT INTO substance(n, id, name) VALUES ({0}, randomblob(16), 'substance {0}')", i));
   }
   Inventor inventor(seed);
   for (std::size_t i = 0; i < runs; ++i) {
@@ -137,21 +142,25 @@ SampleNotebook::SampleNotebook(std::size_t runs, std::uint64_t seed)
     for (const std::string& text : sample.texts) sample.tokens.push_back(tokensOf(text));
     write(m_runs.back());
   }
-  m_database.exec("INSERT INTO run_search(run_search) VALUES('rebuild'); COMMIT; PRAGMA trusted_schema = OFF");
+  m_database.exec(
+      "INSERT INTO run_search(run_search) VALUES('rebuild'); COMMIT; PRAGMA trusted_schema = OFF");
 }
 
 void SampleNotebook::write(const SampleRun& sample) {
   const app::RunRecord& run = sample.run;
-  SQLite::Statement insertRun(m_database,
-                              "INSERT INTO run(n, id, code, person_n, state, title, series, created_ms, "
-                              "created_offset_min, plan_n, vial, lamp, atmosphere, "
-                              "wavelength_nm, temperature_c, duration_h, limiting_key, limiting_mmol, liquid_ml, "
-                              "yield_percent, conversion_percent) "
-                              "VALUES (?, randomblob(16), ?, (SELECT n FROM person WHERE code = ?), ?, ?, ?, ?, ?, 1, "
-                              "?, ?, ?, ?, ?, ?, 'amine', ?, ?, ?, ?)");
-  constexpr std::array<const char*, 6> kStates = {"planned", "charged", "irradiating", "worked-up", "closed", "sealed"};
+  SQLite::Statement insertRun(
+      m_database,
+      "INSERT INTO run(n, id, code, person_n, state, title, series, created_ms, "
+      "created_offset_min, plan_n, vial, lamp, atmosphere, "
+      "wavelength_nm, temperature_c, duration_h, limiting_key, limiting_mmol, liquid_ml, "
+      "yield_percent, conversion_percent) "
+      "VALUES (?, randomblob(16), ?, (SELECT n FROM person WHERE code = ?), ?, ?, ?, ?, ?, 1, "
+      "?, ?, ?, ?, ?, ?, 'amine', ?, ?, ?, ?)");
+  constexpr std::array<const char*, 6> kStates = {"planned",   "charged", "irradiating",
+                                                  "worked-up", "closed",  "sealed"};
   Binder bindRun(insertRun);
-  bindRun(run.n)(run.code)(run.person)(kStates[static_cast<std::size_t>(run.state)])(sample.texts[0])
+  bindRun(run.n)(run.code)(run.person)(kStates[static_cast<std::size_t>(run.state)])(
+      sample.texts[0])
       .orNull(run.series)(std::int64_t{run.created.utc.time_since_epoch().count()})(
           std::int64_t{run.created.offset.count()})
       .orNull(run.vial)
@@ -164,14 +173,15 @@ void SampleNotebook::write(const SampleRun& sample) {
       .orNull(run.conversion_percent);
   insertRun.exec();
   for (const app::ComponentRecord& component : sample.components) {
-    SQLite::Statement insert(m_database,
-                             "INSERT INTO component(id, run_n, position, key, role, name, substance_n, "
-                             "planned_mol_percent, charged_mol_percent, "
-                             "loading_mol_percent, planned_mol_l, charged_mol_l) VALUES (randomblob(16), ?, ?, ?, ?, "
-                             "'x', ?, ?, ?, ?, ?, ?)");
+    SQLite::Statement insert(
+        m_database,
+        "INSERT INTO component(id, run_n, position, key, role, name, substance_n, "
+        "planned_mol_percent, charged_mol_percent, "
+        "loading_mol_percent, planned_mol_l, charged_mol_l) VALUES (randomblob(16), ?, ?, ?, ?, "
+        "'x', ?, ?, ?, ?, ?, ?)");
     Binder bindComponent(insert);
-    bindComponent(run.n)(std::int64_t{component.position})(fmt::format("c{}", component.position))(component.role)(
-        component.substance)
+    bindComponent(run.n)(std::int64_t{component.position})(fmt::format("c{}", component.position))(
+        component.role)(component.substance)
         .orNull(component.planned_molPercent)
         .orNull(component.charged_molPercent)
         .orNull(component.loading_molPercent())
@@ -179,8 +189,9 @@ void SampleNotebook::write(const SampleRun& sample) {
         .orNull(component.charged_mol_L);
     insert.exec();
   }
-  SQLite::Statement insertWords(
-      m_database, "INSERT INTO run_words(run_n, code, title, aim, conclusion, observations) VALUES (?, ?, ?, ?, ?, ?)");
+  SQLite::Statement insertWords(m_database,
+                                "INSERT INTO run_words(run_n, code, title, aim, conclusion, "
+                                "observations) VALUES (?, ?, ?, ?, ?, ?)");
   Binder bindWords(insertWords);
   bindWords(run.n)(run.code)(sample.texts[0])(sample.texts[1])(sample.texts[2])(sample.texts[3]);
   insertWords.exec();
@@ -246,7 +257,9 @@ app::FindCondition RandomQueries::condition(int depth) {
 }
 
 app::Interval RandomQueries::interval(double least, double most) {
-  const auto between = [&] { return least + (most - least) * static_cast<double>(below(1000)) / 1000.0; };
+  const auto between = [&] {
+    return least + (most - least) * static_cast<double>(below(1000)) / 1000.0;
+  };
   app::Interval interval;
   if (below(4) > 0) interval.least = between();
   if (below(4) > 0) interval.most = between();
@@ -267,12 +280,13 @@ app::FindCondition RandomQueries::substance() {
 }
 
 app::FindCondition RandomQueries::words() {
-  constexpr std::array<std::string_view, 8> kHard = {"turned black", "4 czipn", "amb",      "sep",
-                                                     "\"",           "--",      "film amb", "KW-00"};
+  constexpr std::array<std::string_view, 8> kHard = {
+      "turned black", "4 czipn", "amb", "sep", "\"", "--", "film amb", "KW-00"};
   app::WordsCondition condition;
   const std::uint64_t count = 1 + below(3);
   for (std::uint64_t i = 0; i < count; ++i) {
-    condition.words.emplace_back(below(3) == 0 ? kHard[below(kHard.size())] : kWords[below(kWords.size())]);
+    condition.words.emplace_back(below(3) == 0 ? kHard[below(kHard.size())]
+                                               : kWords[below(kWords.size())]);
     if (below(2) == 0) condition.prefix.resize(i + 1, false), condition.prefix[i] = below(3) == 0;
   }
   condition.lastIsPrefix = below(3) == 0;
@@ -281,21 +295,22 @@ app::FindCondition RandomQueries::words() {
 
 app::FindCondition RandomQueries::textField() {
   using Field = app::TextFieldCondition::Field;
-  constexpr std::array<std::pair<Field, std::string_view>, 15> kAsked = {{{Field::kCode, "kw-0012"},
-                                                                          {Field::kCode, "KW-00"},
-                                                                          {Field::kSeries, "acid additives"},
-                                                                          {Field::kSeries, "NICKEL"},
-                                                                          {Field::kSeries, ""},
-                                                                          {Field::kPerson, "kw"},
-                                                                          {Field::kPerson, "AB"},
-                                                                          {Field::kState, "closed"},
-                                                                          {Field::kState, "c"},
-                                                                          {Field::kVial, "10 mL crimp vial"},
-                                                                          {Field::kVial, "10%"},
-                                                                          {Field::kLamp, "led 440"},
-                                                                          {Field::kLamp, "LED"},
-                                                                          {Field::kAtmosphere, "n2"},
-                                                                          {Field::kAtmosphere, "' OR 1=1 --"}}};
+  constexpr std::array<std::pair<Field, std::string_view>, 15> kAsked = {
+      {{Field::kCode, "kw-0012"},
+       {Field::kCode, "KW-00"},
+       {Field::kSeries, "acid additives"},
+       {Field::kSeries, "NICKEL"},
+       {Field::kSeries, ""},
+       {Field::kPerson, "kw"},
+       {Field::kPerson, "AB"},
+       {Field::kState, "closed"},
+       {Field::kState, "c"},
+       {Field::kVial, "10 mL crimp vial"},
+       {Field::kVial, "10%"},
+       {Field::kLamp, "led 440"},
+       {Field::kLamp, "LED"},
+       {Field::kAtmosphere, "n2"},
+       {Field::kAtmosphere, "' OR 1=1 --"}}};
   const auto& [field, value] = kAsked[below(kAsked.size())];
   return {app::TextFieldCondition{field, std::string(value), below(2) == 0}};
 }
@@ -318,7 +333,8 @@ app::FindCondition RandomQueries::measure() {
     case 6:
       return {app::MeasureCondition{Measure::kLimiting, interval(0, 0.4)}};
     default:
-      return {app::MeasureCondition{Measure::kDate, interval(1.7672256e12 - 1e8, 1.7672256e12 + 91.0 * 86.4e6)}};
+      return {app::MeasureCondition{Measure::kDate,
+                                    interval(1.7672256e12 - 1e8, 1.7672256e12 + 91.0 * 86.4e6)}};
   }
 }
 

@@ -12,16 +12,17 @@
 #include "app/notebook/find_query.h"
 #include "db/find_condition_sql.h"
 
-/// An invented notebook in memory and, beside it, the plainest possible evaluation of a search over the
-/// same runs, which knows nothing of SQL.
+/// An invented notebook in memory and, beside it, the plainest possible evaluation of a search over
+/// the same runs, which knows nothing of SQL.
 namespace vialkeeper::testing {
 
 /// A run with its components and the texts that are searched.
 struct SampleRun {
   app::RunRecord run;
   std::vector<app::ComponentRecord> components;
-  std::vector<std::string> texts;                     ///< title, aim, conclusion, observations
-  std::vector<std::vector<std::string>> tokens = {};  ///< of the code and each text, as they are compared
+  std::vector<std::string> texts;  ///< title, aim, conclusion, observations
+  std::vector<std::vector<std::string>> tokens =
+      {};  ///< of the code and each text, as they are compared
 };
 
 class SampleNotebook {

@@ -52,34 +52,40 @@ std::vector<std::int64_t> sorted(std::vector<std::int64_t> numbers) {
   return numbers;
 }
 
-/// Asks in every order, with and without a limit and a counter, and compares with the evaluation by hand.
+/// Asks in every order, with and without a limit and a counter, and compares with the evaluation by
+/// hand.
 void checkQuery(const FindQuery& query, std::size_t limit) {
   const auto expected = notebook().matches(query);
-  for (const FindOrder order :
-       {FindOrder::kNewest, FindOrder::kOldest, FindOrder::kRank, FindOrder::kYield, FindOrder::kCode}) {
+  for (const FindOrder order : {FindOrder::kNewest, FindOrder::kOldest, FindOrder::kRank,
+                                FindOrder::kYield, FindOrder::kCode}) {
     for (const bool isCounted : {false, true}) {
       if (isCounted && order == FindOrder::kOldest) continue;  // the same but for the direction
-      const db::FindSql all = db::findSql(query, {order, 0, true}, isCounted ? counter() : db::RowCounter());
+      const db::FindSql all =
+          db::findSql(query, {order, 0, true}, isCounted ? counter() : db::RowCounter());
       INFO(all.select.sql);
       const auto numbers = notebook().numbers(all.select);
-      REQUIRE(notebook().numbers(all.count) == std::vector{static_cast<std::int64_t>(expected.size())});
+      REQUIRE(notebook().numbers(all.count) ==
+              std::vector{static_cast<std::int64_t>(expected.size())});
       if (order == FindOrder::kRank) {
         REQUIRE(sorted(numbers) == ordered(expected, FindOrder::kOldest));
       } else {
         REQUIRE(numbers == ordered(expected, order));
       }
       if (order != FindOrder::kNewest && order != FindOrder::kRank) continue;
-      const auto first =
-          notebook().numbers(db::findSql(query, {order, limit, true}, isCounted ? counter() : db::RowCounter()).select);
+      const auto first = notebook().numbers(
+          db::findSql(query, {order, limit, true}, isCounted ? counter() : db::RowCounter())
+              .select);
       REQUIRE(first.size() == std::min(limit, expected.size()));
-      if (order != FindOrder::kRank) REQUIRE(std::equal(first.begin(), first.end(), numbers.begin()));
+      if (order != FindOrder::kRank)
+        REQUIRE(std::equal(first.begin(), first.end(), numbers.begin()));
     }
   }
 }
 
 }  // namespace
 
-TEST_CASE("every kind of condition finds what an evaluation by hand finds", "[db][find][independent]") {
+TEST_CASE("every kind of condition finds what an evaluation by hand finds",
+          "[db][find][independent]") {
   using namespace app;
   using Field = TextFieldCondition::Field;
   using Measure = MeasureCondition::Measure;
@@ -87,10 +93,18 @@ TEST_CASE("every kind of condition finds what an evaluation by hand finds", "[db
       {SubstanceCondition{.role = "photocatalyst", .written = {}, .substances = {1}}},
       {SubstanceCondition{.role = "catalyst", .written = {}, .substances = {1}}},
       {SubstanceCondition{.role = "", .written = {}, .substances = {2}}},
-      {SubstanceCondition{
-          .role = "acid", .written = {}, .substances = {1, 2, 3}, .loading_molPercent = Interval{5, 20}}},
-      {SubstanceCondition{.role = "acid", .written = {}, .substances = {1}, .loading_molPercent = Interval{{}, 20}}},
-      {SubstanceCondition{.role = "acid", .written = {}, .substances = {1}, .concentration_mol_L = Interval{0.05, {}}}},
+      {SubstanceCondition{.role = "acid",
+                          .written = {},
+                          .substances = {1, 2, 3},
+                          .loading_molPercent = Interval{5, 20}}},
+      {SubstanceCondition{.role = "acid",
+                          .written = {},
+                          .substances = {1},
+                          .loading_molPercent = Interval{{}, 20}}},
+      {SubstanceCondition{.role = "acid",
+                          .written = {},
+                          .substances = {1},
+                          .concentration_mol_L = Interval{0.05, {}}}},
       {SubstanceCondition{.role = "acid", .written = {}, .substances = {}}},
       {SubstanceCondition{.role = "acid", .written = {}, .substances = {}, .anySubstance = true}},
       {WordsCondition{{"turned", "film"}, false, {}}},
@@ -191,12 +205,15 @@ TEST_CASE("no text of a search reaches SQL or the full-text syntax", "[db][find]
     std::vector<FindCondition> conditions;
     conditions.push_back({SubstanceCondition{.role = text, .written = text, .substances = {1}}});
     conditions.push_back({SubstanceCondition{.role = text, .written = text, .substances = {1, 2}}});
-    conditions.push_back({SubstanceCondition{.role = text, .written = text, .substances = {}, .anySubstance = true}});
+    conditions.push_back({SubstanceCondition{
+        .role = text, .written = text, .substances = {}, .anySubstance = true}});
     conditions.push_back({WordsCondition{{text}, false, {}}});
     conditions.push_back({WordsCondition{{text, text}, true, {true}}});
-    for (int field = 0; field <= static_cast<int>(TextFieldCondition::Field::kAtmosphere); ++field) {
+    for (int field = 0; field <= static_cast<int>(TextFieldCondition::Field::kAtmosphere);
+         ++field) {
       for (const bool isPrefix : {false, true}) {
-        conditions.push_back({TextFieldCondition{static_cast<TextFieldCondition::Field>(field), text, isPrefix}});
+        conditions.push_back(
+            {TextFieldCondition{static_cast<TextFieldCondition::Field>(field), text, isPrefix}});
       }
     }
     for (const FindCondition& condition : conditions) {
@@ -232,8 +249,10 @@ TEST_CASE("long lists and deep trees stay within SQLite's limits", "[db][find]")
   using namespace app;
   AnyOf any;
   for (int i = 0; i < 3'000; ++i)
-    any.conditions.push_back({MeasureCondition{MeasureCondition::Measure::kYield, {i + 0.5, i + 1.5}}});
-  const auto numbers = notebook().numbers(db::findSql({{{any}}}, {FindOrder::kNewest, 0, true}).select);
+    any.conditions.push_back(
+        {MeasureCondition{MeasureCondition::Measure::kYield, {i + 0.5, i + 1.5}}});
+  const auto numbers =
+      notebook().numbers(db::findSql({{{any}}}, {FindOrder::kNewest, 0, true}).select);
   CHECK(numbers.size() == notebook().matches({{{any}}}).size());
   // All substances but the first, and many that there are not: more than SQLite has parameters.
   SubstanceCondition condition{.role = "acid", .written = {}, .substances = {}};
@@ -259,7 +278,9 @@ TEST_CASE("rank puts runs that say a word often before others", "[db][find]") {
   const auto times = [](std::int64_t n) {
     std::size_t count = 0;
     for (const std::string& text : notebook().runs()[static_cast<std::size_t>(n) - 1].texts) {
-      for (std::size_t at = text.find("septum"); at != std::string::npos; at = text.find("septum", at + 1)) ++count;
+      for (std::size_t at = text.find("septum"); at != std::string::npos;
+           at = text.find("septum", at + 1))
+        ++count;
     }
     return count;
   };
@@ -268,14 +289,19 @@ TEST_CASE("rank puts runs that say a word often before others", "[db][find]") {
 
 TEST_CASE("a catalyst with its loading is looked up in its index", "[db][find]") {
   using namespace app;
-  const FindCondition catalyst{SubstanceCondition{
-      .role = "photocatalyst", .written = {}, .substances = {1}, .loading_molPercent = Interval{1, 5}}};
+  const FindCondition catalyst{SubstanceCondition{.role = "photocatalyst",
+                                                  .written = {},
+                                                  .substances = {1},
+                                                  .loading_molPercent = Interval{1, 5}}};
   const FindCondition acid{SubstanceCondition{.role = "acid", .written = {}, .substances = {2}}};
-  const FindCondition both{SubstanceCondition{.role = "catalyst", .written = {}, .substances = {1}}};
-  const FindCondition several{SubstanceCondition{.role = "acid", .written = {}, .substances = {2, 3}}};
+  const FindCondition both{
+      SubstanceCondition{.role = "catalyst", .written = {}, .substances = {1}}};
+  const FindCondition several{
+      SubstanceCondition{.role = "acid", .written = {}, .substances = {2, 3}}};
   const FindCondition words{WordsCondition{{"film"}, false, {}}};
   const auto holds = [](const std::vector<std::string>& plan, std::string_view text) {
-    return std::ranges::any_of(plan, [&](const std::string& line) { return line.find(text) != std::string::npos; });
+    return std::ranges::any_of(
+        plan, [&](const std::string& line) { return line.find(text) != std::string::npos; });
   };
   for (const FindQuery& query : std::vector<FindQuery>{{{catalyst}},
                                                        {{catalyst, acid}},
@@ -286,8 +312,8 @@ TEST_CASE("a catalyst with its loading is looked up in its index", "[db][find]")
                                                        {{{NoneOf{{catalyst}}}, acid}},
                                                        {{{AnyOf{{catalyst, acid}}}}}}) {
     for (const bool isCounted : {false, true}) {
-      const db::FindSql sql =
-          db::findSql(query, {FindOrder::kNewest, 100, true}, isCounted ? counter() : db::RowCounter());
+      const db::FindSql sql = db::findSql(query, {FindOrder::kNewest, 100, true},
+                                          isCounted ? counter() : db::RowCounter());
       for (const db::SqlText& each : {sql.select, sql.count}) {
         const auto plan = notebook().plan(each);
         INFO(each.sql);
@@ -297,10 +323,12 @@ TEST_CASE("a catalyst with its loading is looked up in its index", "[db][find]")
       }
     }
   }
-  const auto plan = notebook().plan(db::findSql({{catalyst}}, {FindOrder::kNewest, 100, true}).select);
+  const auto plan =
+      notebook().plan(db::findSql({{catalyst}}, {FindOrder::kNewest, 100, true}).select);
   CHECK(holds(plan, "component_find (role=? AND substance_n=?"));
   CHECK_FALSE(holds(plan, "TEMP B-TREE"));  // already in order
-  const auto withWords = notebook().plan(db::findSql({{catalyst, words}}, {FindOrder::kNewest, 100, true}).select);
+  const auto withWords =
+      notebook().plan(db::findSql({{catalyst, words}}, {FindOrder::kNewest, 100, true}).select);
   CHECK(holds(withWords, "SEARCH c USING COVERING INDEX component_find"));
   CHECK_FALSE(holds(withWords, "TEMP B-TREE"));
 }

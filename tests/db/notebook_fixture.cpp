@@ -50,28 +50,30 @@ void makeSmallNotebook(const std::string& file, int entries) {
   const auto notebook = required(db::createNotebook(file));
   SteppingClock clock;
   const app::Desk desk{*notebook, clock, "KW"};
-  const auto done = notebook->act(desk.action("create"), [&](app::Writing& writing) -> text::Checked<void> {
-    REQUIRE(writing.addPerson({.code = "KW", .name = "invented"}));
-    app::SubstanceRecord substance;
-    substance.name = "indoline";
-    substance.formula = "C8H9N";
-    substance.cas = "496-15-1";
-    const auto n = writing.addSubstance(substance);
-    const auto plan = writing.addAttachment("format = \"vialkeeper-plan/1\"\n# invented\n");
-    app::ComponentRecord component;
-    component.key = "amine";
-    component.role = "substrate";
-    component.name = "indoline";
-    component.substance = *n;
-    component.planned_mmol = 0.2;
-    component.planned_molPercent = 100.0;
-    const std::vector<app::ComponentRecord> components{component};
-    REQUIRE(writing.addRun(smallRun(*plan, clock.now()), components));
-    return {};
-  });
+  const auto done =
+      notebook->act(desk.action("create"), [&](app::Writing& writing) -> text::Checked<void> {
+        REQUIRE(writing.addPerson({.code = "KW", .name = "invented"}));
+        app::SubstanceRecord substance;
+        substance.name = "indoline";
+        substance.formula = "C8H9N";
+        substance.cas = "496-15-1";
+        const auto n = writing.addSubstance(substance);
+        const auto plan = writing.addAttachment("format = \"vialkeeper-plan/1\"\n# invented\n");
+        app::ComponentRecord component;
+        component.key = "amine";
+        component.role = "substrate";
+        component.name = "indoline";
+        component.substance = *n;
+        component.planned_mmol = 0.2;
+        component.planned_molPercent = 100.0;
+        const std::vector<app::ComponentRecord> components{component};
+        REQUIRE(writing.addRun(smallRun(*plan, clock.now()), components));
+        return {};
+      });
   REQUIRE(done);
   for (int i = 0; i < entries; ++i) {
-    required(app::logLine(desk, runOf(*notebook), {.line = fmt::format("note deep amber, steady bubbles, entry {}", i)}));
+    required(app::logLine(desk, runOf(*notebook),
+                          {.line = fmt::format("note deep amber, steady bubbles, entry {}", i)}));
   }
 }
 
@@ -79,11 +81,14 @@ std::unique_ptr<app::Notebook> opened(const std::string& file) {
   return required(db::openNotebook(file, db::OpenFor::kWriting, "test"));
 }
 
-app::RunRecord runOf(app::Notebook& notebook, const std::string& code) { return required(app::runOfCode(notebook, code)); }
+app::RunRecord runOf(app::Notebook& notebook, const std::string& code) {
+  return required(app::runOfCode(notebook, code));
+}
 
 std::string findings(app::Notebook& notebook) {
   std::string lines;
-  for (const app::Finding& finding : required(notebook.verify()).findings) lines += finding.where + ": " + finding.what + "\n";
+  for (const app::Finding& finding : required(notebook.verify()).findings)
+    lines += finding.where + ": " + finding.what + "\n";
   return lines;
 }
 
@@ -94,10 +99,12 @@ std::string contentOf(const std::string& file) {
     std::vector<std::string> tables = db::auditedTables();
     tables.emplace_back("revision");
     for (const std::string& table : tables) {
-      for (const db::Row& row : connection.rows(fmt::format("SELECT * FROM {} NOT INDEXED ORDER BY 1", table))) {
+      for (const db::Row& row :
+           connection.rows(fmt::format("SELECT * FROM {} NOT INDEXED ORDER BY 1", table))) {
         content += table + canonicalRow(row) + "\n";
         for (const auto& [column, cell] : row.cells()) {
-          if (const auto* blob = std::get_if<db::Blob>(&cell)) content += db::toHex(db::sha256(blob->bytes));
+          if (const auto* blob = std::get_if<db::Blob>(&cell))
+            content += db::toHex(db::sha256(blob->bytes));
         }
       }
     }

@@ -32,7 +32,8 @@ void makeSmallNotebook(const std::string& file, int entries = 3);
 /// What verify finds, one line each; empty where the notebook is sound.
 [[nodiscard]] std::string findings(app::Notebook& notebook);
 
-/// Everything that the records of a file say, read through SQLite alone; `unreadable` where it cannot be.
+/// Everything that the records of a file say, read through SQLite alone; `unreadable` where it
+/// cannot be.
 [[nodiscard]] std::string contentOf(const std::string& file);
 
 }  // namespace vialkeeper::tests

@@ -35,15 +35,18 @@ double correlation(const Uncertain& a, const Uncertain& b) {
 
 }  // namespace
 
-TEST_CASE("resistance, reactance and impedance of the GUM come out with their correlations", "[stats][published]") {
-  // JCGM 100:2008, H.2: the five sets of readings of table H.2, the results of table H.4. The readings and
-  // the correlation coefficients of the results are from memory; means, their u and r as well as R, X, Z with
-  // their u were compared with sandialabs/suncal test/test_examples.py and the GTC example GUM_H2.
+TEST_CASE("resistance, reactance and impedance of the GUM come out with their correlations",
+          "[stats][published]") {
+  // JCGM 100:2008, H.2: the five sets of readings of table H.2, the results of table H.4. The
+  // readings and the correlation coefficients of the results are from memory; means, their u and r
+  // as well as R, X, Z with their u were compared with sandialabs/suncal test/test_examples.py and
+  // the GTC example GUM_H2.
   const Readings volts = {5.007, 4.994, 5.005, 4.990, 4.999};
   const Readings amperes = {19.663e-3, 19.639e-3, 19.640e-3, 19.685e-3, 19.678e-3};
   const Readings radians = {1.0456, 1.0438, 1.0468, 1.0428, 1.0433};
 
-  // Three correlated means as sums over three independent causes: Cholesky's factors of their covariance.
+  // Three correlated means as sums over three independent causes: Cholesky's factors of their
+  // covariance.
   Causes causes;
   const std::array cause = {causes.add(), causes.add(), causes.add()};
   const std::array<const Readings*, 3> readings = {&volts, &amperes, &radians};
@@ -59,7 +62,8 @@ TEST_CASE("resistance, reactance and impedance of the GUM come out with their co
   }
   const auto& [V, I, phi] = mean;
 
-  // Table H.2: u(V) 0.0032, u(I) 0.0095 mA, u(phi) 0.00075; r(V,I) -0.36, r(V,phi) 0.86, r(I,phi) -0.65.
+  // Table H.2: u(V) 0.0032, u(I) 0.0095 mA, u(phi) 0.00075; r(V,I) -0.36, r(V,phi) 0.86, r(I,phi)
+  // -0.65.
   CHECK(V.value() == Approx(4.9990).margin(5e-5));
   CHECK(I.value() == Approx(19.6610e-3).margin(5e-8));
   CHECK(phi.value() == Approx(1.04446).margin(5e-6));
@@ -77,7 +81,8 @@ TEST_CASE("resistance, reactance and impedance of the GUM come out with their co
   CHECK(X.value() == Approx(219.847).margin(5e-4));
   CHECK(Z.value() == Approx(254.260).margin(5e-4));
   CHECK(*R.standardUncertainty() == Approx(0.071).margin(5e-4));
-  CHECK(*X.standardUncertainty() == Approx(0.295).margin(1e-3));  // 0.29558 from these readings; one unit of the digit printed
+  CHECK(*X.standardUncertainty() ==
+        Approx(0.295).margin(1e-3));  // 0.29558 from these readings; one unit of the digit printed
   CHECK(*Z.standardUncertainty() == Approx(0.236).margin(5e-4));
   CHECK(correlation(R, X) == Approx(-0.588).margin(5e-4));
   CHECK(correlation(R, Z) == Approx(-0.485).margin(5.1e-4));
@@ -85,8 +90,9 @@ TEST_CASE("resistance, reactance and impedance of the GUM come out with their co
 }
 
 TEST_CASE("a cadmium standard has the uncertainty that Eurachem prints", "[stats][published]") {
-  // Eurachem/CITAC guide QUAM, example A1, table A1.1 (seen at measurementuncertainty.org/guide/app_a_example1.html):
-  // m 100.28 mg u 0.05, P 0.9999 u 0.000058, V 100.0 mL u 0.07; c = 1000 m P/V = 1002.7 mg/L, u 0.9 mg/L.
+  // Eurachem/CITAC guide QUAM, example A1, table A1.1 (seen at
+  // measurementuncertainty.org/guide/app_a_example1.html): m 100.28 mg u 0.05, P 0.9999 u 0.000058,
+  // V 100.0 mL u 0.07; c = 1000 m P/V = 1002.7 mg/L, u 0.9 mg/L.
   Causes causes;
   const Uncertain m(100.28, 0.05, causes.add());
   const Uncertain P(0.9999, 0.000058, causes.add());
@@ -98,7 +104,8 @@ TEST_CASE("a cadmium standard has the uncertainty that Eurachem prints", "[stats
   CHECK(*c.standardUncertainty() == Approx(0.86372).epsilon(1e-4));
 }
 
-TEST_CASE("the purity of that cadmium has the standard uncertainty of a rectangle", "[stats][published]") {
+TEST_CASE("the purity of that cadmium has the standard uncertainty of a rectangle",
+          "[stats][published]") {
   // Same example, A1.3: purity 99.99 % +- 0.01 %, u = 0.0001/sqrt(3) = 0.000058.
   CHECK(stats::rectangular(0.0001) == Approx(0.000058).margin(5e-7));
 }

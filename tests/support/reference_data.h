@@ -35,7 +35,8 @@ class ReferenceData {
 
  private:
   static text::CsvTable read(const std::string& name) {
-    std::ifstream stream(std::string(VIALKEEPER_SOURCE_DIR "/tests/reference/") + name, std::ios::binary);
+    std::ifstream stream(std::string(VIALKEEPER_SOURCE_DIR "/tests/reference/") + name,
+                         std::ios::binary);
     if (!stream) throw std::runtime_error("cannot open " + name);
     const std::string bytes{std::istreambuf_iterator<char>(stream), {}};
     auto table = text::readCsv(bytes, name, text::CsvComments::kBeforeHeader);

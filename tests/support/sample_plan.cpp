@@ -97,19 +97,30 @@ share = 1
 
 std::string mutated(const std::string& text, std::mt19937_64& random) {
   static const std::array<std::string, 26> pieces = {
-      "\"", "[", "]", "[[", "]]", "{", "}", "=", ",", ".", "#", "\n", "\r\n", "'''", "\"\"\"", "\\",
-      "0",  "-", "e9", "nan", "inf", " mg", "µ", "\xC2", "\x01", "share = 1\n"};
+      "\"", "[",   "]",   "[[",   "]]",  "{",      "}",    "=",          ",",
+      ".",  "#",   "\n",  "\r\n", "'''", "\"\"\"", "\\",   "0",          "-",
+      "e9", "nan", "inf", " mg",  "µ",   "\xC2",   "\x01", "share = 1\n"};
   std::string bytes = text;
   const std::size_t edits = random() % 2 == 0 ? 1 : 1 + random() % 4;
   for (std::size_t edit = 0; edit < edits && !bytes.empty(); ++edit) {
     const std::size_t place = random() % bytes.size();
     const std::size_t length = 1 + random() % 12;
     switch (random() % 8) {
-      case 0: bytes.erase(place, length); break;
-      case 1: bytes.insert(place, pieces[random() % pieces.size()]); break;
-      case 2: bytes.insert(place, bytes.substr(random() % bytes.size(), length)); break;
-      case 3: bytes[place] = static_cast<char>(random() % 256); break;
-      case 4: bytes.replace(place, length, pieces[random() % pieces.size()]); break;
+      case 0:
+        bytes.erase(place, length);
+        break;
+      case 1:
+        bytes.insert(place, pieces[random() % pieces.size()]);
+        break;
+      case 2:
+        bytes.insert(place, bytes.substr(random() % bytes.size(), length));
+        break;
+      case 3:
+        bytes[place] = static_cast<char>(random() % 256);
+        break;
+      case 4:
+        bytes.replace(place, length, pieces[random() % pieces.size()]);
+        break;
       case 5:
       case 6: {  // another digit
         const std::size_t digit = bytes.find_first_of("0123456789", place);
@@ -128,4 +139,3 @@ std::string mutated(const std::string& text, std::mt19937_64& random) {
 }
 
 }  // namespace vialkeeper::tests
-

@@ -12,8 +12,10 @@ namespace vialkeeper::tests {
 
 namespace fs = std::filesystem;
 
-ScratchFolder::ScratchFolder() : m_path((fs::temp_directory_path() / "vialkeeper-test-XXXXXX").string()) {
-  if (::mkdtemp(m_path.data()) == nullptr) throw std::runtime_error("no temporary folder can be made");
+ScratchFolder::ScratchFolder()
+    : m_path((fs::temp_directory_path() / "vialkeeper-test-XXXXXX").string()) {
+  if (::mkdtemp(m_path.data()) == nullptr)
+    throw std::runtime_error("no temporary folder can be made");
 }
 
 ScratchFolder::~ScratchFolder() {
@@ -22,7 +24,9 @@ ScratchFolder::~ScratchFolder() {
   fs::remove_all(m_path, ignored);
 }
 
-std::string ScratchFolder::path(std::string_view name) const { return m_path + "/" + std::string(name); }
+std::string ScratchFolder::path(std::string_view name) const {
+  return m_path + "/" + std::string(name);
+}
 
 std::string ScratchFolder::write(std::string_view name, std::string_view bytes) const {
   std::ofstream file(path(name), std::ios::binary);

@@ -21,7 +21,8 @@ class ScratchFolder {
   /// Puts the bytes there and gives the path.
   std::string write(std::string_view name, std::string_view bytes) const;
   void makeFolder(std::string_view name) const;
-  /// What the folder holds: names and bytes, `<folder>` for a folder. Two equal ones: nothing was written.
+  /// What the folder holds: names and bytes, `<folder>` for a folder. Two equal ones: nothing was
+  /// written.
   [[nodiscard]] std::map<std::string, std::string> contents() const;
 
  private:

@@ -22,10 +22,13 @@ text::Faults faultsOf(std::string_view bytes) {
 
 }  // namespace
 
-TEST_CASE("a table is read as RFC 4180 prints it, quotes, commas and line breaks included", "[text][published]") {
+TEST_CASE("a table is read as RFC 4180 prints it, quotes, commas and line breaks included",
+          "[text][published]") {
   // RFC 4180, section 2, items 5 to 7: the three examples of quoted fields, under one header.
-  const auto table = readCsv("a,b,c\r\n\"aaa\",\"bbb\",\"ccc\"\r\n\"aaa\",\"b\r\nbb\",\"ccc\"\r\n\"aaa\",\"b\"\"bb\",\"ccc\"\r\n",
-                             "t.csv");
+  const auto table = readCsv(
+      "a,b,c\r\n\"aaa\",\"bbb\",\"ccc\"\r\n\"aaa\",\"b\r\nbb\",\"ccc\"\r\n\"aaa\",\"b\"\"bb\","
+      "\"ccc\"\r\n",
+      "t.csv");
   REQUIRE(table);
   CHECK(table->header.cells == Cells{"a", "b", "c"});
   REQUIRE(table->rows.size() == 3);
@@ -42,19 +45,23 @@ TEST_CASE("the last line of a table may lack its line break", "[text][published]
   CHECK(table->rows[0].cells == Cells{"zzz", "yyy", "xxx"});
 }
 
-TEST_CASE("line ends of all systems, a byte-order mark and blanks round cells change nothing", "[text][identity]") {
+TEST_CASE("line ends of all systems, a byte-order mark and blanks round cells change nothing",
+          "[text][identity]") {
   const auto plain = readCsv("key,actual\nnickel,3.1 mg\nacid,2 mg\n", "t.csv");
   REQUIRE(plain);
-  for (const auto& variant :
-       {"key,actual\r\nnickel,3.1 mg\r\nacid,2 mg\r\n"s, "\xEF\xBB\xBFkey,actual\nnickel,3.1 mg\nacid,2 mg"s,
-        " key ,\tactual\n nickel\t, 3.1 mg \nacid ,2 mg\n"s, "\n\nkey,actual\n\nnickel,3.1 mg\n  \nacid,2 mg\n\n"s,
-        "key,actual\n \"nickel\" , \"3.1 mg\" \n\"acid\",2 mg\n"s, "key,actual\rnickel,3.1 mg\racid,2 mg\r"s}) {
+  for (const auto& variant : {"key,actual\r\nnickel,3.1 mg\r\nacid,2 mg\r\n"s,
+                              "\xEF\xBB\xBFkey,actual\nnickel,3.1 mg\nacid,2 mg"s,
+                              " key ,\tactual\n nickel\t, 3.1 mg \nacid ,2 mg\n"s,
+                              "\n\nkey,actual\n\nnickel,3.1 mg\n  \nacid,2 mg\n\n"s,
+                              "key,actual\n \"nickel\" , \"3.1 mg\" \n\"acid\",2 mg\n"s,
+                              "key,actual\rnickel,3.1 mg\racid,2 mg\r"s}) {
     INFO(variant);
     const auto table = readCsv(variant, "t.csv");
     REQUIRE(table);
     CHECK(table->header.cells == plain->header.cells);
     REQUIRE(table->rows.size() == plain->rows.size());
-    for (std::size_t i = 0; i < table->rows.size(); ++i) CHECK(table->rows[i].cells == plain->rows[i].cells);
+    for (std::size_t i = 0; i < table->rows.size(); ++i)
+      CHECK(table->rows[i].cells == plain->rows[i].cells);
   }
 }
 
@@ -64,7 +71,8 @@ TEST_CASE("blanks inside quotation marks are part of the cell", "[text]") {
   CHECK(table->rows[0].cells == Cells{" x ", "y"});
 }
 
-TEST_CASE("rows know the line on which they begin, behind empty lines and cells of several lines", "[text]") {
+TEST_CASE("rows know the line on which they begin, behind empty lines and cells of several lines",
+          "[text]") {
   const auto table = readCsv("a,b\n\nx,\"one\ntwo\nthree\"\ny,z\n\n\nu,v", "t.csv");
   REQUIRE(table);
   CHECK(table->header.line == 1);
@@ -92,7 +100,8 @@ TEST_CASE("an open quotation mark is told on the line where it opens", "[text]")
   CHECK(faults[0].what == "a quotation mark is never closed");
 }
 
-TEST_CASE("text beside a quoted cell and a stray quotation mark are faults of their lines", "[text]") {
+TEST_CASE("text beside a quoted cell and a stray quotation mark are faults of their lines",
+          "[text]") {
   const auto faults = faultsOf("a,b\n\"1\"x,2\n3,4\"5\n");
   REQUIRE(faults.size() == 2);
   CHECK(faults[0].line == 2);
@@ -121,7 +130,9 @@ TEST_CASE("NUL, UTF-16 and broken UTF-8 are refused with their lines", "[text]")
   REQUIRE(nul.size() == 1);
   CHECK(nul[0].line == 2);
   CHECK(nul[0].what.find("NUL") != std::string::npos);
-  for (const auto& bytes : {"\xFF\xFE" "a\0"s, "\xFE\xFF\0a"s}) {
+  for (const auto& bytes : {"\xFF\xFE"
+                            "a\0"s,
+                            "\xFE\xFF\0a"s}) {
     const auto utf16 = faultsOf(bytes);
     REQUIRE(utf16.size() == 1);
     CHECK(utf16[0].what.find("UTF-16") != std::string::npos);
@@ -132,8 +143,10 @@ TEST_CASE("NUL, UTF-16 and broken UTF-8 are refused with their lines", "[text]")
   CHECK(latin1[0].what.find("UTF-8") != std::string::npos);
 }
 
-TEST_CASE("comments before the header are kept where they are asked for, and cells elsewhere", "[text]") {
-  const auto table = readCsv("# cat = 0.002 mol/L\n#second\na,b\n#3,4\n", "t.csv", text::CsvComments::kBeforeHeader);
+TEST_CASE("comments before the header are kept where they are asked for, and cells elsewhere",
+          "[text]") {
+  const auto table = readCsv("# cat = 0.002 mol/L\n#second\na,b\n#3,4\n", "t.csv",
+                             text::CsvComments::kBeforeHeader);
   REQUIRE(table);
   CHECK(table->comments == Cells{"cat = 0.002 mol/L", "second"});
   CHECK(table->header.line == 3);
@@ -143,11 +156,15 @@ TEST_CASE("comments before the header are kept where they are asked for, and cel
   CHECK(plain->header.cells == Cells{"#a", "b"});
 }
 
-TEST_CASE("what toCsvCell writes is read back as it was, in 500 random tables", "[text][identity]") {
+TEST_CASE("what toCsvCell writes is read back as it was, in 500 random tables",
+          "[text][identity]") {
   std::mt19937_64 random(20260304);
-  const std::vector<std::string> pieces = {"a",  "7",  ",", "\"", "\n", "\r\n", "\r", " ", "\t",
-                                           "#", "µ", "·", "'", "\"\"", "", "-", "\xE2\x80\xAF"};
-  const auto pick = [&random](std::size_t below) { return std::uniform_int_distribution<std::size_t>(0, below - 1)(random); };
+  const std::vector<std::string> pieces = {"a",  "7",    ",",  "\"", "\n",          "\r\n",
+                                           "\r", " ",    "\t", "#",  "µ",           "·",
+                                           "'",  "\"\"", "",   "-",  "\xE2\x80\xAF"};
+  const auto pick = [&random](std::size_t below) {
+    return std::uniform_int_distribution<std::size_t>(0, below - 1)(random);
+  };
   for (int round = 0; round < 500; ++round) {
     const std::size_t columns = 2 + pick(4);
     std::string bytes = "c0";

@@ -18,7 +18,8 @@ using text::TomlValue;
 namespace {
 
 const TomlValue* find(const TomlTable& table, std::string_view key) {
-  const auto found = std::ranges::find(table, key, [](const auto& entry) { return std::string_view(entry.first); });
+  const auto found = std::ranges::find(
+      table, key, [](const auto& entry) { return std::string_view(entry.first); });
   return found == table.end() ? nullptr : &found->second;
 }
 
@@ -33,9 +34,10 @@ T get(const TomlTable& table, std::string_view key) {
 }  // namespace
 
 TEST_CASE("a document keeps types, lines and the order of its fields", "[text]") {
-  const auto document = readToml("zulu = \"x\"\nalpha = 1.5\n\n[mike]\ncount = 3\nflag = true\nlist = [1, \"a\"]\n"
-                                 "[[unit]]\nn = 1\n[[unit]]\nn = 2\n",
-                                 "p.toml");
+  const auto document = readToml(
+      "zulu = \"x\"\nalpha = 1.5\n\n[mike]\ncount = 3\nflag = true\nlist = [1, \"a\"]\n"
+      "[[unit]]\nn = 1\n[[unit]]\nn = 2\n",
+      "p.toml");
   REQUIRE(document.faults.empty());
   CHECK(document.complete);
   REQUIRE(document.root.size() == 4);
@@ -64,7 +66,8 @@ TEST_CASE("dates of TOML are recognised as values that no field takes", "[text]"
 }
 
 TEST_CASE("a repeated field is told on its second line, and the first value counts", "[text]") {
-  const auto document = readToml("title = \"one\"\nseries = \"s\"\ntitle = \"two\"\nlast = 4\n", "p.toml");
+  const auto document =
+      readToml("title = \"one\"\nseries = \"s\"\ntitle = \"two\"\nlast = 4\n", "p.toml");
   REQUIRE(document.faults.size() == 1);
   CHECK(document.faults[0].line == 3);
   CHECK(document.faults[0].field == "title");
@@ -74,14 +77,16 @@ TEST_CASE("a repeated field is told on its second line, and the first value coun
 }
 
 TEST_CASE("a repeated section is told on its second line", "[text]") {
-  const auto document = readToml("[vial]\nvolume = \"1 mL\"\n[liquid]\na = 1\n[vial]\nvolume = \"2 mL\"\n", "p.toml");
+  const auto document =
+      readToml("[vial]\nvolume = \"1 mL\"\n[liquid]\na = 1\n[vial]\nvolume = \"2 mL\"\n", "p.toml");
   REQUIRE(document.faults.size() == 1);
   CHECK(document.faults[0].line == 5);
   CHECK(document.faults[0].field == "vial");
   CHECK(document.faults[0].what == "this section stands twice");
 }
 
-TEST_CASE("a quantity without quotation marks is recognised and its mending is spelt out", "[text]") {
+TEST_CASE("a quantity without quotation marks is recognised and its mending is spelt out",
+          "[text]") {
   const auto document = readToml("[liquid]\ntotal = 2.0 mL   # as usual\n", "p.toml");
   REQUIRE(document.faults.size() == 1);
   CHECK(document.faults[0].line == 2);
@@ -93,9 +98,10 @@ TEST_CASE("a quantity without quotation marks is recognised and its mending is s
 }
 
 TEST_CASE("all spelling faults of a file come out in one go, in the order of lines", "[text]") {
-  const auto document = readToml("title = \"open\nseries == \"s\"\n\n[vial]\nvolume = 11.6 mL\nname = \"v\"\nname = \"w\"\n"
-                                 "displaced = mL\nderating = 0.5\n",
-                                 "p.toml");
+  const auto document = readToml(
+      "title = \"open\nseries == \"s\"\n\n[vial]\nvolume = 11.6 mL\nname = \"v\"\nname = \"w\"\n"
+      "displaced = mL\nderating = 0.5\n",
+      "p.toml");
   std::vector<int> lines;
   for (const auto& fault : document.faults) lines.push_back(fault.line);
   CHECK(lines == std::vector<int>{1, 2, 5, 7, 8});
@@ -105,7 +111,9 @@ TEST_CASE("all spelling faults of a file come out in one go, in the order of lin
 }
 
 TEST_CASE("an unreadable section header is told once and keeps its fields to itself", "[text]") {
-  const auto document = readToml("[reaction]\nlimiting = \"a\"\n[liquid\ntotal = \"2 mL\"\n[seal]\nsaturated = true\n", "p.toml");
+  const auto document = readToml(
+      "[reaction]\nlimiting = \"a\"\n[liquid\ntotal = \"2 mL\"\n[seal]\nsaturated = true\n",
+      "p.toml");
   REQUIRE(document.faults.size() == 1);
   CHECK(document.faults[0].line == 3);
   CHECK_FALSE(document.complete);
@@ -114,7 +122,9 @@ TEST_CASE("an unreadable section header is told once and keeps its fields to its
 }
 
 TEST_CASE("a file in another encoding is refused before it is parsed", "[text]") {
-  for (const auto& bytes : {"\xFF\xFE" "a\0=\0"s, "a = \"\0\"\n"s, "a = \"5 \xB5L\"\n"s}) {
+  for (const auto& bytes : {"\xFF\xFE"
+                            "a\0=\0"s,
+                            "a = \"\0\"\n"s, "a = \"5 \xB5L\"\n"s}) {
     const auto document = readToml(bytes, "p.toml");
     REQUIRE(document.faults.size() == 1);
     CHECK_FALSE(document.complete);
@@ -128,22 +138,26 @@ TEST_CASE("a file in another encoding is refused before it is parsed", "[text]")
 TEST_CASE("a document nested without end is refused, not followed", "[text]") {
   std::string dotted = "a";
   for (int i = 0; i < 20000; ++i) dotted += ".a";
-  for (const std::string& bytes : {"a = " + std::string(20000, '[') + std::string(20000, ']'), dotted + " = 1",
-                                   "a = " + std::string(20000, '{'), "[" + dotted + "]", "a = { " + dotted + " = 1 }",
-                                   "\"a\" ." + dotted + " = 1"}) {
+  for (const std::string& bytes :
+       {"a = " + std::string(20000, '[') + std::string(20000, ']'), dotted + " = 1",
+        "a = " + std::string(20000, '{'), "[" + dotted + "]", "a = { " + dotted + " = 1 }",
+        "\"a\" ." + dotted + " = 1"}) {
     const auto document = readToml(bytes, "p.toml");
     CHECK_FALSE(document.faults.empty());
   }
 }
 
 TEST_CASE("dotted keys of a plan's depth and dots in texts are no nesting", "[text]") {
-  const auto document = readToml("supply.kind = \"stock\"\n[a.b.c]\nd.e = 1.5\nname = \"1.2.3.4.5.6.7.8.9.10.11.12 ......\" # a.b.c.d.e.f\n"
-                                 "v = [1.0, 1.0, 1.0, 1.0, 1.0, 1.0, 1.0, 1.0, 1.0, 1.0]\n",
-                                 "p.toml");
+  const auto document = readToml(
+      "supply.kind = \"stock\"\n[a.b.c]\nd.e = 1.5\nname = \"1.2.3.4.5.6.7.8.9.10.11.12 ......\" # "
+      "a.b.c.d.e.f\n"
+      "v = [1.0, 1.0, 1.0, 1.0, 1.0, 1.0, 1.0, 1.0, 1.0, 1.0]\n",
+      "p.toml");
   CHECK(document.faults.empty());
 }
 
-TEST_CASE("inline tables nested as deep as the parser goes are followed or refused, never overrun", "[text]") {
+TEST_CASE("inline tables nested as deep as the parser goes are followed or refused, never overrun",
+          "[text]") {
   std::string bytes = "a = ";
   for (int i = 0; i < 250; ++i) bytes += "{ a.a.a.a.a.a.a = ";
   bytes += "1" + std::string(250, '}');

@@ -39,16 +39,19 @@ TEST_CASE("code points have the bytes that the Unicode Standard prints", "[text]
   CHECK(bytesOf(0x10302) == "\xF0\x90\x8C\x82");
 }
 
-TEST_CASE("overlong forms, surrogates, stray and cut sequences are not UTF-8", "[text][published]") {
+TEST_CASE("overlong forms, surrogates, stray and cut sequences are not UTF-8",
+          "[text][published]") {
   // The Unicode Standard, table 3-7 and the ill-formed examples of D92.
-  for (const auto& bad : {"\xC0\xAF"s, "\xC1\xBF"s, "\xE0\x9F\xBF"s, "\xF0\x8F\xBF\xBF"s, "\xED\xA0\x80"s, "\xED\xBF\xBF"s,
-                          "\xF4\x90\x80\x80"s, "\xF5\x80\x80\x80"s, "\x80"s, "\xBF"s, "\xC2"s, "\xE2\x82"s, "\xF0\x9F\x92"s,
-                          "\xC2\x41"s, "\xFE"s, "\xFF"s}) {
+  for (const auto& bad :
+       {"\xC0\xAF"s, "\xC1\xBF"s, "\xE0\x9F\xBF"s, "\xF0\x8F\xBF\xBF"s, "\xED\xA0\x80"s,
+        "\xED\xBF\xBF"s, "\xF4\x90\x80\x80"s, "\xF5\x80\x80\x80"s, "\x80"s, "\xBF"s, "\xC2"s,
+        "\xE2\x82"s, "\xF0\x9F\x92"s, "\xC2\x41"s, "\xFE"s, "\xFF"s}) {
     INFO(oneLine(bad));
     CHECK(firstInvalidUtf8(bad) == 0U);
     CHECK(firstInvalidUtf8("abµ" + bad) == 4U);
   }
-  CHECK_FALSE(firstInvalidUtf8("\xC2\x80 \xE0\xA0\x80 \xED\x9F\xBF \xEE\x80\x80 \xF0\x90\x80\x80 \xF4\x8F\xBF\xBF"));
+  CHECK_FALSE(firstInvalidUtf8(
+      "\xC2\x80 \xE0\xA0\x80 \xED\x9F\xBF \xEE\x80\x80 \xF0\x90\x80\x80 \xF4\x8F\xBF\xBF"));
 }
 
 TEST_CASE("characters are counted, not bytes", "[text]") {
@@ -91,10 +94,12 @@ TEST_CASE("a long text is quoted to forty characters, never through a character"
 }
 
 TEST_CASE("a fault points at characters, with a caret for each", "[text]") {
-  const text::TextFault fault{.offset = 5, .length = 3, .what = "unit 'qux' is not known", .mend = ""};
+  const text::TextFault fault{
+      .offset = 5, .length = 3, .what = "unit 'qux' is not known", .mend = ""};
   const std::string typed = "5 µ qux";  // the unit begins at byte 5
   CHECK(whatWithPosition(fault, typed) == "unit 'qux' is not known (character 5)");
   CHECK(pointedAt(fault, typed) == "5 µ qux\n    ^^^");
-  const text::TextFault missing{.offset = 2, .length = 0, .what = "the unit is missing", .mend = ""};
+  const text::TextFault missing{
+      .offset = 2, .length = 0, .what = "the unit is missing", .mend = ""};
   CHECK(pointedAt(missing, "12") == "12\n  ^");
 }

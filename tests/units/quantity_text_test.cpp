@@ -35,9 +35,20 @@ std::string markedMass(std::string_view typed, Dialect dialect = Dialect::kFile)
 }  // namespace
 
 TEST_CASE("numbers are read in every form a file may use", "[units]") {
-  for (const auto& [typed, value] : std::vector<std::pair<const char*, double>>{
-           {"12.3", 12.3}, {" 12.3 ", 12.3}, {".5", 0.5}, {"5.", 5.0}, {"+7", 7.0}, {"-7", -7.0}, {"\u22127", -7.0},
-           {"1e3", 1000.0}, {"1E-3", 0.001}, {"2.5e+2", 250.0}, {"007", 7.0}, {"0", 0.0}, {"1e-300", 1e-300}}) {
+  for (const auto& [typed, value] :
+       std::vector<std::pair<const char*, double>>{{"12.3", 12.3},
+                                                   {" 12.3 ", 12.3},
+                                                   {".5", 0.5},
+                                                   {"5.", 5.0},
+                                                   {"+7", 7.0},
+                                                   {"-7", -7.0},
+                                                   {"\u22127", -7.0},
+                                                   {"1e3", 1000.0},
+                                                   {"1E-3", 0.001},
+                                                   {"2.5e+2", 250.0},
+                                                   {"007", 7.0},
+                                                   {"0", 0.0},
+                                                   {"1e-300", 1e-300}}) {
     INFO(typed);
     const auto read = readNumber(typed, Dialect::kFile);
     REQUIRE(read);
@@ -46,9 +57,11 @@ TEST_CASE("numbers are read in every form a file may use", "[units]") {
 }
 
 TEST_CASE("what is no finite decimal number is refused", "[units]") {
-  for (const char* typed : {"", " ", "nan", "NaN", "inf", "-inf", "infinity", "0x10", "0x1p3", "1e999", "-1e999", "1,234.5",
-                            "1.234,5", "1.2.3", "1,2,3", "1'000", "1 000", "--1", "+-1", "-+1", "+\u22121", "-\u22121", ".",
-                            ",", "e5", "1e", "1e+", "twelve", "\u0661", "1_000", "$1"}) {
+  for (const char* typed :
+       {"",      " ",     "nan",    "NaN",     "inf",      "-inf",     "infinity", "0x10",
+        "0x1p3", "1e999", "-1e999", "1,234.5", "1.234,5",  "1.2.3",    "1,2,3",    "1'000",
+        "1 000", "--1",   "+-1",    "-+1",     "+\u22121", "-\u22121", ".",        ",",
+        "e5",    "1e",    "1e+",    "twelve",  "\u0661",   "1_000",    "$1"}) {
     for (const Dialect dialect : {Dialect::kFile, Dialect::kPerson}) {
       INFO(typed);
       CHECK_FALSE(readNumber(typed, dialect));
@@ -59,7 +72,8 @@ TEST_CASE("what is no finite decimal number is refused", "[units]") {
 
 TEST_CASE("a decimal comma is read from people and refused in files with its place", "[units]") {
   CHECK(*readNumber("12,5", Dialect::kPerson) == 12.5);
-  CHECK(readQuantity<units::Mass>("12,5 mg", Dialect::kPerson)->milligrams() == Approx(12.5).epsilon(1e-15));
+  CHECK(readQuantity<units::Mass>("12,5 mg", Dialect::kPerson)->milligrams() ==
+        Approx(12.5).epsilon(1e-15));
   CHECK(markedMass("12,5 mg") == ",");
   CHECK(readQuantity<units::Mass>("12,5 mg", Dialect::kFile).error().offset == 2);
   CHECK(markedMass("1,234.5 mg", Dialect::kFile) == ",");
@@ -120,7 +134,8 @@ TEST_CASE("a value that the unit drives out of the doubles is refused", "[units]
 
 TEST_CASE("temperatures may be negative in Celsius but not reach absolute zero", "[units]") {
   using units::Temperature;
-  CHECK(readQuantity<Temperature>("-20 degC", Dialect::kFile)->kelvin() == Approx(253.15).epsilon(1e-15));
+  CHECK(readQuantity<Temperature>("-20 degC", Dialect::kFile)->kelvin() ==
+        Approx(253.15).epsilon(1e-15));
   CHECK(readQuantity<Temperature>("0 °C", Dialect::kFile)->kelvin() == 273.15);
   CHECK_FALSE(readQuantity<Temperature>("-273.15 degC", Dialect::kFile));
   CHECK_FALSE(readQuantity<Temperature>("0 K", Dialect::kFile));
@@ -148,7 +163,8 @@ TEST_CASE("people add up time spans, files and other quantities do not", "[units
   CHECK_FALSE(readQuantity<units::Mass>("1 g 200 mg", Dialect::kPerson));
 }
 
-TEST_CASE("scaling a written number scales its quantity, over 2000 random numbers and units", "[units][identity]") {
+TEST_CASE("scaling a written number scales its quantity, over 2000 random numbers and units",
+          "[units][identity]") {
   std::mt19937_64 random(42);
   std::uniform_real_distribution<double> decade(-6.0, 6.0);
   const auto all = units::allUnits();
@@ -158,17 +174,21 @@ TEST_CASE("scaling a written number scales its quantity, over 2000 random number
     char digits[40];
     std::snprintf(digits, sizeof digits, "%.17g", number);
     INFO(digits << unit.symbol);
-    const auto read = units::readAnyQuantity(std::string(digits) + std::string(unit.symbol), Dialect::kPerson);
+    const auto read =
+        units::readAnyQuantity(std::string(digits) + std::string(unit.symbol), Dialect::kPerson);
     REQUIRE(read);
     REQUIRE(read->number == number);
-    REQUIRE(read->si == Approx(number * (unit.numerator / unit.denominator) + unit.offset).epsilon(1e-14));
+    REQUIRE(read->si ==
+            Approx(number * (unit.numerator / unit.denominator) + unit.offset).epsilon(1e-14));
   }
 }
 
-TEST_CASE("no random text crashes a reader, and every fault lies inside the text", "[units][identity]") {
+TEST_CASE("no random text crashes a reader, and every fault lies inside the text",
+          "[units][identity]") {
   std::mt19937_64 random(43);
-  const std::vector<std::string> pieces = {"1", "2.5", ",", ".", "-", "+", "e", "E5", " ", "\t", "\u00A0", "mg", "mL", "h",
-                                           "min", "mol", "%", "/", "µ", "μ", "°C", "\u2212", "\xC2", "nan", "L"};
+  const std::vector<std::string> pieces = {
+      "1", "2.5", ",",   ".", "-", "+", "e", "E5", " ",      "\t",   "\u00A0", "mg", "mL",
+      "h", "min", "mol", "%", "/", "µ", "μ", "°C", "\u2212", "\xC2", "nan",    "L"};
   for (int round = 0; round < 20000; ++round) {
     std::string typed;
     const std::size_t length = random() % 7;

@@ -48,7 +48,8 @@ TEST_CASE("temperatures are shown to a tenth, and never as minus zero", "[units]
   CHECK(shown(Temperature::fromCelsius(-78.5)) == "-78.5 °C");
 }
 
-TEST_CASE("time spans are shown in hours and minutes, short ones in minutes and seconds", "[units]") {
+TEST_CASE("time spans are shown in hours and minutes, short ones in minutes and seconds",
+          "[units]") {
   CHECK(shown(Duration::fromHours(20)) == "20 h");
   CHECK(shown(Duration::fromHours(1.5)) == "1 h 30 min");
   CHECK(shown(Duration::fromSeconds(90)) == "1 min 30 s");
@@ -72,9 +73,12 @@ TEST_CASE("what is shown is read back within its last digit, 3000 times", "[unit
     const auto volume = Volume::fromMicrolitres(number);
     const auto amount = Amount::fromMillimoles(number);
     const auto concentration = Concentration::fromMolPerLitre(number);
-    REQUIRE(readQuantity<Mass>(shown(mass, digits), Dialect::kFile)->si() == Approx(mass.si()).epsilon(tolerance));
-    REQUIRE(readQuantity<Volume>(shown(volume, digits), Dialect::kFile)->si() == Approx(volume.si()).epsilon(tolerance));
-    REQUIRE(readQuantity<Amount>(shown(amount, digits), Dialect::kFile)->si() == Approx(amount.si()).epsilon(tolerance));
+    REQUIRE(readQuantity<Mass>(shown(mass, digits), Dialect::kFile)->si() ==
+            Approx(mass.si()).epsilon(tolerance));
+    REQUIRE(readQuantity<Volume>(shown(volume, digits), Dialect::kFile)->si() ==
+            Approx(volume.si()).epsilon(tolerance));
+    REQUIRE(readQuantity<Amount>(shown(amount, digits), Dialect::kFile)->si() ==
+            Approx(amount.si()).epsilon(tolerance));
     REQUIRE(readQuantity<Concentration>(shown(concentration, digits), Dialect::kFile)->si() ==
             Approx(concentration.si()).epsilon(tolerance));
   }

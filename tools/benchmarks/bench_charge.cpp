@@ -1,7 +1,7 @@
 // SPDX-FileCopyrightText: The Vialkeeper developers
 // SPDX-License-Identifier: GPL-3.0-or-later
-// Works out the charge of one plan so many times, each time from its text: `bench_charge PLAN COUNT`.
-// Prints the sum of the limiting targets, so that nothing can be left out.
+// Works out the charge of one plan so many times, each time from its text: `bench_charge PLAN
+// COUNT`. Prints the sum of the limiting targets, so that nothing can be left out.
 #include <cstdlib>
 #include <iostream>
 #include <string>

@@ -2,11 +2,15 @@
 // SPDX-License-Identifier: GPL-3.0-or-later
 // Measures the notebook file; each command prints one line.
 //   bench_notebook fill FILE RUNS          a new notebook of so many invented runs: runs/s, bytes
-//   bench_notebook find FILE QUERY COUNT   so many searches: p50 and p95 in ms. In QUERY {pc} {metal} {acid}
-//                                          {additive} {word} {low} {high} are put in anew for each search.
-//   bench_notebook log FILE COUNT          log entries with full durability, each into another of the newest
+//   bench_notebook find FILE QUERY COUNT   so many searches: p50 and p95 in ms. In QUERY {pc}
+//   {metal} {acid}
+//                                          {additive} {word} {low} {high} are put in anew for each
+//                                          search.
+//   bench_notebook log FILE COUNT          log entries with full durability, each into another of
+//   the newest
 //                                          open runs in turn: entries/s
-//   bench_notebook fsync FOLDER COUNT      512 bytes appended and synced, without a database: writes/s
+//   bench_notebook fsync FOLDER COUNT      512 bytes appended and synced, without a database:
+//   writes/s
 #include <fcntl.h>
 #include <fmt/format.h>
 #include <unistd.h>
@@ -31,7 +35,9 @@ namespace {
 using namespace vialkeeper;
 using Steady = std::chrono::steady_clock;
 
-double secondsSince(Steady::time_point start) { return std::chrono::duration<double>(Steady::now() - start).count(); }
+double secondsSince(Steady::time_point start) {
+  return std::chrono::duration<double>(Steady::now() - start).count();
+}
 
 int fail(const text::Faults& faults) {
   for (const text::Fault& fault : faults) std::cerr << text::toLine(fault) << '\n';
@@ -41,7 +47,8 @@ int fail(const text::Faults& faults) {
 class WallClock final : public app::Clock {
  public:
   [[nodiscard]] units::Moment now() override {
-    return {std::chrono::floor<std::chrono::milliseconds>(std::chrono::system_clock::now()), std::chrono::minutes(0)};
+    return {std::chrono::floor<std::chrono::milliseconds>(std::chrono::system_clock::now()),
+            std::chrono::minutes(0)};
   }
 };
 
@@ -52,13 +59,16 @@ int fill(const std::string& file, std::int64_t runs) {
   const auto summary = app::fillWithRuns(**notebook, runs, {});
   if (!summary) return fail(summary.error());
   const double took_s = secondsSince(start);
-  std::cout << fmt::format("fill: {} runs, {} events in {:.2f} s, {:.0f} runs/s, {} bytes\n", summary->runs, summary->events,
-                           took_s, static_cast<double>(summary->runs) / took_s, std::filesystem::file_size(file));
+  std::cout << fmt::format("fill: {} runs, {} events in {:.2f} s, {:.0f} runs/s, {} bytes\n",
+                           summary->runs, summary->events, took_s,
+                           static_cast<double>(summary->runs) / took_s,
+                           std::filesystem::file_size(file));
   return 0;
 }
 
 void replaceAll(std::string& text, std::string_view what, const std::string& by) {
-  for (std::size_t at = text.find(what); at != std::string::npos; at = text.find(what, at + by.size())) {
+  for (std::size_t at = text.find(what); at != std::string::npos;
+       at = text.find(what, at + by.size())) {
     text.replace(at, what.size(), by);
   }
 }
@@ -66,7 +76,9 @@ void replaceAll(std::string& text, std::string_view what, const std::string& by)
 /// The query with its places filled; names from the whole shelf, used and hardly used ones alike.
 std::string varied(std::string query, app::DemoRandom& random) {
   const app::DemoVocabulary& vocabulary = app::demoVocabulary();
-  const auto quoted = [&random](const std::vector<std::string>& names) { return fmt::format("\"{}\"", random.pick(names)); };
+  const auto quoted = [&random](const std::vector<std::string>& names) {
+    return fmt::format("\"{}\"", random.pick(names));
+  };
   constexpr auto kLow = std::to_array<double>({0.5, 1, 2, 5, 10});
   const double low = random.pick(kLow);
   replaceAll(query, "{pc}", quoted(vocabulary.photocatalysts));
@@ -96,9 +108,14 @@ int find(const std::string& file, const std::string& query, std::int64_t count) 
     matches += found->matches;
   }
   std::ranges::sort(times_ms);
-  const auto percentile = [&times_ms](std::size_t p) { return times_ms[std::min(times_ms.size() - 1, times_ms.size() * p / 100)]; };
-  std::cout << fmt::format("find: p50 {:.2f} ms, p95 {:.2f} ms, most {:.2f} ms, {} searches, {:.1f} matches on average\n", percentile(50),
-                           percentile(95), times_ms.back(), count, static_cast<double>(matches) / static_cast<double>(count));
+  const auto percentile = [&times_ms](std::size_t p) {
+    return times_ms[std::min(times_ms.size() - 1, times_ms.size() * p / 100)];
+  };
+  std::cout << fmt::format(
+      "find: p50 {:.2f} ms, p95 {:.2f} ms, most {:.2f} ms, {} searches, {:.1f} matches on "
+      "average\n",
+      percentile(50), percentile(95), times_ms.back(), count,
+      static_cast<double>(matches) / static_cast<double>(count));
   return 0;
 }
 
@@ -119,11 +136,15 @@ int log(const std::string& file, std::int64_t count) {
   const auto start = Steady::now();
   for (std::int64_t i = 0; i < count; ++i) {
     const app::RunRecord& run = open[static_cast<std::size_t>(i) % open.size()];
-    const std::string line = i % 2 == 0 ? "p 0.42 bar 35 C" : fmt::format("amber, steady bubbles, look {}", i);
-    if (const auto logged = app::logLine({**notebook, clock, run.person}, run, {.line = line}); !logged) return fail(logged.error());
+    const std::string line =
+        i % 2 == 0 ? "p 0.42 bar 35 C" : fmt::format("amber, steady bubbles, look {}", i);
+    if (const auto logged = app::logLine({**notebook, clock, run.person}, run, {.line = line});
+        !logged)
+      return fail(logged.error());
   }
   const double took_s = secondsSince(start);
-  std::cout << fmt::format("log: {} entries in {:.2f} s, {:.0f} entries/s\n", count, took_s, static_cast<double>(count) / took_s);
+  std::cout << fmt::format("log: {} entries in {:.2f} s, {:.0f} entries/s\n", count, took_s,
+                           static_cast<double>(count) / took_s);
   return 0;
 }
 
@@ -138,7 +159,8 @@ int sync(const std::string& folder, std::int64_t count) {
   bool sound = true;
   const auto start = Steady::now();
   for (std::int64_t i = 0; i < count && sound; ++i) {
-    sound = ::write(handle, bytes.data(), bytes.size()) == static_cast<ssize_t>(bytes.size()) && ::fsync(handle) == 0;
+    sound = ::write(handle, bytes.data(), bytes.size()) == static_cast<ssize_t>(bytes.size()) &&
+            ::fsync(handle) == 0;
   }
   const double took_s = secondsSince(start);
   ::close(handle);
@@ -147,7 +169,8 @@ int sync(const std::string& folder, std::int64_t count) {
     std::cerr << "the disk reported an error\n";
     return 1;
   }
-  std::cout << fmt::format("fsync: {} writes in {:.2f} s, {:.0f} writes/s\n", count, took_s, static_cast<double>(count) / took_s);
+  std::cout << fmt::format("fsync: {} writes in {:.2f} s, {:.0f} writes/s\n", count, took_s,
+                           static_cast<double>(count) / took_s);
   return 0;
 }
 
@@ -156,11 +179,16 @@ int sync(const std::string& folder, std::int64_t count) {
 int main(int argc, char** argv) {
   const std::vector<std::string> words(argv + 1, argv + argc);
   std::int64_t count = 0;
-  const bool counted = !words.empty() && std::from_chars(words.back().data(), words.back().data() + words.back().size(), count).ec == std::errc() && count > 0;
+  const bool counted =
+      !words.empty() &&
+      std::from_chars(words.back().data(), words.back().data() + words.back().size(), count).ec ==
+          std::errc() &&
+      count > 0;
   if (counted && words.size() == 3 && words[0] == "fill") return fill(words[1], count);
   if (counted && words.size() == 4 && words[0] == "find") return find(words[1], words[2], count);
   if (counted && words.size() == 3 && words[0] == "log") return log(words[1], count);
   if (counted && words.size() == 3 && words[0] == "fsync") return sync(words[1], count);
-  std::cerr << "usage: bench_notebook fill FILE RUNS | find FILE QUERY COUNT | log FILE COUNT | fsync FOLDER COUNT\n";
+  std::cerr << "usage: bench_notebook fill FILE RUNS | find FILE QUERY COUNT | log FILE COUNT | "
+               "fsync FOLDER COUNT\n";
   return 2;
 }

@@ -27,7 +27,9 @@ struct Loading {
 std::optional<Loading> loadingOf(const ComponentRecord& component) {
   const auto percent = component.loading_molPercent();
   if (!percent) return std::nullopt;
-  Loading loading{.value = *percent, .amount_mmol = component.charged_mmol.value_or(component.planned_mmol.value_or(0.0))};
+  Loading loading{
+      .value = *percent,
+      .amount_mmol = component.charged_mmol.value_or(component.planned_mmol.value_or(0.0))};
   if (component.uCharged_mmol && component.charged_mmol && *component.charged_mmol > 0.0) {
     loading.u = *percent * *component.uCharged_mmol / *component.charged_mmol;
   }
@@ -42,7 +44,9 @@ bool differ(const Loading& a, const Loading& b) {
 
 class Comparer {
  public:
-  Comparer(Notebook& notebook, const std::vector<RunRecord>& runs) : m_notebook(notebook) { m_result.runs = runs; }
+  Comparer(Notebook& notebook, const std::vector<RunRecord>& runs) : m_notebook(notebook) {
+    m_result.runs = runs;
+  }
 
   Checked<Comparison> compare() {
     if (auto read = readComponents(); !read) return std::unexpected(read.error());
@@ -52,9 +56,11 @@ class Comparer {
       if (!value) return std::string(kNone);
       return u ? fmt::format("{:.3g} ± {:.2g} %", *value, *u) : fmt::format("{:.3g} %", *value);
     };
-    add(m_result.outcomes, "yield", [&](const RunRecord& run) { return percent(run.yield_percent, run.uYield_percent); });
-    add(m_result.outcomes, "conversion",
-        [&](const RunRecord& run) { return percent(run.conversion_percent, run.uConversion_percent); });
+    add(m_result.outcomes, "yield",
+        [&](const RunRecord& run) { return percent(run.yield_percent, run.uYield_percent); });
+    add(m_result.outcomes, "conversion", [&](const RunRecord& run) {
+      return percent(run.conversion_percent, run.uConversion_percent);
+    });
     return std::move(m_result);
   }
 
@@ -107,14 +113,18 @@ class Comparer {
       if (loading && !first) first = loading;
     }
     note(different, fmt::format("{}: {}", place.first, name), std::move(loadings));
-    const bool sameLots = std::ranges::all_of(lots, [&](const std::string& lot) { return lot == lots.front(); });
+    const bool sameLots =
+        std::ranges::all_of(lots, [&](const std::string& lot) { return lot == lots.front(); });
     if (!sameLots) m_result.inputs.push_back({fmt::format("lot of {}", name), std::move(lots)});
   }
 
-  static std::string loadingText(const ComponentRecord& component, const std::optional<Loading>& loading) {
+  static std::string loadingText(const ComponentRecord& component,
+                                 const std::optional<Loading>& loading) {
     if (!loading) return "present";
-    if (component.role == "solvent" && component.target_uL) return units::toSignificant(*component.target_uL, 3) + " µL";
-    const std::string doubt = loading->u > 0.0 ? fmt::format(" ± {}", units::toSignificant(loading->u, 1)) : "";
+    if (component.role == "solvent" && component.target_uL)
+      return units::toSignificant(*component.target_uL, 3) + " µL";
+    const std::string doubt =
+        loading->u > 0.0 ? fmt::format(" ± {}", units::toSignificant(loading->u, 1)) : "";
     return fmt::format("{}{} mol%", units::toSignificant(loading->value, 3), doubt);
   }
 
@@ -126,10 +136,12 @@ class Comparer {
     }
   }
 
-  void add(std::vector<Difference>& list, const std::string& what, const std::function<std::string(const RunRecord&)>& value) {
+  void add(std::vector<Difference>& list, const std::string& what,
+           const std::function<std::string(const RunRecord&)>& value) {
     std::vector<std::string> values;
     for (const RunRecord& run : m_result.runs) values.push_back(value(run));
-    const bool same = std::ranges::all_of(values, [&](const std::string& v) { return v == values.front(); });
+    const bool same =
+        std::ranges::all_of(values, [&](const std::string& v) { return v == values.front(); });
     if (&list == &m_result.inputs) {
       note(!same, what, std::move(values));
     } else if (!same || values.front() != kNone) {
@@ -138,18 +150,24 @@ class Comparer {
   }
 
   void conditions() {
-    const auto orNone = [](const std::string& text) { return text.empty() ? std::string(kNone) : text; };
+    const auto orNone = [](const std::string& text) {
+      return text.empty() ? std::string(kNone) : text;
+    };
     const auto number = [](const std::optional<double>& value, const char* unit) {
       return value ? fmt::format("{:.4g} {}", *value, unit) : std::string(kNone);
     };
     std::vector<Difference>& inputs = m_result.inputs;
-    add(inputs, "limiting amount", [](const RunRecord& run) { return fmt::format("{:.4g} mmol", run.limiting_mmol); });
-    add(inputs, "liquid", [](const RunRecord& run) { return fmt::format("{:.4g} mL", run.liquid_mL); });
+    add(inputs, "limiting amount",
+        [](const RunRecord& run) { return fmt::format("{:.4g} mmol", run.limiting_mmol); });
+    add(inputs, "liquid",
+        [](const RunRecord& run) { return fmt::format("{:.4g} mL", run.liquid_mL); });
     add(inputs, "vial", [&](const RunRecord& run) { return orNone(run.vial); });
     add(inputs, "atmosphere", [&](const RunRecord& run) { return orNone(run.atmosphere); });
     add(inputs, "lamp", [&](const RunRecord& run) { return orNone(run.lamp); });
-    add(inputs, "wavelength", [&](const RunRecord& run) { return number(run.wavelength_nm, "nm"); });
-    add(inputs, "temperature", [&](const RunRecord& run) { return number(run.temperature_C, "°C"); });
+    add(inputs, "wavelength",
+        [&](const RunRecord& run) { return number(run.wavelength_nm, "nm"); });
+    add(inputs, "temperature",
+        [&](const RunRecord& run) { return number(run.temperature_C, "°C"); });
     add(inputs, "duration", [&](const RunRecord& run) { return number(run.duration_h, "h"); });
     add(inputs, "person", [](const RunRecord& run) { return run.person; });
   }

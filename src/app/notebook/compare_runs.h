@@ -17,14 +17,15 @@ struct Difference {
 
 struct Comparison {
   std::vector<RunRecord> runs;
-  std::vector<Difference> inputs;   ///< components, conditions, lots; amounts only where beyond 2u
-  std::vector<Difference> outcomes; ///< yield, conversion
-  int sameInputs = 0;               ///< inputs in which all runs agree
+  std::vector<Difference> inputs;    ///< components, conditions, lots; amounts only where beyond 2u
+  std::vector<Difference> outcomes;  ///< yield, conversion
+  int sameInputs = 0;                ///< inputs in which all runs agree
 };
 
-/// Sets runs side by side. Components are matched by role and substance; loadings as charged, else as
-/// planned, differ where they are further apart than twice their combined uncertainty, or 0.1 % where
-/// none is known.
-[[nodiscard]] Checked<Comparison> compareRuns(Notebook& notebook, const std::vector<RunRecord>& runs);
+/// Sets runs side by side. Components are matched by role and substance; loadings as charged, else
+/// as planned, differ where they are further apart than twice their combined uncertainty, or 0.1 %
+/// where none is known.
+[[nodiscard]] Checked<Comparison> compareRuns(Notebook& notebook,
+                                              const std::vector<RunRecord>& runs);
 
 }  // namespace vialkeeper::app

@@ -18,11 +18,12 @@ struct ReadTable {
 };
 
 /// Reads a CSV whose header names columns with their units, `time [h],amine [mol/L]`; lines
-/// `# cat = 0.002 mol/L` before it are constants and go into the recipe. A cell that holds no number is
-/// kept as a gap and told; an empty one is a gap.
-/// Faults: what readCsv refuses, no row, a kind whose columns are not there (`time` of a course, decay,
-/// pressure or headspace; `quencher` of a quench).
-[[nodiscard]] Checked<ReadTable> readDataTable(std::string_view bytes, const std::string& file, const std::string& kind);
+/// `# cat = 0.002 mol/L` before it are constants and go into the recipe. A cell that holds no
+/// number is kept as a gap and told; an empty one is a gap. Faults: what readCsv refuses, no row, a
+/// kind whose columns are not there (`time` of a course, decay, pressure or headspace; `quencher`
+/// of a quench).
+[[nodiscard]] Checked<ReadTable> readDataTable(std::string_view bytes, const std::string& file,
+                                               const std::string& kind);
 
 struct ImportedDataset {
   DatasetRecord record;
@@ -30,7 +31,9 @@ struct ImportedDataset {
 };
 
 /// Keeps the file byte for byte, its numbers, and the link to the run, in one action.
-[[nodiscard]] Checked<ImportedDataset> importDataset(const Desk& desk, const RunRecord& run, std::string_view bytes,
-                                                     const std::string& file, const std::string& kind);
+[[nodiscard]] Checked<ImportedDataset> importDataset(const Desk& desk, const RunRecord& run,
+                                                     std::string_view bytes,
+                                                     const std::string& file,
+                                                     const std::string& kind);
 
 }  // namespace vialkeeper::app

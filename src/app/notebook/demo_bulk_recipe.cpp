@@ -59,8 +59,6 @@ class Stocking {
 };
 
 constexpr DemoSubstance kTrimethoxybenzene{"1,3,5-trimethoxybenzene", "C9H12O3", "", "621-23-8", ""};
-constexpr DemoSubstance kMecn{"acetonitrile", "C2H3N", "", "75-05-8", ""};
-constexpr DemoSubstance kH2o{"water", "H2O", "", "7732-18-5", ""};
 
 Checked<std::vector<BulkSubstance>> listOf(Stocking& stocking, std::vector<DemoSubstance> publicOnes,
                                            const std::vector<std::string>& names, double molarMass_g_mol) {
@@ -106,8 +104,8 @@ Checked<BulkShelf> collect(Stocking& stocking) {
     take(shelf.substrates.emplace_back(), stocking.known(demoSubstrate(kind).substance));
   }
   take(shelf.standard, stocking.known(kTrimethoxybenzene));
-  take(shelf.acetonitrile, stocking.known(kMecn));
-  take(shelf.water, stocking.known(kH2o));
+  take(shelf.acetonitrile, stocking.known(demoLiquid("mecn")));
+  take(shelf.water, stocking.known(demoLiquid("water")));
   if (!faults.empty()) return std::unexpected(std::move(faults));
   return shelf;
 }

@@ -14,7 +14,7 @@ inline constexpr int kDemoCampaignRuns = 61;
 
 struct DemoOptions {
   int runs = kDemoCampaignRuns;
-  std::uint64_t seed = 20260504;  ///< one whose duplicates agree, but for one pair
+  std::uint64_t seed = 20260504;  ///< one whose duplicates agree, but for two pairs
 };
 
 /// What was put into the notebook.

@@ -5,6 +5,7 @@
 #include <algorithm>
 #include <array>
 #include <tuple>
+#include <utility>
 
 namespace vialkeeper::app {
 namespace {
@@ -17,6 +18,15 @@ constexpr DemoSubstance kCatalyst{
     "1416881-52-1", "tetracarbazolyl isophthalonitrile"};
 
 constexpr DemoSubstance kIndole{"indole", "C8H7N", "c1ccc2[nH]ccc2c1", "120-72-9", ""};
+
+using Liquid = std::pair<std::string_view, DemoSubstance>;
+
+constexpr auto kLiquids = std::to_array<Liquid>({
+    {"mecn", {"acetonitrile", "C2H3N", "CC#N", "75-05-8", "MeCN"}},
+    {"dmf", {"DMF", "C3H7NO", "CN(C)C=O", "68-12-2", "N,N-dimethylformamide"}},
+    {"ethanol", {"ethanol", "C2H6O", "CCO", "64-17-5", "EtOH"}},
+    {"water", {"water", "H2O", "O", "7732-18-5", "H2O"}},
+});
 
 // In the order of DemoSubstrateKind.
 constexpr auto kSubstrates = std::to_array<DemoSubstrate>({
@@ -94,6 +104,7 @@ SubstanceDraft draftOf(const DemoSubstance& substance, bool withStructures) {
 
 const DemoSubstance& demoCatalyst() { return kCatalyst; }
 const DemoSubstance& demoPartner() { return kIndole; }
+const DemoSubstance& demoLiquid(std::string_view key) { return std::ranges::find(kLiquids, key, &Liquid::first)->second; }
 const DemoSubstrate& demoSubstrate(DemoSubstrateKind kind) { return kSubstrates.at(static_cast<std::size_t>(kind)); }
 const DemoMetal& demoMetal(DemoMetalKind kind) { return kMetals.at(static_cast<std::size_t>(kind) - 1); }
 const DemoAcid& demoAcid(DemoAcidKind kind) { return kAcids.at(static_cast<std::size_t>(kind) - 1); }
@@ -117,6 +128,7 @@ bool isDuplicate(const DemoRecipe& a, const DemoRecipe& b) {
 
 std::vector<SubstanceDraft> demoShelf(bool withStructures) {
   std::vector<SubstanceDraft> drafts{draftOf(kCatalyst, withStructures), draftOf(kIndole, withStructures)};
+  for (const auto& [key, liquid] : kLiquids) drafts.push_back(draftOf(liquid, withStructures));
   for (const DemoSubstrate& substrate : kSubstrates) drafts.push_back(draftOf(substrate.substance, withStructures));
   for (const DemoMetal& metal : kMetals) drafts.push_back(draftOf(metal.substance, withStructures));
   for (const DemoAcid& acid : kAcids) drafts.push_back(draftOf(acid.substance, withStructures));

@@ -66,6 +66,7 @@ enum class DemoSolventKind { kMecnWater, kMecn, kDmf, kDmfWater, kEthanol, kEtha
 
 [[nodiscard]] const DemoSubstance& demoCatalyst();  ///< the photocatalyst of all runs
 [[nodiscard]] const DemoSubstance& demoPartner();   ///< of a coupling
+[[nodiscard]] const DemoSubstance& demoLiquid(std::string_view key);  ///< mecn, dmf, ethanol or water
 [[nodiscard]] const DemoSubstrate& demoSubstrate(DemoSubstrateKind kind);
 [[nodiscard]] const DemoMetal& demoMetal(DemoMetalKind kind);  ///< not of kNone
 [[nodiscard]] const DemoAcid& demoAcid(DemoAcidKind kind);     ///< not of kNone

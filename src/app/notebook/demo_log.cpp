@@ -183,7 +183,11 @@ class LogWriter {
       say(hour + 25 * kMinute, m_hand.hydrogen(m_vial.hydrogenFraction() * (1.0 + 0.02 * m_random.normal())));
       m_vial.takeGas(250.0);
     }
-    say(hour + 26 * kMinute, m_hand.vent());
+    if (m_run.vents) {
+      letGasOut(hour + 26 * kMinute);
+    } else {
+      say(hour + 26 * kMinute, m_hand.vent());
+    }
     if (!m_run.course) say(hour + 30 * kMinute, m_hand.aliquot("for NMR"));
     if (m_random.once(0.3)) say(hour + 40 * kMinute, m_hand.observation(DemoSight::kEnd));
   }

@@ -2,26 +2,15 @@
 // SPDX-License-Identifier: GPL-3.0-or-later
 #include <fmt/format.h>
 
-#include <array>
-
 #include "app/notebook/demo_chemistry.h"
 
 namespace vialkeeper::app {
 namespace {
 
-/// A solvent component: how its lines begin and end in a plan.
-struct SolventLines {
-  std::string_view key;
-  std::string_view name;
-  std::string_view cas;
-  std::string_view hazards;
-};
-
-constexpr auto kSolventLines = std::to_array<SolventLines>({
-    {"mecn", "acetonitrile", "75-05-8", R"("H225", "H302", "H312", "H332", "H319")"},
-    {"dmf", "DMF", "68-12-2", R"("H226", "H312", "H332", "H319", "H360D")"},
-    {"ethanol", "ethanol", "64-17-5", R"("H225", "H319")"},
-});
+std::string_view hazardsOf(std::string_view liquid) {
+  if (liquid == "mecn") return R"("H225", "H302", "H312", "H332", "H319")";
+  return liquid == "dmf" ? R"("H226", "H312", "H332", "H319", "H360D")" : R"("H225", "H319")";
+}
 
 class PlanWriter {
  public:
@@ -120,16 +109,11 @@ total = "{:.1f} mL"
 
   void solvents() {
     const DemoSolvent& solvent = demoSolvent(m_recipe.solvent);
-    for (const SolventLines& lines : kSolventLines) {
-      if (lines.key != solvent.main) continue;
-      m_text += fmt::format("\n[[component]]\nkey = \"{}\"\nrole = \"solvent\"\nname = \"{}\"\ncas = \"{}\"\nshare = {:g}\n"
-                            "device = \"pipette-1000uL\"\nhazards = [{}]\n",
-                            lines.key, lines.name, lines.cas, solvent.mainShare, lines.hazards);
-    }
-    if (solvent.waterShare > 0.0) {
-      m_text += fmt::format("\n[[component]]\nkey = \"water\"\nrole = \"solvent\"\nname = \"water\"\ncas = \"7732-18-5\"\n"
-                            "share = {:g}\ndevice = \"pipette-1000uL\"\n", solvent.waterShare);
-    }
+    component(solvent.main, "solvent", demoLiquid(solvent.main));
+    m_text += fmt::format("share = {:g}\ndevice = \"pipette-1000uL\"\nhazards = [{}]\n", solvent.mainShare, hazardsOf(solvent.main));
+    if (solvent.waterShare <= 0.0) return;
+    component("water", "solvent", demoLiquid("water"));
+    m_text += fmt::format("share = {:g}\ndevice = \"pipette-1000uL\"\n", solvent.waterShare);
   }
 
   const DemoRecipe& m_recipe;

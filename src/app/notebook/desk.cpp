@@ -12,7 +12,8 @@
 namespace vialkeeper::app {
 namespace {
 
-constexpr std::array<std::string_view, 6> kStates = {"planned", "charged", "irradiating", "worked-up", "closed", "sealed"};
+constexpr std::array<std::string_view, 6> kStates = {"planned",   "charged", "irradiating",
+                                                     "worked-up", "closed",  "sealed"};
 
 }  // namespace
 
@@ -44,8 +45,10 @@ Checked<std::string> whoWorks(Notebook& notebook, const std::optional<std::strin
   const auto people = notebook.people();
   if (!people) return std::unexpected(people.error());
   if (people->size() == 1) return people->front().code;
-  return askedFault("--person", people->empty() ? "the notebook knows nobody yet" : "several people work in this notebook",
-                    "say who you are, --person KW or VIALKEEPER_PERSON=KW");
+  return askedFault(
+      "--person",
+      people->empty() ? "the notebook knows nobody yet" : "several people work in this notebook",
+      "say who you are, --person KW or VIALKEEPER_PERSON=KW");
 }
 
 Checked<RunRecord> runOfCode(Notebook& notebook, std::string_view code) {

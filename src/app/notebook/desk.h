@@ -38,12 +38,14 @@ struct Desk {
 [[nodiscard]] bool areInitials(std::string_view text);
 
 /// Who works: the initials that were given, else the only person of the notebook.
-/// Fault: initials that are none (1 to 8 capital letters and digits), or nobody named where there are
-/// several or none.
-[[nodiscard]] Checked<std::string> whoWorks(Notebook& notebook, const std::optional<std::string>& given);
+/// Fault: initials that are none (1 to 8 capital letters and digits), or nobody named where there
+/// are several or none.
+[[nodiscard]] Checked<std::string> whoWorks(Notebook& notebook,
+                                            const std::optional<std::string>& given);
 
 /// A fault of what was asked, at a place.
-[[nodiscard]] std::unexpected<text::Faults> askedFault(std::string field, std::string what, std::string mend);
+[[nodiscard]] std::unexpected<text::Faults> askedFault(std::string field, std::string what,
+                                                       std::string mend);
 
 /// The run of that code. Fault: there is none; the nearest code is offered.
 [[nodiscard]] Checked<RunRecord> runOfCode(Notebook& notebook, std::string_view code);

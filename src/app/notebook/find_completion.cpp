@@ -51,7 +51,8 @@ std::optional<TermAtCursor> termAt(std::string_view text, std::size_t cursor) {
     if (scanner.at > cursor) {
       // Before the value, within the blanks or the field's own name.
       const bool behindColon = text.substr(0, cursor).find_last_not_of(" \t:") != cursor - 1;
-      return behindColon ? std::optional(TermAtCursor{.field = field, .value = {cursor, 0}}) : std::nullopt;
+      return behindColon ? std::optional(TermAtCursor{.field = field, .value = {cursor, 0}})
+                         : std::nullopt;
     }
     const std::size_t begin = scanner.at;
     const std::size_t mark = scanner.quoteLength();
@@ -62,7 +63,9 @@ std::optional<TermAtCursor> termAt(std::string_view text, std::size_t cursor) {
     }
     TermAtCursor term{.field = field, .value = {begin, scanner.at - begin}, .isQuoted = mark > 0};
     term.typed = text.substr(begin, cursor - begin);
-    if (mark > 0) term.typed = cursor < begin + mark ? std::string() : FindScanner{term.typed}.value(true)->text;
+    if (mark > 0)
+      term.typed =
+          cursor < begin + mark ? std::string() : FindScanner{term.typed}.value(true)->text;
     // Behind a finished quotation there is nothing left to complete.
     if (mark > 0 && value->isFinished && cursor == scanner.at) return std::nullopt;
     return term;
@@ -77,7 +80,8 @@ std::optional<int> match(std::string_view folded, std::string_view name, std::st
   // A word of the name begins so: fold what follows each of its separators.
   for (std::size_t i = 1; i < name.size(); ++i) {
     const char before = name[i - 1];
-    const bool isSeparator = before == ' ' || before == '-' || before == '(' || before == ',' || before == ')';
+    const bool isSeparator =
+        before == ' ' || before == '-' || before == '(' || before == ',' || before == ')';
     if (isSeparator && foldName(name.substr(i)).starts_with(typed)) return 2;
   }
   return 3;
@@ -97,13 +101,15 @@ struct Candidate {
 };
 
 /// The best entries, best first.
-std::vector<const VocabularyEntry*> best(const std::vector<VocabularyEntry>& entries, std::string_view typed,
-                                         std::size_t most) {
+std::vector<const VocabularyEntry*> best(const std::vector<VocabularyEntry>& entries,
+                                         std::string_view typed, std::size_t most) {
   std::vector<Candidate> candidates;
   for (const VocabularyEntry& entry : entries) {
-    if (const auto rank = match(entry.folded, entry.name, typed)) candidates.push_back({*rank, entry.uses, &entry});
+    if (const auto rank = match(entry.folded, entry.name, typed))
+      candidates.push_back({*rank, entry.uses, &entry});
   }
-  const auto last = candidates.begin() + static_cast<std::ptrdiff_t>(std::min(candidates.size(), most));
+  const auto last =
+      candidates.begin() + static_cast<std::ptrdiff_t>(std::min(candidates.size(), most));
   std::partial_sort(candidates.begin(), last, candidates.end());
   std::vector<const VocabularyEntry*> found;
   for (auto each = candidates.begin(); each != last; ++each) found.push_back(each->entry);
@@ -121,7 +127,8 @@ std::vector<VocabularyEntry> states() {
 }
 
 /// What may stand behind `field:`; nullptr where nothing can be proposed.
-const std::vector<VocabularyEntry>* valuesOf(const FindField& field, const FindVocabulary& vocabulary) {
+const std::vector<VocabularyEntry>* valuesOf(const FindField& field,
+                                             const FindVocabulary& vocabulary) {
   static const std::vector<VocabularyEntry> kStates = states();
   if (field.kind == FindField::Kind::kRole) return &vocabulary.substances;
   if (field.kind != FindField::Kind::kText) return nullptr;
@@ -151,7 +158,8 @@ std::vector<Completion> fieldsFor(const TermAtCursor& term, std::size_t most) {
   for (const FindField& field : findFields()) {
     if (found.size() == most) break;
     if (!field.name.starts_with(typed)) continue;
-    found.push_back({fmt::format("{}:", field.name), term.value, fmt::format("{}: {}", field.name, field.meaning)});
+    found.push_back({fmt::format("{}:", field.name), term.value,
+                     fmt::format("{}: {}", field.name, field.meaning)});
   }
   return found;
 }
@@ -159,14 +167,14 @@ std::vector<Completion> fieldsFor(const TermAtCursor& term, std::size_t most) {
 }  // namespace
 
 void prepareVocabulary(FindVocabulary& vocabulary) {
-  for (auto* entries : {&vocabulary.substances, &vocabulary.series, &vocabulary.people, &vocabulary.vials,
-                        &vocabulary.lamps, &vocabulary.atmospheres}) {
+  for (auto* entries : {&vocabulary.substances, &vocabulary.series, &vocabulary.people,
+                        &vocabulary.vials, &vocabulary.lamps, &vocabulary.atmospheres}) {
     for (VocabularyEntry& entry : *entries) entry.folded = foldName(entry.name);
   }
 }
 
-std::vector<Completion> completeFind(std::string_view text, std::size_t cursor, const FindVocabulary& vocabulary,
-                                     std::size_t most) {
+std::vector<Completion> completeFind(std::string_view text, std::size_t cursor,
+                                     const FindVocabulary& vocabulary, std::size_t most) {
   if (cursor > text.size() || text.size() > 10'000 || text::firstInvalidUtf8(text)) return {};
   const auto term = termAt(text, cursor);
   if (!term) return {};
@@ -184,8 +192,8 @@ std::vector<Completion> completeFind(std::string_view text, std::size_t cursor, 
   // One letter is in too many names to be of help.
   if (typed.size() < 2 || found.size() >= most) return found;
   for (const VocabularyEntry* entry : best(vocabulary.substances, typed, most - found.size())) {
-    found.push_back(
-        {fmt::format("any:{} ", asFindValue(entry->name)), term->value, fmt::format("{}, in any role", entry->name)});
+    found.push_back({fmt::format("any:{} ", asFindValue(entry->name)), term->value,
+                     fmt::format("{}, in any role", entry->name)});
   }
   return found;
 }

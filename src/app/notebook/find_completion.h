@@ -39,11 +39,13 @@ struct Completion {
   std::string label;   ///< for the list: `pivalic acid`, `additive: a substance in this role`
 };
 
-/// Proposals for the word that the cursor, a byte's place in the text, stands in or behind: values behind
-/// `field:`; else fields, and substances in any role. Names that begin with what is typed come before those
-/// of which a word begins so, and these before those that hold it; then what is used more, then shorter names.
-/// The vocabulary must be prepared. Cost: one comparison with each name of one kind.
+/// Proposals for the word that the cursor, a byte's place in the text, stands in or behind: values
+/// behind `field:`; else fields, and substances in any role. Names that begin with what is typed
+/// come before those of which a word begins so, and these before those that hold it; then what is
+/// used more, then shorter names. The vocabulary must be prepared. Cost: one comparison with each
+/// name of one kind.
 [[nodiscard]] std::vector<Completion> completeFind(std::string_view text, std::size_t cursor,
-                                                   const FindVocabulary& vocabulary, std::size_t most = 12);
+                                                   const FindVocabulary& vocabulary,
+                                                   std::size_t most = 12);
 
 }  // namespace vialkeeper::app

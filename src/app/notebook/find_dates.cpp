@@ -103,11 +103,13 @@ ScanResult<Interval> scanDates(FindScanner& scanner, bool mayBeAbsent) {
     if (!second) return std::unexpected(second.error());
     interval.most = second->last;
     if (interval.least && *interval.least > second->last) {
-      return textFault(begin, scanner.at - begin, "the range runs backwards", "write the earlier day first");
+      return textFault(begin, scanner.at - begin, "the range runs backwards",
+                       "write the earlier day first");
     }
   }
   if (!scanner.standsApart()) {
-    return textFault(scanner.at, scanner.text.size() - scanner.at, "more follows after the date", kForm);
+    return textFault(scanner.at, scanner.text.size() - scanner.at, "more follows after the date",
+                     kForm);
   }
   return interval;
 }

@@ -17,14 +17,15 @@ using Measure = MeasureCondition::Measure;
 std::vector<FindField> makeFields() {
   std::vector<FindField> fields;
   for (int role = 0; role <= static_cast<int>(charge::Role::kOther); ++role) {
-    fields.push_back(
-        {FindField::Kind::kRole, charge::toText(static_cast<charge::Role>(role)), "a substance in this role"});
+    fields.push_back({FindField::Kind::kRole, charge::toText(static_cast<charge::Role>(role)),
+                      "a substance in this role"});
   }
   fields.push_back({FindField::Kind::kRole, "catalyst", "a photocatalyst or cocatalyst"});
   fields.push_back({FindField::Kind::kRole, "any", "a substance in any role"});
   fields.push_back({FindField::Kind::kStructure, "structure", "substances that hold a SMILES"});
   const auto text = [&fields](std::string_view name, std::string_view meaning, Field field) {
-    fields.push_back({.kind = FindField::Kind::kText, .name = name, .meaning = meaning, .text = field});
+    fields.push_back(
+        {.kind = FindField::Kind::kText, .name = name, .meaning = meaning, .text = field});
   };
   text("code", "the run's code", Field::kCode);
   text("series", "the run's series", Field::kSeries);
@@ -34,7 +35,8 @@ std::vector<FindField> makeFields() {
   text("lamp", "the lamp's name", Field::kLamp);
   text("atmosphere", "the gas it was closed under", Field::kAtmosphere);
   const auto measure = [&fields](std::string_view name, std::string_view meaning, Measure which) {
-    fields.push_back({.kind = FindField::Kind::kMeasure, .name = name, .meaning = meaning, .measure = which});
+    fields.push_back(
+        {.kind = FindField::Kind::kMeasure, .name = name, .meaning = meaning, .measure = which});
   };
   measure("yield", "%", Measure::kYield);
   measure("conversion", "%", Measure::kConversion);
@@ -50,8 +52,9 @@ std::vector<FindField> makeFields() {
 /// Marks that are safe within a word: none of them begins or ends anything.
 bool isPlain(char c) {
   const auto byte = static_cast<unsigned char>(c);
-  return (byte >= '0' && byte <= '9') || (byte >= 'A' && byte <= 'Z') || (byte >= 'a' && byte <= 'z') || c == '-' ||
-         c == ',' || c == '\'' || c == '_' || c == '+' || c == '/';
+  return (byte >= '0' && byte <= '9') || (byte >= 'A' && byte <= 'Z') ||
+         (byte >= 'a' && byte <= 'z') || c == '-' || c == ',' || c == '\'' || c == '_' ||
+         c == '+' || c == '/';
 }
 
 }  // namespace

@@ -36,7 +36,8 @@ struct GatheredWords {
 
 class Parser {
  public:
-  Parser(std::string_view text, const ParseOptions& options) : m_scanner{text}, m_asYouType(options.asYouType) {}
+  Parser(std::string_view text, const ParseOptions& options)
+      : m_scanner{text}, m_asYouType(options.asYouType) {}
 
   Reading<ParsedQuery> parse() {
     auto conditions = parseAny();
@@ -49,7 +50,8 @@ class Parser {
   }
 
  private:
-  /// Alternatives between `or`, as one condition; or the conditions themselves where there is but one.
+  /// Alternatives between `or`, as one condition; or the conditions themselves where there is but
+  /// one.
   Reading<ParsedConditions> parseAny();
   /// Conditions side by side, up to `or`, a closing parenthesis or the end.
   Reading<ParsedConditions> parseAll();
@@ -70,7 +72,8 @@ class Parser {
 
   /// Whether what is missing at the end may still be typed.
   [[nodiscard]] bool isUnfinished() const { return m_asYouType && m_scanner.atEnd(); }
-  /// Passes over a range that begins at `begin` if all that is wrong is that somebody still types it.
+  /// Passes over a range that begins at `begin` if all that is wrong is that somebody still types
+  /// it.
   bool passUnfinished(const FindScanner& begin) {
     if (!m_asYouType || !endsWithinRange(begin)) return false;
     m_scanner.at = m_scanner.text.size();
@@ -86,7 +89,8 @@ class Parser {
 
 Reading<void> Parser::countOne(std::size_t at) {
   if (++m_conditions <= kMostConditions) return {};
-  return textFault(at, m_scanner.text.size() - at, fmt::format("more than {} conditions", kMostConditions),
+  return textFault(at, m_scanner.text.size() - at,
+                   fmt::format("more than {} conditions", kMostConditions),
                    "search for fewer things at once");
 }
 
@@ -163,7 +167,8 @@ Reading<void> Parser::parseOne(ParsedConditions& conditions, GatheredWords& word
     return parseTerm(conditions, words);
   }
   if (++m_depth > kDeepest) {
-    return textFault(begin, 1, fmt::format("more than {} levels of parentheses and 'not'", kDeepest),
+    return textFault(begin, 1,
+                     fmt::format("more than {} levels of parentheses and 'not'", kDeepest),
                      fmt::format("write it with fewer, or {}", kLiteralAdvice));
   }
   auto parsed = isNot ? parseNot(conditions) : parseGroup(conditions);
@@ -231,12 +236,14 @@ Reading<const FindField*> Parser::scanField() {
   if (isAddress || (!isColon && comparison == Comparison::kNone)) return nullptr;
   if (field == nullptr) {
     // `A>B` and `a=b` may be anybody's text; `yeild>60` is a slip.
-    if (!isColon && (sign.atEnd() || sign.text[sign.at] < '0' || sign.text[sign.at] > '9')) return nullptr;
+    if (!isColon && (sign.atEnd() || sign.text[sign.at] < '0' || sign.text[sign.at] > '9'))
+      return nullptr;
     std::vector<std::string> known;
     for (const FindField& each : findFields()) known.emplace_back(each.name);
     const auto nearest = units::nearestName(text::asciiLowered(name), known);
-    return textFault(begin, name.size(), fmt::format("there is no field {}", text::quoted(name)),
-                     nearest ? fmt::format("did you mean {}? Or {}", *nearest, kLiteralAdvice) : kLiteralAdvice);
+    return textFault(
+        begin, name.size(), fmt::format("there is no field {}", text::quoted(name)),
+        nearest ? fmt::format("did you mean {}? Or {}", *nearest, kLiteralAdvice) : kLiteralAdvice);
   }
   if (!isMeasure && !isColon && comparison != Comparison::kEqual) {
     return textFault(begin, sign.at - begin, fmt::format("{} has no size to compare", field->name),
@@ -254,7 +261,8 @@ Reading<void> Parser::parseTerm(ParsedConditions& conditions, GatheredWords& wor
     m_scanner.skipBlanks();
     if (isUnfinished()) return {};
     if (m_scanner.atEnd() || m_scanner.text[m_scanner.at] == ')') {
-      return textFault(begin, m_scanner.at - begin, fmt::format("nothing follows {}", (*field)->name),
+      return textFault(begin, m_scanner.at - begin,
+                       fmt::format("nothing follows {}", (*field)->name),
                        fmt::format("write what is looked for behind it, or {}", kLiteralAdvice));
     }
     return parseField(**field, conditions);
@@ -287,14 +295,16 @@ Reading<void> Parser::parseSubstance(const FindField& field, ParsedConditions& c
   if (!value) return std::unexpected(value.error());
   if (text::trimmed(value->text).empty() && !(value->isPrefix && !value->isQuoted)) {
     if (isUnfinished()) return {};
-    return textFault(value->place.offset, value->place.length, "a name without letters", "write the substance's name");
+    return textFault(value->place.offset, value->place.length, "a name without letters",
+                     "write the substance's name");
   }
   auto loading = parseLoading();
   if (!loading) return std::unexpected(loading.error());
   if (field.kind == FindField::Kind::kStructure) {
     // A `*` is an atom there.
     const std::string smiles =
-        value->isQuoted ? value->text : std::string(before.text.substr(value->place.offset, value->place.length));
+        value->isQuoted ? value->text
+                        : std::string(before.text.substr(value->place.offset, value->place.length));
     conditions.push_back({StructurePattern{smiles, *loading, value->place}});
     return {};
   }
@@ -315,14 +325,16 @@ Reading<WrittenLoading> Parser::parseLoading() {
     return WrittenLoading{};
   }
   if (!*range) return WrittenLoading{};
-  if ((*range)->kind == Kind::kConcentration) return WrittenLoading{.concentration_mol_L = (*range)->interval};
+  if ((*range)->kind == Kind::kConcentration)
+    return WrittenLoading{.concentration_mol_L = (*range)->interval};
   return WrittenLoading{.molPercent = (*range)->interval};
 }
 
 Reading<void> Parser::parseText(const FindField& field, ParsedConditions& conditions) {
   const auto value = m_scanner.value(m_asYouType);
   if (!value) return std::unexpected(value.error());
-  TextFieldCondition condition{field.text, std::string(text::trimmed(value->text)), value->isPrefix};
+  TextFieldCondition condition{field.text, std::string(text::trimmed(value->text)),
+                               value->isPrefix};
   if (m_asYouType && !value->isFinished) condition.isPrefix = true;
   if (field.text == TextFieldCondition::Field::kState) {
     std::ranges::replace(condition.value, ' ', '-');
@@ -336,9 +348,10 @@ Reading<void> Parser::parseText(const FindField& field, ParsedConditions& condit
     });
     if (!isKnown) {
       const auto nearest = units::nearestName(lowered, known);
-      return textFault(
-          value->place.offset, value->place.length, fmt::format("there is no state {}", text::quoted(value->text)),
-          nearest ? fmt::format("did you mean {}?", *nearest) : fmt::format("a run is {}", fmt::join(known, ", ")));
+      return textFault(value->place.offset, value->place.length,
+                       fmt::format("there is no state {}", text::quoted(value->text)),
+                       nearest ? fmt::format("did you mean {}?", *nearest)
+                               : fmt::format("a run is {}", fmt::join(known, ", ")));
     }
   }
   conditions.push_back({std::move(condition)});
@@ -374,11 +387,13 @@ Reading<void> Parser::parseWord(ParsedConditions& conditions, GatheredWords& gat
 
 }  // namespace
 
-std::expected<ParsedQuery, TextFault> parseFind(std::string_view text, const ParseOptions& options) {
+std::expected<ParsedQuery, TextFault> parseFind(std::string_view text,
+                                                const ParseOptions& options) {
   if (text.size() > kLongest) {
     std::size_t offset = kLongest;
     while (offset > 0 && (static_cast<unsigned char>(text[offset]) & 0xC0U) == 0x80U) --offset;
-    return textFault(offset, text.size() - offset, fmt::format("a search of more than {} bytes", kLongest),
+    return textFault(offset, text.size() - offset,
+                     fmt::format("a search of more than {} bytes", kLongest),
                      "search for fewer things at once");
   }
   if (const auto invalid = text::firstInvalidUtf8(text)) {

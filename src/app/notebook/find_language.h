@@ -57,8 +57,8 @@ struct ParsedNot {
 };
 
 struct ParsedCondition {
-  std::variant<SubstanceName, StructurePattern, WordsCondition, TextFieldCondition, MeasureCondition, ParsedAll,
-               ParsedAny, ParsedNot>
+  std::variant<SubstanceName, StructurePattern, WordsCondition, TextFieldCondition,
+               MeasureCondition, ParsedAll, ParsedAny, ParsedNot>
       data;
 };
 
@@ -73,14 +73,14 @@ struct ParseOptions {
   bool asYouType = false;
 };
 
-/// Reads a search. Limits: 10,000 bytes, 200 conditions and words, 32 levels of parentheses and `not`.
-/// Faults point at the place: an unknown field, a value that cannot be read, an operator without its
-/// condition, a parenthesis or quotation mark without its twin, bytes that are no text.
-[[nodiscard]] std::expected<ParsedQuery, text::TextFault> parseFind(std::string_view text,
-                                                                    const ParseOptions& options = {});
+/// Reads a search. Limits: 10,000 bytes, 200 conditions and words, 32 levels of parentheses and
+/// `not`. Faults point at the place: an unknown field, a value that cannot be read, an operator
+/// without its condition, a parenthesis or quotation mark without its twin, bytes that are no text.
+[[nodiscard]] std::expected<ParsedQuery, text::TextFault> parseFind(
+    std::string_view text, const ParseOptions& options = {});
 
-/// What looking up substances needs from a notebook. An implementation that can fail keeps its fault to
-/// itself, gives nothing, and is asked for the fault afterwards.
+/// What looking up substances needs from a notebook. An implementation that can fail keeps its
+/// fault to itself, gives nothing, and is asked for the fault afterwards.
 class SubstanceResolver {
  public:
   SubstanceResolver() = default;
@@ -93,7 +93,8 @@ class SubstanceResolver {
   virtual std::vector<RowNumber> numbersByNameBeginning(std::string_view folded) = 0;
   virtual std::vector<RowNumber> numbersByCas(std::string_view cas) = 0;
   /// Those that hold the structure; the fault points into `smiles`.
-  virtual std::expected<std::vector<RowNumber>, text::TextFault> numbersBySubstructure(std::string_view smiles) = 0;
+  virtual std::expected<std::vector<RowNumber>, text::TextFault> numbersBySubstructure(
+      std::string_view smiles) = 0;
   /// Every name and synonym as written, for near misses.
   virtual std::vector<std::string> names() = 0;
 };
@@ -104,9 +105,8 @@ struct ResolveOptions {
 
 /// Looks the substances up. Faults: a name or CAS number of no substance, with the nearest names;
 /// a structure that cannot be read. A structure that no substance holds matches nothing.
-[[nodiscard]] std::expected<FindQuery, text::TextFault> resolveQuery(const ParsedQuery& parsed,
-                                                                     SubstanceResolver& resolver,
-                                                                     const ResolveOptions& options = {});
+[[nodiscard]] std::expected<FindQuery, text::TextFault> resolveQuery(
+    const ParsedQuery& parsed, SubstanceResolver& resolver, const ResolveOptions& options = {});
 
 /// A field that may stand before `:`, or before a comparison.
 struct FindField {

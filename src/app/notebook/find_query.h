@@ -76,7 +76,9 @@ struct NoneOf {
 };
 
 struct FindCondition {
-  std::variant<SubstanceCondition, WordsCondition, TextFieldCondition, MeasureCondition, AllOf, AnyOf, NoneOf> data;
+  std::variant<SubstanceCondition, WordsCondition, TextFieldCondition, MeasureCondition, AllOf,
+               AnyOf, NoneOf>
+      data;
 };
 
 /// All runs that meet every condition; an empty list means all runs.

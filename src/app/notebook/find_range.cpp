@@ -26,7 +26,8 @@ using Reading = std::expected<T, TextFault>;
 bool isDigit(char c) { return c >= '0' && c <= '9'; }
 
 std::string_view dash(const FindScanner& scanner) {
-  for (const std::string_view dash : {"-", "\u2010", "\u2011", "\u2012", "\u2013", "\u2014", "\u2212"}) {
+  for (const std::string_view dash :
+       {"-", "\u2010", "\u2011", "\u2012", "\u2013", "\u2014", "\u2212"}) {
     if (scanner.rest().starts_with(dash)) return dash;
   }
   return {};
@@ -52,7 +53,8 @@ std::size_t digitsFrom(std::string_view text, std::size_t at) {
   return at - begin;
 }
 
-/// Length of the number here: a sign, digits, one decimal sign that is not the first of `..`, an exponent.
+/// Length of the number here: a sign, digits, one decimal sign that is not the first of `..`, an
+/// exponent.
 std::size_t numberLength(const FindScanner& scanner) {
   const std::string_view text = scanner.text;
   std::size_t at = scanner.at;
@@ -70,7 +72,8 @@ std::size_t numberLength(const FindScanner& scanner) {
   }
   if (digits == 0) return 0;
   if (at < text.size() && (text[at] == 'e' || text[at] == 'E')) {
-    const std::size_t sign = at + 1 < text.size() && (text[at + 1] == '-' || text[at + 1] == '+') ? 1 : 0;
+    const std::size_t sign =
+        at + 1 < text.size() && (text[at + 1] == '-' || text[at + 1] == '+') ? 1 : 0;
     if (const std::size_t power = digitsFrom(text, at + 1 + sign)) at += 1 + sign + power;
   }
   return at - scanner.at;
@@ -82,14 +85,16 @@ std::string_view unitText(const FindScanner& scanner) {
   if (ahead.rest().starts_with("mol")) {
     FindScanner percent{ahead.text, ahead.at + 3};
     percent.skipBlanks();
-    if (percent.rest().starts_with('%')) return ahead.text.substr(ahead.at, percent.at + 1 - ahead.at);
+    if (percent.rest().starts_with('%'))
+      return ahead.text.substr(ahead.at, percent.at + 1 - ahead.at);
   }
   while (!ahead.atBoundary() && !ahead.rest().starts_with("..")) ++ahead.at;
   return scanner.text.substr(scanner.at, ahead.at - scanner.at);
 }
 
 const units::Unit* knownUnit(std::string_view written) {
-  const bool isSpacedMolPercent = written.starts_with("mol") && written.ends_with('%') && written != "mol-%";
+  const bool isSpacedMolPercent =
+      written.starts_with("mol") && written.ends_with('%') && written != "mol-%";
   return units::findUnit(isSpacedMolPercent ? "mol%" : written, units::Dialect::kPerson);
 }
 
@@ -140,7 +145,8 @@ double halfDigit(std::string_view number) {
   const double power =
       mantissa == number.size()
           ? 1.0
-          : units::readNumber("1" + std::string(number.substr(mantissa)), units::Dialect::kPerson).value_or(1.0);
+          : units::readNumber("1" + std::string(number.substr(mantissa)), units::Dialect::kPerson)
+                .value_or(1.0);
   return 0.5 * std::pow(10.0, -places) * power;
 }
 
@@ -153,30 +159,36 @@ std::unexpected<TextFault> placed(TextFault fault, const WrittenEnd& end, const 
 }
 
 /// Understands one end; `unit` may have been written at the other.
-Reading<ReadEnd> readEnd(std::string_view text, const WrittenEnd& end, std::string_view unit, const RangeForm& form) {
+Reading<ReadEnd> readEnd(std::string_view text, const WrittenEnd& end, std::string_view unit,
+                         const RangeForm& form) {
   const std::string_view number = text.substr(end.number.offset, end.number.length);
   if (unit.empty()) {
     return textFault(end.number.offset + end.number.length, 0, "the unit is missing",
                      fmt::format("write for example {}", form.example));
   }
-  const bool isSpaced = unit.starts_with("mol") && knownUnit(unit) != nullptr && unit.ends_with('%');
+  const bool isSpaced =
+      unit.starts_with("mol") && knownUnit(unit) != nullptr && unit.ends_with('%');
   const std::string written = fmt::format("{} {}", number, isSpaced ? "mol%" : unit);
   const auto read = units::readAnyQuantity(written, units::Dialect::kPerson);
   if (!read) return placed(read.error(), end, form);
   if (std::ranges::find(form.kinds, read->kind) == form.kinds.end()) {
     return textFault(end.number.offset, end.end - end.number.offset,
-                     fmt::format("{} is {}, which is not compared here", read->symbol, units::nameOf(read->kind)),
+                     fmt::format("{} is {}, which is not compared here", read->symbol,
+                                 units::nameOf(read->kind)),
                      fmt::format("write for example {}", form.example));
   }
   if (!std::isfinite(read->si)) {
-    return textFault(end.number.offset, end.number.length, "a value too large to hold", "give a smaller one");
+    return textFault(end.number.offset, end.number.length, "a value too large to hold",
+                     "give a smaller one");
   }
   const units::Unit* last = end.lastUnit != nullptr ? end.lastUnit : knownUnit(unit);
   const double factor = last == nullptr ? 1.0 : last->numerator / last->denominator;
   // On the scale as written, for 5 % of 298 K is no small share of 25 °C.
   const double share = 0.05 * std::abs(read->kind == Kind::kTemperature ? read->number : read->si);
-  const double digit = halfDigit(text.substr(end.lastNumber.offset, end.lastNumber.length)) * factor;
-  return ReadEnd{read->kind, read->si, share > 0.0 ? std::min(digit, share) : digit, 1e-9 * std::abs(read->si)};
+  const double digit =
+      halfDigit(text.substr(end.lastNumber.offset, end.lastNumber.length)) * factor;
+  return ReadEnd{read->kind, read->si, share > 0.0 ? std::min(digit, share) : digit,
+                 1e-9 * std::abs(read->si)};
 }
 
 /// From coherent SI to the unit of the notebook's columns.
@@ -245,13 +257,16 @@ std::unexpected<TextFault> runsBackwards(std::size_t begin, std::size_t end) {
 /// Which unit a lone end or the later end of a range is read with.
 std::string_view unitFor(const WrittenEnd& end, std::string_view otherwise) {
   // What stands apart and is no unit is the next word, unless a unit must be here.
-  const bool isAttempt = !end.unit.empty() && (end.unitTouches || end.known != nullptr || otherwise.empty());
+  const bool isAttempt =
+      !end.unit.empty() && (end.unitTouches || end.known != nullptr || otherwise.empty());
   return isAttempt ? end.unit : otherwise;
 }
 
-/// A range whose unit is optional takes a unit of its own kind only: `yield>60 C` is followed by a word.
+/// A range whose unit is optional takes a unit of its own kind only: `yield>60 C` is followed by a
+/// word.
 void leaveForeignUnit(WrittenEnd& end, const RangeForm& form) {
-  const bool isForeign = end.known != nullptr && std::ranges::find(form.kinds, end.known->kind) == form.kinds.end();
+  const bool isForeign =
+      end.known != nullptr && std::ranges::find(form.kinds, end.known->kind) == form.kinds.end();
   if (!isForeign || form.unitIfNone.empty() || end.unitTouches) return;
   end.unit = {};
   end.known = nullptr;
@@ -273,7 +288,9 @@ Reading<FoundRange> readBetween(FindScanner& scanner, const WrittenEnd& first, s
   // `5.. mol%`: the unit of an end that is left out.
   const std::string_view alone = unitText(scanner);
   const bool standsAlone = !second.isThere() && knownUnit(alone) != nullptr;
-  const std::string_view unit = second.isThere() ? unitFor(second, inherited) : standsAlone ? alone : inherited;
+  const std::string_view unit = second.isThere() ? unitFor(second, inherited)
+                                : standsAlone    ? alone
+                                                 : inherited;
   if (second.isThere()) scanner.at = endOf(second, unit);
   if (standsAlone) scanner.at += alone.size();
   Interval si;
@@ -281,19 +298,23 @@ Reading<FoundRange> readBetween(FindScanner& scanner, const WrittenEnd& first, s
   for (const bool isFirst : {true, false}) {
     const WrittenEnd& end = isFirst ? first : second;
     if (!end.isThere()) continue;
-    const auto read = readEnd(scanner.text, end, isFirst && !first.unit.empty() ? first.unit : unit, form);
+    const auto read =
+        readEnd(scanner.text, end, isFirst && !first.unit.empty() ? first.unit : unit, form);
     if (!read) return std::unexpected(read.error());
     if (kind && *kind != read->kind) {
-      return textFault(begin, scanner.at - begin, "the two ends are not of one kind", "give both in the same unit");
+      return textFault(begin, scanner.at - begin, "the two ends are not of one kind",
+                       "give both in the same unit");
     }
     kind = read->kind;
-    (isFirst ? si.least : si.most) = isFirst ? read->si - read->rounding : read->si + read->rounding;
+    (isFirst ? si.least : si.most) =
+        isFirst ? read->si - read->rounding : read->si + read->rounding;
   }
   if (si.least && si.most && *si.least > *si.most) return runsBackwards(begin, scanner.at);
   return inColumns(*kind, si);
 }
 
-Reading<FoundRange> readLone(FindScanner& scanner, WrittenEnd end, Comparison comparison, const RangeForm& form) {
+Reading<FoundRange> readLone(FindScanner& scanner, WrittenEnd end, Comparison comparison,
+                             const RangeForm& form) {
   leaveForeignUnit(end, form);
   const std::string_view unit = unitFor(end, form.unitIfNone);
   const auto read = readEnd(scanner.text, end, unit, form);
@@ -303,22 +324,25 @@ Reading<FoundRange> readLone(FindScanner& scanner, WrittenEnd end, Comparison co
 }
 
 /// A range or comparison that has to be here: `first` is what stands behind the sign of comparison.
-Reading<FoundRange> readRange(FindScanner& scanner, const WrittenEnd& first, Comparison comparison, std::size_t begin,
-                              const RangeForm& form) {
-  FindScanner behind{scanner.text, first.known == nullptr && !first.unit.empty() && first.unitTouches
-                                       ? first.unitAt + first.unit.size()
-                                       : first.end};
+Reading<FoundRange> readRange(FindScanner& scanner, const WrittenEnd& first, Comparison comparison,
+                              std::size_t begin, const RangeForm& form) {
+  FindScanner behind{scanner.text,
+                     first.known == nullptr && !first.unit.empty() && first.unitTouches
+                         ? first.unitAt + first.unit.size()
+                         : first.end};
   const bool isRange = behind.skipDots();
   const bool holdsNumber = first.isThere() || (isRange && numberLength(behind) > 0);
   if (!holdsNumber) {
-    return textFault(begin, scanner.at - begin, "no number follows", fmt::format("write for example {}", form.example));
+    return textFault(begin, scanner.at - begin, "no number follows",
+                     fmt::format("write for example {}", form.example));
   }
   if (isRange && comparison != Comparison::kNone && comparison != Comparison::kEqual) {
     return textFault(begin, behind.at - begin, "a comparison and a range at once",
                      fmt::format("write for example {}", form.example));
   }
   if (isRange) scanner = behind;
-  auto read = isRange ? readBetween(scanner, first, begin, form) : readLone(scanner, first, comparison, form);
+  auto read = isRange ? readBetween(scanner, first, begin, form)
+                      : readLone(scanner, first, comparison, form);
   if (read && !scanner.standsApart()) {
     return textFault(scanner.at, scanner.text.size() - scanner.at, "more follows after the value",
                      fmt::format("write for example {}, then a blank", form.example));
@@ -341,8 +365,9 @@ ScanResult<FoundRange> scanRange(FindScanner& scanner, const RangeForm& form) {
   }
   if (mayBeOther && first.known == nullptr) {
     FindScanner dots{scanner.text, first.end};
-    const bool isRange = dots.skipDots() && (numberLength(dots) > 0 || (first.isThere() && dots.atBoundary()) ||
-                                             knownUnit(unitText(dots)) != nullptr);
+    const bool isRange =
+        dots.skipDots() && (numberLength(dots) > 0 || (first.isThere() && dots.atBoundary()) ||
+                            knownUnit(unitText(dots)) != nullptr);
     if (!isRange || (!first.isThere() && numberLength(dots) == 0)) {
       scanner = before;
       return std::nullopt;

@@ -25,18 +25,20 @@ struct RangeForm {
 };
 
 struct FoundRange {
-  units::Kind kind;   ///< never equivalents: they are given as mol%
-  Interval interval;  ///< in the unit of the notebook's columns: mol%, mol/L, %, nm, °C, h, mL, mmol
+  units::Kind kind;  ///< never equivalents: they are given as mol%
+  Interval
+      interval;  ///< in the unit of the notebook's columns: mol%, mol/L, %, nm, °C, h, mL, mmol
 };
 
 template <class T>
 using ScanResult = std::expected<std::optional<T>, text::TextFault>;
 
 /// Reads a range here; the scanner then stands behind it, or where it stood if there is none.
-/// The ends written belong to the range, but for `>` and `<`; they are met within 1e-9 of their value,
-/// for what is stored was computed. A lone value means half a unit of its last digit to either side, or
-/// 5 % of it where that is less (`5 mol%` is 4.75 to 5.25 mol%, `440 nm` is 439.5 to 440.5 nm).
-/// Faults: no number, an unknown or unwanted unit, a range that runs backwards or uses a dash.
+/// The ends written belong to the range, but for `>` and `<`; they are met within 1e-9 of their
+/// value, for what is stored was computed. A lone value means half a unit of its last digit to
+/// either side, or 5 % of it where that is less (`5 mol%` is 4.75 to 5.25 mol%, `440 nm` is 439.5
+/// to 440.5 nm). Faults: no number, an unknown or unwanted unit, a range that runs backwards or
+/// uses a dash.
 [[nodiscard]] ScanResult<FoundRange> scanRange(FindScanner& scanner, const RangeForm& form);
 
 /// Reads days, months or years and ranges of them as milliseconds of the local clock.
@@ -49,8 +51,8 @@ using ScanResult = std::expected<std::optional<T>, text::TextFault>;
 /// What may stand behind a substance.
 [[nodiscard]] RangeForm loadingRange();
 
-/// Whether from here to the end stands nothing but what a range is made of, and perhaps one word that may
-/// become a unit: somebody may still be typing it.
+/// Whether from here to the end stands nothing but what a range is made of, and perhaps one word
+/// that may become a unit: somebody may still be typing it.
 [[nodiscard]] bool endsWithinRange(FindScanner scanner);
 
 }  // namespace vialkeeper::app

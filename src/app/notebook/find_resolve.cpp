@@ -21,14 +21,17 @@ template <class T>
 using Reading = std::expected<T, TextFault>;
 
 /// Names that begin with or hold the folded text, shortest first, at most three.
-std::vector<std::string> namesThatHold(std::string_view folded, const std::vector<std::string>& names,
+std::vector<std::string> namesThatHold(std::string_view folded,
+                                       const std::vector<std::string>& names,
                                        const std::vector<std::string>& foldedNames) {
   std::vector<std::pair<std::size_t, std::size_t>> found;  // rank, index
   for (std::size_t i = 0; i < names.size(); ++i) {
     const std::size_t at = foldedNames[i].find(folded);
-    if (at != std::string::npos) found.emplace_back((at == 0 ? 0 : 100'000) + foldedNames[i].size(), i);
+    if (at != std::string::npos)
+      found.emplace_back((at == 0 ? 0 : 100'000) + foldedNames[i].size(), i);
   }
-  const auto last = found.begin() + static_cast<std::ptrdiff_t>(std::min<std::size_t>(found.size(), 3));
+  const auto last =
+      found.begin() + static_cast<std::ptrdiff_t>(std::min<std::size_t>(found.size(), 3));
   std::partial_sort(found.begin(), last, found.end());
   std::vector<std::string> shown;
   for (auto each = found.begin(); each != last; ++each) shown.push_back(names[each->second]);
@@ -44,10 +47,12 @@ std::string nearMisses(std::string_view written, SubstanceResolver& resolver) {
   for (const std::string& name : names) foldedNames.push_back(foldName(name));
   std::vector<std::string> near;
   if (const auto nearest = units::nearestName(folded, foldedNames)) {
-    near.push_back(names[static_cast<std::size_t>(std::ranges::find(foldedNames, *nearest) - foldedNames.begin())]);
+    near.push_back(names[static_cast<std::size_t>(std::ranges::find(foldedNames, *nearest) -
+                                                  foldedNames.begin())]);
   }
   if (near.empty() && folded.size() >= 3) near = namesThatHold(folded, names, foldedNames);
-  if (near.empty()) return "write a name, synonym or CAS number that is on the shelf, or search for it as a word";
+  if (near.empty())
+    return "write a name, synonym or CAS number that is on the shelf, or search for it as a word";
   std::string list;
   for (std::size_t i = 0; i < near.size(); ++i) {
     if (i > 0) list += i + 1 == near.size() ? " or " : ", ";
@@ -58,7 +63,8 @@ std::string nearMisses(std::string_view written, SubstanceResolver& resolver) {
 
 class QueryBuilder {
  public:
-  QueryBuilder(SubstanceResolver& resolver, const ResolveOptions& options) : m_resolver(resolver), m_options(options) {}
+  QueryBuilder(SubstanceResolver& resolver, const ResolveOptions& options)
+      : m_resolver(resolver), m_options(options) {}
 
   Reading<FindConditions> build(const ParsedConditions& parsed) {
     FindConditions conditions;
@@ -97,10 +103,12 @@ class QueryBuilder {
     condition.substances = numbersOf(name);
     if (condition.substances.empty() && !m_options.unknownMatchesNothing) {
       const bool isCas = chem::checkCasNumber(name.written).has_value();
-      return textFault(name.place.offset, name.place.length,
-                       fmt::format("no substance of this notebook {} {}{}", isCas ? "has the CAS number" : "is called",
-                                   text::quoted(name.written), name.isPrefix ? " or begins so" : ""),
-                       nearMisses(name.written, m_resolver));
+      return textFault(
+          name.place.offset, name.place.length,
+          fmt::format("no substance of this notebook {} {}{}",
+                      isCas ? "has the CAS number" : "is called", text::quoted(name.written),
+                      name.isPrefix ? " or begins so" : ""),
+          nearMisses(name.written, m_resolver));
     }
     return FindCondition{std::move(condition)};
   }
@@ -112,14 +120,16 @@ class QueryBuilder {
       // Within quotation marks the text begins one further on.
       const std::size_t marks = pattern.place.length > pattern.smiles.size() ? 1 : 0;
       fault.offset = std::min(fault.offset + marks, pattern.place.length) + pattern.place.offset;
-      fault.length = std::min(fault.length, pattern.place.offset + pattern.place.length - fault.offset);
+      fault.length =
+          std::min(fault.length, pattern.place.offset + pattern.place.length - fault.offset);
       return std::unexpected(std::move(fault));
     }
-    return FindCondition{SubstanceCondition{.role = {},
-                                            .written = pattern.smiles,
-                                            .substances = std::move(*numbers),
-                                            .loading_molPercent = pattern.loading.molPercent,
-                                            .concentration_mol_L = pattern.loading.concentration_mol_L}};
+    return FindCondition{
+        SubstanceCondition{.role = {},
+                           .written = pattern.smiles,
+                           .substances = std::move(*numbers),
+                           .loading_molPercent = pattern.loading.molPercent,
+                           .concentration_mol_L = pattern.loading.concentration_mol_L}};
   }
 
   /// By name; by CAS number if it is one; by the beginning of a name if asked for, or if nobody has
@@ -148,7 +158,8 @@ class QueryBuilder {
 
 }  // namespace
 
-std::expected<FindQuery, TextFault> resolveQuery(const ParsedQuery& parsed, SubstanceResolver& resolver,
+std::expected<FindQuery, TextFault> resolveQuery(const ParsedQuery& parsed,
+                                                 SubstanceResolver& resolver,
                                                  const ResolveOptions& options) {
   auto conditions = QueryBuilder(resolver, options).build(parsed.conditions);
   if (!conditions) return std::unexpected(conditions.error());

@@ -23,7 +23,8 @@ class NotebookResolver final : public SubstanceResolver {
 
   std::vector<RowNumber> numbersByName(std::string_view folded) override {
     std::vector<RowNumber> numbers;
-    for (const SubstanceRecord& substance : kept(m_notebook.substancesByName(folded))) numbers.push_back(substance.n);
+    for (const SubstanceRecord& substance : kept(m_notebook.substancesByName(folded)))
+      numbers.push_back(substance.n);
     return numbers;
   }
 
@@ -41,7 +42,8 @@ class NotebookResolver final : public SubstanceResolver {
     return found && *found ? std::vector{(*found)->n} : std::vector<RowNumber>{};
   }
 
-  std::expected<std::vector<RowNumber>, text::TextFault> numbersBySubstructure(std::string_view smiles) override {
+  std::expected<std::vector<RowNumber>, text::TextFault> numbersBySubstructure(
+      std::string_view smiles) override {
     const auto fault = [smiles](const chem::StructureFault& why) {
       return text::textFault(0, smiles.size(), why.what, why.mend);
     };
@@ -52,8 +54,9 @@ class NotebookResolver final : public SubstanceResolver {
     const std::string bits = (*pattern)->fingerprint();
     std::vector<RowNumber> numbers;
     for (const SubstanceRecord& substance : kept(m_notebook.substances())) {
-      const bool candidate = !substance.canonicalSmiles.empty() &&
-                             (substance.fingerprint.empty() || chem::mayContain(substance.fingerprint, bits));
+      const bool candidate =
+          !substance.canonicalSmiles.empty() &&
+          (substance.fingerprint.empty() || chem::mayContain(substance.fingerprint, bits));
       if (candidate && (*pattern)->isIn(substance.canonicalSmiles)) numbers.push_back(substance.n);
     }
     return numbers;
@@ -80,14 +83,16 @@ class NotebookResolver final : public SubstanceResolver {
 };
 
 std::unexpected<text::Faults> queryFault(const text::TextFault& fault, std::string_view text) {
-  return std::unexpected(text::Faults{{.field = "query",
-                                       .what = fmt::format("{}: {}", text::quoted(text), whatWithPosition(fault, text)),
-                                       .mend = fault.mend}});
+  return std::unexpected(text::Faults{
+      {.field = "query",
+       .what = fmt::format("{}: {}", text::quoted(text), whatWithPosition(fault, text)),
+       .mend = fault.mend}});
 }
 
 }  // namespace
 
-Checked<FindResult> findRuns(Notebook& notebook, std::string_view text, const FindOptions& options, bool asYouType) {
+Checked<FindResult> findRuns(Notebook& notebook, std::string_view text, const FindOptions& options,
+                             bool asYouType) {
   const auto parsed = parseFind(text, {.asYouType = asYouType});
   if (!parsed) return queryFault(parsed.error(), text);
   NotebookResolver resolver(notebook);

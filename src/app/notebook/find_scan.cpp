@@ -15,9 +15,9 @@ using text::textFault;
 using text::TextFault;
 
 bool isBlank(char32_t value) {
-  return value <= 0x20 || (value >= 0x7F && value <= 0xA0) || (value >= 0x2000 && value <= 0x200F) ||
-         (value >= 0x2028 && value <= 0x202F) || (value >= 0x205F && value <= 0x206F) || value == 0x3000 ||
-         value == 0xFEFF;
+  return value <= 0x20 || (value >= 0x7F && value <= 0xA0) ||
+         (value >= 0x2000 && value <= 0x200F) || (value >= 0x2028 && value <= 0x202F) ||
+         (value >= 0x205F && value <= 0x206F) || value == 0x3000 || value == 0xFEFF;
 }
 
 bool isLetter(char c) { return (c >= 'a' && c <= 'z') || (c >= 'A' && c <= 'Z'); }
@@ -26,8 +26,9 @@ bool isDigit(char c) { return c >= '0' && c <= '9'; }
 
 /// Signs beyond ASCII that hold neither letter nor digit and that people type or paste.
 bool isSign(char32_t value) {
-  if (value == 0xAA || value == 0xB5 || value == 0xBA) return false;                                      // ª µ º
-  if (value == 0xB2 || value == 0xB3 || value == 0xB9 || (value >= 0xBC && value <= 0xBE)) return false;  // ² ³ ¹ ¼
+  if (value == 0xAA || value == 0xB5 || value == 0xBA) return false;  // ª µ º
+  if (value == 0xB2 || value == 0xB3 || value == 0xB9 || (value >= 0xBC && value <= 0xBE))
+    return false;  // ² ³ ¹ ¼
   if (value >= 0xA1 && value <= 0xBF) return true;
   return value == 0xD7 || value == 0xF7 || (value >= 0x2010 && value <= 0x205E) ||
          (value >= 0x2190 && value <= 0x23FF) || (value >= 0x3001 && value <= 0x3003);
@@ -64,7 +65,8 @@ std::size_t FindScanner::quoteLength() const {
 
 std::string_view FindScanner::letters() const {
   const std::string_view here = rest();
-  return here.substr(0, static_cast<std::size_t>(std::ranges::find_if_not(here, isLetter) - here.begin()));
+  return here.substr(
+      0, static_cast<std::size_t>(std::ranges::find_if_not(here, isLetter) - here.begin()));
 }
 
 std::string_view FindScanner::keyword() const {
@@ -80,15 +82,16 @@ std::string_view FindScanner::keyword() const {
 }
 
 Comparison FindScanner::comparison() {
-  constexpr auto kSigns = std::to_array<std::pair<std::string_view, Comparison>>({{">=", Comparison::kAtLeast},
-                                                                                  {"=>", Comparison::kAtLeast},
-                                                                                  {"≥", Comparison::kAtLeast},
-                                                                                  {"<=", Comparison::kAtMost},
-                                                                                  {"=<", Comparison::kAtMost},
-                                                                                  {"≤", Comparison::kAtMost},
-                                                                                  {">", Comparison::kMore},
-                                                                                  {"<", Comparison::kLess},
-                                                                                  {"=", Comparison::kEqual}});
+  constexpr auto kSigns =
+      std::to_array<std::pair<std::string_view, Comparison>>({{">=", Comparison::kAtLeast},
+                                                              {"=>", Comparison::kAtLeast},
+                                                              {"≥", Comparison::kAtLeast},
+                                                              {"<=", Comparison::kAtMost},
+                                                              {"=<", Comparison::kAtMost},
+                                                              {"≤", Comparison::kAtMost},
+                                                              {">", Comparison::kMore},
+                                                              {"<", Comparison::kLess},
+                                                              {"=", Comparison::kEqual}});
   for (const auto& [sign, meaning] : kSigns) {
     if (!rest().starts_with(sign)) continue;
     at += sign.size();
@@ -130,7 +133,8 @@ std::expected<FindValue, TextFault> FindScanner::quotedValue(bool mayBeUnclosed)
     break;
   }
   if (!value.isFinished && !mayBeUnclosed) {
-    return textFault(begin, at - begin, "the quotation mark is never closed", "write \" at the end of the words");
+    return textFault(begin, at - begin, "the quotation mark is never closed",
+                     "write \" at the end of the words");
   }
   value.place.length = at - begin;
   return value;
@@ -168,7 +172,8 @@ std::expected<FindValue, TextFault> FindScanner::value(bool mayBeUnclosed) {
 bool isSearchable(std::string_view word) {
   for (std::size_t at = 0; at < word.size();) {
     const auto [value, length] = text::codePointAt(word, at);
-    if (value < 0x80 ? isLetter(word[at]) || isDigit(word[at]) : !isBlank(value) && !isSign(value)) return true;
+    if (value < 0x80 ? isLetter(word[at]) || isDigit(word[at]) : !isBlank(value) && !isSign(value))
+      return true;
     at += length;
   }
   return false;

@@ -51,7 +51,8 @@ struct FindScanner {
   [[nodiscard]] std::string_view keyword() const;
   /// Takes a sign of comparison and the blanks behind it, if one stands here.
   Comparison comparison();
-  /// Takes the two dots of a range with the blanks around them; false, and nothing taken, without them.
+  /// Takes the two dots of a range with the blanks around them; false, and nothing taken, without
+  /// them.
   bool skipDots();
   /// Reads one value; a word goes up to a blank or to a closing parenthesis that it did not open.
   /// Fault: a quotation mark that is never closed, unless `mayBeUnclosed`.

@@ -13,8 +13,8 @@ namespace vialkeeper::app {
 namespace {
 
 // The plain letter of each code point from U+00C0 and from U+1E00; `.` where there is none.
-// Derived from the decompositions of the Unicode Character Database; ø, đ, ħ, ł and their like, which
-// do not decompose, are given the letter that they are typed as without them.
+// Derived from the decompositions of the Unicode Character Database; ø, đ, ħ, ł and their like,
+// which do not decompose, are given the letter that they are typed as without them.
 constexpr char32_t kLatinFrom = 0xC0;
 constexpr std::string_view kLatin =
     "aaaaaa.ceeeeiiiidnooooo.ouuuuy..aaaaaa.ceeeeiiiidnooooo.ouuuuy.y"
@@ -29,8 +29,9 @@ constexpr std::string_view kLatinAdditional =
 
 constexpr char32_t kAlpha = 0x3B1;
 constexpr std::array<std::string_view, 25> kGreek = {
-    "alpha", "beta",    "gamma", "delta", "epsilon", "zeta",  "eta", "theta",   "iota", "kappa", "lambda", "u",    "nu",
-    "xi",    "omicron", "pi",    "rho",   "sigma",   "sigma", "tau", "upsilon", "phi",  "chi",   "psi",    "omega"};
+    "alpha", "beta",   "gamma",   "delta", "epsilon", "zeta",    "eta",  "theta", "iota",
+    "kappa", "lambda", "u",       "nu",    "xi",      "omicron", "pi",   "rho",   "sigma",
+    "sigma", "tau",    "upsilon", "phi",   "chi",     "psi",     "omega"};
 
 // What is spelt with more letters than one, and the Greek letters that stand elsewhere.
 constexpr auto kSpelt = std::to_array<std::pair<char32_t, std::string_view>>({
@@ -50,22 +51,25 @@ constexpr auto kSpelt = std::to_array<std::pair<char32_t, std::string_view>>({
     {U'\u03F5', "epsilon"},
 });
 
-bool isWithin(char32_t value, char32_t first, char32_t last) { return value >= first && value <= last; }
+bool isWithin(char32_t value, char32_t first, char32_t last) {
+  return value >= first && value <= last;
+}
 
 bool isBlank(char32_t value) {
   return value <= 0x20 || isWithin(value, 0x7F, 0xA0) || isWithin(value, 0x2000, 0x200F) ||
-         isWithin(value, 0x2028, 0x202F) || isWithin(value, 0x205F, 0x206F) || value == 0x3000 || value == 0xFEFF;
+         isWithin(value, 0x2028, 0x202F) || isWithin(value, 0x205F, 0x206F) || value == 0x3000 ||
+         value == 0xFEFF;
 }
 
 bool isHyphen(char32_t value) {
-  return value == '-' || value == 0xAD || isWithin(value, 0x2010, 0x2015) || value == 0x2043 || value == 0x2212 ||
-         value == 0xFE58 || value == 0xFE63 || value == 0xFF0D;
+  return value == '-' || value == 0xAD || isWithin(value, 0x2010, 0x2015) || value == 0x2043 ||
+         value == 0x2212 || value == 0xFE58 || value == 0xFE63 || value == 0xFF0D;
 }
 
 /// The apostrophe, what keyboards and typesetting put in its place, and the prime.
 bool isApostrophe(char32_t value) {
-  return value == '\'' || value == '`' || value == 0xB4 || value == 0x2BC || isWithin(value, 0x2018, 0x201B) ||
-         value == 0x2032;
+  return value == '\'' || value == '`' || value == 0xB4 || value == 0x2BC ||
+         isWithin(value, 0x2018, 0x201B) || value == 0x2032;
 }
 
 bool isCombining(char32_t value) { return isWithin(value, 0x300, 0x36F); }
@@ -90,13 +94,15 @@ void appendFolded(std::string& folded, char32_t value) {
     folded += static_cast<char>(value);
     return;
   }
-  for (const auto& [from, plain] : {std::pair{kLatinFrom, kLatin}, std::pair{kLatinAdditionalFrom, kLatinAdditional}}) {
+  for (const auto& [from, plain] :
+       {std::pair{kLatinFrom, kLatin}, std::pair{kLatinAdditionalFrom, kLatinAdditional}}) {
     if (const char letter = plainLetter(value, from, plain)) {
       folded += letter;
       return;
     }
   }
-  const auto spelt = std::ranges::find(kSpelt, value, &std::pair<char32_t, std::string_view>::first);
+  const auto spelt =
+      std::ranges::find(kSpelt, value, &std::pair<char32_t, std::string_view>::first);
   if (spelt != kSpelt.end()) {
     folded += spelt->second;
     return;

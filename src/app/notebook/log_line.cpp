@@ -69,7 +69,8 @@ FirstWord firstWord(std::string_view line, std::size_t from) {
   FirstWord first;
   first.begin = first.end = skipBlanks(line, from);
   while (first.end < line.size() && isLetter(line[first.end])) ++first.end;
-  first.lowered = text::asciiLowered(line.substr(first.begin, std::min<std::size_t>(first.end - first.begin, 20)));
+  first.lowered = text::asciiLowered(
+      line.substr(first.begin, std::min<std::size_t>(first.end - first.begin, 20)));
   if (first.lowered == "h" && line.substr(first.end).starts_with('2')) {
     first.lowered = "h2";
     ++first.end;
@@ -98,7 +99,9 @@ bool isOneSlipAway(std::string_view written, std::string_view meant) {
   const std::string_view restA(a, written.end());
   const std::string_view restB(b, meant.end());
   if (restA.empty() && restB.empty()) return false;
-  const auto without = [](std::string_view word, std::size_t n) { return word.substr(std::min(n, word.size())); };
+  const auto without = [](std::string_view word, std::size_t n) {
+    return word.substr(std::min(n, word.size()));
+  };
   if (without(restA, 1) == without(restB, 1)) return true;
   if (without(restA, 1) == restB || restA == without(restB, 1)) return true;
   return restA.size() > 1 && restB.size() > 1 && restA[0] == restB[1] && restA[1] == restB[0] &&
@@ -108,8 +111,11 @@ bool isOneSlipAway(std::string_view written, std::string_view meant) {
 /// One reading of one line.
 class LineReader {
  public:
-  /// LabelCheck::kNo: only whether the line is a shorthand matters, so hints are not looked for either.
-  LineReader(std::string_view line, LabelCheck check) : m_line(line), m_check(check) { m_read.event.raw = line; }
+  /// LabelCheck::kNo: only whether the line is a shorthand matters, so hints are not looked for
+  /// either.
+  LineReader(std::string_view line, LabelCheck check) : m_line(line), m_check(check) {
+    m_read.event.raw = line;
+  }
 
   ReadEntry run() {
     const std::size_t begin = skipBlanks(m_line, 0);
@@ -159,19 +165,26 @@ class LineReader {
 
   Step readHead(const HeadWord& head, std::size_t end) {
     switch (head.head) {
-      case Head::kLamp: return readLamp(end);
-      case Head::kPhoto: return readPhoto(end);
-      case Head::kNote: return readNote(end);
+      case Head::kLamp:
+        return readLamp(end);
+      case Head::kPhoto:
+        return readPhoto(end);
+      case Head::kNote:
+        return readNote(end);
       case Head::kSample: {
         const FirstWord second = firstWord(m_line, end);
         const bool named = second.lowered == "gas" || second.lowered == "liquid";
-        return readForm(second.lowered == "gas" ? event_kind::kGasSample : event_kind::kLiquidSample,
-                        named ? second.end : end);
+        return readForm(
+            second.lowered == "gas" ? event_kind::kGasSample : event_kind::kLiquidSample,
+            named ? second.end : end);
       }
       case Head::kLiquid:
-      case Head::kGas: return readSampleOrAdded(head.head == Head::kGas, end);
-      case Head::kAdd: return readAdded(end);
-      case Head::kOneForm: break;
+      case Head::kGas:
+        return readSampleOrAdded(head.head == Head::kGas, end);
+      case Head::kAdd:
+        return readAdded(end);
+      case Head::kOneForm:
+        break;
     }
     return readForm(head.kind, end);
   }
@@ -183,7 +196,8 @@ class LineReader {
 
   /// Behind `:` or a full stop that stands after the word.
   std::size_t behindSign(std::size_t from) const {
-    const bool stop = from < m_line.size() && m_line[from] == '.' && numberEnd(m_line, from) == from;
+    const bool stop =
+        from < m_line.size() && m_line[from] == '.' && numberEnd(m_line, from) == from;
     return stop || m_line.substr(from).starts_with(':') ? from + 1 : from;
   }
 
@@ -231,15 +245,18 @@ class LineReader {
     const std::size_t begin = skipBlanks(m_line, behindSign(from));
     const std::size_t end = trimmedEnd(m_line);
     if (begin >= end) {
-      return textFault(std::min(begin, end), 0, "the file is missing", "write photo and the file's name");
+      return textFault(std::min(begin, end), 0, "the file is missing",
+                       "write photo and the file's name");
     }
     std::string_view file = m_line.substr(begin, end - begin);
-    if (file.size() > 2 && (file.front() == '"' || file.front() == '\'') && file.front() == file.back()) {
+    if (file.size() > 2 && (file.front() == '"' || file.front() == '\'') &&
+        file.front() == file.back()) {
       file = file.substr(1, file.size() - 2);
     }
     const std::size_t folder = file.find_last_of("/\\");
     if (folder + 1 == file.size()) {
-      return textFault(begin, end - begin, "this names a folder, not a file", "write photo and the file's name");
+      return textFault(begin, end - begin, "this names a folder, not a file",
+                       "write photo and the file's name");
     }
     m_read.photo = file;
     m_read.event.kind = event_kind::kPhoto;
@@ -251,7 +268,8 @@ class LineReader {
     m_meant = event_kind::kObservation;
     const std::size_t begin = skipBlanks(m_line, behindSign(from));
     if (begin >= trimmedEnd(m_line)) {
-      return textFault(std::min(begin, m_line.size()), 0, "the text is missing", "write note and what you saw");
+      return textFault(std::min(begin, m_line.size()), 0, "the text is missing",
+                       "write note and what you saw");
     }
     keepAsText(m_line.substr(begin));
     return {};
@@ -263,8 +281,11 @@ class LineReader {
     const LogTokens pieces = logTokens(m_line, from);
     const std::string_view rest = m_line.substr(std::min(from, m_line.size()));
     if (std::ranges::any_of(rest, [](char c) { return c >= '0' && c <= '9'; })) return false;
-    // A unit tells of a figure in words (`fifty uL`); in a longer text it is a word (`at the stir bar`).
-    const auto isUnit = [&](const LogToken& token) { return logUnit(token.of(m_line)).has_value(); };
+    // A unit tells of a figure in words (`fifty uL`); in a longer text it is a word (`at the stir
+    // bar`).
+    const auto isUnit = [&](const LogToken& token) {
+      return logUnit(token.of(m_line)).has_value();
+    };
     if (pieces.tokens.size() <= 3 && std::ranges::any_of(pieces.tokens, isUnit)) return false;
     const bool wordsAlone = lamp || m_meant == event_kind::kVent || m_meant == event_kind::kPurge;
     return pieces.tokens.size() > (wordsAlone ? 2U : 0U);
@@ -277,13 +298,16 @@ class LineReader {
     for (const std::string_view word : {"p", "T", "aliquot", "h2"}) {
       if (word == "h2" && m_line.find('%') == std::string_view::npos) continue;
       const std::string longer = fmt::format("{} {}", word, m_line.substr(first.begin, 60));
-      const ReadEntry read = m_line.size() - first.begin > 60 ? ReadEntry{} : LineReader(longer, LabelCheck::kNo).run();
+      const ReadEntry read = m_line.size() - first.begin > 60
+                                 ? ReadEntry{}
+                                 : LineReader(longer, LabelCheck::kNo).run();
       const bool label = read.event.kind == event_kind::kLiquidSample && !read.event.note.empty();
       if (read.event.kind.empty() || read.event.kind == event_kind::kObservation || label) continue;
       const bool sample = word == "aliquot";
-      return doubt({first.begin, 0, sample ? "a volume without a word" : "a reading without its word",
-                    sample ? "put aliquot or gas in front" : fmt::format("put {} in front", word)},
-                   read.event.kind);
+      return doubt(
+          {first.begin, 0, sample ? "a volume without a word" : "a reading without its word",
+           sample ? "put aliquot or gas in front" : fmt::format("put {} in front", word)},
+          read.event.kind);
     }
   }
 
@@ -297,7 +321,8 @@ class LineReader {
       if (read.event.kind == event_kind::kObservation) continue;
       const std::size_t length = first.end - first.begin;
       return doubt({first.begin, length,
-                    fmt::format("{} is no word of the log", text::quoted(m_line.substr(first.begin, length))),
+                    fmt::format("{} is no word of the log",
+                                text::quoted(m_line.substr(first.begin, length))),
                     fmt::format("write {}", head.word)},
                    read.event.kind);
     }
@@ -334,7 +359,8 @@ ReadEntry readAddendum(std::string_view line) {
   read.event.raw = line;
   read.event.note = line;
   read.sentence = eventSentence(read.event);
-  if (trimmedEnd(line) == 0) read.doubt = TextFault{0, 0, "nothing is written here", "write what is to be added"};
+  if (trimmedEnd(line) == 0)
+    read.doubt = TextFault{0, 0, "nothing is written here", "write what is to be added"};
   return read;
 }
 

@@ -47,34 +47,51 @@ constexpr auto kForms = std::to_array<Form>({
     {event_kind::kLiquidSample, kV | kT | kText, kV, PressureRule::kGauge, "aliquot 50 uL"},
     {event_kind::kVent, kG | kP | kT | kD, 0, PressureRule::kMustSay, "vent"},
     {event_kind::kPurge, kG | kP | kT | kD, 0, PressureRule::kMustSay, "purge N2"},
-    {event_kind::kCollected, kV | kT | kP, kV | kT, PressureRule::kAbsolute, "collected 4.2 mL 21 C"},
+    {event_kind::kCollected, kV | kT | kP, kV | kT, PressureRule::kAbsolute,
+     "collected 4.2 mL 21 C"},
     {event_kind::kGasAdded, kV | kN | kP | kT | kG, kG, PressureRule::kMustSay, "add gas 2 mL H2"},
-    {event_kind::kLiquidAdded, kV | kText, kV | kText, PressureRule::kGauge, "add 0.2 mL acetonitrile"},
+    {event_kind::kLiquidAdded, kV | kText, kV | kText, PressureRule::kGauge,
+     "add 0.2 mL acetonitrile"},
 });
 
 unsigned itemOf(Kind kind) {
   switch (kind) {
-    case Kind::kPressure: return kP;
-    case Kind::kTemperature: return kT;
-    case Kind::kVolume: return kV;
-    case Kind::kAmount: return kN;
+    case Kind::kPressure:
+      return kP;
+    case Kind::kTemperature:
+      return kT;
+    case Kind::kVolume:
+      return kV;
+    case Kind::kAmount:
+      return kN;
     case Kind::kMolPercent:
-    case Kind::kPercent: return kX;
-    case Kind::kDuration: return kD;
-    default: return 0;
+    case Kind::kPercent:
+      return kX;
+    case Kind::kDuration:
+      return kD;
+    default:
+      return 0;
   }
 }
 
 std::string_view nameOfItem(unsigned item) {
   switch (item) {
-    case kP: return "pressure";
-    case kT: return "temperature";
-    case kV: return "volume";
-    case kN: return "amount";
-    case kX: return "fraction";
-    case kD: return "time span";
-    case kG: return "gas";
-    default: return "name of the liquid";
+    case kP:
+      return "pressure";
+    case kT:
+      return "temperature";
+    case kV:
+      return "volume";
+    case kN:
+      return "amount";
+    case kX:
+      return "fraction";
+    case kD:
+      return "time span";
+    case kG:
+      return "gas";
+    default:
+      return "name of the liquid";
   }
 }
 
@@ -83,7 +100,11 @@ class FormReader {
  public:
   FormReader(std::string_view line, std::size_t from, const Form& form, EventRecord& event,
              LabelCheck check)
-      : m_line(line), m_pieces(logTokens(line, from)), m_form(form), m_event(event), m_check(check) {}
+      : m_line(line),
+        m_pieces(logTokens(line, from)),
+        m_form(form),
+        m_event(event),
+        m_check(check) {}
 
   Step run() {
     m_event.kind = m_form.kind;
@@ -107,11 +128,13 @@ class FormReader {
 
   Step takeNumber(const LogToken& token) {
     const auto& unit = token.unit;
-    if (!takes(kText) && m_line.substr(token.unitBegin).starts_with(':') && token.hasUnit()) return timeInLine(token);
+    if (!takes(kText) && m_line.substr(token.unitBegin).starts_with(':') && token.hasUnit())
+      return timeInLine(token);
     const unsigned item = unit ? itemOf(unit->unit->kind) : !token.hasUnit() && wants(kX) ? kX : 0;
     if (isText(token, item)) return takeText(token);
     if (item != 0 && takes(item) && has(item)) {
-      return textFault(token.begin, token.end - token.begin, fmt::format("a second {} in one line", nameOfItem(item)),
+      return textFault(token.begin, token.end - token.begin,
+                       fmt::format("a second {} in one line", nameOfItem(item)),
                        "write one event in a line");
     }
     m_textOpen = false;
@@ -130,7 +153,8 @@ class FormReader {
     if (wanted) return false;
     if (!token.standsFree()) return has(kV) && !token.unit;
     const auto& unit = token.unit;
-    const bool solution = unit && (unit->unit->kind == Kind::kConcentration || unit->unit->kind == Kind::kPercent);
+    const bool solution =
+        unit && (unit->unit->kind == Kind::kConcentration || unit->unit->kind == Kind::kPercent);
     return has(kV) && solution && m_form.kind == event_kind::kLiquidAdded;
   }
 
@@ -142,13 +166,19 @@ class FormReader {
     const unsigned given = unit ? itemOf(unit->unit->kind) : 0;
     const unsigned item = given != 0 && wants(given) ? given : wanted;
     if ((item & kN) != 0 && (item & kV) != 0) {
-      return keep(readToken(m_line, token, {Kind::kVolume, Kind::kAmount}, Range::kPositive), token);
+      return keep(readToken(m_line, token, {Kind::kVolume, Kind::kAmount}, Range::kPositive),
+                  token);
     }
-    if ((item & kP) != 0) return keep(readToken(m_line, token, {Kind::kPressure}, Range::kAny), token);
-    if ((item & kV) != 0) return keep(readToken(m_line, token, {Kind::kVolume}, Range::kPositive), token);
-    if ((item & kN) != 0) return keep(readToken(m_line, token, {Kind::kAmount}, Range::kPositive), token);
-    if ((item & kT) != 0) return keep(readToken(m_line, token, {Kind::kTemperature}, Range::kAny), token);
-    if ((item & kD) != 0) return keep(readToken(m_line, token, {Kind::kDuration}, Range::kPositive), token);
+    if ((item & kP) != 0)
+      return keep(readToken(m_line, token, {Kind::kPressure}, Range::kAny), token);
+    if ((item & kV) != 0)
+      return keep(readToken(m_line, token, {Kind::kVolume}, Range::kPositive), token);
+    if ((item & kN) != 0)
+      return keep(readToken(m_line, token, {Kind::kAmount}, Range::kPositive), token);
+    if ((item & kT) != 0)
+      return keep(readToken(m_line, token, {Kind::kTemperature}, Range::kAny), token);
+    if ((item & kD) != 0)
+      return keep(readToken(m_line, token, {Kind::kDuration}, Range::kPositive), token);
     if ((item & kX) != 0) return takeFraction(token);
     return textFault(token.begin, token.end - token.begin, "one quantity too many", example());
   }
@@ -164,7 +194,8 @@ class FormReader {
       case Kind::kTemperature: {
         // Kelvin less 273.15 leaves a rest in the last bits.
         const bool celsius = read->symbol != "K";
-        m_event.temperature_C = celsius ? read->number : std::round((read->si - 273.15) * 1e9) / 1e9;
+        m_event.temperature_C =
+            celsius ? read->number : std::round((read->si - 273.15) * 1e9) / 1e9;
         break;
       }
       case Kind::kVolume:
@@ -175,7 +206,9 @@ class FormReader {
         m_event.amount_mmol = inUnit(*read, "mmol");
         m_has |= kV;
         break;
-      default: m_duration = written(token); break;
+      default:
+        m_duration = written(token);
+        break;
     }
     return {};
   }
@@ -183,11 +216,11 @@ class FormReader {
   Step takeFraction(const LogToken& token) {
     const auto& unit = token.unit;
     if (token.hasUnit() && (!unit || itemOf(unit->unit->kind) != kX)) {
-      return textFault(token.unitBegin, token.unitEnd - token.unitBegin, "a fraction or a percentage is wanted",
-                       "write it like 12.3 % or 0.123");
+      return textFault(token.unitBegin, token.unitEnd - token.unitBegin,
+                       "a fraction or a percentage is wanted", "write it like 12.3 % or 0.123");
     }
-    const auto number =
-        units::readNumber(m_line.substr(token.begin, token.numberEnd - token.begin), units::Dialect::kPerson);
+    const auto number = units::readNumber(m_line.substr(token.begin, token.numberEnd - token.begin),
+                                          units::Dialect::kPerson);
     if (!number) {
       TextFault fault = number.error();
       fault.offset += token.begin;
@@ -217,7 +250,8 @@ class FormReader {
     const bool venting = m_form.kind == event_kind::kVent && lowered == "ambient" && !has(kP);
     const bool more = m_at + 1 < m_pieces.tokens.size();
     if (collecting || venting || (isJoint(word) && more)) return {};
-    return textFault(token.begin, token.end - token.begin, fmt::format("{} is not understood here", text::quoted(word)),
+    return textFault(token.begin, token.end - token.begin,
+                     fmt::format("{} is not understood here", text::quoted(word)),
                      fmt::format("{}{}, with a remark behind a semicolon", example(),
                                  takes(kG) ? ", the gas one of H2 N2 O2 Ar CO2 CO CH4" : ""));
   }
@@ -230,12 +264,16 @@ class FormReader {
   Step takeGas(const LogToken& token, std::string_view gas) {
     const bool headspace = m_form.kind == event_kind::kHeadspace;
     if (headspace && gas != "H2") {
-      return textFault(token.begin, token.end - token.begin, "the reading is the fraction of H2", example());
+      return textFault(token.begin, token.end - token.begin, "the reading is the fraction of H2",
+                       example());
     }
     if (gas == "air" && m_form.kind == event_kind::kGasAdded) {
-      return textFault(token.begin, token.end - token.begin, "air is a mixture", "add N2 and O2 in a line each");
+      return textFault(token.begin, token.end - token.begin, "air is a mixture",
+                       "add N2 and O2 in a line each");
     }
-    if (has(kG)) return textFault(token.begin, token.end - token.begin, "a second gas in one line", "name one gas");
+    if (has(kG))
+      return textFault(token.begin, token.end - token.begin, "a second gas in one line",
+                       "name one gas");
     m_has |= kG;
     if (!headspace) m_event.gas = gas;
     return {};
@@ -243,10 +281,12 @@ class FormReader {
 
   Step takePressureKind(const LogToken& token, std::string_view kind) {
     if (!m_event.pressureKind.empty() && m_event.pressureKind != kind) {
-      return textFault(token.begin, token.end - token.begin, "gauge and absolute in one line", "keep one of the two");
+      return textFault(token.begin, token.end - token.begin, "gauge and absolute in one line",
+                       "keep one of the two");
     }
     if (kind == "gauge" && m_form.pressure == PressureRule::kAbsolute) {
-      return textFault(token.begin, token.end - token.begin, "a barometer shows an absolute pressure",
+      return textFault(token.begin, token.end - token.begin,
+                       "a barometer shows an absolute pressure",
                        "give the barometer's reading, such as 1013 mbar");
     }
     if (m_event.pressureKind.empty()) m_pressureWord = token;
@@ -302,7 +342,8 @@ class FormReader {
       const unsigned item = unit ? itemOf(unit->unit->kind) : 0;
       const bool solution = unit && (item == 0 || item == kX) && unit->unit->kind != Kind::kMass;
       if (!name && item == kP) {
-        return textFault(token.begin, token.end - token.begin, "a pressure in the label of a sample",
+        return textFault(token.begin, token.end - token.begin,
+                         "a pressure in the label of a sample",
                          "log the reading in a line of its own");
       }
       if (name && !solution) {
@@ -311,15 +352,18 @@ class FormReader {
       }
     }
     if (name && gasNamed(text)) {
-      return textFault(m_textBegin, text.size(), "a gas where a liquid is wanted", "write it like add gas 2 mL H2");
+      return textFault(m_textBegin, text.size(), "a gas where a liquid is wanted",
+                       "write it like add gas 2 mL H2");
     }
     std::string_view rest = text;
     for (const std::string_view joint : {"and ", "then ", "+ ", "& "}) {
-      if (text::asciiLowered(text.substr(0, joint.size())) == joint) rest = text.substr(joint.size());
+      if (text::asciiLowered(text.substr(0, joint.size())) == joint)
+        rest = text.substr(joint.size());
     }
     const bool second = numberEnd(rest, 0) > 0 && rest.size() < text.size();
     if (!second && !readsAsEvent(rest)) return {};
-    return textFault(m_textBegin, text.size(), "a second event in one line", "write one event in a line");
+    return textFault(m_textBegin, text.size(), "a second event in one line",
+                     "write one event in a line");
   }
 
   Step settlePressure() {
@@ -329,7 +373,8 @@ class FormReader {
     }
     if (m_event.pressureKind.empty()) {
       if (m_form.pressure == PressureRule::kMustSay) {
-        return textFault(m_pressure.end, 0, "gauge or abs is missing", "say gauge or abs behind the pressure");
+        return textFault(m_pressure.end, 0, "gauge or abs is missing",
+                         "say gauge or abs behind the pressure");
       }
       m_event.pressureKind = m_form.pressure == PressureRule::kGauge ? "gauge" : "abs";
     }

@@ -22,13 +22,14 @@ inline constexpr std::string_view kPurge = "purge";
 inline constexpr std::string_view kGasAdded = "gas added";
 inline constexpr std::string_view kLiquidAdded = "liquid added";
 inline constexpr std::string_view kObservation = "observation";
-inline constexpr std::string_view kPhoto = "photo";        ///< with an attachment; idle for the ledger
-inline constexpr std::string_view kAddendum = "addendum";  ///< text on a sealed run; idle for the ledger
+inline constexpr std::string_view kPhoto = "photo";  ///< with an attachment; idle for the ledger
+inline constexpr std::string_view kAddendum =
+    "addendum";  ///< text on a sealed run; idle for the ledger
 
 /// Those of a log file: what the ledger replays.
 inline constexpr auto kOfLogFile = std::to_array<std::string_view>(
-    {kLampOn, kLampOff, kPressure, kTemperature, kHeadspace, kGasSample, kLiquidSample, kVent, kCollected,
-     kPurge, kGasAdded, kLiquidAdded, kObservation});
+    {kLampOn, kLampOff, kPressure, kTemperature, kHeadspace, kGasSample, kLiquidSample, kVent,
+     kCollected, kPurge, kGasAdded, kLiquidAdded, kObservation});
 
 /// Whether a log file may name the kind.
 [[nodiscard]] constexpr bool isOfLogFile(std::string_view kind) {

@@ -15,7 +15,8 @@ std::string figure(double value) { return fmt::format("{:.6g}", value); }
 
 std::string volumeOf(const EventRecord& event) {
   if (!event.volume_uL) return {};
-  return *event.volume_uL < 1000.0 ? figure(*event.volume_uL) + " µL" : figure(*event.volume_uL / 1000.0) + " mL";
+  return *event.volume_uL < 1000.0 ? figure(*event.volume_uL) + " µL"
+                                   : figure(*event.volume_uL / 1000.0) + " mL";
 }
 
 std::string pressureOf(const EventRecord& event) {
@@ -27,13 +28,15 @@ std::string conditions(const EventRecord& event) {
   std::string words;
   if (event.pressure_bar) words += " at " + pressureOf(event);
   if (event.temperature_C) {
-    words += fmt::format("{} {} °C", event.pressure_bar ? " and" : " at", figure(*event.temperature_C));
+    words +=
+        fmt::format("{} {} °C", event.pressure_bar ? " and" : " at", figure(*event.temperature_C));
   }
   return words;
 }
 
 std::string temperature(const EventRecord& event) {
-  return event.temperature_C ? fmt::format(" at {} °C", figure(*event.temperature_C)) : std::string();
+  return event.temperature_C ? fmt::format(" at {} °C", figure(*event.temperature_C))
+                             : std::string();
 }
 
 std::string remark(const EventRecord& event) {
@@ -72,13 +75,15 @@ std::string gasAdded(const EventRecord& event) {
 std::string eventSentence(const EventRecord& event) {
   using namespace event_kind;
   const std::string_view kind = event.kind;
-  if (kind == kPressure) return "pressure " + pressureOf(event) + temperature(event) + remark(event);
+  if (kind == kPressure)
+    return "pressure " + pressureOf(event) + temperature(event) + remark(event);
   if (kind == kTemperature) {
-    return fmt::format("temperature {} °C{}", figure(event.temperature_C.value_or(0.0)), remark(event));
+    return fmt::format("temperature {} °C{}", figure(event.temperature_C.value_or(0.0)),
+                       remark(event));
   }
   if (kind == kHeadspace) {
-    return fmt::format("headspace {} % H2{}{}", figure(event.fraction.value_or(0.0) * 100.0), conditions(event),
-                       remark(event));
+    return fmt::format("headspace {} % H2{}{}", figure(event.fraction.value_or(0.0) * 100.0),
+                       conditions(event), remark(event));
   }
   if (kind == kGasSample || kind == kLiquidSample) {
     return fmt::format("{} {}{}{}", kind, volumeOf(event), temperature(event), remark(event));
@@ -86,7 +91,8 @@ std::string eventSentence(const EventRecord& event) {
   if (kind == kVent || kind == kPurge) return opened(event);
   if (kind == kCollected) return collected(event);
   if (kind == kGasAdded) return gasAdded(event);
-  if (kind == kLiquidAdded) return fmt::format("liquid added: {} {}", volumeOf(event), text::oneLine(event.note));
+  if (kind == kLiquidAdded)
+    return fmt::format("liquid added: {} {}", volumeOf(event), text::oneLine(event.note));
   if (kind == kPhoto) return "photo " + text::quoted(event.attachmentName);
   return std::string(kind) + temperature(event) + remark(event);
 }

@@ -18,37 +18,69 @@ using Pair = std::pair<std::string_view, std::string_view>;
 
 // No-break, thin and narrow spaces, then marks that nobody sees: zero-width space and joiners,
 // direction marks, word joiner, byte-order mark.
-constexpr auto kBlanks = std::to_array<std::string_view>(
-    {" ", "\t", "\u00A0", "\u2009", "\u202F", "\u200B", "\u200C", "\u200D", "\u200E", "\u200F", "\u2060", "\uFEFF"});
+constexpr auto kBlanks =
+    std::to_array<std::string_view>({" ", "\t", "\u00A0", "\u2009", "\u202F", "\u200B", "\u200C",
+                                     "\u200D", "\u200E", "\u200F", "\u2060", "\uFEFF"});
 
-constexpr auto kGases = std::to_array<Pair>({{"h2", "H2"}, {"n2", "N2"}, {"o2", "O2"}, {"ar", "Ar"},
-                                             {"co2", "CO2"}, {"co", "CO"}, {"ch4", "CH4"}, {"air", "air"},
-                                             {"hydrogen", "H2"}, {"nitrogen", "N2"}, {"oxygen", "O2"},
-                                             {"argon", "Ar"}, {"methane", "CH4"}});
+constexpr auto kGases = std::to_array<Pair>({{"h2", "H2"},
+                                             {"n2", "N2"},
+                                             {"o2", "O2"},
+                                             {"ar", "Ar"},
+                                             {"co2", "CO2"},
+                                             {"co", "CO"},
+                                             {"ch4", "CH4"},
+                                             {"air", "air"},
+                                             {"hydrogen", "H2"},
+                                             {"nitrogen", "N2"},
+                                             {"oxygen", "O2"},
+                                             {"argon", "Ar"},
+                                             {"methane", "CH4"}});
 
-constexpr auto kPressureKinds = std::to_array<Pair>({{"gauge", "gauge"}, {"gage", "gauge"}, {"g", "gauge"},
-                                                     {"(g)", "gauge"}, {"(gauge)", "gauge"}, {"abs", "abs"},
-                                                     {"abs.", "abs"}, {"absolute", "abs"}, {"a", "abs"},
-                                                     {"(a)", "abs"}, {"(abs)", "abs"}});
+constexpr auto kPressureKinds = std::to_array<Pair>({{"gauge", "gauge"},
+                                                     {"gage", "gauge"},
+                                                     {"g", "gauge"},
+                                                     {"(g)", "gauge"},
+                                                     {"(gauge)", "gauge"},
+                                                     {"abs", "abs"},
+                                                     {"abs.", "abs"},
+                                                     {"absolute", "abs"},
+                                                     {"a", "abs"},
+                                                     {"(a)", "abs"},
+                                                     {"(abs)", "abs"}});
 
 // The longer first, so that `(g)` is not taken for a unit that ends in `)`.
-constexpr auto kPressureEndings = std::to_array<Pair>(
-    {{"(gauge)", "gauge"}, {"(abs)", "abs"}, {"(g)", "gauge"}, {"(a)", "abs"}, {"g", "gauge"}, {"a", "abs"}});
+constexpr auto kPressureEndings = std::to_array<Pair>({{"(gauge)", "gauge"},
+                                                       {"(abs)", "abs"},
+                                                       {"(g)", "gauge"},
+                                                       {"(a)", "abs"},
+                                                       {"g", "gauge"},
+                                                       {"a", "abs"}});
 
 constexpr auto kJoints = std::to_array<std::string_view>(
     {"at", "of", "with", "to", "under", "for", "t", "temp", "temperature", "p", "pressure"});
 
-constexpr auto kSpellings = std::to_array<Pair>({{"oC", "degC"}, {"ºC", "degC"}, {"ºc", "degC"}, {"°c", "degC"},
-                                                 {"deg C", "degC"}, {"° C", "degC"}, {"º C", "degC"},
-                                                 {"vol%", "%"}, {"vol %", "%"}, {"vol-%", "%"}});
+constexpr auto kSpellings = std::to_array<Pair>({{"oC", "degC"},
+                                                 {"ºC", "degC"},
+                                                 {"ºc", "degC"},
+                                                 {"°c", "degC"},
+                                                 {"deg C", "degC"},
+                                                 {"° C", "degC"},
+                                                 {"º C", "degC"},
+                                                 {"vol%", "%"},
+                                                 {"vol %", "%"},
+                                                 {"vol-%", "%"}});
 
-// Units of which only one can be meant where letters' case is lost; concentrations are not among them.
-constexpr auto kAnyCase = std::to_array<Kind>({Kind::kVolume, Kind::kPressure, Kind::kTemperature, Kind::kAmount,
-                                               Kind::kMass, Kind::kDuration, Kind::kPercent});
+// Units of which only one can be meant where letters' case is lost; concentrations are not among
+// them.
+constexpr auto kAnyCase =
+    std::to_array<Kind>({Kind::kVolume, Kind::kPressure, Kind::kTemperature, Kind::kAmount,
+                         Kind::kMass, Kind::kDuration, Kind::kPercent});
 
 bool isDigit(char c) { return c >= '0' && c <= '9'; }
 
-bool isDigitAt(std::string_view text, std::size_t at) { return at < text.size() && isDigit(text[at]); }
+bool isDigitAt(std::string_view text, std::size_t at) {
+  return at < text.size() && isDigit(text[at]);
+}
 
 bool isDecimalAt(std::string_view text, std::size_t at) {
   return at < text.size() && (text[at] == '.' || text[at] == ',') && isDigitAt(text, at + 1);
@@ -152,7 +184,9 @@ class Tokenizer {
   static bool isSeparator(char c) { return c == ',' || c == '@' || c == '='; }
 
   std::size_t wordEnd(std::size_t at) const {
-    while (at < m_end && blankLength(m_line, at) == 0 && !isSeparator(m_line[at]) && m_line[at] != ';') ++at;
+    while (at < m_end && blankLength(m_line, at) == 0 && !isSeparator(m_line[at]) &&
+           m_line[at] != ';')
+      ++at;
     return at;
   }
 
@@ -181,15 +215,16 @@ class Tokenizer {
     return token;
   }
 
-  /// The word as the unit, lengthened by a second one (`deg C`) or without what is stuck to it (`bar35C`).
+  /// The word as the unit, lengthened by a second one (`deg C`) or without what is stuck to it
+  /// (`bar35C`).
   void takeUnit(LogToken& token, std::size_t end) const {
     const std::size_t begin = token.unitBegin;
     token.unitEnd = end;
     const std::size_t next = std::min(skipBlanks(m_line, end), m_end);
     const std::size_t nextEnd = wordEnd(next);
     if (next > end && nextEnd - begin <= 16) {
-      const std::string joined =
-          std::string(m_line.substr(begin, end - begin)) + " " + std::string(m_line.substr(next, nextEnd - next));
+      const std::string joined = std::string(m_line.substr(begin, end - begin)) + " " +
+                                 std::string(m_line.substr(next, nextEnd - next));
       if (lookedUp(kSpellings, joined)) {
         token.unit = logUnit(joined);
         token.unitEnd = nextEnd;
@@ -273,14 +308,16 @@ std::optional<LogUnit> logUnit(std::string_view symbol) {
   return found;
 }
 
-std::expected<units::ReadQuantity, text::TextFault> readToken(std::string_view line, const LogToken& token,
+std::expected<units::ReadQuantity, text::TextFault> readToken(std::string_view line,
+                                                              const LogToken& token,
                                                               std::initializer_list<Kind> kinds,
                                                               units::Range range) {
   const std::size_t numberLength = token.numberEnd - token.begin;
   std::string written(line.substr(token.begin, numberLength));
   if (token.hasUnit()) {
     written += ' ';
-    written += token.unit ? token.unit->unit->symbol : line.substr(token.unitBegin, token.unitEnd - token.unitBegin);
+    written += token.unit ? token.unit->unit->symbol
+                          : line.substr(token.unitBegin, token.unitEnd - token.unitBegin);
   }
   auto read = units::readQuantityOf(kinds, written, units::Dialect::kPerson, range);
   if (read) return read;
@@ -290,8 +327,9 @@ std::expected<units::ReadQuantity, text::TextFault> readToken(std::string_view l
     return std::min(token.unitBegin + (place - numberLength - 1), token.unitEnd);
   };
   text::TextFault fault = read.error();
-  const std::size_t end =
-      fault.offset + fault.length >= written.size() ? token.end : inLine(fault.offset + fault.length);
+  const std::size_t end = fault.offset + fault.length >= written.size()
+                              ? token.end
+                              : inLine(fault.offset + fault.length);
   fault.offset = inLine(fault.offset);
   fault.length = fault.length == 0 ? 0 : std::max(end, fault.offset) - fault.offset;
   return std::unexpected(std::move(fault));

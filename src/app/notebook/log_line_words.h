@@ -22,21 +22,25 @@ struct LogUnit {
   std::string_view pressureKind;  ///< `gauge` of `barg`, `abs` of `psia`, else empty
 };
 
-/// A piece of the line, by byte offsets. A number has the word behind it as its unit, whether that is
-/// known or not, unless it is a word of the log itself.
+/// A piece of the line, by byte offsets. A number has the word behind it as its unit, whether that
+/// is known or not, unless it is a word of the log itself.
 struct LogToken {
   bool isNumber = false;
   std::size_t begin = 0;
   std::size_t end = 0;
   std::size_t numberEnd = 0;  ///< numbers only, as are the next two
   std::size_t unitBegin = 0;
-  std::size_t unitEnd = 0;  ///< equal to unitBegin where there is no unit
+  std::size_t unitEnd = 0;      ///< equal to unitBegin where there is no unit
   std::optional<LogUnit> unit;  ///< where it is known
 
   [[nodiscard]] bool hasUnit() const { return unitEnd > unitBegin; }
   /// Whether the number stands alone: `21 drops`, not `2-propanol`.
-  [[nodiscard]] bool standsFree() const { return isNumber && (!hasUnit() || unitBegin > numberEnd); }
-  [[nodiscard]] std::string_view of(std::string_view line) const { return line.substr(begin, end - begin); }
+  [[nodiscard]] bool standsFree() const {
+    return isNumber && (!hasUnit() || unitBegin > numberEnd);
+  }
+  [[nodiscard]] std::string_view of(std::string_view line) const {
+    return line.substr(begin, end - begin);
+  }
 };
 
 struct LogTokens {
@@ -67,7 +71,8 @@ struct LogTokens {
 
 /// The quantity by the one reader of quantities; a fault points into the line.
 [[nodiscard]] std::expected<units::ReadQuantity, text::TextFault> readToken(
-    std::string_view line, const LogToken& token, std::initializer_list<units::Kind> kinds, units::Range range);
+    std::string_view line, const LogToken& token, std::initializer_list<units::Kind> kinds,
+    units::Range range);
 
 /// The number in a unit of the same kind, by integers of the unit table: `50 uL` is 50 µL exactly.
 [[nodiscard]] double inUnit(const units::ReadQuantity& read, std::string_view target);

@@ -19,10 +19,14 @@ namespace {
 constexpr std::size_t kLongestLine = std::size_t{16} << 20U;
 
 Checked<void> checkLine(const std::string& line) {
-  if (text::trimmed(line).empty()) return askedFault("entry", "the entry is empty", "say what happened");
-  if (line.size() > kLongestLine) return askedFault("entry", "the entry is longer than 16 MB", "attach it as a file");
-  if (text::firstInvalidUtf8(line)) return askedFault("entry", "the entry holds bytes that are not UTF-8", "type it again");
-  if (line.find('\0') != std::string::npos) return askedFault("entry", "the entry holds a NUL character", "type it again");
+  if (text::trimmed(line).empty())
+    return askedFault("entry", "the entry is empty", "say what happened");
+  if (line.size() > kLongestLine)
+    return askedFault("entry", "the entry is longer than 16 MB", "attach it as a file");
+  if (text::firstInvalidUtf8(line))
+    return askedFault("entry", "the entry holds bytes that are not UTF-8", "type it again");
+  if (line.find('\0') != std::string::npos)
+    return askedFault("entry", "the entry holds a NUL character", "type it again");
   return {};
 }
 
@@ -37,12 +41,15 @@ Checked<ReadEntry> readEntry(const RunRecord& run, const LogRequest& request) {
                     entry.doubt->mend);
 }
 
-Checked<LogTime> timeOf(const LogRequest& request, const units::Moment& now, const units::Moment& otherwise) {
+Checked<LogTime> timeOf(const LogRequest& request, const units::Moment& now,
+                        const units::Moment& otherwise) {
   if (!request.at) return LogTime{otherwise, false, ""};
   const auto time = readLogTime(*request.at, now);
   if (time) return *time;
-  return askedFault("--at", fmt::format("{}: {}", text::quoted(*request.at), whatWithPosition(time.error(), *request.at)),
-                    time.error().mend);
+  return askedFault(
+      "--at",
+      fmt::format("{}: {}", text::quoted(*request.at), whatWithPosition(time.error(), *request.at)),
+      time.error().mend);
 }
 
 /// The photo's bytes, read before anything is written.
@@ -52,12 +59,14 @@ Checked<std::string> photoBytes(const std::string& file) {
 }
 
 int numberOf(const std::vector<NumberedEvent>& events, RowNumber n) {
-  const auto found = std::ranges::find_if(events, [n](const NumberedEvent& entry) { return entry.event.n == n; });
+  const auto found =
+      std::ranges::find_if(events, [n](const NumberedEvent& entry) { return entry.event.n == n; });
   return found == events.end() ? 0 : found->number;
 }
 
 /// Writes the event, and the state it implies, in one action.
-Checked<LoggedEntry> write(const Desk& desk, const RunRecord& run, const Action& action, ReadEntry entry, bool late) {
+Checked<LoggedEntry> write(const Desk& desk, const RunRecord& run, const Action& action,
+                           ReadEntry entry, bool late) {
   const auto photo = photoBytes(entry.photo);
   if (!photo) return std::unexpected(photo.error());
   entry.event.run = run.n;
@@ -103,7 +112,8 @@ Checked<std::vector<NumberedEvent>> numberedEvents(Notebook& notebook, const Run
 Checked<LoggedEntry> logLine(const Desk& desk, const RunRecord& run, const LogRequest& request) {
   if (const auto sound = checkLine(request.line); !sound) return std::unexpected(sound.error());
   const Deed deed = run.state == RunState::kSealed ? Deed::kAddAddendum : Deed::kLog;
-  if (const auto may = mayDo(run.state, deed, request.reason); !may) return std::unexpected(may.error());
+  if (const auto may = mayDo(run.state, deed, request.reason); !may)
+    return std::unexpected(may.error());
   auto entry = readEntry(run, request);
   if (!entry) return std::unexpected(entry.error());
   const Action action = desk.action("log", request.reason);
@@ -114,18 +124,22 @@ Checked<LoggedEntry> logLine(const Desk& desk, const RunRecord& run, const LogRe
   return write(desk, run, action, *std::move(entry), time->late);
 }
 
-Checked<LoggedEntry> correctEvent(const Desk& desk, const RunRecord& run, int number, const LogRequest& request) {
+Checked<LoggedEntry> correctEvent(const Desk& desk, const RunRecord& run, int number,
+                                  const LogRequest& request) {
   if (const auto sound = checkLine(request.line); !sound) return std::unexpected(sound.error());
-  if (const auto may = mayDo(run.state, Deed::kCorrectLog, request.reason); !may) return std::unexpected(may.error());
+  if (const auto may = mayDo(run.state, Deed::kCorrectLog, request.reason); !may)
+    return std::unexpected(may.error());
   const auto events = numberedEvents(desk.notebook, run);
   if (!events) return std::unexpected(events.error());
   const auto original = std::ranges::find(*events, number, &NumberedEvent::number);
   if (original == events->end()) {
-    return askedFault("event", fmt::format("{} has no entry {}", run.code, number), "see its numbers with show");
+    return askedFault("event", fmt::format("{} has no entry {}", run.code, number),
+                      "see its numbers with show");
   }
   if (original->event.supersededBy != 0) {
-    return askedFault("event", fmt::format("entry {} was corrected already, by entry {}", number,
-                                           numberOf(*events, original->event.supersededBy)),
+    return askedFault("event",
+                      fmt::format("entry {} was corrected already, by entry {}", number,
+                                  numberOf(*events, original->event.supersededBy)),
                       "correct that one");
   }
   auto entry = readEntry(run, request);

@@ -11,15 +11,16 @@
 
 namespace vialkeeper::app {
 
-/// An entry of the log with its number in the run, by which people correct it: 1, 2, 3 in the order of
-/// writing down.
+/// An entry of the log with its number in the run, by which people correct it: 1, 2, 3 in the order
+/// of writing down.
 struct NumberedEvent {
   int number = 0;
   EventRecord event;
 };
 
 /// The run's entries in the order in which they happened.
-[[nodiscard]] Checked<std::vector<NumberedEvent>> numberedEvents(Notebook& notebook, const RunRecord& run);
+[[nodiscard]] Checked<std::vector<NumberedEvent>> numberedEvents(Notebook& notebook,
+                                                                 const RunRecord& run);
 
 /// A line to be logged.
 struct LogRequest {
@@ -35,10 +36,11 @@ struct LoggedEntry {
   bool late = false;     ///< back-dated by more than a day
 };
 
-/// Logs one line. A line that looks like a shorthand but cannot be read is a fault that points at the
-/// place, unless it is accepted as text. `lamp on` moves a planned or charged run to irradiating; a photo
-/// is kept byte for byte; a sealed run takes addenda only.
-[[nodiscard]] Checked<LoggedEntry> logLine(const Desk& desk, const RunRecord& run, const LogRequest& request);
+/// Logs one line. A line that looks like a shorthand but cannot be read is a fault that points at
+/// the place, unless it is accepted as text. `lamp on` moves a planned or charged run to
+/// irradiating; a photo is kept byte for byte; a sealed run takes addenda only.
+[[nodiscard]] Checked<LoggedEntry> logLine(const Desk& desk, const RunRecord& run,
+                                           const LogRequest& request);
 
 /// Puts a new entry in the place of one that was wrong; both stay visible. Its time is that of the
 /// original unless another is given.

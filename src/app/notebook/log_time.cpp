@@ -24,20 +24,33 @@ using text::TextFault;
 using text::textFault;
 using units::Moment;
 
-constexpr const char* kForms = "write it like 14:20, yesterday 17:05, 20 min ago or 2026-03-04T14:20+01:00";
+constexpr const char* kForms =
+    "write it like 14:20, yesterday 17:05, 20 min ago or 2026-03-04T14:20+01:00";
 constexpr hours kLate{24};
 constexpr hours kFurthest{24 * 36525};
 
 // Words for the units of time beside those of the unit table.
-constexpr auto kTimeWords = std::to_array<std::pair<std::string_view, std::string_view>>(
-    {{"mins", "min"}, {"minute", "min"}, {"minutes", "min"}, {"m", "min"}, {"hour", "h"}, {"hours", "h"},
-     {"hr", "h"}, {"hrs", "h"}, {"sec", "s"}, {"secs", "s"}, {"second", "s"}, {"seconds", "s"}, {"day", "d"},
-     {"days", "d"}});
+constexpr auto kTimeWords =
+    std::to_array<std::pair<std::string_view, std::string_view>>({{"mins", "min"},
+                                                                  {"minute", "min"},
+                                                                  {"minutes", "min"},
+                                                                  {"m", "min"},
+                                                                  {"hour", "h"},
+                                                                  {"hours", "h"},
+                                                                  {"hr", "h"},
+                                                                  {"hrs", "h"},
+                                                                  {"sec", "s"},
+                                                                  {"secs", "s"},
+                                                                  {"second", "s"},
+                                                                  {"seconds", "s"},
+                                                                  {"day", "d"},
+                                                                  {"days", "d"}});
 
 bool isDigit(char c) { return c >= '0' && c <= '9'; }
 
 /// Time since midnight of `9:05`, `14:20` or `14:20:30`, the whole of the text.
-std::expected<seconds, TextFault> readTimeOfDay(std::string_view text, std::size_t begin, std::size_t end) {
+std::expected<seconds, TextFault> readTimeOfDay(std::string_view text, std::size_t begin,
+                                                std::size_t end) {
   std::array<int, 3> parts{};
   std::size_t count = 0;
   std::size_t at = begin;
@@ -63,7 +76,8 @@ std::expected<seconds, TextFault> readTimeOfDay(std::string_view text, std::size
   return hours{parts[0]} + minutes{parts[1]} + seconds{parts[2]};
 }
 
-/// A span as people write it, with blanks and the table's units put in; and where each byte came from.
+/// A span as people write it, with blanks and the table's units put in; and where each byte came
+/// from.
 struct PlainSpan {
   std::string text;
   std::vector<std::size_t> from;
@@ -91,22 +105,28 @@ PlainSpan plainSpan(std::string_view text, std::size_t begin, std::size_t end) {
     }
     do ++next;
     while (next < end && blankLength(text, next) == 0 && !isDigit(text[next]));
-    const std::string word = text::asciiLowered(text.substr(at, std::min<std::size_t>(next - at, 12)));
-    const auto known = std::ranges::find(kTimeWords, word, &std::pair<std::string_view, std::string_view>::first);
-    plain.add(known == kTimeWords.end() ? text.substr(at, next - at) : known->second, at, next - at);
+    const std::string word =
+        text::asciiLowered(text.substr(at, std::min<std::size_t>(next - at, 12)));
+    const auto known =
+        std::ranges::find(kTimeWords, word, &std::pair<std::string_view, std::string_view>::first);
+    plain.add(known == kTimeWords.end() ? text.substr(at, next - at) : known->second, at,
+              next - at);
     at = next;
   }
   return plain;
 }
 
 /// The span before `ago`.
-std::expected<milliseconds, TextFault> readSpan(std::string_view text, std::size_t begin, std::size_t end) {
+std::expected<milliseconds, TextFault> readSpan(std::string_view text, std::size_t begin,
+                                                std::size_t end) {
   const PlainSpan plain = plainSpan(text, begin, end);
-  const auto span =
-      units::readQuantity<units::Duration>(plain.text, units::Dialect::kPerson, units::Range::kNonNegative);
+  const auto span = units::readQuantity<units::Duration>(plain.text, units::Dialect::kPerson,
+                                                         units::Range::kNonNegative);
   if (!span) {
     TextFault fault = span.error();
-    const auto inText = [&](std::size_t place) { return place < plain.from.size() ? plain.from[place] : end; };
+    const auto inText = [&](std::size_t place) {
+      return place < plain.from.size() ? plain.from[place] : end;
+    };
     const std::size_t last = inText(fault.offset + fault.length);
     fault.offset = inText(fault.offset);
     fault.length = fault.length == 0 ? 0 : std::max(last, fault.offset) - fault.offset;
@@ -155,7 +175,8 @@ class TimeReader {
     if (!at) return std::unexpected(at.error());
     if (at->utc > m_now.utc) return stillToCome(*at);
     const milliseconds back = m_now.utc - at->utc;
-    if (back > kFurthest) return textFault(m_begin, m_end - m_begin, "more than 100 years ago", "check the year");
+    if (back > kFurthest)
+      return textFault(m_begin, m_end - m_begin, "more than 100 years ago", "check the year");
     LogTime read{.at = *at, .late = back > kLate, .sentence = dayAndTime(*at, m_now)};
     if (back >= seconds{1}) read.sentence += fmt::format(" ({} ago)", spanOf(back));
     return read;
@@ -204,15 +225,17 @@ class TimeReader {
     if (m_end - m_begin <= 64 && readSpan(m_text, m_begin, m_end)) {
       return textFault(m_end, 0, "ago is missing behind the time span", "write it like 20 min ago");
     }
-    return textFault(m_begin + digits, m_end - m_begin - digits, "this time cannot be read", kForms);
+    return textFault(m_begin + digits, m_end - m_begin - digits, "this time cannot be read",
+                     kForms);
   }
 
   std::unexpected<TextFault> stillToCome(const Moment& at) const {
-    return textFault(m_begin, m_end - m_begin,
-                     fmt::format("{} is still to come, for it is {} now", dayAndTime(at, m_now), clockOf(m_now)),
-                     at.utc - m_now.utc <= hours{24} && at.offset == m_now.offset
-                         ? fmt::format("give an earlier time, or yesterday {} if that is meant", clockOf(at))
-                         : std::string("give the time at which it happened"));
+    return textFault(
+        m_begin, m_end - m_begin,
+        fmt::format("{} is still to come, for it is {} now", dayAndTime(at, m_now), clockOf(m_now)),
+        at.utc - m_now.utc <= hours{24} && at.offset == m_now.offset
+            ? fmt::format("give an earlier time, or yesterday {} if that is meant", clockOf(at))
+            : std::string("give the time at which it happened"));
   }
 
   std::string_view m_text;

@@ -15,7 +15,8 @@
 #include "text/fault.h"
 
 /// The port to the notebook file: what use cases ask of storage. Implemented in `db` over SQLite.
-/// Every fault is of FaultKind::kNotebook where the file is at fault, kInput where what was asked is.
+/// Every fault is of FaultKind::kNotebook where the file is at fault, kInput where what was asked
+/// is.
 namespace vialkeeper::app {
 
 using text::Checked;
@@ -46,7 +47,8 @@ class Writing {
   virtual Checked<RowNumber> addAttachment(std::string_view bytes) = 0;
   /// The next code of this person, `KW-0043`; taken only if the run is added in the same action.
   virtual Checked<std::string> nextRunCode(std::string_view person) = 0;
-  virtual Checked<RowNumber> addRun(const RunRecord& run, std::span<const ComponentRecord> components) = 0;
+  virtual Checked<RowNumber> addRun(const RunRecord& run,
+                                    std::span<const ComponentRecord> components) = 0;
   virtual Checked<void> changeRun(const RunRecord& run) = 0;
   virtual Checked<void> changeComponent(const ComponentRecord& component) = 0;
   virtual Checked<RowNumber> addEvent(const EventRecord& event) = 0;
@@ -92,7 +94,8 @@ class Notebook {
 
   /// Carries out one action: all of it in one transaction with its revision, or nothing.
   /// `work` may be called with the notebook as it is then; a fault from it rolls everything back.
-  virtual Checked<void> act(const Action& action, const std::function<Checked<void>(Writing&)>& work) = 0;
+  virtual Checked<void> act(const Action& action,
+                            const std::function<Checked<void>(Writing&)>& work) = 0;
 
   virtual Checked<std::vector<Person>> people() = 0;
   virtual Checked<std::optional<Person>> findPerson(std::string_view code) = 0;
@@ -100,7 +103,8 @@ class Notebook {
   virtual Checked<std::vector<SubstanceRecord>> substances() = 0;
   virtual Checked<SubstanceRecord> substance(RowNumber n) = 0;
   virtual Checked<std::optional<SubstanceRecord>> substanceByCas(std::string_view cas) = 0;
-  virtual Checked<std::optional<SubstanceRecord>> substanceByStructure(std::string_view canonicalSmiles) = 0;
+  virtual Checked<std::optional<SubstanceRecord>> substanceByStructure(
+      std::string_view canonicalSmiles) = 0;
   /// By name or synonym, folded (fold_name.h): there may be several.
   virtual Checked<std::vector<SubstanceRecord>> substancesByName(std::string_view foldedName) = 0;
   /// Every name and synonym with its substance, for near misses and completion.
@@ -129,9 +133,11 @@ class Notebook {
 
   virtual Checked<NotebookSummary> summary() = 0;
   virtual Checked<VerifyReport> verify() = 0;
-  /// A copy that was opened again and checked before it got its name. Fault: the file is there already.
+  /// A copy that was opened again and checked before it got its name. Fault: the file is there
+  /// already.
   virtual Checked<void> backup(const std::string& file) = 0;
-  /// Everything, as text and raw files, into a new folder from which importAll makes the same notebook.
+  /// Everything, as text and raw files, into a new folder from which importAll makes the same
+  /// notebook.
   virtual Checked<void> exportAll(const std::string& folder) = 0;
   /// Fills this notebook, which must be empty, from such a folder.
   virtual Checked<void> importAll(const std::string& folder) = 0;

@@ -43,7 +43,7 @@ struct SubstanceRecord {
   std::string cas = {};
   std::optional<double> molarMass_g_mol = {};
   std::optional<double> uMolarMass_g_mol = {};
-  std::string fingerprint = {};           ///< bytes, for the substructure prefilter; empty without structure
+  std::string fingerprint = {};  ///< bytes, for the substructure prefilter; empty without structure
   std::vector<std::string> hazards = {};  ///< codes
   std::string note = {};
 };
@@ -132,8 +132,8 @@ struct ComponentRecord {
 struct EventRecord {
   RowNumber n = 0;
   RowNumber run = 0;
-  std::string kind = {};  ///< `lamp on`, `pressure`, `observation`, …
-  std::string raw = {};   ///< as typed
+  std::string kind = {};   ///< `lamp on`, `pressure`, `observation`, …
+  std::string raw = {};    ///< as typed
   units::Moment at{};      ///< when it happened
   units::Moment logged{};  ///< when it was written down
   std::string person = {};

@@ -12,8 +12,8 @@
 #include "app/notebook/records.h"
 #include "text/fault.h"
 
-/// The life of a run: which state follows which, and what may be done in each. docs/run-life.md shows
-/// the same tables; a test compares the two.
+/// The life of a run: which state follows which, and what may be done in each. docs/run-life.md
+/// shows the same tables; a test compares the two.
 namespace vialkeeper::app {
 
 enum class Permission { kNo, kWithReason, kYes };
@@ -107,10 +107,12 @@ inline constexpr auto kDeedRules = [] {
   return Permission::kNo;
 }
 
-/// The state after a trigger: the same one where it moves nothing. A trigger never moves a run back.
+/// The state after a trigger: the same one where it moves nothing. A trigger never moves a run
+/// back.
 [[nodiscard]] constexpr RunState stateAfter(RunState state, Trigger trigger) {
   for (const Transition& transition : kTransitions) {
-    if (trigger != Trigger::kNone && transition.from == state && transition.impliedBy == trigger) return transition.to;
+    if (trigger != Trigger::kNone && transition.from == state && transition.impliedBy == trigger)
+      return transition.to;
   }
   return state;
 }
@@ -120,9 +122,10 @@ inline constexpr auto kDeedRules = [] {
   return eventKind == event_kind::kLampOn ? Trigger::kLampOn : Trigger::kNone;
 }
 
-/// Whether the run may go from one state to the other. `reason` is what the user gave; blanks are none.
-/// Fault: the transition does not exist, or wants a reason; the field is `state`.
-[[nodiscard]] text::Checked<void> mayTransition(RunState from, RunState to, std::string_view reason = {});
+/// Whether the run may go from one state to the other. `reason` is what the user gave; blanks are
+/// none. Fault: the transition does not exist, or wants a reason; the field is `state`.
+[[nodiscard]] text::Checked<void> mayTransition(RunState from, RunState to,
+                                                std::string_view reason = {});
 
 /// Whether something may be done to a run in this state.
 /// Fault: it may not, or not without a reason; the field is `state`.

@@ -35,7 +35,8 @@ SubstanceDraft draftOf(const ComponentPlan& component) {
     draft.formula = solvent->formula;
     draft.smiles = solvent->smiles;
     if (draft.cas.empty()) draft.cas = solvent->cas;
-    if (foldName(solvent->name) != foldName(component.name)) draft.synonyms.push_back(solvent->name);
+    if (foldName(solvent->name) != foldName(component.name))
+      draft.synonyms.push_back(solvent->name);
   }
   return draft;
 }
@@ -46,7 +47,8 @@ struct ShelfPlace {
   SubstanceRecord record;  ///< of a new card
 };
 
-Checked<ShelfPlace> placeOnShelf(Notebook& notebook, const ComponentPlan& component, text::Notices& notices) {
+Checked<ShelfPlace> placeOnShelf(Notebook& notebook, const ComponentPlan& component,
+                                 text::Notices& notices) {
   auto record = describeSubstance(draftOf(component));
   if (!record) return std::unexpected(record.error());
   const auto match = matchSubstance(notebook, *record);
@@ -54,13 +56,15 @@ Checked<ShelfPlace> placeOnShelf(Notebook& notebook, const ComponentPlan& compon
   if (!match->same.empty()) return ShelfPlace{match->same.front().n, {}};
   if (!match->nearMisses.empty()) {
     notices.push_back({"near-miss",
-                       fmt::format("{} is new on the shelf, where {} looks like it", component.name, match->nearMisses.front()),
+                       fmt::format("{} is new on the shelf, where {} looks like it", component.name,
+                                   match->nearMisses.front()),
                        "component." + component.key});
   }
   return ShelfPlace{0, *std::move(record)};
 }
 
-ComponentRecord componentRecord(const ComponentPlan& plan, const ComponentCharge& charge, int position) {
+ComponentRecord componentRecord(const ComponentPlan& plan, const ComponentCharge& charge,
+                                int position) {
   ComponentRecord record{.position = position,
                          .key = plan.key,
                          .role = std::string(toText(plan.role)),
@@ -96,7 +100,8 @@ RunRecord runRecord(const PlannedRun& planned) {
 }
 
 /// The shelf place of every component, substances that occur twice in the plan found once.
-Checked<std::vector<ShelfPlace>> placeAll(Notebook& notebook, const charge::Plan& plan, text::Notices& notices) {
+Checked<std::vector<ShelfPlace>> placeAll(Notebook& notebook, const charge::Plan& plan,
+                                          text::Notices& notices) {
   std::vector<ShelfPlace> places;
   text::Faults faults;
   for (const ComponentPlan& component : plan.components) {
@@ -124,14 +129,16 @@ bool isSameSubstance(const SubstanceRecord& a, const SubstanceRecord& b) {
 }
 
 Checked<void> writeRun(Writing& writing, RunRecord& run, std::vector<ComponentRecord>& components,
-                       std::vector<ShelfPlace>& places, const std::string& planText, std::vector<std::string>& added) {
+                       std::vector<ShelfPlace>& places, const std::string& planText,
+                       std::vector<std::string>& added) {
   for (std::size_t i = 0; i < places.size(); ++i) {
     if (places[i].n == 0) {
       const auto n = writing.addSubstance(places[i].record);
       if (!n) return std::unexpected(n.error());
       added.push_back(places[i].record.name);
       for (std::size_t j = i; j < places.size(); ++j) {
-        if (places[j].n == 0 && isSameSubstance(places[j].record, places[i].record)) places[j].n = *n;
+        if (places[j].n == 0 && isSameSubstance(places[j].record, places[i].record))
+          places[j].n = *n;
       }
     }
     components[i].substance = places[i].n;
@@ -154,7 +161,9 @@ Checked<void> writeRun(Writing& writing, RunRecord& run, std::vector<ComponentRe
 charge::Weighings recordedWeighings(const std::vector<ComponentRecord>& components) {
   charge::Weighings weighings;
   for (const ComponentRecord& component : components) {
-    charge::Weighing weighing{.key = component.key, .actual = units::Mass::fromSi(0.0), .asWritten = component.actualText};
+    charge::Weighing weighing{.key = component.key,
+                              .actual = units::Mass::fromSi(0.0),
+                              .asWritten = component.actualText};
     if (component.actual_mg) {
       weighing.actual = units::Mass::fromMilligrams(*component.actual_mg);
     } else if (component.actual_uL) {
@@ -186,7 +195,8 @@ Checked<RunSheet> loadRun(Notebook& notebook, const RunRecord& run, charge::Reta
   if (plan->chemist.empty()) plan->chemist = run.person;
   if (plan->date.empty()) plan->date = toIsoText(run.created).substr(0, 10);
   return RunSheet{run, *std::move(components),
-                  PlannedRun{*std::move(planText), *std::move(plan), *std::move(substances), *std::move(result)},
+                  PlannedRun{*std::move(planText), *std::move(plan), *std::move(substances),
+                             *std::move(result)},
                   !weighings.empty()};
 }
 
@@ -210,7 +220,9 @@ Checked<AddedRun> addRun(const Desk& desk, const NewRun& wanted) {
   AddedRun added{.run = runRecord(*planned), .newSubstances = {}, .notices = {}};
   if (!wanted.title.empty()) added.run.title = wanted.title;
   if (!planned->plan.code.empty()) {
-    added.notices.push_back({"code-ignored", "the plan's own code is not used: the notebook gives the next free one", "code"});
+    added.notices.push_back(
+        {"code-ignored", "the plan's own code is not used: the notebook gives the next free one",
+         "code"});
   }
   added.run.aim = wanted.aim;
   added.run.person = desk.person;
@@ -220,21 +232,24 @@ Checked<AddedRun> addRun(const Desk& desk, const NewRun& wanted) {
   if (!places) return std::unexpected(places.error());
   std::vector<ComponentRecord> components;
   for (std::size_t i = 0; i < planned->plan.components.size(); ++i) {
-    components.push_back(componentRecord(planned->plan.components[i], planned->charge.components[i], static_cast<int>(i)));
+    components.push_back(componentRecord(planned->plan.components[i], planned->charge.components[i],
+                                         static_cast<int>(i)));
   }
-  const auto done = desk.notebook.act(desk.action(wanted.clonedFrom == 0 ? "add" : "clone"), [&](Writing& writing) {
-    return writeRun(writing, added.run, components, *places, planText, added.newSubstances);
-  });
+  const auto done = desk.notebook.act(
+      desk.action(wanted.clonedFrom == 0 ? "add" : "clone"), [&](Writing& writing) {
+        return writeRun(writing, added.run, components, *places, planText, added.newSubstances);
+      });
   if (!done) return std::unexpected(done.error());
   for (const ComponentCharge& component : planned->charge.components) {
     added.notices.insert(added.notices.end(), component.notices.begin(), component.notices.end());
   }
-  added.notices.insert(added.notices.end(), planned->charge.notices.begin(), planned->charge.notices.end());
+  added.notices.insert(added.notices.end(), planned->charge.notices.begin(),
+                       planned->charge.notices.end());
   return added;
 }
 
-Checked<AddedRun> cloneRun(const Desk& desk, const RunRecord& original, const std::vector<PlanOverride>& overrides,
-                           const std::string& title) {
+Checked<AddedRun> cloneRun(const Desk& desk, const RunRecord& original,
+                           const std::vector<PlanOverride>& overrides, const std::string& title) {
   auto planText = desk.notebook.attachment(original.plan);
   if (!planText) return std::unexpected(planText.error());
   return addRun(desk, {.planText = *std::move(planText),

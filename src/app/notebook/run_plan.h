@@ -35,9 +35,9 @@ struct PlanOverride {
 /// A run to be added.
 struct NewRun {
   std::string planText;
-  std::string planFile;                  ///< named in faults
+  std::string planFile;  ///< named in faults
   std::vector<PlanOverride> overrides = {};
-  std::string title = {};                ///< in place of the plan's
+  std::string title = {};  ///< in place of the plan's
   std::string aim = {};
   RowNumber clonedFrom = 0;
 };
@@ -49,12 +49,13 @@ struct AddedRun {
   text::Notices notices;                   ///< near misses on the shelf, and those of the charge
 };
 
-/// Adds a run from a plan: sets the overrides, works out the charge, matches every substance with the
-/// shelf or puts it there, gives the next code of the person.
+/// Adds a run from a plan: sets the overrides, works out the charge, matches every substance with
+/// the shelf or puts it there, gives the next code of the person.
 [[nodiscard]] Checked<AddedRun> addRun(const Desk& desk, const NewRun& wanted);
 
 /// Adds a run with the plan of another, as it is now.
 [[nodiscard]] Checked<AddedRun> cloneRun(const Desk& desk, const RunRecord& original,
-                                         const std::vector<PlanOverride>& overrides, const std::string& title);
+                                         const std::vector<PlanOverride>& overrides,
+                                         const std::string& title);
 
 }  // namespace vialkeeper::app

@@ -28,7 +28,8 @@ void note(Faults& faults, std::string field, std::string what, std::string mend)
   faults.push_back({.field = std::move(field), .what = std::move(what), .mend = std::move(mend)});
 }
 
-std::optional<Percent> readPercent(const std::string& field, const std::string& typed, Faults& faults) {
+std::optional<Percent> readPercent(const std::string& field, const std::string& typed,
+                                   Faults& faults) {
   std::string_view rest = text::trimmed(typed);
   if (rest.ends_with('%')) rest = text::trimmed(rest.substr(0, rest.size() - 1));
   std::string_view doubt;
@@ -40,9 +41,11 @@ std::optional<Percent> readPercent(const std::string& field, const std::string& 
     break;
   }
   const auto value = units::readNumber(rest, units::Dialect::kPerson);
-  const auto u = doubt.empty() ? std::expected<double, text::TextFault>(0.0) : units::readNumber(doubt, units::Dialect::kPerson);
+  const auto u = doubt.empty() ? std::expected<double, text::TextFault>(0.0)
+                               : units::readNumber(doubt, units::Dialect::kPerson);
   if (!value || !u || *u < 0.0) {
-    note(faults, field, fmt::format("{} is no percentage", text::quoted(typed)), "write for example 71 % or 71 ± 2 %");
+    note(faults, field, fmt::format("{} is no percentage", text::quoted(typed)),
+         "write for example 71 % or 71 ± 2 %");
     return std::nullopt;
   }
   // A little above 100 is measurement; much above is a slip.
@@ -53,7 +56,8 @@ std::optional<Percent> readPercent(const std::string& field, const std::string& 
   return Percent{*value, doubt.empty() ? std::nullopt : std::optional(*u)};
 }
 
-void readWords(const std::optional<std::string>& given, const char* field, std::string& into, Faults& faults) {
+void readWords(const std::optional<std::string>& given, const char* field, std::string& into,
+               Faults& faults) {
   if (!given) return;
   if (text::firstInvalidUtf8(*given) || given->find('\0') != std::string::npos) {
     note(faults, field, "the text holds bytes that are no text", "type it again");
@@ -64,7 +68,8 @@ void readWords(const std::optional<std::string>& given, const char* field, std::
 
 }  // namespace
 
-Checked<RunRecord> recordResult(const Desk& desk, const RunRecord& run, const ResultRequest& request) {
+Checked<RunRecord> recordResult(const Desk& desk, const RunRecord& run,
+                                const ResultRequest& request) {
   RunRecord changed = run;
   Faults faults;
   if (request.yield || request.conversion) {
@@ -84,7 +89,8 @@ Checked<RunRecord> recordResult(const Desk& desk, const RunRecord& run, const Re
     }
   }
   if (request.conclusion) add(faults, mayDo(run.state, Deed::kConclude, request.reason));
-  if (request.aim || request.title) add(faults, mayDo(run.state, Deed::kWriteHeadings, request.reason));
+  if (request.aim || request.title)
+    add(faults, mayDo(run.state, Deed::kWriteHeadings, request.reason));
   readWords(request.conclusion, "--conclusion", changed.conclusion, faults);
   readWords(request.aim, "--aim", changed.aim, faults);
   readWords(request.title, "--title", changed.title, faults);

@@ -16,13 +16,14 @@ struct ResultRequest {
   std::optional<std::string> conclusion = {};
   std::optional<std::string> aim = {};
   std::optional<std::string> title = {};
-  std::optional<std::string> state = {};       ///< `worked-up`, `closed`, …
+  std::optional<std::string> state = {};  ///< `worked-up`, `closed`, …
   std::string reason = {};
 };
 
-/// Records results, words and the next state in one action. A result moves a charged or irradiating run
-/// to worked up. Faults, together: a percentage that cannot be read or lies outside 0 to 110, an unknown
-/// state, a step that the run's life does not allow or for which it wants a reason.
-[[nodiscard]] Checked<RunRecord> recordResult(const Desk& desk, const RunRecord& run, const ResultRequest& request);
+/// Records results, words and the next state in one action. A result moves a charged or irradiating
+/// run to worked up. Faults, together: a percentage that cannot be read or lies outside 0 to 110,
+/// an unknown state, a step that the run's life does not allow or for which it wants a reason.
+[[nodiscard]] Checked<RunRecord> recordResult(const Desk& desk, const RunRecord& run,
+                                              const ResultRequest& request);
 
 }  // namespace vialkeeper::app

@@ -13,13 +13,14 @@ Checked<SigningKey> keyOf(const Desk& desk) {
   const auto key = desk.notebook.signingKey(desk.person);
   if (!key) return std::unexpected(key.error());
   if (*key) return **key;
-  return askedFault("key", fmt::format("{} has no signing key", desk.person), "make one first: key new");
+  return askedFault("key", fmt::format("{} has no signing key", desk.person),
+                    "make one first: key new");
 }
 
 /// Signs what the notebook holds at that moment and keeps the seal, within one action.
 Checked<void> signInside(const Desk& desk, Signer& signer, Writing& writing, const SigningKey& key,
-                         const RunRecord& run, const std::string& meaning, const std::string& passphrase,
-                         const units::Moment& at) {
+                         const RunRecord& run, const std::string& meaning,
+                         const std::string& passphrase, const units::Moment& at) {
   const auto canonical = desk.notebook.canonicalRun(run.n);
   if (!canonical) return std::unexpected(canonical.error());
   auto seal = signer.sign(key, passphrase, meaning, at, *canonical);
@@ -42,11 +43,14 @@ Checked<void> makeSigningKey(const Desk& desk, Signer& signer, const std::string
   });
 }
 
-Checked<void> sealRun(const Desk& desk, Signer& signer, const RunRecord& run, const std::string& passphrase) {
-  if (run.state == RunState::kSealed) return askedFault(run.code, "the run is sealed already", "countersign it, or add an addendum");
+Checked<void> sealRun(const Desk& desk, Signer& signer, const RunRecord& run,
+                      const std::string& passphrase) {
+  if (run.state == RunState::kSealed)
+    return askedFault(run.code, "the run is sealed already", "countersign it, or add an addendum");
   if (run.state != RunState::kClosed) {
-    return askedFault(run.code, fmt::format("the run is {}, and only a closed run is sealed", toText(run.state)),
-                      "close it first: result RUN --state closed");
+    return askedFault(
+        run.code, fmt::format("the run is {}, and only a closed run is sealed", toText(run.state)),
+        "close it first: result RUN --state closed");
   }
   const auto key = keyOf(desk);
   if (!key) return std::unexpected(key.error());
@@ -59,14 +63,18 @@ Checked<void> sealRun(const Desk& desk, Signer& signer, const RunRecord& run, co
   });
 }
 
-Checked<void> countersignRun(const Desk& desk, Signer& signer, const RunRecord& run, const std::string& passphrase) {
-  if (run.state != RunState::kSealed) return askedFault(run.code, "the run is not sealed", "its author seals it first");
+Checked<void> countersignRun(const Desk& desk, Signer& signer, const RunRecord& run,
+                             const std::string& passphrase) {
+  if (run.state != RunState::kSealed)
+    return askedFault(run.code, "the run is not sealed", "its author seals it first");
   const auto seals = desk.notebook.seals(run.n);
   if (!seals) return std::unexpected(seals.error());
   const auto signedBefore = std::ranges::find(*seals, desk.person, &SealRecord::person);
   if (signedBefore != seals->end()) {
-    return askedFault(run.code, fmt::format("{} has signed this run already, as {}", desk.person, signedBefore->meaning),
-                      "a witness is somebody else");
+    return askedFault(
+        run.code,
+        fmt::format("{} has signed this run already, as {}", desk.person, signedBefore->meaning),
+        "a witness is somebody else");
   }
   const auto key = keyOf(desk);
   if (!key) return std::unexpected(key.error());

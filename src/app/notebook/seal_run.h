@@ -9,17 +9,18 @@
 
 namespace vialkeeper::app {
 
-/// Makes a signing key for the person at the desk. A later key takes the place of an earlier one for
-/// signing; what the earlier one signed stays valid.
-[[nodiscard]] Checked<void> makeSigningKey(const Desk& desk, Signer& signer, const std::string& passphrase);
+/// Makes a signing key for the person at the desk. A later key takes the place of an earlier one
+/// for signing; what the earlier one signed stays valid.
+[[nodiscard]] Checked<void> makeSigningKey(const Desk& desk, Signer& signer,
+                                           const std::string& passphrase);
 
-/// Seals a closed run: from then on it takes addenda only. The seal covers the run and all it links to.
-/// Fault: the run is not closed, the person has no key, the passphrase does not open it.
+/// Seals a closed run: from then on it takes addenda only. The seal covers the run and all it links
+/// to. Fault: the run is not closed, the person has no key, the passphrase does not open it.
 [[nodiscard]] Checked<void> sealRun(const Desk& desk, Signer& signer, const RunRecord& run,
                                     const std::string& passphrase);
 
-/// Adds a witness's signature to a sealed run. Fault: the run is not sealed, the witness is its author
-/// or has signed already.
+/// Adds a witness's signature to a sealed run. Fault: the run is not sealed, the witness is its
+/// author or has signed already.
 [[nodiscard]] Checked<void> countersignRun(const Desk& desk, Signer& signer, const RunRecord& run,
                                            const std::string& passphrase);
 

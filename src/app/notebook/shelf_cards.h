@@ -17,12 +17,12 @@ using TypedFields = std::vector<std::pair<std::string, std::string>>;
 
 /// Reads a card of one kind. Faults, together: an unknown field, a required one that is missing, a
 /// quantity of the wrong kind, a substance that is not on the shelf.
-[[nodiscard]] Checked<ShelfCard> readCard(Notebook& notebook, ShelfKind kind, const std::string& name,
-                                          const TypedFields& fields);
+[[nodiscard]] Checked<ShelfCard> readCard(Notebook& notebook, ShelfKind kind,
+                                          const std::string& name, const TypedFields& fields);
 
 /// Puts a card on the shelf. Fault: its name is taken.
-[[nodiscard]] Checked<ShelfCard> addShelfCard(const Desk& desk, ShelfKind kind, const std::string& name,
-                                              const TypedFields& fields);
+[[nodiscard]] Checked<ShelfCard> addShelfCard(const Desk& desk, ShelfKind kind,
+                                              const std::string& name, const TypedFields& fields);
 
 /// One field of a card as it is shown, with its unit; empty where it is not given.
 [[nodiscard]] std::string shownField(const ShelfCard& card, const ShelfField& field);
@@ -34,9 +34,9 @@ struct ShelfImport {
 };
 
 /// Imports cards from CSV: the columns are `name` and the kind's fields (for substances `name`,
-/// `synonyms` separated by semicolons, `formula`, `smiles`, `cas`, `molar_mass`, `hazards`, `note`).
-/// All of the file's faults are told at once, and nothing is written then.
-[[nodiscard]] Checked<ShelfImport> importShelf(const Desk& desk, std::string_view kindWord, std::string_view bytes,
-                                               const std::string& file);
+/// `synonyms` separated by semicolons, `formula`, `smiles`, `cas`, `molar_mass`, `hazards`,
+/// `note`). All of the file's faults are told at once, and nothing is written then.
+[[nodiscard]] Checked<ShelfImport> importShelf(const Desk& desk, std::string_view kindWord,
+                                               std::string_view bytes, const std::string& file);
 
 }  // namespace vialkeeper::app

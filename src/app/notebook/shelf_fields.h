@@ -25,10 +25,10 @@ struct ShelfField {
 /// A kind of card: lots, stocks, vials, lamps, balances, pipettes.
 struct ShelfKindInfo {
   ShelfKind kind;
-  std::string_view word;    ///< as a person types it: `vial`
-  std::string_view plural;  ///< `vials`
-  std::string_view table;   ///< in the file
-  bool ofSubstance = false; ///< lots and stocks belong to a substance
+  std::string_view word;     ///< as a person types it: `vial`
+  std::string_view plural;   ///< `vials`
+  std::string_view table;    ///< in the file
+  bool ofSubstance = false;  ///< lots and stocks belong to a substance
   std::span<const ShelfField> fields;
 };
 

@@ -19,7 +19,8 @@ class Signer {
 
   /// A new key pair of a person, its secret half sealed under the passphrase.
   /// Fault: a passphrase of fewer than eight characters, no memory for the key derivation.
-  virtual text::Checked<SigningKey> makeKey(const std::string& person, const std::string& passphrase) = 0;
+  virtual text::Checked<SigningKey> makeKey(const std::string& person,
+                                            const std::string& passphrase) = 0;
 
   /// Signs a canonical text. Fault: the passphrase does not open the key.
   virtual text::Checked<SealRecord> sign(const SigningKey& key, const std::string& passphrase,

@@ -25,7 +25,10 @@ charge::Plan planOf(const SubstanceDraft& draft, Faults& faults) {
   charge::ComponentPlan component{.key = "substance",
                                   .role = charge::Role::kOther,
                                   .name = draft.name,
-                                  .identity = {.smiles = draft.smiles, .formula = draft.formula, .molarMass = {}, .cas = draft.cas},
+                                  .identity = {.smiles = draft.smiles,
+                                               .formula = draft.formula,
+                                               .molarMass = {},
+                                               .cas = draft.cas},
                                   .amount = {charge::Basis::kAmount, 1.0, ""},
                                   .supply = charge::SolidSupply{},
                                   .device = {},
@@ -33,13 +36,15 @@ charge::Plan planOf(const SubstanceDraft& draft, Faults& faults) {
                                   .hazards = {},
                                   .place = {.path = "substance", .line = 0}};
   if (!draft.molarMass.empty()) {
-    const auto mass = units::readQuantity<units::MolarMass>(draft.molarMass, units::Dialect::kPerson);
+    const auto mass =
+        units::readQuantity<units::MolarMass>(draft.molarMass, units::Dialect::kPerson);
     if (mass) {
       component.identity.molarMass = *mass;
       component.identity.molarMassLastDigit = units::MolarMass::fromGramsPerMole(0.01);
     } else {
       faults.push_back({.field = "molar_mass",
-                        .what = fmt::format("{}: {}", text::quoted(draft.molarMass), whatWithPosition(mass.error(), draft.molarMass)),
+                        .what = fmt::format("{}: {}", text::quoted(draft.molarMass),
+                                            whatWithPosition(mass.error(), draft.molarMass)),
                         .mend = mass.error().mend});
     }
   }
@@ -49,17 +54,23 @@ charge::Plan planOf(const SubstanceDraft& draft, Faults& faults) {
 
 void checkTexts(const SubstanceDraft& draft, Faults& faults) {
   if (text::trimmed(draft.name).empty()) {
-    faults.push_back({.field = "name", .what = "the substance has no name", .mend = "give the name you call it by"});
+    faults.push_back({.field = "name",
+                      .what = "the substance has no name",
+                      .mend = "give the name you call it by"});
   }
-  for (const auto& [field, content] : {std::pair{"name", draft.name}, std::pair{"note", draft.note}}) {
+  for (const auto& [field, content] :
+       {std::pair{"name", draft.name}, std::pair{"note", draft.note}}) {
     if (text::firstInvalidUtf8(content) || text::oneLine(content) != content) {
-      faults.push_back({.field = field, .what = "the text holds invisible control characters", .mend = "type it again in one plain line"});
+      faults.push_back({.field = field,
+                        .what = "the text holds invisible control characters",
+                        .mend = "type it again in one plain line"});
     }
   }
   if (draft.cas.empty()) return;
   if (const auto checked = chem::checkCasNumber(draft.cas); !checked) {
     faults.push_back({.field = "cas",
-                      .what = fmt::format("{}: {}", text::quoted(draft.cas), whatWithPosition(checked.error(), draft.cas)),
+                      .what = fmt::format("{}: {}", text::quoted(draft.cas),
+                                          whatWithPosition(checked.error(), draft.cas)),
                       .mend = checked.error().mend});
   }
 }
@@ -69,7 +80,8 @@ void addStructure(const std::string& smiles, SubstanceRecord& record, Faults& fa
   const auto engine = chem::structureEngine();
   const auto identity = engine ? (*engine)->identify(smiles) : std::unexpected(engine.error());
   if (!identity) {
-    faults.push_back({.field = "smiles", .what = identity.error().what, .mend = identity.error().mend});
+    faults.push_back(
+        {.field = "smiles", .what = identity.error().what, .mend = identity.error().mend});
     return;
   }
   record.inchiKey = identity->inchiKey;
@@ -77,8 +89,11 @@ void addStructure(const std::string& smiles, SubstanceRecord& record, Faults& fa
 }
 
 bool contradicts(const SubstanceRecord& a, const SubstanceRecord& b) {
-  const auto differ = [](const std::string& x, const std::string& y) { return !x.empty() && !y.empty() && x != y; };
-  return differ(a.canonicalSmiles, b.canonicalSmiles) || differ(a.cas, b.cas) || differ(a.formula, b.formula);
+  const auto differ = [](const std::string& x, const std::string& y) {
+    return !x.empty() && !y.empty() && x != y;
+  };
+  return differ(a.canonicalSmiles, b.canonicalSmiles) || differ(a.cas, b.cas) ||
+         differ(a.formula, b.formula);
 }
 
 /// Names within two letters of it, folded, the nearest first.
@@ -143,7 +158,8 @@ Checked<SubstanceMatch> matchSubstance(Notebook& notebook, const SubstanceRecord
   }
   auto named = notebook.substancesByName(foldName(substance.name));
   if (!named) return std::unexpected(named.error());
-  std::erase_if(*named, [&](const SubstanceRecord& other) { return contradicts(other, substance); });
+  std::erase_if(*named,
+                [&](const SubstanceRecord& other) { return contradicts(other, substance); });
   match.same = *std::move(named);
   if (!match.same.empty()) return match;
   auto near = nearNames(notebook, substance.name);
@@ -176,15 +192,18 @@ Checked<SubstanceRecord> addSubstanceCard(const Desk& desk, const SubstanceDraft
   const auto match = matchSubstance(desk.notebook, *record);
   if (!match) return std::unexpected(match.error());
   if (!match->same.empty()) {
-    return askedFault("name", fmt::format("{} is on the shelf already, as {}", draft.name, match->same.front().name),
-                      "add a synonym to that card instead");
+    return askedFault(
+        "name",
+        fmt::format("{} is on the shelf already, as {}", draft.name, match->same.front().name),
+        "add a synonym to that card instead");
   }
-  const auto done = desk.notebook.act(desk.action("shelf add"), [&](Writing& writing) -> Checked<void> {
-    const auto n = writing.addSubstance(*record);
-    if (!n) return std::unexpected(n.error());
-    record->n = *n;
-    return {};
-  });
+  const auto done =
+      desk.notebook.act(desk.action("shelf add"), [&](Writing& writing) -> Checked<void> {
+        const auto n = writing.addSubstance(*record);
+        if (!n) return std::unexpected(n.error());
+        record->n = *n;
+        return {};
+      });
   if (!done) return std::unexpected(done.error());
   return record;
 }

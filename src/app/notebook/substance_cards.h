@@ -24,24 +24,29 @@ struct SubstanceDraft {
 };
 
 /// Works the draft out: formula, molar mass, canonical structure, InChIKey, fingerprint.
-/// Faults, together: no name, a CAS number that fails its check, an unreadable formula or structure,
-/// descriptions that disagree.
+/// Faults, together: no name, a CAS number that fails its check, an unreadable formula or
+/// structure, descriptions that disagree.
 [[nodiscard]] Checked<SubstanceRecord> describeSubstance(const SubstanceDraft& draft);
 
 /// Which substance of the shelf this is.
 struct SubstanceMatch {
-  std::vector<SubstanceRecord> same;    ///< by structure, else CAS number, else name; several if names clash
-  std::vector<std::string> nearMisses;  ///< names that look like it, to be offered and never assumed
+  std::vector<SubstanceRecord>
+      same;  ///< by structure, else CAS number, else name; several if names clash
+  std::vector<std::string>
+      nearMisses;  ///< names that look like it, to be offered and never assumed
 };
 
-/// Looks for a described substance on the shelf. A name that belongs to a card of another structure or
-/// CAS number is no match but a fault: the same name for two things.
-[[nodiscard]] Checked<SubstanceMatch> matchSubstance(Notebook& notebook, const SubstanceRecord& substance);
+/// Looks for a described substance on the shelf. A name that belongs to a card of another structure
+/// or CAS number is no match but a fault: the same name for two things.
+[[nodiscard]] Checked<SubstanceMatch> matchSubstance(Notebook& notebook,
+                                                     const SubstanceRecord& substance);
 
 /// The substances that a person may mean by a name, CAS number or synonym.
-[[nodiscard]] Checked<SubstanceMatch> lookUpSubstance(Notebook& notebook, std::string_view nameOrCas);
+[[nodiscard]] Checked<SubstanceMatch> lookUpSubstance(Notebook& notebook,
+                                                      std::string_view nameOrCas);
 
 /// Puts a substance on the shelf. Fault: it is there already.
-[[nodiscard]] Checked<SubstanceRecord> addSubstanceCard(const Desk& desk, const SubstanceDraft& draft);
+[[nodiscard]] Checked<SubstanceRecord> addSubstanceCard(const Desk& desk,
+                                                        const SubstanceDraft& draft);
 
 }  // namespace vialkeeper::app

@@ -16,25 +16,32 @@
 namespace vialkeeper::app {
 namespace {
 
-Checked<const charge::ComponentPlan*> componentOfKey(const charge::Plan& plan, const std::string& key) {
+Checked<const charge::ComponentPlan*> componentOfKey(const charge::Plan& plan,
+                                                     const std::string& key) {
   if (const charge::ComponentPlan* component = plan.find(key)) return component;
   std::vector<std::string> keys;
   for (const charge::ComponentPlan& component : plan.components) keys.push_back(component.key);
   const auto nearest = units::nearestName(key, keys);
   return askedFault("key", fmt::format("the run has no component {}", text::quoted(key)),
-                    nearest ? fmt::format("did you mean {}?", *nearest) : fmt::format("its keys are {}", fmt::join(keys, ", ")));
+                    nearest ? fmt::format("did you mean {}?", *nearest)
+                            : fmt::format("its keys are {}", fmt::join(keys, ", ")));
 }
 
 Checked<Recorded> readActual(const charge::ComponentPlan& component, const std::string& quantity) {
-  const auto read = units::readQuantityOf({units::Kind::kMass, units::Kind::kVolume}, quantity, units::Dialect::kPerson);
+  const auto read = units::readQuantityOf({units::Kind::kMass, units::Kind::kVolume}, quantity,
+                                          units::Dialect::kPerson);
   if (!read) {
-    return askedFault(component.key, fmt::format("{}: {}", text::quoted(quantity), whatWithPosition(read.error(), quantity)),
-                      read.error().mend);
+    return askedFault(
+        component.key,
+        fmt::format("{}: {}", text::quoted(quantity), whatWithPosition(read.error(), quantity)),
+        read.error().mend);
   }
   Recorded actual = units::Mass::fromSi(read->si);
   if (read->kind == units::Kind::kVolume) actual = units::Volume::fromSi(read->si);
   if (const auto recordable = charge::checkRecordable(component, actual); !recordable) {
-    return askedFault(component.key, fmt::format("{}: {}", text::quoted(quantity), recordable.error().what), recordable.error().mend);
+    return askedFault(component.key,
+                      fmt::format("{}: {}", text::quoted(quantity), recordable.error().what),
+                      recordable.error().mend);
   }
   return actual;
 }
@@ -51,11 +58,13 @@ void takeCharged(ComponentRecord& record, const charge::AsCharged& charged) {
   record.charged_mol_L = valueOf(charged.concentration_mol_m3, 1e-3);
 }
 
-void takeActual(ComponentRecord& record, const Recorded& actual, const std::string& typed, const Author& author) {
+void takeActual(ComponentRecord& record, const Recorded& actual, const std::string& typed,
+                const Author& author) {
   record.actual_mg.reset();
   record.actual_uL.reset();
   if (const auto* mass = std::get_if<units::Mass>(&actual)) record.actual_mg = mass->milligrams();
-  if (const auto* volume = std::get_if<units::Volume>(&actual)) record.actual_uL = volume->microlitres();
+  if (const auto* volume = std::get_if<units::Volume>(&actual))
+    record.actual_uL = volume->microlitres();
   record.actualText = typed;
   record.weighed = author.at;
   record.weighedBy = author.person;
@@ -63,9 +72,11 @@ void takeActual(ComponentRecord& record, const Recorded& actual, const std::stri
 
 }  // namespace
 
-Checked<WeighedComponent> weighComponent(const Desk& desk, const RunRecord& run, const std::string& key,
-                                         const std::string& quantity, bool accepted, const std::string& reason) {
-  if (const auto may = mayDo(run.state, Deed::kWeigh, reason); !may) return std::unexpected(may.error());
+Checked<WeighedComponent> weighComponent(const Desk& desk, const RunRecord& run,
+                                         const std::string& key, const std::string& quantity,
+                                         bool accepted, const std::string& reason) {
+  if (const auto may = mayDo(run.state, Deed::kWeigh, reason); !may)
+    return std::unexpected(may.error());
   auto sheet = loadRun(desk.notebook, run);
   if (!sheet) return std::unexpected(sheet.error());
   const auto component = componentOfKey(sheet->planned.plan, key);
@@ -73,13 +84,15 @@ Checked<WeighedComponent> weighComponent(const Desk& desk, const RunRecord& run,
   const auto actual = readActual(**component, quantity);
   if (!actual) return std::unexpected(actual.error());
   if (!accepted) {
-    auto questions = questionWeighing(**component, *sheet->planned.charge.find(key), *actual, quantity);
+    auto questions =
+        questionWeighing(**component, *sheet->planned.charge.find(key), *actual, quantity);
     if (!questions.empty()) return WeighedComponent{std::move(questions), *std::move(sheet)};
   }
   const Action action = desk.action("weigh", reason);
   const auto record = std::ranges::find(sheet->components, key, &ComponentRecord::key);
   takeActual(*record, *actual, quantity, action.author);
-  auto judged = charge::chargeAsWeighed(sheet->planned.plan, sheet->planned.substances, recordedWeighings(sheet->components));
+  auto judged = charge::chargeAsWeighed(sheet->planned.plan, sheet->planned.substances,
+                                        recordedWeighings(sheet->components));
   if (!judged) return std::unexpected(judged.error());
   for (ComponentRecord& each : sheet->components) {
     const auto& charged = judged->find(each.key)->charged;

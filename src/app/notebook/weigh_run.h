@@ -17,13 +17,14 @@ struct WeighedComponent {
   RunSheet sheet;                       ///< the run with what is recorded now
 };
 
-/// Records what the balance or pipette gave for one component, in place of what was recorded before (the
-/// trail keeps that). All weighed components are judged anew, for they may follow the limiting one.
-/// A quantity that looks like a slip is questioned unless `accepted`.
-/// Faults: no such component, a quantity that cannot be read or is of the wrong kind, a run whose state
-/// forbids it or wants a reason.
+/// Records what the balance or pipette gave for one component, in place of what was recorded before
+/// (the trail keeps that). All weighed components are judged anew, for they may follow the limiting
+/// one. A quantity that looks like a slip is questioned unless `accepted`. Faults: no such
+/// component, a quantity that cannot be read or is of the wrong kind, a run whose state forbids it
+/// or wants a reason.
 [[nodiscard]] Checked<WeighedComponent> weighComponent(const Desk& desk, const RunRecord& run,
-                                                       const std::string& key, const std::string& quantity,
-                                                       bool accepted, const std::string& reason);
+                                                       const std::string& key,
+                                                       const std::string& quantity, bool accepted,
+                                                       const std::string& reason);
 
 }  // namespace vialkeeper::app

@@ -35,8 +35,11 @@ double siOf(const Recorded& recorded) {
 }
 
 Recorded scaled(const Recorded& recorded, double factor) {
-  return std::visit([factor](auto quantity) { return Recorded(decltype(quantity)::fromSi(quantity.si() * factor)); },
-                    recorded);
+  return std::visit(
+      [factor](auto quantity) {
+        return Recorded(decltype(quantity)::fromSi(quantity.si() * factor));
+      },
+      recorded);
 }
 
 /// The target in the kind of quantity that was recorded, if there is one to compare with.
@@ -60,8 +63,8 @@ int powerOfTen(double ratio) {
 
 /// What was typed, taken to its number and unit.
 std::optional<units::ReadQuantity> typed(std::string_view asWritten) {
-  const auto read =
-      units::readQuantityOf({units::Kind::kMass, units::Kind::kVolume}, asWritten, units::Dialect::kPerson);
+  const auto read = units::readQuantityOf({units::Kind::kMass, units::Kind::kVolume}, asWritten,
+                                          units::Dialect::kPerson);
   return read ? std::optional(*read) : std::nullopt;
 }
 
@@ -76,14 +79,16 @@ std::string_view unitBelow(std::string_view symbol, int thousands) {
   const auto among = [&](auto units) -> std::string_view {
     const auto found = std::ranges::find(units, usualSpelling(symbol));
     const auto place = (found - units.begin()) - thousands;
-    if (found == units.end() || place < 0 || place >= static_cast<std::ptrdiff_t>(units.size())) return {};
+    if (found == units.end() || place < 0 || place >= static_cast<std::ptrdiff_t>(units.size()))
+      return {};
     return units[static_cast<std::size_t>(place)];
   };
   const std::string_view mass = among(kMassUnits);
   return mass.empty() ? among(kVolumeUnits) : mass;
 }
 
-/// The figures as typed with the other unit or the decimal sign moved; else as quantities are shown.
+/// The figures as typed with the other unit or the decimal sign moved; else as quantities are
+/// shown.
 std::string likelyText(const Recorded& likely, std::string_view asWritten, int power) {
   const auto read = typed(asWritten);
   if (!read) return shownOf(likely);
@@ -91,7 +96,8 @@ std::string likelyText(const Recorded& likely, std::string_view asWritten, int p
     const std::string_view unit = unitBelow(read->symbol, power / 3);
     return unit.empty() ? shownOf(likely) : fmt::format("{:.10g} {}", read->number, unit);
   }
-  return fmt::format("{:.10g} {}", read->number / std::pow(10.0, power), usualSpelling(read->symbol));
+  return fmt::format("{:.10g} {}", read->number / std::pow(10.0, power),
+                     usualSpelling(read->symbol));
 }
 
 std::string written(const Recorded& actual, std::string_view asWritten) {
@@ -99,20 +105,22 @@ std::string written(const Recorded& actual, std::string_view asWritten) {
   return trimmed.empty() || trimmed.size() > 40 ? shownOf(actual) : text::oneLine(trimmed);
 }
 
-/// Which of the two is usual for a supply: by its device, else by its kind. Neat liquids go by either.
+/// Which of the two is usual for a supply: by its device, else by its kind. Neat liquids go by
+/// either.
 enum class Usual { kMass, kVolume, kEither };
 
 Usual usualFor(const charge::ComponentPlan& plan) {
   if (plan.device) return plan.device->balance() != nullptr ? Usual::kMass : Usual::kVolume;
   if (std::holds_alternative<charge::SolidSupply>(plan.supply)) return Usual::kMass;
-  if (std::holds_alternative<charge::LiquidSupply>(plan.supply) && !plan.isSolvent()) return Usual::kEither;
+  if (std::holds_alternative<charge::LiquidSupply>(plan.supply) && !plan.isSolvent())
+    return Usual::kEither;
   return Usual::kVolume;
 }
 
 class Questioner {
  public:
-  Questioner(const charge::ComponentPlan& plan, const charge::ComponentCharge& target, const Recorded& actual,
-             std::string_view asWritten)
+  Questioner(const charge::ComponentPlan& plan, const charge::ComponentCharge& target,
+             const Recorded& actual, std::string_view asWritten)
       : m_plan(plan), m_target(target), m_actual(actual), m_asWritten(asWritten) {}
 
   std::vector<SlipQuestion> run() {
@@ -124,10 +132,14 @@ class Questioner {
  private:
   /// The target of the other kind, if its figure is the one that was typed: `100 mg` for 100 µL.
   std::optional<Recorded> sameFigure() const {
-    const auto close = [](double a, double b) { return b > 0.0 && std::abs(a / b - 1.0) <= kSameFigure; };
+    const auto close = [](double a, double b) {
+      return b > 0.0 && std::abs(a / b - 1.0) <= kSameFigure;
+    };
     if (const auto* mass = std::get_if<Mass>(&m_actual)) {
-      const bool same = m_target.targetVolume && close(mass->milligrams(), m_target.targetVolume->microlitres());
-      return same ? std::optional<Recorded>(Volume::fromMicrolitres(mass->milligrams())) : std::nullopt;
+      const bool same =
+          m_target.targetVolume && close(mass->milligrams(), m_target.targetVolume->microlitres());
+      return same ? std::optional<Recorded>(Volume::fromMicrolitres(mass->milligrams()))
+                  : std::nullopt;
     }
     const double uL = std::get<Volume>(m_actual).microlitres();
     const bool same = m_target.targetMass && close(uL, m_target.targetMass->milligrams());
@@ -154,11 +166,12 @@ class Questioner {
     if (!unusual && !meant) return;
     SlipQuestion question{
         .kind = SlipKind::kOtherQuantity, .what = {}, .ask = {}, .likely = meant, .likelyText = {}};
-    question.what = unusual ? fmt::format("{} is {}, but {} is {}", written(m_actual, m_asWritten),
-                                          mass ? "a mass" : "a volume", m_plan.name,
-                                          mass ? "usually taken by volume" : "usually weighed")
-                            : fmt::format("{} has the figure of the target of {}", written(m_actual, m_asWritten),
-                                          shownOf(otherTarget(mass)));
+    question.what = unusual
+                        ? fmt::format("{} is {}, but {} is {}", written(m_actual, m_asWritten),
+                                      mass ? "a mass" : "a volume", m_plan.name,
+                                      mass ? "usually taken by volume" : "usually weighed")
+                        : fmt::format("{} has the figure of the target of {}",
+                                      written(m_actual, m_asWritten), shownOf(otherTarget(mass)));
     if (meant) question.likelyText = shownOf(*meant);
     question.ask = meant ? fmt::format("did you mean {}?", question.likelyText)
                          : fmt::format("was it really {}?", mass ? "weighed" : "taken by volume");
@@ -177,26 +190,28 @@ class Questioner {
     const std::string size = ratio > 2.0 ? fmt::format("{:.3g} times", ratio)
                                          : fmt::format("{:.0f} % {}", std::abs(ratio - 1.0) * 100.0,
                                                        ratio > 1.0 ? "above" : "below");
-    m_questions.push_back({.kind = SlipKind::kOffTarget,
-                           .what = fmt::format("{} is {} the target of {}", written(m_actual, m_asWritten), size,
-                                               shownOf(*target)),
-                           .ask = "is the figure right?",
-                           .likely = std::nullopt,
-                           .likelyText = {}});
+    m_questions.push_back(
+        {.kind = SlipKind::kOffTarget,
+         .what = fmt::format("{} is {} the target of {}", written(m_actual, m_asWritten), size,
+                             shownOf(*target)),
+         .ask = "is the figure right?",
+         .likely = std::nullopt,
+         .likelyText = {}});
   }
 
   void askForPower(const Recorded& target, int power) {
     const Recorded likely = scaled(m_actual, std::pow(10.0, -power));
     const std::string text = likelyText(likely, m_asWritten, power);
     const auto times = static_cast<long long>(std::llround(std::pow(10.0, std::abs(power))));
-    m_questions.push_back({.kind = power % 3 == 0 ? SlipKind::kUnit : SlipKind::kDecimalSign,
-                           .what = power > 0 ? fmt::format("{} is about {} times the target of {}",
-                                                           written(m_actual, m_asWritten), times, shownOf(target))
-                                             : fmt::format("{} is about 1/{} of the target of {}",
-                                                           written(m_actual, m_asWritten), times, shownOf(target)),
-                           .ask = fmt::format("did you mean {}?", text),
-                           .likely = likely,
-                           .likelyText = text});
+    m_questions.push_back(
+        {.kind = power % 3 == 0 ? SlipKind::kUnit : SlipKind::kDecimalSign,
+         .what = power > 0 ? fmt::format("{} is about {} times the target of {}",
+                                         written(m_actual, m_asWritten), times, shownOf(target))
+                           : fmt::format("{} is about 1/{} of the target of {}",
+                                         written(m_actual, m_asWritten), times, shownOf(target)),
+         .ask = fmt::format("did you mean {}?", text),
+         .likely = likely,
+         .likelyText = text});
   }
 
   const charge::ComponentPlan& m_plan;
@@ -208,7 +223,8 @@ class Questioner {
 
 }  // namespace
 
-std::vector<SlipQuestion> questionWeighing(const charge::ComponentPlan& plan, const charge::ComponentCharge& target,
+std::vector<SlipQuestion> questionWeighing(const charge::ComponentPlan& plan,
+                                           const charge::ComponentCharge& target,
                                            const Recorded& actual, std::string_view asWritten) {
   return Questioner(plan, target, actual, asWritten).run();
 }

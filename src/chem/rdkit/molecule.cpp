@@ -142,7 +142,7 @@ std::optional<StructureFault> refuseMolecule(const RWMol& mol) {
 }  // namespace
 
 std::expected<std::unique_ptr<RWMol>, StructureFault> parseMolecule(std::string_view text,
-                                                                     Hydrogens hydrogens) {
+                                                                    Hydrogens hydrogens) {
   silenceLogs();
   const std::string_view smiles = withoutOuterBlanks(text);
   if (auto refused = refuseNotation(smiles)) return std::unexpected(*refused);

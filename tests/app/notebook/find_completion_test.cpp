@@ -110,7 +110,8 @@ TEST_CASE("any text and cursor are answered, within the text", "[notebook][find]
 TEST_CASE("twenty thousand names are gone through between two keystrokes", "[notebook][find]") {
   FindVocabulary vocabulary;
   for (int i = 0; i < 20'000; ++i)
-    vocabulary.substances.push_back({fmt::format("{}-methyl-{}-indoline acid {}", i % 7, i % 991, i), i % 13});
+    vocabulary.substances.push_back(
+        {fmt::format("{}-methyl-{}-indoline acid {}", i % 7, i % 991, i), i % 13});
   prepareVocabulary(vocabulary);
   const auto begin = std::chrono::steady_clock::now();
   CHECK(completeFind("additive:ind", 12, vocabulary).size() == 12);

@@ -35,8 +35,8 @@ std::string shown(const ParsedConditions& conditions);
 std::string shown(const ParsedCondition& condition) {
   struct {
     std::string operator()(const SubstanceName& name) const {
-      return fmt::format("{}={}{}{}{}", name.role, name.written, name.isPrefix ? "*" : "", name.isFinished ? "" : "~",
-                         shown(name.loading));
+      return fmt::format("{}={}{}{}{}", name.role, name.written, name.isPrefix ? "*" : "",
+                         name.isFinished ? "" : "~", shown(name.loading));
     }
     std::string operator()(const StructurePattern& pattern) const {
       return "smiles=" + pattern.smiles + shown(pattern.loading);
@@ -44,38 +44,48 @@ std::string shown(const ParsedCondition& condition) {
     std::string operator()(const WordsCondition& words) const {
       std::string text;
       for (std::size_t i = 0; i < words.words.size(); ++i) {
-        text += fmt::format("{}'{}'{}", i > 0 ? " " : "", words.words[i], words.prefix[i] ? "*" : "");
+        text +=
+            fmt::format("{}'{}'{}", i > 0 ? " " : "", words.words[i], words.prefix[i] ? "*" : "");
       }
       return text;
     }
     std::string operator()(const TextFieldCondition& field) const {
-      return fmt::format("field{}={}{}", static_cast<int>(field.field), field.value, field.isPrefix ? "*" : "");
+      return fmt::format("field{}={}{}", static_cast<int>(field.field), field.value,
+                         field.isPrefix ? "*" : "");
     }
     std::string operator()(const MeasureCondition& measure) const {
       if (measure.measure == MeasureCondition::Measure::kDate) {
         return fmt::format("date [{:.0f},{:.0f}]", measure.interval.least.value_or(-1),
                            measure.interval.most.value_or(-1));
       }
-      return fmt::format("measure{}{}", static_cast<int>(measure.measure), shown(measure.interval, ""));
+      return fmt::format("measure{}{}", static_cast<int>(measure.measure),
+                         shown(measure.interval, ""));
     }
-    std::string operator()(const ParsedAll& all) const { return "all(" + shown(all.conditions) + ")"; }
-    std::string operator()(const ParsedAny& any) const { return "any(" + shown(any.conditions) + ")"; }
-    std::string operator()(const ParsedNot& none) const { return "not(" + shown(none.conditions) + ")"; }
+    std::string operator()(const ParsedAll& all) const {
+      return "all(" + shown(all.conditions) + ")";
+    }
+    std::string operator()(const ParsedAny& any) const {
+      return "any(" + shown(any.conditions) + ")";
+    }
+    std::string operator()(const ParsedNot& none) const {
+      return "not(" + shown(none.conditions) + ")";
+    }
   } writer;
   return std::visit(writer, condition.data);
 }
 
 std::string shown(const ParsedConditions& conditions) {
   std::string text;
-  for (const ParsedCondition& condition : conditions) text += (text.empty() ? "" : " ; ") + shown(condition);
+  for (const ParsedCondition& condition : conditions)
+    text += (text.empty() ? "" : " ; ") + shown(condition);
   return text;
 }
 
 std::string parsed(std::string_view text, bool asYouType = false) {
   const auto query = parseFind(text, {asYouType});
   if (!query)
-    return fmt::format("fault {}+{}: {}: {}", query.error().offset, query.error().length, query.error().what,
-                       query.error().mend);
+    return fmt::format("fault {}+{}: {}: {}", query.error().offset, query.error().length,
+                       query.error().what, query.error().mend);
   return shown(query->conditions);
 }
 
@@ -126,8 +136,10 @@ TEST_CASE("substances stand behind their role, with a loading", "[notebook][find
   CHECK(parsed("solvent=DMF") == "solvent=DMF");
   CHECK(parsed("ligand:dtbbpy").starts_with("fault 0+6"));
   // A number that begins a word is no loading.
-  CHECK(parsed("acid:TFA 4-CzIPN 3 vials 2nd 5...") == "acid=TFA ; '4-CzIPN' '3' 'vials' '2nd' '5...'");
-  CHECK(parsed("substrate:(R)-amine structure:c1ccc(N)cc1 x") == "substrate=(R)-amine ; smiles=c1ccc(N)cc1 ; 'x'");
+  CHECK(parsed("acid:TFA 4-CzIPN 3 vials 2nd 5...") ==
+        "acid=TFA ; '4-CzIPN' '3' 'vials' '2nd' '5...'");
+  CHECK(parsed("substrate:(R)-amine structure:c1ccc(N)cc1 x") ==
+        "substrate=(R)-amine ; smiles=c1ccc(N)cc1 ; 'x'");
   CHECK(parsed("(structure:C(=O)O or structure:\"[O-]*\")") == "any(smiles=C(=O)O ; smiles=[O-]*)");
   CHECK(parsed("structure:C* 5..20 mol%") == "smiles=C* [5,20]mol%");
 }
@@ -200,9 +212,11 @@ TEST_CASE("not, or, and, parentheses", "[notebook][find]") {
   CHECK(pointed("film \"grey") == "\"grey");
 }
 
-TEST_CASE("a search that cannot be read points at the character and says how to mend it", "[notebook][find]") {
+TEST_CASE("a search that cannot be read points at the character and says how to mend it",
+          "[notebook][find]") {
   CHECK(parsed("film additve:TFA") ==
-        "fault 5+7: there is no field 'additve': did you mean additive? Or put it between quotation marks to search "
+        "fault 5+7: there is no field 'additve': did you mean additive? Or put it between "
+        "quotation marks to search "
         "for the text");
   CHECK(pointed("yeild>60") == "yeild");
   CHECK(pointed("solvent>DMF") == "solvent>");
@@ -227,7 +241,8 @@ TEST_CASE("a search that cannot be read points at the character and says how to 
   CHECK(pointed("wavelength:440nmm") == "nmm");
   CHECK(what("film \xFF") == "a byte that is no text in UTF-8");
   const TextFault fault = parseFind("acé additve:x").error();
-  CHECK(vialkeeper::text::whatWithPosition(fault, "acé additve:x") == "there is no field 'additve' (character 5)");
+  CHECK(vialkeeper::text::whatWithPosition(fault, "acé additve:x") ==
+        "there is no field 'additve' (character 5)");
 }
 
 TEST_CASE("while it is typed, an unfinished end is no fault", "[notebook][find]") {
@@ -238,8 +253,8 @@ TEST_CASE("while it is typed, an unfinished end is no fault", "[notebook][find]"
   CHECK(parsed("additive:piv ", true) == "additive=piv");
   CHECK(parsed("person:K", true) == "field2=K*");
   for (const char* unfinished :
-       {"film additive:", "film yield>", "film (", "film not", "film not ", "film or", "film or ", "film and",
-        "film and ", "film \"", "film temperature>3", "film yield:60..6foo"}) {
+       {"film additive:", "film yield>", "film (", "film not", "film not ", "film or", "film or ",
+        "film and", "film and ", "film \"", "film temperature>3", "film yield:60..6foo"}) {
     INFO(unfinished);
     const std::string got = parsed(unfinished, true);
     CHECK(got.starts_with("'film'"));
@@ -249,7 +264,8 @@ TEST_CASE("while it is typed, an unfinished end is no fault", "[notebook][find]"
   CHECK(parsed("additve:x film", true).starts_with("fault 0+7"));
   // Whatever is typed up to somewhere may be a fault, but never one behind the text.
   const std::string whole =
-      "photocatalyst:4CzIPN (additive:\"pivalic acid\" 5..20 mol% or not acid:TFA >0.1 M) yield>60 2026-03 amb*";
+      "photocatalyst:4CzIPN (additive:\"pivalic acid\" 5..20 mol% or not acid:TFA >0.1 M) yield>60 "
+      "2026-03 amb*";
   for (std::size_t length = 0; length <= whole.size(); ++length) {
     INFO(whole.substr(0, length));
     CHECK(parseFind(whole.substr(0, length), {true}));
@@ -271,9 +287,11 @@ TEST_CASE("hostile searches are read or refused, never more", "[notebook][find][
   for (int i = 0; i < 201; ++i) many += "a or ";
   CHECK(what(many + "a") == "more than 200 conditions");
 
-  constexpr std::string_view kParts[] = {
-      "a", "or",   " ",       " ", "not", "(",    ")",  "\"",         "*", "additive:", "yield", ">", "<=", "..",
-      "5", "mol%", "2026-03", "-", "é",   "\xE2", "\0", "structure:", ":", "0.1 M",     "=",     "'", "h",  "1e9"};
+  constexpr std::string_view kParts[] = {"a",  "or",   " ",  " ",          "not",     "(",
+                                         ")",  "\"",   "*",  "additive:",  "yield",   ">",
+                                         "<=", "..",   "5",  "mol%",       "2026-03", "-",
+                                         "é",  "\xE2", "\0", "structure:", ":",       "0.1 M",
+                                         "=",  "'",    "h",  "1e9"};
   std::mt19937_64 random(17);
   for (int round = 0; round < 20'000; ++round) {
     std::string text;
@@ -294,8 +312,8 @@ TEST_CASE("hostile searches are read or refused, never more", "[notebook][find][
 TEST_CASE("a value is written so that it is read back", "[notebook][find][identity]") {
   CHECK(asFindValue("4CzIPN") == "4CzIPN");
   CHECK(asFindValue("pivalic acid") == "\"pivalic acid\"");
-  for (const char* name :
-       {"(R)-BINOL", "a\"b", "\"", "x)", "amb*", "5 mol%", "not", "β-pinene", "N,N-dimethyl", "a:b", ">5"}) {
+  for (const char* name : {"(R)-BINOL", "a\"b", "\"", "x)", "amb*", "5 mol%", "not", "β-pinene",
+                           "N,N-dimethyl", "a:b", ">5"}) {
     INFO(name);
     const auto query = parseFind("additive:" + asFindValue(name) + " film");
     REQUIRE(query);
@@ -316,15 +334,16 @@ TEST_CASE("the examples of docs/find.md are read", "[notebook][find]") {
       if (end == std::string::npos) break;
       const std::string code = line.substr(at + 1, end - at - 1);
       at = end;
-      const bool isLoading =
-          code.find("mol%") != std::string::npos || code.find("equiv") != std::string::npos || code.ends_with(" M");
-      const bool isExample = code.find_first_of(":>.") != std::string::npos && !code.ends_with(':') && code != ".." &&
-                             code != ">" && code != ">=" && !code.starts_with("vialkeeper") &&
-                             !code.starts_with("5-20");
+      const bool isLoading = code.find("mol%") != std::string::npos ||
+                             code.find("equiv") != std::string::npos || code.ends_with(" M");
+      const bool isExample = code.find_first_of(":>.") != std::string::npos &&
+                             !code.ends_with(':') && code != ".." && code != ">" && code != ">=" &&
+                             !code.starts_with("vialkeeper") && !code.starts_with("5-20");
       if (!isExample && !isLoading) continue;
       ++examples;
       INFO(code);
-      CHECK(parsed(isLoading && !code.starts_with("5-20") ? "any:x " + code : code).find("fault") == std::string::npos);
+      CHECK(parsed(isLoading && !code.starts_with("5-20") ? "any:x " + code : code).find("fault") ==
+            std::string::npos);
     }
   }
   CHECK(examples > 30);

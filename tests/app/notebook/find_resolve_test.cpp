@@ -18,7 +18,8 @@ class Shelf : public SubstanceResolver {
     return numbersWhere([&](const std::string& name) { return foldName(name) == folded; });
   }
   std::vector<RowNumber> numbersByNameBeginning(std::string_view folded) override {
-    return numbersWhere([&](const std::string& name) { return foldName(name).starts_with(folded); });
+    return numbersWhere(
+        [&](const std::string& name) { return foldName(name).starts_with(folded); });
   }
   std::vector<RowNumber> numbersByCas(std::string_view cas) override {
     return cas == "75-98-9" ? std::vector<RowNumber>{2} : std::vector<RowNumber>{};
@@ -26,7 +27,8 @@ class Shelf : public SubstanceResolver {
   std::expected<std::vector<RowNumber>, vialkeeper::text::TextFault> numbersBySubstructure(
       std::string_view smiles) override {
     if (smiles == "C(=O)O") return std::vector<RowNumber>{2, 3};
-    if (smiles == "C1CC") return vialkeeper::text::textFault(1, 1, "ring 1 is never closed", "close it");
+    if (smiles == "C1CC")
+      return vialkeeper::text::textFault(1, 1, "ring 1 is never closed", "close it");
     return std::vector<RowNumber>{};
   }
   std::vector<std::string> names() override {
@@ -44,11 +46,12 @@ class Shelf : public SubstanceResolver {
     }
     return found;
   }
-  std::multimap<std::string, RowNumber> m_names = {{"4CzIPN", 1},      {"pivalic acid", 2}, {"PivOH", 2},
-                                                   {"acetic acid", 3}, {"DMF", 4},          {"dmf", 5}};
+  std::multimap<std::string, RowNumber> m_names = {
+      {"4CzIPN", 1}, {"pivalic acid", 2}, {"PivOH", 2}, {"acetic acid", 3}, {"DMF", 4}, {"dmf", 5}};
 };
 
-std::expected<FindQuery, vialkeeper::text::TextFault> found(std::string_view text, const ParseOptions& parse = {},
+std::expected<FindQuery, vialkeeper::text::TextFault> found(std::string_view text,
+                                                            const ParseOptions& parse = {},
                                                             const ResolveOptions& resolve = {}) {
   Shelf shelf;
   const auto parsed = parseFind(text, parse);
@@ -56,7 +59,8 @@ std::expected<FindQuery, vialkeeper::text::TextFault> found(std::string_view tex
   return resolveQuery(*parsed, shelf, resolve);
 }
 
-const SubstanceCondition& first(const std::expected<FindQuery, vialkeeper::text::TextFault>& query) {
+const SubstanceCondition& first(
+    const std::expected<FindQuery, vialkeeper::text::TextFault>& query) {
   REQUIRE(query);
   return std::get<SubstanceCondition>(query->conditions.at(0).data);
 }
@@ -95,11 +99,14 @@ TEST_CASE("a name of no substance is a fault that offers the nearest", "[noteboo
   CHECK(found("acid:acid").error().mend == "did you mean \"acetic acid\" or \"pivalic acid\"?");
   CHECK(found("acid:pivalic").error().mend == "did you mean \"pivalic acid\"?");
   CHECK(found("acid:xyzzy").error().mend.starts_with("write a name"));
-  CHECK(found("acid:64-19-7").error().what == "no substance of this notebook has the CAS number '64-19-7'");
-  CHECK(found("acid:xy*").error().what == "no substance of this notebook is called 'xy' or begins so");
+  CHECK(found("acid:64-19-7").error().what ==
+        "no substance of this notebook has the CAS number '64-19-7'");
+  CHECK(found("acid:xy*").error().what ==
+        "no substance of this notebook is called 'xy' or begins so");
 }
 
-TEST_CASE("while it is typed, a name narrows and an unknown one matches nothing", "[notebook][find]") {
+TEST_CASE("while it is typed, a name narrows and an unknown one matches nothing",
+          "[notebook][find]") {
   CHECK(first(found("acid:piv", {true}, {true})).substances == std::vector<RowNumber>{2});
   CHECK(first(found("acid:xyz", {true}, {true})).substances.empty());
   CHECK(first(found("acid:piv ", {true}, {true})).substances.empty());

@@ -63,7 +63,8 @@ TEST_CASE("folding is idempotent on any bytes", "[notebook][find][identity]") {
     else if (value < 0x800)
       letter = {static_cast<char>(0xC0 | (value >> 6U)), static_cast<char>(0x80 | (value & 0x3FU))};
     else
-      letter = {static_cast<char>(0xE0 | (value >> 12U)), static_cast<char>(0x80 | ((value >> 6U) & 0x3FU)),
+      letter = {static_cast<char>(0xE0 | (value >> 12U)),
+                static_cast<char>(0x80 | ((value >> 6U) & 0x3FU)),
                 static_cast<char>(0x80 | (value & 0x3FU))};
     REQUIRE(foldName(foldName(letter)) == foldName(letter));
   }

@@ -17,8 +17,8 @@
 #include "text/utf8.h"
 
 using namespace vialkeeper;
-using app::readLogLine;
 using app::ReadEntry;
+using app::readLogLine;
 namespace event_kind = app::event_kind;
 
 namespace {
@@ -28,7 +28,8 @@ void checkRecord(const ReadEntry& read, const std::string& line) {
   REQUIRE(event_kind::isKnown(read.event.kind));
   REQUIRE(read.event.kind != event_kind::kAddendum);
   REQUIRE(!read.sentence.empty());
-  REQUIRE(std::ranges::none_of(read.sentence, [](char c) { return static_cast<unsigned char>(c) < 0x20; }));
+  REQUIRE(std::ranges::none_of(read.sentence,
+                               [](char c) { return static_cast<unsigned char>(c) < 0x20; }));
   if (!read.doubt) return;
   REQUIRE(read.event.kind == event_kind::kObservation);
   REQUIRE(read.event.note == line);
@@ -36,18 +37,28 @@ void checkRecord(const ReadEntry& read, const std::string& line) {
   REQUIRE(read.doubt->offset + read.doubt->length <= line.size());
   REQUIRE(!read.doubt->what.empty());
   REQUIRE(!read.doubt->mend.empty());
-  const bool empty = !read.event.pressure_bar && !read.event.temperature_C && !read.event.volume_uL &&
-                     !read.event.amount_mmol && !read.event.fraction && read.event.gas.empty() &&
-                     read.event.pressureKind.empty() && read.photo.empty();
+  const bool empty = !read.event.pressure_bar && !read.event.temperature_C &&
+                     !read.event.volume_uL && !read.event.amount_mmol && !read.event.fraction &&
+                     read.event.gas.empty() && read.event.pressureKind.empty() &&
+                     read.photo.empty();
   REQUIRE(empty);
 }
 
 std::string randomLine(std::mt19937_64& random) {
   static const std::vector<std::string> kPieces = {
-      "p", "P ", "T", "lamp", " on", "off", "aliquot ", "gas ", "sample", "h2 ", "vent", "purge ", "add ", "added", "collected ",
-      "photo ", "note ", " ", "  ", "0.42", "0,42", "35", "1e3", "-", "\u2212", " bar", "bar", " C", "°C", " uL", "µL", " mL", "%", " abs",
-      " g", "(a)", "Ar", " N2", "H₂", "acetonitrile", "1,4-dioxane", ";", ",", "=", ":", "/", "(", "\"", "\n", "\t", "\u00A0", "\u202E",
-      "\uFEFF", "mmol", " at ", "of", "to ", "14:20", "K", "and ", "M", "deg", " C", "ü", "😀"};
+      "p",           "P ",       "T",      "lamp",   " on",
+      "off",         "aliquot ", "gas ",   "sample", "h2 ",
+      "vent",        "purge ",   "add ",   "added",  "collected ",
+      "photo ",      "note ",    " ",      "  ",     "0.42",
+      "0,42",        "35",       "1e3",    "-",      "\u2212",
+      " bar",        "bar",      " C",     "°C",     " uL",
+      "µL",          " mL",      "%",      " abs",   " g",
+      "(a)",         "Ar",       " N2",    "H₂",     "acetonitrile",
+      "1,4-dioxane", ";",        ",",      "=",      ":",
+      "/",           "(",        "\"",     "\n",     "\t",
+      "\u00A0",      "\u202E",   "\uFEFF", "mmol",   " at ",
+      "of",          "to ",      "14:20",  "K",      "and ",
+      "M",           "deg",      " C",     "ü",      "😀"};
   std::string line;
   const std::size_t count = random() % 9;
   for (std::size_t i = 0; i < count; ++i) {
@@ -80,7 +91,8 @@ TEST_CASE("a shorthand that cannot be read is a doubt at the right character", "
     const std::string line = expected.line;
     const ReadEntry read = readLogLine(line);
     REQUIRE(read.doubt);
-    INFO(text::pointedAt(*read.doubt, line) << "\n" << read.doubt->what << ": " << read.doubt->mend);
+    INFO(text::pointedAt(*read.doubt, line) << "\n"
+                                            << read.doubt->what << ": " << read.doubt->mend);
     CHECK(read.meant == expected.meant);
     CHECK(line.substr(0, read.doubt->offset) == expected.before);
     CHECK(line.substr(read.doubt->offset, read.doubt->length) == expected.pointed);
@@ -135,7 +147,8 @@ TEST_CASE("what was read fills the event in the units of its columns", "[log]") 
 }
 
 TEST_CASE("an observation is kept word for word", "[log]") {
-  for (const std::string line : {"  two blanks, a tab\t", "Ünïcödé and \u202Ebidi", "line\nbreak", "=SUM(A1)", "'; DROP TABLE event;--"}) {
+  for (const std::string line : {"  two blanks, a tab\t", "Ünïcödé and \u202Ebidi", "line\nbreak",
+                                 "=SUM(A1)", "'; DROP TABLE event;--"}) {
     const ReadEntry read = readLogLine(line);
     CHECK(!read.doubt);
     CHECK(read.event.note == line);
@@ -155,11 +168,13 @@ TEST_CASE("nothing at all is a doubt, not an event", "[log]") {
 }
 
 TEST_CASE("while a line is typed the doubt says that it is unfinished", "[log]") {
-  for (const char* line : {"p", "p ", "p 0.42", "p 0.42 bar 35", "lamp ", "aliquot", "aliquot 50 ", "add 0.2 mL ", "photo ", "collected 4.2 mL"}) {
+  for (const char* line : {"p", "p ", "p 0.42", "p 0.42 bar 35", "lamp ", "aliquot", "aliquot 50 ",
+                           "add 0.2 mL ", "photo ", "collected 4.2 mL"}) {
     INFO(line);
     CHECK(readLogLine(line).isUnfinished());
   }
-  for (const char* line : {"p 0.42 bra", "p 0.42 bar", "vent", "clear", "0.42 bar", "p 0.42 35 C"}) {
+  for (const char* line :
+       {"p 0.42 bra", "p 0.42 bar", "vent", "clear", "0.42 bar", "p 0.42 35 C"}) {
     INFO(line);
     CHECK(!readLogLine(line).isUnfinished());
   }
@@ -186,7 +201,8 @@ TEST_CASE("the kinds of events are those of the log file, a photo and an addendu
   for (const auto kind : event_kind::kOfLogFile) CHECK(made.contains(std::string(kind)));
 }
 
-TEST_CASE("20,000 random lines are kept, read alike twice, and doubted within their bounds", "[log][identity]") {
+TEST_CASE("20,000 random lines are kept, read alike twice, and doubted within their bounds",
+          "[log][identity]") {
   std::mt19937_64 random(20260304);
   std::size_t events = 0;
   std::size_t doubts = 0;
@@ -207,7 +223,8 @@ TEST_CASE("20,000 random lines are kept, read alike twice, and doubted within th
   CHECK(doubts > 2000);
 }
 
-TEST_CASE("every beginning of a shorthand is read without a silent observation", "[log][identity]") {
+TEST_CASE("every beginning of a shorthand is read without a silent observation",
+          "[log][identity]") {
   for (const Understood& expected : kUnderstood) {
     const ReadEntry whole = readLogLine(expected.line);
     if (whole.event.kind == event_kind::kObservation) continue;

@@ -42,15 +42,18 @@ TEST_CASE("the time of an entry is read against the moment of writing", "[log]")
       {"1 h 20 min ago", "2026-03-04T13:00:30+01:00", false, "today 13:00:30 (1 h 20 min ago)"},
       {"1h20min ago", "2026-03-04T13:00:30+01:00", false, "today 13:00:30 (1 h 20 min ago)"},
       {"1,5 hours ago", "2026-03-04T12:50:30+01:00", false, "today 12:50:30 (1 h 30 min ago)"},
-      {"2 Hours 10 Minutes ago", "2026-03-04T12:10:30+01:00", false, "today 12:10:30 (2 h 10 min ago)"},
+      {"2 Hours 10 Minutes ago", "2026-03-04T12:10:30+01:00", false,
+       "today 12:10:30 (2 h 10 min ago)"},
       {"90s ago", "2026-03-04T14:19:00+01:00", false, "today 14:19 (1 min 30 s ago)"},
       {"0 min ago", "2026-03-04T14:20:30+01:00", false, "today 14:20:30"},
       {"24 h ago", "2026-03-03T14:20:30+01:00", false, "yesterday 14:20:30 (24 h ago)"},
       {"24 h 1 s ago", "2026-03-03T14:20:29+01:00", true, "yesterday 14:20:29 (24 h ago)"},
       {"3 days ago", "2026-03-01T14:20:30+01:00", true, "2026-03-01T14:20:30+01:00 (3 d ago)"},
-      {"2026-03-04T14:20+01:00", "2026-03-04T14:20:00+01:00", false, "today 14:20 (0 min 30 s ago)"},
+      {"2026-03-04T14:20+01:00", "2026-03-04T14:20:00+01:00", false,
+       "today 14:20 (0 min 30 s ago)"},
       {"2026-03-04 13:20:30Z", "2026-03-04T13:20:30Z", false, "2026-03-04T13:20:30+00:00"},
-      {"2026-02-01T08:00+01:00", "2026-02-01T08:00:00+01:00", true, "2026-02-01T08:00:00+01:00 (31 d ago)"},
+      {"2026-02-01T08:00+01:00", "2026-02-01T08:00:00+01:00", true,
+       "2026-02-01T08:00:00+01:00 (31 d ago)"},
   };
   for (const Row& row : rows) {
     INFO(row.text);
@@ -74,7 +77,8 @@ TEST_CASE("a time that cannot be is refused at the right character", "[log]") {
       {"14:21", "14:21", "today 14:21 is still to come, for it is 14:20:30 now"},
       {"23:59", "23:59", "today 23:59 is still to come, for it is 14:20:30 now"},
       {"today 15:00", "today 15:00", "today 15:00 is still to come, for it is 14:20:30 now"},
-      {"2026-03-05T00:00+01:00", "2026-03-05T00:00+01:00", "2026-03-05T00:00:00+01:00 is still to come, for it is 14:20:30 now"},
+      {"2026-03-05T00:00+01:00", "2026-03-05T00:00+01:00",
+       "2026-03-05T00:00:00+01:00 is still to come, for it is 14:20:30 now"},
       {"yesterday", "", "the time of day is missing"},
       {"yesterday 25:00", "25:00", "there is no such time of day"},
       {"14:60", "14:60", "there is no such time of day"},
@@ -115,7 +119,8 @@ TEST_CASE("a time that cannot be is refused at the right character", "[log]") {
 }
 
 TEST_CASE("a time of day that is still to come offers yesterday's", "[log]") {
-  CHECK(readLogTime("17:05", kNow).error().mend == "give an earlier time, or yesterday 17:05 if that is meant");
+  CHECK(readLogTime("17:05", kNow).error().mend ==
+        "give an earlier time, or yesterday 17:05 if that is meant");
 }
 
 TEST_CASE("the day is that of the local offset", "[log]") {
@@ -128,10 +133,12 @@ TEST_CASE("the day is that of the local offset", "[log]") {
   CHECK(readLogTime("20 min ago", east)->at == moment("2025-12-31T23:50:00+13:00"));
 }
 
-TEST_CASE("random texts for a time never lie ahead of now and read alike twice", "[log][identity]") {
+TEST_CASE("random texts for a time never lie ahead of now and read alike twice",
+          "[log][identity]") {
   std::mt19937_64 random(7);
-  const std::vector<std::string> pieces = {"now", "today ", "yesterday ", "14", ":", "20", "9", " ", "min", " h", "ago", "-", "2026-03-04",
-                                           "T", "+01:00", "Z", "1,5", "\u00A0", "ü", ".", "e9", "days "};
+  const std::vector<std::string> pieces = {
+      "now", "today ",     "yesterday ", "14",     ":", "20",  "9",      " ", "min", " h", "ago",
+      "-",   "2026-03-04", "T",          "+01:00", "Z", "1,5", "\u00A0", "ü", ".",   "e9", "days "};
   std::size_t understood = 0;
   for (int round = 0; round < 20000; ++round) {
     std::string text;

@@ -17,7 +17,8 @@ using enum RunState;
 
 namespace {
 
-constexpr std::array<RunState, kRunStateCount> kStates = {kPlanned, kCharged, kIrradiating, kWorkedUp, kClosed, kSealed};
+constexpr std::array<RunState, kRunStateCount> kStates = {kPlanned,  kCharged, kIrradiating,
+                                                          kWorkedUp, kClosed,  kSealed};
 
 /// The cells of every row of the page's tables.
 std::vector<std::vector<std::string>> tableRows() {
@@ -28,7 +29,8 @@ std::vector<std::vector<std::string>> tableRows() {
   while (std::getline(file, line)) {
     if (!line.starts_with('|') || line.starts_with("|-")) continue;
     std::vector<std::string> cells;
-    for (std::size_t begin = 1, end = 0; (end = line.find('|', begin)) != std::string::npos; begin = end + 1) {
+    for (std::size_t begin = 1, end = 0; (end = line.find('|', begin)) != std::string::npos;
+         begin = end + 1) {
       cells.emplace_back(text::trimmed(std::string_view(line).substr(begin, end - begin)));
     }
     rows.push_back(std::move(cells));
@@ -38,19 +40,26 @@ std::vector<std::vector<std::string>> tableRows() {
 
 std::string inDocs(Permission permission) {
   switch (permission) {
-    case Permission::kYes: return "yes";
-    case Permission::kWithReason: return "reason";
-    case Permission::kNo: break;
+    case Permission::kYes:
+      return "yes";
+    case Permission::kWithReason:
+      return "reason";
+    case Permission::kNo:
+      break;
   }
   return "–";
 }
 
 std::string inDocs(Trigger trigger) {
   switch (trigger) {
-    case Trigger::kFirstWeighing: return "first weighing";
-    case Trigger::kLampOn: return "lamp on";
-    case Trigger::kResult: return "first result";
-    case Trigger::kNone: break;
+    case Trigger::kFirstWeighing:
+      return "first weighing";
+    case Trigger::kLampOn:
+      return "lamp on";
+    case Trigger::kResult:
+      return "first result";
+    case Trigger::kNone:
+      break;
   }
   return "";
 }
@@ -63,14 +72,17 @@ static_assert(stateAfter(kPlanned, Trigger::kFirstWeighing) == kCharged);
 
 }  // namespace
 
-TEST_CASE("the page on a run's life shows the table of transitions that is enforced", "[life][docs]") {
+TEST_CASE("the page on a run's life shows the table of transitions that is enforced",
+          "[life][docs]") {
   std::map<std::string, std::pair<std::string, std::string>> shown;
   for (const auto& cells : tableRows()) {
-    if (cells.size() == 4 && cells[0] != "from") shown[cells[0] + " > " + cells[1]] = {cells[2], cells[3]};
+    if (cells.size() == 4 && cells[0] != "from")
+      shown[cells[0] + " > " + cells[1]] = {cells[2], cells[3]};
   }
   CHECK(shown.size() == kTransitions.size());
   for (const Transition& transition : kTransitions) {
-    const std::string name = std::string(toText(transition.from)) + " > " + std::string(toText(transition.to));
+    const std::string name =
+        std::string(toText(transition.from)) + " > " + std::string(toText(transition.to));
     INFO(name);
     REQUIRE(shown.contains(name));
     CHECK(shown[name].first == inDocs(transition.permission));
@@ -89,15 +101,18 @@ TEST_CASE("the page on a run's life shows the table of deeds that is enforced", 
   for (const DeedRule& rule : kDeedRules) {
     INFO(rule.name);
     REQUIRE(shown.contains(std::string(rule.name)));
-    for (std::size_t i = 0; i < kStates.size(); ++i) CHECK(shown[std::string(rule.name)][i] == inDocs(rule.in[i]));
+    for (std::size_t i = 0; i < kStates.size(); ++i)
+      CHECK(shown[std::string(rule.name)][i] == inDocs(rule.in[i]));
   }
 }
 
 TEST_CASE("every deed has its rule, once", "[life][identity]") {
-  for (std::size_t i = 0; i < kDeedRules.size(); ++i) CHECK(kDeedRules[i].deed == static_cast<Deed>(i));
+  for (std::size_t i = 0; i < kDeedRules.size(); ++i)
+    CHECK(kDeedRules[i].deed == static_cast<Deed>(i));
   for (std::size_t i = 0; i < kTransitions.size(); ++i) {
     for (std::size_t j = i + 1; j < kTransitions.size(); ++j) {
-      CHECK((kTransitions[i].from != kTransitions[j].from || kTransitions[i].to != kTransitions[j].to));
+      CHECK((kTransitions[i].from != kTransitions[j].from ||
+             kTransitions[i].to != kTransitions[j].to));
     }
     CHECK(kTransitions[i].permission != Permission::kNo);
     // What happens by itself must not need a reason, and never moves a run back.
@@ -127,12 +142,14 @@ TEST_CASE("transitions and deeds are allowed or refused with a sentence for ever
       const Permission permission = permissionOf(from, rule.deed);
       CHECK(mayDo(from, rule.deed).has_value() == (permission == Permission::kYes));
       CHECK(mayDo(from, rule.deed, "misread").has_value() == (permission != Permission::kNo));
-      if (const auto refused = mayDo(from, rule.deed); !refused) CHECK(!refused.error().front().mend.empty());
+      if (const auto refused = mayDo(from, rule.deed); !refused)
+        CHECK(!refused.error().front().mend.empty());
     }
   }
 }
 
-TEST_CASE("nothing leaves sealed, and everything but an addendum and a countersignature is over", "[life]") {
+TEST_CASE("nothing leaves sealed, and everything but an addendum and a countersignature is over",
+          "[life]") {
   for (const RunState to : kStates) CHECK(!mayTransition(kSealed, to, "a very good reason"));
   for (const DeedRule& rule : kDeedRules) {
     const bool stays = rule.deed == Deed::kAddAddendum || rule.deed == Deed::kCountersign;
@@ -152,10 +169,13 @@ TEST_CASE("the sentences say what and how to mend it", "[life]") {
   const auto logged = mayDo(kClosed, Deed::kLog).error().front();
   CHECK(logged.what == "nobody can add a log entry while the run is closed");
   CHECK(logged.mend == "open the run again: from closed to worked up, with a reason");
-  CHECK(mayDo(kSealed, Deed::kWeigh).error().front().mend == "write an addendum: it stands beside the sealed record");
-  CHECK(mayDo(kCharged, Deed::kChangePlan).error().front().what == "to change the plan takes a reason once the run is charged");
+  CHECK(mayDo(kSealed, Deed::kWeigh).error().front().mend ==
+        "write an addendum: it stands beside the sealed record");
+  CHECK(mayDo(kCharged, Deed::kChangePlan).error().front().what ==
+        "to change the plan takes a reason once the run is charged");
   CHECK(mayDo(kClosed, Deed::kCountersign).error().front().mend == "seal the run first");
-  CHECK(mayDo(kPlanned, Deed::kRecordResult).error().front().what == "nobody can record a result while the run is planned");
+  CHECK(mayDo(kPlanned, Deed::kRecordResult).error().front().what ==
+        "nobody can record a result while the run is planned");
 }
 
 TEST_CASE("events move a run on and never back", "[life]") {
@@ -174,5 +194,6 @@ TEST_CASE("events move a run on and never back", "[life]") {
     }
   }
   CHECK(triggerOf("lamp on") == Trigger::kLampOn);
-  for (const char* kind : {"lamp off", "pressure", "vent", "observation", "photo", "addendum"}) CHECK(triggerOf(kind) == Trigger::kNone);
+  for (const char* kind : {"lamp off", "pressure", "vent", "observation", "photo", "addendum"})
+    CHECK(triggerOf(kind) == Trigger::kNone);
 }

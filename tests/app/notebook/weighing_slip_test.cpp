@@ -26,11 +26,22 @@ using units::Volume;
 namespace {
 
 ComponentPlan plan(charge::Supply supply, charge::Role role = charge::Role::kSubstrate) {
-  return {.key = "x", .role = role, .name = "indoline", .identity = {}, .amount = {}, .supply = std::move(supply),
-          .supplyGiven = true, .perLimiting = 0.0, .device = {}, .tolerancePercent = {}, .hazards = {}, .place = {}};
+  return {.key = "x",
+          .role = role,
+          .name = "indoline",
+          .identity = {},
+          .amount = {},
+          .supply = std::move(supply),
+          .supplyGiven = true,
+          .perLimiting = 0.0,
+          .device = {},
+          .tolerancePercent = {},
+          .hazards = {},
+          .place = {}};
 }
 
-ComponentCharge target(std::optional<double> mg, std::optional<double> uL, std::optional<double> gPerML = {}) {
+ComponentCharge target(std::optional<double> mg, std::optional<double> uL,
+                       std::optional<double> gPerML = {}) {
   ComponentCharge charge;
   charge.key = "x";
   charge.name = "indoline";
@@ -41,13 +52,15 @@ ComponentCharge target(std::optional<double> mg, std::optional<double> uL, std::
 }
 
 Recorded recorded(const std::string& text) {
-  const auto read = units::readQuantityOf({units::Kind::kMass, units::Kind::kVolume}, text, units::Dialect::kPerson);
+  const auto read = units::readQuantityOf({units::Kind::kMass, units::Kind::kVolume}, text,
+                                          units::Dialect::kPerson);
   REQUIRE(read);
   if (read->kind == units::Kind::kMass) return Mass::fromSi(read->si);
   return Volume::fromSi(read->si);
 }
 
-std::vector<SlipQuestion> ask(const ComponentPlan& plan, const ComponentCharge& target, const std::string& text) {
+std::vector<SlipQuestion> ask(const ComponentPlan& plan, const ComponentCharge& target,
+                              const std::string& text) {
   return questionWeighing(plan, target, recorded(text), text);
 }
 
@@ -58,7 +71,8 @@ const ComponentPlan kSolvent = plan(charge::LiquidSupply{}, charge::Role::kSolve
 
 }  // namespace
 
-TEST_CASE("a power of ten off its target is questioned with the value that was probably meant", "[weighing]") {
+TEST_CASE("a power of ten off its target is questioned with the value that was probably meant",
+          "[weighing]") {
   struct Row {
     const char* text;
     SlipKind kind;
@@ -66,12 +80,18 @@ TEST_CASE("a power of ten off its target is questioned with the value that was p
     double factor;
   };
   const std::vector<Row> rows = {
-      {"26.9 g", SlipKind::kUnit, "26.9 mg", 1e-3},        {"26,9 g", SlipKind::kUnit, "26.9 mg", 1e-3},
-      {"26.9 ug", SlipKind::kUnit, "26.9 mg", 1e3},        {"26.9 µg", SlipKind::kUnit, "26.9 mg", 1e3},
-      {"0.0269 mg", SlipKind::kUnit, "0.0269 g", 1e3},     {"26.9 kg", SlipKind::kUnit, "26.9 mg", 1e-6},
-      {"2.69 mg", SlipKind::kDecimalSign, "26.9 mg", 10},  {"269 mg", SlipKind::kDecimalSign, "26.9 mg", 0.1},
-      {"0.269 mg", SlipKind::kDecimalSign, "26.9 mg", 100}, {"2690 mg", SlipKind::kDecimalSign, "26.9 mg", 0.01},
-      {"0.269 g", SlipKind::kDecimalSign, "0.0269 g", 0.1}, {"330 mg", SlipKind::kDecimalSign, "33 mg", 0.1},
+      {"26.9 g", SlipKind::kUnit, "26.9 mg", 1e-3},
+      {"26,9 g", SlipKind::kUnit, "26.9 mg", 1e-3},
+      {"26.9 ug", SlipKind::kUnit, "26.9 mg", 1e3},
+      {"26.9 µg", SlipKind::kUnit, "26.9 mg", 1e3},
+      {"0.0269 mg", SlipKind::kUnit, "0.0269 g", 1e3},
+      {"26.9 kg", SlipKind::kUnit, "26.9 mg", 1e-6},
+      {"2.69 mg", SlipKind::kDecimalSign, "26.9 mg", 10},
+      {"269 mg", SlipKind::kDecimalSign, "26.9 mg", 0.1},
+      {"0.269 mg", SlipKind::kDecimalSign, "26.9 mg", 100},
+      {"2690 mg", SlipKind::kDecimalSign, "26.9 mg", 0.01},
+      {"0.269 g", SlipKind::kDecimalSign, "0.0269 g", 0.1},
+      {"330 mg", SlipKind::kDecimalSign, "33 mg", 0.1},
       {"2.1 mg", SlipKind::kDecimalSign, "21 mg", 10},
   };
   for (const Row& row : rows) {
@@ -86,8 +106,10 @@ TEST_CASE("a power of ten off its target is questioned with the value that was p
     const double given = std::get<Mass>(recorded(row.text)).si();
     CHECK(std::get<Mass>(*question.likely).si() == Approx(given * row.factor).epsilon(1e-12));
   }
-  CHECK(ask(kSolid, target(26.8, {}), "26.9 g").front().what == "26.9 g is about 1000 times the target of 26.8 mg");
-  CHECK(ask(kSolid, target(26.8, {}), "2.69 mg").front().what == "2.69 mg is about 1/10 of the target of 26.8 mg");
+  CHECK(ask(kSolid, target(26.8, {}), "26.9 g").front().what ==
+        "26.9 g is about 1000 times the target of 26.8 mg");
+  CHECK(ask(kSolid, target(26.8, {}), "2.69 mg").front().what ==
+        "2.69 mg is about 1/10 of the target of 26.8 mg");
 }
 
 TEST_CASE("volumes slip between microlitres and millilitres", "[weighing]") {
@@ -144,15 +166,18 @@ TEST_CASE("a mass where a volume is usual is questioned, and the reverse", "[wei
 
   ComponentPlan onBalance = kLiquid;
   onBalance.device = *charge::findDevice("balance-0.1mg");
-  CHECK(ask(onBalance, target(26.8, 25.2, 1.063), "25.2 uL").front().kind == SlipKind::kOtherQuantity);
+  CHECK(ask(onBalance, target(26.8, 25.2, 1.063), "25.2 uL").front().kind ==
+        SlipKind::kOtherQuantity);
   CHECK(ask(onBalance, target(26.8, 25.2, 1.063), "26.8 mg").empty());
   ComponentPlan byPipette = kLiquid;
   byPipette.device = *charge::findDevice("pipette-100uL");
   CHECK(ask(byPipette, target(26.8, 25.2, 1.063), "25.2 uL").empty());
-  CHECK(ask(byPipette, target(26.8, 25.2, 1.063), "26.8 mg").front().ask == "was it really weighed?");
+  CHECK(ask(byPipette, target(26.8, 25.2, 1.063), "26.8 mg").front().ask ==
+        "was it really weighed?");
 }
 
-TEST_CASE("the figure of the other target is recognised where the density tells them apart", "[weighing]") {
+TEST_CASE("the figure of the other target is recognised where the density tells them apart",
+          "[weighing]") {
   const auto heavy = ask(kLiquid, target(133, 100, 1.33), "100 mg");
   REQUIRE(heavy.size() == 1);
   CHECK(heavy.front().kind == SlipKind::kOtherQuantity);
@@ -163,7 +188,8 @@ TEST_CASE("the figure of the other target is recognised where the density tells 
   CHECK(reverse.front().likelyText == "133 mg");
 }
 
-TEST_CASE("whatever is recorded, the questions are few, worded, and alike twice", "[weighing][identity]") {
+TEST_CASE("whatever is recorded, the questions are few, worded, and alike twice",
+          "[weighing][identity]") {
   std::mt19937_64 random(5);
   std::uniform_real_distribution<double> power(-12, 6);
   const std::vector<const ComponentPlan*> plans = {&kSolid, &kLiquid, &kStock, &kSolvent};
@@ -172,8 +198,10 @@ TEST_CASE("whatever is recorded, the questions are few, worded, and alike twice"
     const auto goal = target(random() % 3 != 0 ? std::optional(some()) : std::nullopt,
                              random() % 3 != 0 ? std::optional(some()) : std::nullopt,
                              random() % 2 != 0 ? std::optional(some()) : std::nullopt);
-    const Recorded actual = random() % 2 != 0 ? Recorded(Mass::fromMilligrams(some())) : Recorded(Volume::fromMicrolitres(some()));
-    const auto questions = questionWeighing(*plans[random() % 4], goal, actual, random() % 2 != 0 ? "nonsense \xFF" : "");
+    const Recorded actual = random() % 2 != 0 ? Recorded(Mass::fromMilligrams(some()))
+                                              : Recorded(Volume::fromMicrolitres(some()));
+    const auto questions = questionWeighing(*plans[random() % 4], goal, actual,
+                                            random() % 2 != 0 ? "nonsense \xFF" : "");
     REQUIRE(questions.size() <= 2);
     for (const SlipQuestion& question : questions) {
       REQUIRE(!question.what.empty());
@@ -183,8 +211,10 @@ TEST_CASE("whatever is recorded, the questions are few, worded, and alike twice"
   }
 }
 
-TEST_CASE("the value that was probably meant raises no question of size itself", "[weighing][identity]") {
-  for (const char* text : {"26.9 g", "2.69 mg", "269 mg", "2690 mg", "26.9 ug", "330 mg", "21.5 g"}) {
+TEST_CASE("the value that was probably meant raises no question of size itself",
+          "[weighing][identity]") {
+  for (const char* text :
+       {"26.9 g", "2.69 mg", "269 mg", "2690 mg", "26.9 ug", "330 mg", "21.5 g"}) {
     INFO(text);
     const auto questions = ask(kSolid, target(26.8, {}), text);
     REQUIRE(questions.size() == 1);
