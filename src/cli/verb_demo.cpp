@@ -18,7 +18,8 @@
 namespace vialkeeper::cli {
 namespace {
 
-std::string answer(const std::string& file, const app::DemoSummary& summary, const CommonOptions& common) {
+std::string answer(const std::string& file, const app::DemoSummary& summary,
+                   const CommonOptions& common) {
   if (common.json) {
     return toJsonText({{"file", file},
                        {"people", app::kDemoPeople},
@@ -27,8 +28,10 @@ std::string answer(const std::string& file, const app::DemoSummary& summary, con
                        {"datasets", summary.datasets},
                        {"notices", nlohmann::ordered_json::array()}});
   }
-  return fmt::format("{}: {} invented runs by {}, {} log entries, {} datasets\nAll of it is invented; none of it was measured.\n",
-                     file, summary.runs, fmt::join(app::kDemoPeople, ", "), summary.events, summary.datasets);
+  return fmt::format(
+      "{}: {} invented runs by {}, {} log entries, {} datasets\nAll of it is invented; none of it "
+      "was measured.\n",
+      file, summary.runs, fmt::join(app::kDemoPeople, ", "), summary.events, summary.datasets);
 }
 
 /// Makes the notebook and fills it.
@@ -36,7 +39,8 @@ VerbResult runDemo(int runs, const CommonOptions& common) {
   const auto file = bookFile(common);
   if (!file) return std::unexpected(file.error());
   if (runs < 1) {
-    return std::unexpected(text::Faults{usageFault("--runs", "a demonstration has at least one run", "ask for 1 or more")});
+    return std::unexpected(text::Faults{
+        usageFault("--runs", "a demonstration has at least one run", "ask for 1 or more")});
   }
   auto notebook = db::createNotebook(*file);
   if (!notebook) return std::unexpected(notebook.error());
@@ -53,8 +57,11 @@ VerbResult runDemo(int runs, const CommonOptions& common) {
 
 Verb demoVerb(CLI::App& program) {
   auto runs = std::make_shared<int>(app::kDemoCampaignRuns);
-  CLI::App* parser = program.add_subcommand("demo", "Make a notebook of invented runs, to look around in");
-  parser->add_option("--runs", *runs, fmt::format("how many runs; {} are the campaign, more are filled up in bulk", app::kDemoCampaignRuns));
+  CLI::App* parser =
+      program.add_subcommand("demo", "Make a notebook of invented runs, to look around in");
+  parser->add_option("--runs", *runs,
+                     fmt::format("how many runs; {} are the campaign, more are filled up in bulk",
+                                 app::kDemoCampaignRuns));
   return {parser, [runs](const CommonOptions& common) { return runDemo(*runs, common); }};
 }
 

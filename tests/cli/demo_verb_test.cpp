@@ -22,7 +22,8 @@ namespace {
 /// A demonstration, made once for all cases.
 class Demo {
  public:
-  Demo() : m_file(m_folder.path("demo.vialbook")), m_ran(run({"--book", m_file, "--json", "demo"})) {}
+  Demo()
+      : m_file(m_folder.path("demo.vialbook")), m_ran(run({"--book", m_file, "--json", "demo"})) {}
 
   const Ran& ran() const { return m_ran; }
   std::unique_ptr<app::Notebook> notebook() const {
@@ -43,7 +44,8 @@ const Demo& demo() {
 }
 
 std::vector<app::FoundRun> found(app::Notebook& notebook, std::string_view query) {
-  const auto result = app::findRuns(notebook, query, {.order = app::FindOrder::kOldest, .limit = 0});
+  const auto result =
+      app::findRuns(notebook, query, {.order = app::FindOrder::kOldest, .limit = 0});
   INFO(query << ": " << (result ? "" : text::toLine(result.error().front())));
   REQUIRE(result);
   return result->runs;
@@ -53,12 +55,15 @@ std::vector<app::FoundRun> found(app::Notebook& notebook, std::string_view query
 std::string told(app::Notebook& notebook) {
   std::string text;
   for (const app::FoundRun& entry : found(notebook, "")) {
-    text += entry.run.code + "|" + entry.run.title + "|" + entry.run.conclusion + "|" + toIsoText(entry.run.created) + "\n";
+    text += entry.run.code + "|" + entry.run.title + "|" + entry.run.conclusion + "|" +
+            toIsoText(entry.run.created) + "\n";
     text += std::to_string(entry.run.yield_percent.value_or(-1)) + "\n";
-    for (const app::ComponentRecord& component : entry.components) text += component.actualText + ";";
+    for (const app::ComponentRecord& component : entry.components)
+      text += component.actualText + ";";
     const auto events = notebook.events(entry.run.n);
     REQUIRE(events);
-    for (const app::EventRecord& event : *events) text += toIsoText(event.at) + toIsoText(event.logged) + event.raw + "\n";
+    for (const app::EventRecord& event : *events)
+      text += toIsoText(event.at) + toIsoText(event.logged) + event.raw + "\n";
     const auto datasets = notebook.datasetsOf(entry.run.n);
     REQUIRE(datasets);
     for (const app::DatasetRecord& dataset : *datasets) text += *notebook.attachment(dataset.raw);
@@ -94,7 +99,9 @@ TEST_CASE("demo refuses a file that is there and a number of runs below one", "[
 TEST_CASE("two demonstrations agree in every code, text and number", "[demo][identity]") {
   const ScratchFolder folder;
   const std::string file = folder.path("again.vialbook");
-  REQUIRE(run({"--book", file, "demo"}).status == 0);
+  const Ran ran = run({"--book", file, "demo"});
+  REQUIRE(ran.status == 0);
+  CHECK_THAT(ran.out, Catch::Matchers::Contains("All of it is invented"));
   auto again = db::openNotebook(file, db::OpenFor::kReading, "test");
   REQUIRE(again);
   CHECK(told(**again) == told(*demo().notebook()));
@@ -104,22 +111,41 @@ TEST_CASE("a demonstration verifies and is marked as invented", "[demo][identity
   const auto notebook = demo().notebook();
   const auto report = notebook->verify();
   REQUIRE(report);
-  for (const app::Finding& finding : report->findings) FAIL_CHECK(finding.where << ": " << finding.what);
+  for (const app::Finding& finding : report->findings)
+    FAIL_CHECK(finding.where << ": " << finding.what);
   const auto people = notebook->people();
   REQUIRE(people);
   for (const app::Person& person : *people) CHECK(person.name.ends_with("(invented)"));
-  for (const app::FoundRun& entry : found(*notebook, "")) CHECK(entry.run.aim.starts_with("Invented demonstration data."));
+  for (const app::FoundRun& entry : found(*notebook, ""))
+    CHECK(entry.run.aim.starts_with("Invented demonstration data."));
 }
 
-TEST_CASE("a demonstration's runs are found by everything that they are looked for by", "[demo][identity]") {
+TEST_CASE("a demonstration's runs are found by everything that they are looked for by",
+          "[demo][identity]") {
   const auto notebook = demo().notebook();
-  const std::map<std::string, std::size_t> least = {
-      {R"(acid:"pivalic acid" 5..20 mol%)", 20}, {"acid:PivOH 1.5..3 mol%", 1}, {"photocatalyst:4CzIPN 1.8..2.2 mol%", 2},
-      {"cocatalyst:NiBr2 0.5..3 mol%", 3}, {R"(catalyst:"palladium(II) acetate")", 4}, {"substrate:indoline yield>60", 8},
-      {"not acid:*", 5}, {"solvent:DMF", 5}, {"solvent:ethanol not solvent:acetonitrile", 3}, {"wavelength:440 nm", 40},
-      {"amber bubbles", 5}, {"septum leaks", 1}, {"timer", 1}, {R"("black ppt")", 1}, {"state:planned", 2}, {"state:charged", 1},
-      {"state:irradiating", 2}, {"state:worked-up", 2}, {"person:TS", 10}, {"2026-04", 15}, {R"(series:"acid additives")", 11},
-      {R"(partner:indole)", 4}, {R"(vial:"20 mL crimp vial" yield>50)", 4}};
+  const std::map<std::string, std::size_t> least = {{R"(acid:"pivalic acid" 5..20 mol%)", 20},
+                                                    {"acid:PivOH 1.5..3 mol%", 1},
+                                                    {"photocatalyst:4CzIPN 1.8..2.2 mol%", 2},
+                                                    {"cocatalyst:NiBr2 0.5..3 mol%", 3},
+                                                    {R"(catalyst:"palladium(II) acetate")", 4},
+                                                    {"substrate:indoline yield>60", 8},
+                                                    {"not acid:*", 5},
+                                                    {"solvent:DMF", 5},
+                                                    {"solvent:ethanol not solvent:acetonitrile", 3},
+                                                    {"wavelength:440 nm", 40},
+                                                    {"amber bubbles", 5},
+                                                    {"septum leaks", 1},
+                                                    {"timer", 1},
+                                                    {R"("black ppt")", 1},
+                                                    {"state:planned", 2},
+                                                    {"state:charged", 1},
+                                                    {"state:irradiating", 2},
+                                                    {"state:worked-up", 2},
+                                                    {"person:TS", 10},
+                                                    {"2026-04", 15},
+                                                    {R"(series:"acid additives")", 11},
+                                                    {R"(partner:indole)", 4},
+                                                    {R"(vial:"20 mL crimp vial" yield>50)", 4}};
   for (const auto& [query, count] : least) {
     INFO(query);
     CHECK(found(*notebook, query).size() >= count);
@@ -127,10 +153,14 @@ TEST_CASE("a demonstration's runs are found by everything that they are looked f
   CHECK(found(*notebook, "FAILED").size() == 3);
 }
 
-TEST_CASE("duplicates of a demonstration scatter, but by no more than chemistry does", "[demo][identity]") {
+TEST_CASE("duplicates of a demonstration scatter, but by no more than chemistry does",
+          "[demo][identity]") {
   const auto notebook = demo().notebook();
   std::vector<double> yields;
-  for (const app::FoundRun& entry : found(*notebook, R"(substrate:indoline acid:"pivalic acid" 9..11 mol% cocatalyst:NiBr2 4.5..5.5 mol% photocatalyst:4CzIPN 0.9..1.1 mol% solvent:water wavelength:440 limiting:0.2 mmol)")) {
+  for (
+      const app::FoundRun& entry : found(
+          *notebook,
+          R"(substrate:indoline acid:"pivalic acid" 9..11 mol% cocatalyst:NiBr2 4.5..5.5 mol% photocatalyst:4CzIPN 0.9..1.1 mol% solvent:water wavelength:440 limiting:0.2 mmol)")) {
     if (entry.run.yield_percent) yields.push_back(*entry.run.yield_percent);
   }
   REQUIRE(yields.size() >= 3);
@@ -139,13 +169,15 @@ TEST_CASE("duplicates of a demonstration scatter, but by no more than chemistry 
   CHECK(most - least < 15.0);
 }
 
-TEST_CASE("a demonstration's trail looks like work: who did what in the order of time", "[demo][identity]") {
+TEST_CASE("a demonstration's trail looks like work: who did what in the order of time",
+          "[demo][identity]") {
   const auto notebook = demo().notebook();
   const auto first = notebook->findRun("KW-0002");
   REQUIRE((first && *first));
   const auto history = notebook->history((*first)->n);
   REQUIRE(history);
-  CHECK(std::ranges::is_sorted(*history, {}, [](const app::RevisionRecord& revision) { return revision.at.utc; }));
+  CHECK(std::ranges::is_sorted(
+      *history, {}, [](const app::RevisionRecord& revision) { return revision.at.utc; }));
   std::set<std::string> actions;
   for (const app::RevisionRecord& revision : *history) actions.insert(revision.action);
   for (const char* action : {"weigh", "log", "result", "import"}) CHECK(actions.contains(action));
@@ -163,7 +195,8 @@ TEST_CASE("a demonstration's trail looks like work: who did what in the order of
   CHECK(late >= 3);
 }
 
-TEST_CASE("runs filled in bulk have 8 components and 10 events, and the charge of their own plans", "[demo][identity]") {
+TEST_CASE("runs filled in bulk have 8 components and 10 events, and the charge of their own plans",
+          "[demo][identity]") {
   const ScratchFolder folder;
   auto notebook = db::createNotebook(folder.path("bulk.vialbook"));
   REQUIRE(notebook);
@@ -192,10 +225,18 @@ TEST_CASE("runs filled in bulk have 8 components and 10 events, and the charge o
       const app::ComponentRecord& kept = runs[i].components[c];
       INFO(kept.key);
       CHECK(near(kept.planned_molPercent, computed.molPercent));
-      CHECK(near(kept.planned_mmol, computed.amount_mol ? std::optional(computed.amount_mol->value() * 1e3) : std::nullopt));
-      CHECK(near(kept.planned_mol_L, computed.concentration ? std::optional(computed.concentration->molPerLitre()) : std::nullopt));
-      CHECK(near(kept.target_mg, computed.targetMass ? std::optional(computed.targetMass->milligrams()) : std::nullopt));
-      CHECK(near(kept.target_uL, computed.targetVolume ? std::optional(computed.targetVolume->microlitres()) : std::nullopt));
+      CHECK(near(kept.planned_mmol, computed.amount_mol
+                                        ? std::optional(computed.amount_mol->value() * 1e3)
+                                        : std::nullopt));
+      CHECK(near(kept.planned_mol_L, computed.concentration
+                                         ? std::optional(computed.concentration->molPerLitre())
+                                         : std::nullopt));
+      CHECK(near(kept.target_mg, computed.targetMass
+                                     ? std::optional(computed.targetMass->milligrams())
+                                     : std::nullopt));
+      CHECK(near(kept.target_uL, computed.targetVolume
+                                     ? std::optional(computed.targetVolume->microlitres())
+                                     : std::nullopt));
     }
   }
   CHECK(codes.size() == 620);

@@ -94,7 +94,11 @@ TEST_CASE("after 200 kills in mid-write every acknowledged entry is there and th
     std::set<int> promised;
     for (int attempt = 0; attempt < 20; ++attempt) {
       const Child child = started(file, attempt * 100000, 100000);
-      ::usleep(static_cast<useconds_t>(5000 + random() % 35000));
+      // Not before it writes: the first acknowledgement starts the clock.
+      int first = 0;
+      REQUIRE(::read(child.pipe, &first, sizeof first) == sizeof first);
+      promised.insert(first);
+      ::usleep(static_cast<useconds_t>(random() % 30000));
       REQUIRE(::kill(child.pid, SIGKILL) == 0);
       const int status = statusOf(child.pid);
       REQUIRE(WIFSIGNALED(status));

@@ -46,6 +46,14 @@ std::map<std::string, std::string> ScratchFolder::contents() const {
   return all;
 }
 
+std::string ScratchFolder::withoutPath(std::string text) const {
+  const std::string prefix = m_path + "/";
+  for (std::size_t at = text.find(prefix); at != std::string::npos; at = text.find(prefix, at)) {
+    text.erase(at, prefix.size());
+  }
+  return text;
+}
+
 std::string bytesOf(const std::string& path) {
   std::ifstream file(path, std::ios::binary);
   if (!file) throw std::runtime_error("cannot read " + path);

@@ -24,6 +24,8 @@ class ScratchFolder {
   /// What the folder holds: names and bytes, `<folder>` for a folder. Two equal ones: nothing was
   /// written.
   [[nodiscard]] std::map<std::string, std::string> contents() const;
+  /// The text with the folder's own path taken out, so that `plan.toml:3: …` remains.
+  [[nodiscard]] std::string withoutPath(std::string text) const;
 
  private:
   std::string m_path;

@@ -20,19 +20,24 @@
 namespace vialkeeper::app {
 namespace {
 
-constexpr std::int64_t kBatch = 100;  // larger ones cost more than the syncs they save: a revision tells all of it
+constexpr std::int64_t kBatch =
+    500;  // in one action: the index pages are written once for all of them
 constexpr std::int64_t kRunsPerDay = 40;
 constexpr std::uint64_t kStream = 1'000'000;  // apart from those of the campaign's runs
 
 constexpr auto kColours = std::to_array<std::string_view>(
-    {"amber", "yellow", "deep amber", "orange", "brown", "pale yellow", "dark brown", "colourless", "green", "red-brown"});
-constexpr auto kSolids = std::to_array<std::string_view>(
-    {"clear", "no solid", "slightly turbid", "some ppt", "turbid", "black specks", "oily film", "white needles"});
-constexpr auto kGas = std::to_array<std::string_view>(
-    {"steady bubbles", "no bubbles", "fine bubbles on the bar", "slow bubbles", "fast bubbles", "foam"});
+    {"amber", "yellow", "deep amber", "orange", "brown", "pale yellow", "dark brown", "colourless",
+     "green", "red-brown"});
+constexpr auto kSolids =
+    std::to_array<std::string_view>({"clear", "no solid", "slightly turbid", "some ppt", "turbid",
+                                     "black specks", "oily film", "white needles"});
+constexpr auto kGas =
+    std::to_array<std::string_view>({"steady bubbles", "no bubbles", "fine bubbles on the bar",
+                                     "slow bubbles", "fast bubbles", "foam"});
 constexpr auto kRare = std::to_array<std::string_view>(
-    {"septum bulged", "stir bar stuck", "vial tilted", "fan noisy", "lid fogged", "mirror on the glass", "smells of indole",
-     "crystals at the rim", "needle blocked", "block at 37 C", "power cut overnight", "gauge drifting", "second lamp used",
+    {"septum bulged", "stir bar stuck", "vial tilted", "fan noisy", "lid fogged",
+     "mirror on the glass", "smells of indole", "crystals at the rim", "needle blocked",
+     "block at 37 C", "power cut overnight", "gauge drifting", "second lamp used",
      "vial swapped with neighbour", "label smudged", "cap re-crimped"});
 
 /// A place in a list, the first ones far more often: as 1, 1/2, 1/3, …
@@ -40,7 +45,8 @@ class Skewed {
  public:
   explicit Skewed(std::size_t count) {
     double sum = 0.0;
-    for (std::size_t i = 0; i < count; ++i) m_sums.push_back(sum += 1.0 / static_cast<double>(i + 1));
+    for (std::size_t i = 0; i < count; ++i)
+      m_sums.push_back(sum += 1.0 / static_cast<double>(i + 1));
   }
   std::size_t operator()(DemoRandom& random) const {
     const auto found = std::ranges::lower_bound(m_sums, random.between(0.0, m_sums.back()));
@@ -54,17 +60,22 @@ class Skewed {
 DemoVocabulary makeVocabulary() {
   DemoVocabulary vocabulary;
   vocabulary.photocatalysts = {"4CzIPN"};
-  vocabulary.cocatalysts = {"nickel(II) bromide glyme", "nickel(II) chloride hexahydrate", "palladium(II) acetate"};
-  vocabulary.acids = {"pivalic acid", "acetic acid", "benzoic acid", "hexanoic acid", "trifluoroacetic acid"};
-  const auto fill = [](std::vector<std::string>& names, std::string_view pattern, std::size_t count) {
-    while (names.size() < count) names.push_back(fmt::format(fmt::runtime(pattern), names.size() + 1));
+  vocabulary.cocatalysts = {"nickel(II) bromide glyme", "nickel(II) chloride hexahydrate",
+                            "palladium(II) acetate"};
+  vocabulary.acids = {"pivalic acid", "acetic acid", "benzoic acid", "hexanoic acid",
+                      "trifluoroacetic acid"};
+  const auto fill = [](std::vector<std::string>& names, std::string_view pattern,
+                       std::size_t count) {
+    while (names.size() < count)
+      names.push_back(fmt::format(fmt::runtime(pattern), names.size() + 1));
   };
   fill(vocabulary.photocatalysts, "invented dye D{:02}", 80);
   fill(vocabulary.cocatalysts, "invented metal salt M{:02}", 60);
   fill(vocabulary.acids, "invented acid A{:02}", 60);
   fill(vocabulary.additives, "invented additive X{:03}", 100);
-  for (const auto& list : {std::span<const std::string_view>(kColours), std::span<const std::string_view>(kSolids),
-                           std::span<const std::string_view>(kGas), std::span<const std::string_view>(kRare)}) {
+  for (const auto& list :
+       {std::span<const std::string_view>(kColours), std::span<const std::string_view>(kSolids),
+        std::span<const std::string_view>(kGas), std::span<const std::string_view>(kRare)}) {
     vocabulary.words.insert(vocabulary.words.end(), list.begin(), list.end());
   }
   return vocabulary;
@@ -100,7 +111,9 @@ class BulkWriter {
     bulk.run.uYield_percent = 2.0;
     bulk.run.conversion_percent = std::min(100.0, std::round(yield * 10.4) / 10.0);
     bulk.run.uConversion_percent = 2.0;
-    bulk.run.conclusion = yield > 70.0 ? "Good, worth a second look." : yield < 20.0 ? "Poor, dropped." : "As expected.";
+    bulk.run.conclusion = yield > 70.0   ? "Good, worth a second look."
+                          : yield < 20.0 ? "Poor, dropped."
+                                         : "As expected.";
     weigh(bulk.components, bulk.run, laterBy(at, 0.2));
     log(bulk, yield * 0.01);
     return bulk;
@@ -121,12 +134,14 @@ class BulkWriter {
                       .cocatalyst_molPercent = m_random.pick(kMetal),
                       .acid_molPercent = m_random.pick(kAcid),
                       .additive_molPercent = m_random.pick(kAdditive)};
-    recipe.title = fmt::format("{}, {} {:g} mol%", m_shelf.substrates[recipe.substrate].name, m_shelf.acids[recipe.acid].name, recipe.acid_molPercent);
+    recipe.title = fmt::format("{}, {} {:g} mol%", m_shelf.substrates[recipe.substrate].name,
+                               m_shelf.acids[recipe.acid].name, recipe.acid_molPercent);
     recipe.series = fmt::format("screen {}", 1 + m_random.below(60));
     return recipe;
   }
 
-  void weigh(std::vector<ComponentRecord>& components, const RunRecord& run, const units::Moment& at) {
+  void weigh(std::vector<ComponentRecord>& components, const RunRecord& run,
+             const units::Moment& at) {
     for (ComponentRecord& component : components) {
       if (component.role == "solvent") continue;
       const double factor = 1.0 + 0.012 * m_random.normal();
@@ -137,7 +152,8 @@ class BulkWriter {
         component.actual_uL = std::round(*component.target_uL * factor);
         component.actualText = fmt::format("{:.0f} uL", *component.actual_uL);
       }
-      const double took = component.target_mg ? *component.actual_mg / *component.target_mg : *component.actual_uL / *component.target_uL;
+      const double took = component.target_mg ? *component.actual_mg / *component.target_mg
+                                              : *component.actual_uL / *component.target_uL;
       component.weighed = at;
       component.weighedBy = run.person;
       component.charged_mmol = *component.planned_mmol * took;
@@ -147,7 +163,8 @@ class BulkWriter {
     // The loadings are those of what was weighed against the substrate that was weighed.
     for (ComponentRecord& component : components) {
       if (component.planned_molPercent && component.charged_mmol) {
-        component.charged_molPercent = 100.0 * *component.charged_mmol / *components.front().charged_mmol;
+        component.charged_molPercent =
+            100.0 * *component.charged_mmol / *components.front().charged_mmol;
       }
     }
   }
@@ -176,7 +193,8 @@ class BulkWriter {
   }
 
   std::string observation() {
-    std::string text = fmt::format("{}, {}, {}", kColours[m_colour(m_random)], kSolids[m_solid(m_random)], kGas[m_gas(m_random)]);
+    std::string text = fmt::format("{}, {}, {}", kColours[m_colour(m_random)],
+                                   kSolids[m_solid(m_random)], kGas[m_gas(m_random)]);
     if (m_random.once(0.05)) text += fmt::format("; {}", kRare[m_rare(m_random)]);
     return text;
   }
@@ -237,13 +255,17 @@ const DemoVocabulary& demoVocabulary() {
   return vocabulary;
 }
 
-Checked<DemoSummary> fillWithRuns(Notebook& notebook, std::int64_t runs, const DemoOptions& options) {
+Checked<DemoSummary> fillWithRuns(Notebook& notebook, std::int64_t runs,
+                                  const DemoOptions& options) {
   if (runs < 0) return askedFault("runs", "a number of runs is at least 0", "give another");
-  const units::Moment first = laterBy(demoMoment(0, 8.0), -24.0 * static_cast<double>(runs / kRunsPerDay + 3));
+  const units::Moment first =
+      laterBy(demoMoment(0, 8.0), -24.0 * static_cast<double>(runs / kRunsPerDay + 3));
   const auto whenOf = [&first](std::int64_t i) {
-    return laterBy(first, 24.0 * static_cast<double>(i / kRunsPerDay) + 0.2 * static_cast<double>(i % kRunsPerDay));
+    return laterBy(first, 24.0 * static_cast<double>(i / kRunsPerDay) +
+                              0.2 * static_cast<double>(i % kRunsPerDay));
   };
-  if (const auto people = addDemoPeople(notebook, first); !people) return std::unexpected(people.error());
+  if (const auto people = addDemoPeople(notebook, first); !people)
+    return std::unexpected(people.error());
   auto shelf = stockBulkShelf(notebook, {{"KW", first}, "demo"});
   if (!shelf) return std::unexpected(shelf.error());
   auto charge = BulkCharge::of(*shelf);
@@ -252,15 +274,16 @@ Checked<DemoSummary> fillWithRuns(Notebook& notebook, std::int64_t runs, const D
   DemoSummary summary;
   while (summary.runs < runs) {
     const std::int64_t end = std::min(runs, summary.runs + kBatch);
-    const auto done = notebook.act({{"KW", laterBy(whenOf(end - 1), 21.0)}, "demo"}, [&](Writing& writing) -> Checked<void> {
-      Codes codes(writing);
-      for (; summary.runs < end; ++summary.runs) {
-        BulkRun bulk = writer.next(whenOf(summary.runs));
-        if (const auto written = write(writing, codes, bulk); !written) return written;
-        summary.events += static_cast<std::int64_t>(bulk.events.size());
-      }
-      return {};
-    });
+    const auto done = notebook.act(
+        {{"KW", laterBy(whenOf(end - 1), 21.0)}, "demo"}, [&](Writing& writing) -> Checked<void> {
+          Codes codes(writing);
+          for (; summary.runs < end; ++summary.runs) {
+            BulkRun bulk = writer.next(whenOf(summary.runs));
+            if (const auto written = write(writing, codes, bulk); !written) return written;
+            summary.events += static_cast<std::int64_t>(bulk.events.size());
+          }
+          return {};
+        });
     if (!done) return std::unexpected(done.error());
   }
   return summary;

@@ -10,8 +10,8 @@
 
 namespace vialkeeper::app {
 
-/// Substances that bulk runs are charged with, the most used first, and words of their observations:
-/// what a benchmark may look for.
+/// Substances that bulk runs are charged with, the most used first, and words of their
+/// observations: what a benchmark may look for.
 struct DemoVocabulary {
   std::vector<std::string> photocatalysts;
   std::vector<std::string> cocatalysts;
@@ -22,10 +22,12 @@ struct DemoVocabulary {
 
 [[nodiscard]] const DemoVocabulary& demoVocabulary();
 
-/// Adds so many plain invented runs of exactly 8 components and 10 events each, 100 in one action, dated
-/// before the campaign. About 300 substances are used as a group would: few often, most seldom. The charge
-/// is worked out once a variant and scaled with the loadings; each run's plan agrees with its record.
-/// People and substances that are missing are added. Fault: a negative number.
-[[nodiscard]] Checked<DemoSummary> fillWithRuns(Notebook& notebook, std::int64_t runs, const DemoOptions& options);
+/// Adds so many plain invented runs of exactly 8 components and 10 events each, 500 in one action,
+/// dated before the campaign. About 300 substances are used as a group would: few often, most
+/// seldom. The charge is worked out once a variant and scaled with the loadings; each run's plan
+/// agrees with its record. People and substances that are missing are added. Fault: a negative
+/// number.
+[[nodiscard]] Checked<DemoSummary> fillWithRuns(Notebook& notebook, std::int64_t runs,
+                                                const DemoOptions& options);
 
 }  // namespace vialkeeper::app

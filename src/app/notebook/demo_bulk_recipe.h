@@ -59,9 +59,12 @@ class BulkCharge {
   [[nodiscard]] static Checked<BulkCharge> of(const BulkShelf& shelf);
 
   /// A run's record with what its plan says: vial, lamp, amounts.
-  [[nodiscard]] const RunRecord& run(std::size_t substrate) const { return m_variants[substrate].run; }
+  [[nodiscard]] const RunRecord& run(std::size_t substrate) const {
+    return m_variants[substrate].run;
+  }
   /// The 8 components as planned.
-  [[nodiscard]] std::vector<ComponentRecord> components(const BulkShelf& shelf, const BulkRecipe& recipe) const;
+  [[nodiscard]] std::vector<ComponentRecord> components(const BulkShelf& shelf,
+                                                        const BulkRecipe& recipe) const;
 
  private:
   struct Variant {

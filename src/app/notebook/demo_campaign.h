@@ -24,10 +24,10 @@ struct DemoSummary {
   std::int64_t datasets = 0;
 };
 
-/// Fills an empty notebook with the campaign of three invented people, March to May 2026, through the same
-/// use cases that a person works with. The same options give the same codes, texts and numbers; ids are
-/// made anew. Fewer runs than the campaign has: its first ones.
-/// Faults: the notebook is not empty, fewer than one run.
+/// Fills an empty notebook with the campaign of three invented people, March to May 2026, through
+/// the same use cases that a person works with. The same options give the same codes, texts and
+/// numbers; ids are made anew. Fewer runs than the campaign has: its first ones. Faults: the
+/// notebook is not empty, fewer than one run.
 [[nodiscard]] Checked<DemoSummary> makeDemo(Notebook& notebook, const DemoOptions& options);
 
 }  // namespace vialkeeper::app

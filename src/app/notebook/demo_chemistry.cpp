@@ -12,10 +12,10 @@ namespace {
 
 constexpr std::string_view kSolid = R"({ kind = "solid", assay = 0.98, u_assay = 0.005 })";
 
-constexpr DemoSubstance kCatalyst{
-    "4CzIPN", "C56H32N6",
-    "N#Cc1c(n2c3ccccc3c3ccccc32)c(C#N)c(n2c3ccccc3c3ccccc32)c(n2c3ccccc3c3ccccc32)c1n1c2ccccc2c2ccccc21",
-    "1416881-52-1", "tetracarbazolyl isophthalonitrile"};
+constexpr DemoSubstance kCatalyst{"4CzIPN", "C56H32N6",
+                                  "N#Cc1c(n2c3ccccc3c3ccccc32)c(C#N)c(n2c3ccccc3c3ccccc32)c("
+                                  "n2c3ccccc3c3ccccc32)c1n1c2ccccc2c2ccccc21",
+                                  "1416881-52-1", "tetracarbazolyl isophthalonitrile"};
 
 constexpr DemoSubstance kIndole{"indole", "C8H7N", "c1ccc2[nH]ccc2c1", "120-72-9", ""};
 
@@ -30,36 +30,80 @@ constexpr auto kLiquids = std::to_array<Liquid>({
 
 // In the order of DemoSubstrateKind.
 constexpr auto kSubstrates = std::to_array<DemoSubstrate>({
-    {{"indoline", "C8H9N", "C1Cc2ccccc2N1", "496-15-1", "2,3-dihydroindole"}, kIndole, "imine",
-     R"({ kind = "liquid", density = "1.063 g/mL", u_density = "0.002 g/mL", assay = 0.99, u_assay = 0.005 })", 1.0, 1.0},
+    {{"indoline", "C8H9N", "C1Cc2ccccc2N1", "496-15-1", "2,3-dihydroindole"},
+     kIndole,
+     "imine",
+     R"({ kind = "liquid", density = "1.063 g/mL", u_density = "0.002 g/mL", assay = 0.99, u_assay = 0.005 })",
+     1.0,
+     1.0},
     {{"5-methoxyindoline", "C9H11NO", "COc1ccc2NCCc2c1", "21857-45-4", ""},
-     {"5-methoxyindole", "C9H9NO", "COc1ccc2[nH]ccc2c1", "1006-94-6", ""}, "imine", kSolid, 1.0, 1.3},
+     {"5-methoxyindole", "C9H9NO", "COc1ccc2[nH]ccc2c1", "1006-94-6", ""},
+     "imine",
+     kSolid,
+     1.0,
+     1.3},
     {{"5-bromoindoline", "C8H8BrN", "Brc1ccc2NCCc2c1", "22190-33-6", ""},
-     {"5-bromoindole", "C8H6BrN", "Brc1ccc2[nH]ccc2c1", "10075-50-0", ""}, "imine", kSolid, 1.0, 0.72},
+     {"5-bromoindole", "C8H6BrN", "Brc1ccc2[nH]ccc2c1", "10075-50-0", ""},
+     "imine",
+     kSolid,
+     1.0,
+     0.72},
     {{"2-methylindoline", "C9H11N", "CC1Cc2ccccc2N1", "6872-06-6", ""},
-     {"2-methylindole", "C9H9N", "Cc1cc2ccccc2[nH]1", "95-20-5", ""}, "imine",
-     R"({ kind = "liquid", density = "1.023 g/mL", u_density = "0.003 g/mL", assay = 0.98, u_assay = 0.005 })", 1.0, 0.62},
+     {"2-methylindole", "C9H9N", "Cc1cc2ccccc2[nH]1", "95-20-5", ""},
+     "imine",
+     R"({ kind = "liquid", density = "1.023 g/mL", u_density = "0.003 g/mL", assay = 0.98, u_assay = 0.005 })",
+     1.0,
+     0.62},
     {{"1,2,3,4-tetrahydroquinoline", "C9H11N", "C1CNc2ccccc2C1", "635-46-1", "THQ"},
-     {"quinoline", "C9H7N", "c1ccc2ncccc2c1", "91-22-5", ""}, "quinoline",
-     R"({ kind = "liquid", density = "1.061 g/mL", u_density = "0.002 g/mL", assay = 0.98, u_assay = 0.005 })", 2.0, 0.66},
-    {{"6-methoxy-1,2,3,4-tetrahydroquinoline", "C10H13NO", "COc1ccc2NCCCc2c1", "120-15-0", "6-MeO-THQ"},
-     {"6-methoxyquinoline", "C10H9NO", "COc1ccc2ncccc2c1", "5263-87-6", ""}, "quinoline", kSolid, 2.0, 0.9},
-    {{"2-methyl-1,2,3,4-tetrahydroquinoline", "C10H13N", "CC1CCc2ccccc2N1", "1780-19-4", "tetrahydroquinaldine"},
-     {"2-methylquinoline", "C10H9N", "Cc1ccc2ccccc2n1", "91-63-4", "quinaldine"}, "quinoline",
-     R"({ kind = "liquid", density = "1.02 g/mL", u_density = "0.01 g/mL", assay = 0.97, u_assay = 0.01 })", 2.0, 0.5},
-    {{"2-phenyl-1,2,3,4-tetrahydroisoquinoline", "C15H15N", "C1CN(c2ccccc2)Cc2ccccc21", "3340-78-1", "N-phenyl THIQ"},
+     {"quinoline", "C9H7N", "c1ccc2ncccc2c1", "91-22-5", ""},
+     "quinoline",
+     R"({ kind = "liquid", density = "1.061 g/mL", u_density = "0.002 g/mL", assay = 0.98, u_assay = 0.005 })",
+     2.0,
+     0.66},
+    {{"6-methoxy-1,2,3,4-tetrahydroquinoline", "C10H13NO", "COc1ccc2NCCCc2c1", "120-15-0",
+      "6-MeO-THQ"},
+     {"6-methoxyquinoline", "C10H9NO", "COc1ccc2ncccc2c1", "5263-87-6", ""},
+     "quinoline",
+     kSolid,
+     2.0,
+     0.9},
+    {{"2-methyl-1,2,3,4-tetrahydroquinoline", "C10H13N", "CC1CCc2ccccc2N1", "1780-19-4",
+      "tetrahydroquinaldine"},
+     {"2-methylquinoline", "C10H9N", "Cc1ccc2ccccc2n1", "91-63-4", "quinaldine"},
+     "quinoline",
+     R"({ kind = "liquid", density = "1.02 g/mL", u_density = "0.01 g/mL", assay = 0.97, u_assay = 0.01 })",
+     2.0,
+     0.5},
+    {{"2-phenyl-1,2,3,4-tetrahydroisoquinoline", "C15H15N", "C1CN(c2ccccc2)Cc2ccccc21", "3340-78-1",
+      "N-phenyl THIQ"},
      {"1-(1H-indol-3-yl)-2-phenyl-1,2,3,4-tetrahydroisoquinoline", "C23H20N2",
-      "C1CN(c2ccccc2)C(c2c[nH]c3ccccc23)c2ccccc21", "", ""}, "coupled", kSolid, 1.0, 1.0},
+      "C1CN(c2ccccc2)C(c2c[nH]c3ccccc23)c2ccccc21", "", ""},
+     "coupled",
+     kSolid,
+     1.0,
+     1.0},
 });
 
 // In the order of DemoMetalKind, kNone left out.
 constexpr auto kMetals = std::to_array<DemoMetal>({
-    {{"nickel(II) bromide glyme", "C4H10Br2NiO2", "", "28923-39-9", "NiBr2;NiBr2 glyme;NiBr2(dme)"}, "nickel",
-     R"({ kind = "solid", assay = 0.97, u_assay = 0.01 })", "balance-0.01mg", 1.0, 0.06},
-    {{"nickel(II) chloride hexahydrate", "NiCl2·6H2O", "", "7791-20-0", "NiCl2 hexahydrate"}, "nickel",
-     R"({ kind = "stock", concentration = "0.10 mol/L", u_concentration = "0.001 mol/L", solvent = "water" })", "pipette-200uL", 0.85, 0.06},
-    {{"palladium(II) acetate", "C4H6O4Pd", "", "3375-31-3", "Pd(OAc)2"}, "palladium",
-     R"({ kind = "stock", concentration = "10 mM", u_concentration = "0.1 mM", solvent = "dmf" })", "pipette-1000uL", 1.25, 0.13},
+    {{"nickel(II) bromide glyme", "C4H10Br2NiO2", "", "28923-39-9", "NiBr2;NiBr2 glyme;NiBr2(dme)"},
+     "nickel",
+     R"({ kind = "solid", assay = 0.97, u_assay = 0.01 })",
+     "balance-0.01mg",
+     1.0,
+     0.06},
+    {{"nickel(II) chloride hexahydrate", "NiCl2·6H2O", "", "7791-20-0", "NiCl2 hexahydrate"},
+     "nickel",
+     R"({ kind = "stock", concentration = "0.10 mol/L", u_concentration = "0.001 mol/L", solvent = "water" })",
+     "pipette-200uL",
+     0.85,
+     0.06},
+    {{"palladium(II) acetate", "C4H6O4Pd", "", "3375-31-3", "Pd(OAc)2"},
+     "palladium",
+     R"({ kind = "stock", concentration = "10 mM", u_concentration = "0.1 mM", solvent = "dmf" })",
+     "pipette-1000uL",
+     1.25,
+     0.13},
 });
 
 // In the order of DemoAcidKind, kNone left out.
@@ -71,12 +115,18 @@ constexpr auto kAcids = std::to_array<DemoAcid>({
     {{"trifluoroacetic acid", "C2HF3O2", "O=C(O)C(F)(F)F", "76-05-1", "TFA"}, 0.1},
 });
 
-constexpr std::string_view kInMecn = R"({ kind = "stock", concentration = "4.0 mM", u_concentration = "0.04 mM", solvent = "mecn" })";
-constexpr std::string_view kInDmf = R"({ kind = "stock", concentration = "4.0 mM", u_concentration = "0.04 mM", solvent = "dmf" })";
-constexpr std::string_view kStrongInDmf = R"({ kind = "stock", concentration = "10 mM", u_concentration = "0.1 mM", solvent = "DMF" })";
-constexpr std::string_view kAcidInMecn = R"({ kind = "stock", concentration = "0.10 mol/L", u_concentration = "0.001 mol/L", solvent = "mecn" })";
-constexpr std::string_view kAcidInDmf = R"({ kind = "stock", concentration = "0.10 mol/L", u_concentration = "0.001 mol/L", solvent = "dmf" })";
-constexpr std::string_view kAcidInEthanol = R"({ kind = "stock", concentration = "0.10 mol/L", u_concentration = "0.001 mol/L", solvent = "ethanol" })";
+constexpr std::string_view kInMecn =
+    R"({ kind = "stock", concentration = "4.0 mM", u_concentration = "0.04 mM", solvent = "mecn" })";
+constexpr std::string_view kInDmf =
+    R"({ kind = "stock", concentration = "4.0 mM", u_concentration = "0.04 mM", solvent = "dmf" })";
+constexpr std::string_view kStrongInDmf =
+    R"({ kind = "stock", concentration = "10 mM", u_concentration = "0.1 mM", solvent = "DMF" })";
+constexpr std::string_view kAcidInMecn =
+    R"({ kind = "stock", concentration = "0.10 mol/L", u_concentration = "0.001 mol/L", solvent = "mecn" })";
+constexpr std::string_view kAcidInDmf =
+    R"({ kind = "stock", concentration = "0.10 mol/L", u_concentration = "0.001 mol/L", solvent = "dmf" })";
+constexpr std::string_view kAcidInEthanol =
+    R"({ kind = "stock", concentration = "0.10 mol/L", u_concentration = "0.001 mol/L", solvent = "ethanol" })";
 
 // In the order of DemoSolventKind.
 constexpr auto kSolvents = std::to_array<DemoSolvent>({
@@ -104,16 +154,27 @@ SubstanceDraft draftOf(const DemoSubstance& substance, bool withStructures) {
 
 const DemoSubstance& demoCatalyst() { return kCatalyst; }
 const DemoSubstance& demoPartner() { return kIndole; }
-const DemoSubstance& demoLiquid(std::string_view key) { return std::ranges::find(kLiquids, key, &Liquid::first)->second; }
-const DemoSubstrate& demoSubstrate(DemoSubstrateKind kind) { return kSubstrates.at(static_cast<std::size_t>(kind)); }
-const DemoMetal& demoMetal(DemoMetalKind kind) { return kMetals.at(static_cast<std::size_t>(kind) - 1); }
-const DemoAcid& demoAcid(DemoAcidKind kind) { return kAcids.at(static_cast<std::size_t>(kind) - 1); }
-const DemoSolvent& demoSolvent(DemoSolventKind kind) { return kSolvents.at(static_cast<std::size_t>(kind)); }
+const DemoSubstance& demoLiquid(std::string_view key) {
+  return std::ranges::find(kLiquids, key, &Liquid::first)->second;
+}
+const DemoSubstrate& demoSubstrate(DemoSubstrateKind kind) {
+  return kSubstrates.at(static_cast<std::size_t>(kind));
+}
+const DemoMetal& demoMetal(DemoMetalKind kind) {
+  return kMetals.at(static_cast<std::size_t>(kind) - 1);
+}
+const DemoAcid& demoAcid(DemoAcidKind kind) {
+  return kAcids.at(static_cast<std::size_t>(kind) - 1);
+}
+const DemoSolvent& demoSolvent(DemoSolventKind kind) {
+  return kSolvents.at(static_cast<std::size_t>(kind));
+}
 
 bool hasSameFrame(const DemoRecipe& a, const DemoRecipe& b) {
   const auto frame = [](const DemoRecipe& recipe) {
-    return std::tuple(recipe.substrate, recipe.metal, recipe.acid, recipe.solvent, recipe.partner_mol_L,
-                      recipe.catalyst_molPercent > 0.0, recipe.liquid_mL, recipe.largeVial, recipe.light_h > 0.0);
+    return std::tuple(recipe.substrate, recipe.metal, recipe.acid, recipe.solvent,
+                      recipe.partner_mol_L, recipe.catalyst_molPercent > 0.0, recipe.liquid_mL,
+                      recipe.largeVial, recipe.light_h > 0.0);
   };
   return frame(a) == frame(b);
 }
@@ -127,9 +188,11 @@ bool isDuplicate(const DemoRecipe& a, const DemoRecipe& b) {
 }
 
 std::vector<SubstanceDraft> demoShelf(bool withStructures) {
-  std::vector<SubstanceDraft> drafts{draftOf(kCatalyst, withStructures), draftOf(kIndole, withStructures)};
+  std::vector<SubstanceDraft> drafts{draftOf(kCatalyst, withStructures),
+                                     draftOf(kIndole, withStructures)};
   for (const auto& [key, liquid] : kLiquids) drafts.push_back(draftOf(liquid, withStructures));
-  for (const DemoSubstrate& substrate : kSubstrates) drafts.push_back(draftOf(substrate.substance, withStructures));
+  for (const DemoSubstrate& substrate : kSubstrates)
+    drafts.push_back(draftOf(substrate.substance, withStructures));
   for (const DemoMetal& metal : kMetals) drafts.push_back(draftOf(metal.substance, withStructures));
   for (const DemoAcid& acid : kAcids) drafts.push_back(draftOf(acid.substance, withStructures));
   return drafts;

@@ -8,8 +8,8 @@
 
 #include "app/notebook/substance_cards.h"
 
-/// What the invented campaign is made of. The substances and their data are public; what happens to them
-/// is invented.
+/// What the invented campaign is made of. The substances and their data are public; what happens to
+/// them is invented.
 namespace vialkeeper::app {
 
 struct DemoSubstance {
@@ -46,7 +46,8 @@ struct DemoAcid {
   double help = 1.0;
 };
 
-/// A solvent or mixture: its lines in a plan, and where the stocks of catalyst and acid are made up.
+/// A solvent or mixture: its lines in a plan, and where the stocks of catalyst and acid are made
+/// up.
 struct DemoSolvent {
   std::string_view name;  ///< as a title says it
   std::string_view main;  ///< key of the larger part
@@ -59,14 +60,24 @@ struct DemoSolvent {
   double vapour35_bar = 0.184;
 };
 
-enum class DemoSubstrateKind { kIndoline, kMethoxy, kBromo, kMethyl, kQuinoline, kMethoxyQuinoline, kMethylQuinoline, kCoupling };
+enum class DemoSubstrateKind {
+  kIndoline,
+  kMethoxy,
+  kBromo,
+  kMethyl,
+  kQuinoline,
+  kMethoxyQuinoline,
+  kMethylQuinoline,
+  kCoupling
+};
 enum class DemoMetalKind { kNone, kNickelBromide, kNickelChloride, kPalladium };
 enum class DemoAcidKind { kNone, kPivalic, kAcetic, kBenzoic, kHexanoic, kTrifluoroacetic };
 enum class DemoSolventKind { kMecnWater, kMecn, kDmf, kDmfWater, kEthanol, kEthanolWater };
 
 [[nodiscard]] const DemoSubstance& demoCatalyst();  ///< the photocatalyst of all runs
 [[nodiscard]] const DemoSubstance& demoPartner();   ///< of a coupling
-[[nodiscard]] const DemoSubstance& demoLiquid(std::string_view key);  ///< mecn, dmf, ethanol or water
+[[nodiscard]] const DemoSubstance& demoLiquid(
+    std::string_view key);  ///< mecn, dmf, ethanol or water
 [[nodiscard]] const DemoSubstrate& demoSubstrate(DemoSubstrateKind kind);
 [[nodiscard]] const DemoMetal& demoMetal(DemoMetalKind kind);  ///< not of kNone
 [[nodiscard]] const DemoAcid& demoAcid(DemoAcidKind kind);     ///< not of kNone
@@ -79,7 +90,7 @@ struct DemoRecipe {
   DemoAcidKind acid = DemoAcidKind::kPivalic;
   DemoSolventKind solvent = DemoSolventKind::kMecnWater;
   double substrate_mmol = 0.2;
-  double partner_mol_L = 0.0;     ///< of a coupling
+  double partner_mol_L = 0.0;        ///< of a coupling
   double catalyst_molPercent = 1.0;  ///< 0: none
   double metal_molPercent = 5.0;
   double acid_molPercent = 10.0;
@@ -95,8 +106,8 @@ struct DemoRecipe {
 /// Whether two runs were charged alike: duplicates.
 [[nodiscard]] bool isDuplicate(const DemoRecipe& a, const DemoRecipe& b);
 
-/// The plan as a person would write it. `withStructures`: SMILES, else formulas, for a program without the
-/// structure module.
+/// The plan as a person would write it. `withStructures`: SMILES, else formulas, for a program
+/// without the structure module.
 [[nodiscard]] std::string demoPlanText(const DemoRecipe& recipe, bool withStructures);
 
 /// Cards for the shelf, with the synonyms by which people look for them.

@@ -8,14 +8,17 @@
 
 namespace vialkeeper::app {
 
-std::string demoCourseCsv(const DemoRunSpec& run, const DemoOutcome& outcome, const DemoLog& log, DemoRandom& random) {
+std::string demoCourseCsv(const DemoRunSpec& run, const DemoOutcome& outcome, const DemoLog& log,
+                          DemoRandom& random) {
   const DemoRecipe& recipe = run.recipe;
   const bool coupling = recipe.partner_mol_L > 0.0;
   const double start_mol_L = recipe.substrate_mmol / recipe.liquid_mL;
   const auto measured = [&](double value) {
-    return std::max(0.0, value * (1.0 + 0.012 * random.normal()) + 0.004 * start_mol_L * random.normal());
+    return std::max(
+        0.0, value * (1.0 + 0.012 * random.normal()) + 0.004 * start_mol_L * random.normal());
   };
-  std::string csv = fmt::format("# cat = {:.6f} mol/L\n", 0.01 * recipe.catalyst_molPercent * start_mol_L);
+  std::string csv =
+      fmt::format("# cat = {:.6f} mol/L\n", 0.01 * recipe.catalyst_molPercent * start_mol_L);
   csv += fmt::format("time [h],amine [mol/L],{}{} [mol/L]\n", coupling ? "indole [mol/L]," : "",
                      demoSubstrate(recipe.substrate).productKey);
   std::vector<double> times_h{0.0};

@@ -10,8 +10,8 @@
 namespace vialkeeper::app {
 
 /// CSV of concentrations at the aliquots, `time [h],amine [mol/L],…`, with 1.5 % of noise.
-[[nodiscard]] std::string demoCourseCsv(const DemoRunSpec& run, const DemoOutcome& outcome, const DemoLog& log,
-                                        DemoRandom& random);
+[[nodiscard]] std::string demoCourseCsv(const DemoRunSpec& run, const DemoOutcome& outcome,
+                                        const DemoLog& log, DemoRandom& random);
 
 /// CSV of the recorded pressure, absolute: `time [h],pressure [bar],temperature [degC]`.
 [[nodiscard]] std::string demoTraceCsv(const DemoLog& log);

@@ -39,7 +39,11 @@ std::vector<double> visits(const DemoRunSpec& run) {
 class LogWriter {
  public:
   LogWriter(const DemoRunSpec& run, const DemoOutcome& outcome, DemoRandom& random)
-      : m_run(run), m_outcome(outcome), m_random(random), m_hand(run.person, random), m_vial(startOf(run)) {}
+      : m_run(run),
+        m_outcome(outcome),
+        m_random(random),
+        m_hand(run.person, random),
+        m_vial(startOf(run)) {}
 
   DemoLog run() {
     say(-0.30, m_hand.observation(DemoSight::kCharged));
@@ -65,7 +69,8 @@ class LogWriter {
   }
 
   void correct(std::size_t wrong, double hour, std::string line, std::string reason) {
-    DemoEntry entry{.happened_h = m_log.entries[wrong].happened_h, .written_h = hour, .line = std::move(line)};
+    DemoEntry entry{
+        .happened_h = m_log.entries[wrong].happened_h, .written_h = hour, .line = std::move(line)};
     entry.corrects = wrong;
     entry.reason = std::move(reason);
     m_log.entries.push_back(std::move(entry));
@@ -86,7 +91,8 @@ class LogWriter {
   void record() {
     const double due = static_cast<double>(m_log.trace.size()) * kTraceStep_h;
     if (m_now_h + 1e-9 < due) return;
-    m_log.trace.push_back({m_now_h, m_vial.absolute_bar() + 0.002 * m_random.normal(), m_vial.celsius() + 0.1 * m_random.normal()});
+    m_log.trace.push_back({m_now_h, m_vial.absolute_bar() + 0.002 * m_random.normal(),
+                           m_vial.celsius() + 0.1 * m_random.normal()});
   }
 
   void readPressure(double hour) {
@@ -95,7 +101,8 @@ class LogWriter {
     const double celsius = m_vial.celsius() + 0.2 * m_random.normal();
     const std::string line = m_hand.pressure(gauge_bar, celsius);
     if (m_run.person == "KW" && gauge_bar > 0.15 && m_random.once(0.04)) {
-      const std::size_t wrong = say(hour, fmt::format("p {:.1f} bar {:.0f} C", gauge_bar * 10.0, celsius));
+      const std::size_t wrong =
+          say(hour, fmt::format("p {:.1f} bar {:.0f} C", gauge_bar * 10.0, celsius));
       correct(wrong, hour + 2 * kMinute, line, "decimal point");
     } else {
       say(hour, line);
@@ -108,7 +115,8 @@ class LogWriter {
     m_vial.takeLiquid(50.0);
     const std::string line = m_hand.aliquot(fmt::format("S{}", m_log.aliquots_h.size()));
     if (m_run.person != "MR" && m_random.once(0.04)) {
-      const std::size_t wrong = say(hour, fmt::format("aliqout 50 uL S{}", m_log.aliquots_h.size()));
+      const std::size_t wrong =
+          say(hour, fmt::format("aliqout 50 uL S{}", m_log.aliquots_h.size()));
       m_log.entries[wrong].accepted = true;
       correct(wrong, hour + kMinute, line, "typo, it was a sample");
     } else {
@@ -140,7 +148,8 @@ class LogWriter {
     readPressure(hour);
     if (m_run.course) takeAliquot(hour + 2 * kMinute);
     if (m_run.vents && m_vial.gauge_bar() > kVentAbove_bar) letGasOut(hour + 4 * kMinute);
-    if (planned_h == 0.5 || m_random.once(0.35)) say(hour + 6 * kMinute, m_hand.observation(sightNow()));
+    if (planned_h == 0.5 || m_random.once(0.35))
+      say(hour + 6 * kMinute, m_hand.observation(sightNow()));
     if (m_run.fate == DemoFate::kLeak && planned_h == 2.0) {
       say(hour + 7 * kMinute, m_hand.gasSample());
       m_vial.takeGas(250.0);
@@ -154,7 +163,8 @@ class LogWriter {
     say(0.0, m_hand.lampOn());
     m_warm = true;
     for (const double hour : visits(m_run)) visit(hour);
-    if (light_h == 20.0 && !m_run.vents && m_random.once(0.4)) late(7.0 + 0.25 * static_cast<double>(m_random.below(5)), light_h - 0.3);
+    if (light_h == 20.0 && !m_run.vents && m_random.once(0.4))
+      late(7.0 + 0.25 * static_cast<double>(m_random.below(5)), light_h - 0.3);
     readPressure(light_h - 3 * kMinute);
     if (m_run.course) takeAliquot(light_h - kMinute);
     advance(light_h);
@@ -175,12 +185,14 @@ class LogWriter {
   void afterwards(double off_h) {
     const double hour = about(off_h + 0.6);
     advance(off_h + 4 * kMinute);
-    say(off_h + 4 * kMinute, m_hand.observation(m_run.fate == DemoFate::kLeak ? DemoSight::kLeak : sightNow()));
+    say(off_h + 4 * kMinute,
+        m_hand.observation(m_run.fate == DemoFate::kLeak ? DemoSight::kLeak : sightNow()));
     advance(hour);
     readPressure(hour);
     if (m_run.fate != DemoFate::kLeak && m_random.once(0.6)) {
       say(hour + 2 * kMinute, m_hand.gasSample());
-      say(hour + 25 * kMinute, m_hand.hydrogen(m_vial.hydrogenFraction() * (1.0 + 0.02 * m_random.normal())));
+      say(hour + 25 * kMinute,
+          m_hand.hydrogen(m_vial.hydrogenFraction() * (1.0 + 0.02 * m_random.normal())));
       m_vial.takeGas(250.0);
     }
     if (m_run.vents) {
@@ -213,7 +225,8 @@ class LogWriter {
   void order() {
     std::vector<std::size_t> places(m_log.entries.size());
     std::iota(places.begin(), places.end(), std::size_t{0});
-    std::ranges::stable_sort(places, {}, [this](std::size_t i) { return m_log.entries[i].written_h; });
+    std::ranges::stable_sort(places, {},
+                             [this](std::size_t i) { return m_log.entries[i].written_h; });
     std::vector<std::size_t> placeOf(places.size());
     for (std::size_t i = 0; i < places.size(); ++i) placeOf[places[i]] = i;
     std::vector<DemoEntry> ordered;

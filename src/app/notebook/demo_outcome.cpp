@@ -8,7 +8,8 @@
 namespace vialkeeper::app {
 namespace {
 
-constexpr double kReference_perHour = 0.14;  // indoline, 1 mol%, 5 mol% nickel, 10 mol% pivalic acid
+constexpr double kReference_perHour =
+    0.14;  // indoline, 1 mol%, 5 mol% nickel, 10 mol% pivalic acid
 constexpr double kCoupling_perHour = 0.34;
 constexpr double kBestAcid_molPercent = 10.0;
 
@@ -27,17 +28,20 @@ double rateOf(const DemoRecipe& recipe) {
   const bool coupling = recipe.substrate == DemoSubstrateKind::kCoupling;
   double rate = coupling ? kCoupling_perHour : kReference_perHour * acidFactor(recipe);
   rate *= demoSubstrate(recipe.substrate).rate * demoSolvent(recipe.solvent).rate;
-  rate *= recipe.catalyst_molPercent > 0.0 ? saturating(recipe.catalyst_molPercent, 0.6, 1.0) : 0.015;
+  rate *=
+      recipe.catalyst_molPercent > 0.0 ? saturating(recipe.catalyst_molPercent, 0.6, 1.0) : 0.015;
   if (recipe.metal == DemoMetalKind::kNone) return rate * 0.1;
   const double reference = recipe.metal == DemoMetalKind::kPalladium ? 2.0 : 5.0;
-  return rate * demoMetal(recipe.metal).rate * saturating(recipe.metal_molPercent, 0.5 * reference, reference);
+  return rate * demoMetal(recipe.metal).rate *
+         saturating(recipe.metal_molPercent, 0.5 * reference, reference);
 }
 
 }  // namespace
 
 DemoOutcome::DemoOutcome(const DemoRecipe& recipe, DemoFate fate, DemoRandom& random) {
   double rate = rateOf(recipe) * (1.0 + 0.05 * random.normal());
-  double death = recipe.metal == DemoMetalKind::kNone ? 0.06 : demoMetal(recipe.metal).death_perHour;
+  double death =
+      recipe.metal == DemoMetalKind::kNone ? 0.06 : demoMetal(recipe.metal).death_perHour;
   death *= 1.0 + 0.1 * random.normal();
   if (fate == DemoFate::kPrecipitate) death = 0.8;
   if (fate == DemoFate::kNoLamp) rate = 0.0;
@@ -46,7 +50,8 @@ DemoOutcome::DemoOutcome(const DemoRecipe& recipe, DemoFate fate, DemoRandom& ra
   m_selectivity = 0.955 + 0.01 * random.normal();
   m_hydrogen_mmol = 0.97 * demoSubstrate(recipe.substrate).hydrogens * recipe.substrate_mmol;
   m_conversion_percent = std::clamp(100.0 * end + 0.8 * random.normal(), 0.0, 100.0);
-  m_yield_percent = std::clamp(100.0 * end * m_selectivity + 0.8 * random.normal(), 0.0, m_conversion_percent);
+  m_yield_percent =
+      std::clamp(100.0 * end * m_selectivity + 0.8 * random.normal(), 0.0, m_conversion_percent);
 }
 
 void DemoOutcome::integrate(const DemoRecipe& recipe, double rate_perHour, double death_perHour) {

@@ -13,9 +13,9 @@ namespace vialkeeper::app {
 enum class DemoFate { kSound, kLeak, kNoLamp, kPrecipitate };
 
 /// How an invented run goes: its extent under the lamp and what is found at the end.
-/// Model: dx/dt = k a(t) (1 − x), a = exp(−d t) for a catalyst that dies; k saturates with the loadings of
-/// photocatalyst and cocatalyst and is largest at 10 mol% of acid; a coupling saturates with its partner.
-/// The scatter between duplicates is 5 % of k. Nothing of this is measured.
+/// Model: dx/dt = k a(t) (1 − x), a = exp(−d t) for a catalyst that dies; k saturates with the
+/// loadings of photocatalyst and cocatalyst and is largest at 10 mol% of acid; a coupling saturates
+/// with its partner. The scatter between duplicates is 5 % of k. Nothing of this is measured.
 class DemoOutcome {
  public:
   DemoOutcome(const DemoRecipe& recipe, DemoFate fate, DemoRandom& random);
@@ -23,7 +23,9 @@ class DemoOutcome {
   /// After so many hours of light; the last value stays.
   [[nodiscard]] double extentAt(double light_h) const;
   /// Hydrogen given off until then [mmol].
-  [[nodiscard]] double hydrogenAt(double light_h) const { return m_hydrogen_mmol * extentAt(light_h); }
+  [[nodiscard]] double hydrogenAt(double light_h) const {
+    return m_hydrogen_mmol * extentAt(light_h);
+  }
 
   [[nodiscard]] double conversion_percent() const { return m_conversion_percent; }
   [[nodiscard]] double yield_percent() const { return m_yield_percent; }

@@ -11,12 +11,14 @@ Checked<void> addDemoPeople(Notebook& notebook, const units::Moment& at) {
     const auto present = notebook.findPerson(code);
     if (!present) return std::unexpected(present.error());
     if (*present) continue;
-    const Person person{.code = std::string(code), .name = fmt::format("{}. {}. (invented)", code[0], code[1])};
-    const auto done = notebook.act({{person.code, at}, "create"}, [&](Writing& writing) -> Checked<void> {
-      const auto n = writing.addPerson(person);
-      if (!n) return std::unexpected(n.error());
-      return {};
-    });
+    const Person person{.code = std::string(code),
+                        .name = fmt::format("{}. {}. (invented)", code[0], code[1])};
+    const auto done =
+        notebook.act({{person.code, at}, "create"}, [&](Writing& writing) -> Checked<void> {
+          const auto n = writing.addPerson(person);
+          if (!n) return std::unexpected(n.error());
+          return {};
+        });
     if (!done) return done;
   }
   return {};

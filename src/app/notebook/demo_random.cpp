@@ -17,7 +17,8 @@ std::uint64_t spread(std::uint64_t number) {
 
 }  // namespace
 
-DemoRandom::DemoRandom(std::uint64_t seed, std::uint64_t stream) : m_generator(seed ^ spread(stream)) {}
+DemoRandom::DemoRandom(std::uint64_t seed, std::uint64_t stream)
+    : m_generator(seed ^ spread(stream)) {}
 
 double DemoRandom::uniform() { return static_cast<double>(m_generator() >> 11U) * 0x1.0p-53; }
 

@@ -17,11 +17,11 @@ struct DemoRun {
   DemoRunSpec spec;
   DemoOutcome outcome;
   DemoLog log;
-  DemoRandom random;             ///< for what is decided at the bench
+  DemoRandom random;               ///< for what is decided at the bench
   const DemoRun* frame = nullptr;  ///< an earlier run whose plan is cloned
-  RowNumber n = 0;               ///< once it is added
+  RowNumber n = 0;                 ///< once it is added
   std::string code = {};
-  std::string yield = {};        ///< as it was recorded; empty before
+  std::string yield = {};  ///< as it was recorded; empty before
 };
 
 /// Something that somebody does at some time.
@@ -35,7 +35,7 @@ struct DemoStep {
 [[nodiscard]] std::vector<DemoRun> demoRuns(const DemoOptions& options);
 
 /// All steps of one run, until the story ends. `runs` must stay where they are.
-[[nodiscard]] std::vector<DemoStep> demoSteps(DemoRun& run, const std::vector<DemoRun>& runs, bool withStructures,
-                                              DemoSummary& summary);
+[[nodiscard]] std::vector<DemoStep> demoSteps(DemoRun& run, const std::vector<DemoRun>& runs,
+                                              bool withStructures, DemoSummary& summary);
 
 }  // namespace vialkeeper::app

@@ -19,10 +19,10 @@ struct DemoRunSpec {
   DemoFate fate = DemoFate::kSound;
   RunState state = RunState::kClosed;  ///< in which the campaign leaves it
   std::string aim = {};
-  std::string conclusion = {};         ///< what its author concludes besides the figures
-  bool course = false;                 ///< several aliquots, and a course of concentrations
-  bool trace = false;                  ///< the pressure was also recorded
-  bool vents = false;                  ///< enough gas to vent it underway
+  std::string conclusion = {};  ///< what its author concludes besides the figures
+  bool course = false;          ///< several aliquots, and a course of concentrations
+  bool trace = false;           ///< the pressure was also recorded
+  bool vents = false;           ///< enough gas to vent it underway
 };
 
 /// What every aim of the campaign begins with, so that nobody takes it for work that was done.

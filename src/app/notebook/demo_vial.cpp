@@ -21,17 +21,23 @@ DemoVial::DemoVial(const DemoVialStart& start)
   m_inert_mmol = (kAmbient_bar - vapour_bar()) / barPerMmol();
 }
 
-double DemoVial::barPerMmol() const { return kGas_barMlPerMmolK * (m_celsius + 273.15) / m_headspace_mL; }
+double DemoVial::barPerMmol() const {
+  return kGas_barMlPerMmolK * (m_celsius + 273.15) / m_headspace_mL;
+}
 
 double DemoVial::vapour_bar() const {
   return m_vapour21_bar * std::pow(m_vapour35_bar / m_vapour21_bar, (m_celsius - 21.0) / 14.0);
 }
 
-double DemoVial::absolute_bar() const { return (m_inert_mmol + m_hydrogen_mmol) * barPerMmol() + vapour_bar(); }
+double DemoVial::absolute_bar() const {
+  return (m_inert_mmol + m_hydrogen_mmol) * barPerMmol() + vapour_bar();
+}
 
 double DemoVial::gauge_bar() const { return absolute_bar() - kAmbient_bar; }
 
-double DemoVial::hydrogenFraction() const { return m_hydrogen_mmol * barPerMmol() / absolute_bar(); }
+double DemoVial::hydrogenFraction() const {
+  return m_hydrogen_mmol * barPerMmol() / absolute_bar();
+}
 
 void DemoVial::loseShare(double share) {
   const double kept = 1.0 - std::clamp(share, 0.0, 1.0);

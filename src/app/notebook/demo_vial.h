@@ -11,8 +11,8 @@ struct DemoVialStart {
   double vapour35_bar = 0.184;  ///< and at 35 °C
 };
 
-/// The gas over an invented reaction, so that the readings in its log agree with each other: ideal gas in
-/// the headspace beside the vapour of the liquid; hydrogen in the liquid is left out.
+/// The gas over an invented reaction, so that the readings in its log agree with each other: ideal
+/// gas in the headspace beside the vapour of the liquid; hydrogen in the liquid is left out.
 class DemoVial {
  public:
   explicit DemoVial(const DemoVialStart& start);

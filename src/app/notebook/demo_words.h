@@ -11,7 +11,18 @@
 namespace vialkeeper::app {
 
 /// What is seen of a vial, and when.
-enum class DemoSight { kCharged, kFirst, kEarly, kEvening, kEnd, kDark, kNoLight, kLeak, kPrecipitate, kPalladium };
+enum class DemoSight {
+  kCharged,
+  kFirst,
+  kEarly,
+  kEvening,
+  kEnd,
+  kDark,
+  kNoLight,
+  kLeak,
+  kPrecipitate,
+  kPalladium
+};
 
 /// Observations in the words of chemists, abbreviations and slips included; none reads as an event.
 [[nodiscard]] std::span<const std::string_view> demoObservations(DemoSight sight);
@@ -19,7 +30,8 @@ enum class DemoSight { kCharged, kFirst, kEarly, kEvening, kEnd, kDark, kNoLight
 /// How one of the three writes: each in a way of their own.
 class DemoHand {
  public:
-  DemoHand(std::string person, DemoRandom& random) : m_person(std::move(person)), m_random(random) {}
+  DemoHand(std::string person, DemoRandom& random)
+      : m_person(std::move(person)), m_random(random) {}
 
   [[nodiscard]] std::string lampOn();
   [[nodiscard]] std::string lampOff();
