@@ -83,7 +83,7 @@ constexpr PlanFault kFaults[] = {
     {"a key twice in the addition order", R"(["nickel", "amine"])", R"(["nickel", "nickel"])",
      "3:addition_order", "'nickel' is listed twice", "list every key once"},
     {"an addition order that is no list", R"(["nickel", "amine"])", R"("nickel")",
-     "3:addition_order", "this is not a list of texts", "write for example"},
+     "3:addition_order", "this is not a list of texts", "write texts in quotation marks"},
     {"a date that does not exist", R"(title = "Ind)", "date = \"2025-02-30\"\ntitle = \"Ind",
      "2:date", "'2025-02-30': there is no such day in the calendar (character 1)",
      "check month and day"},
@@ -96,7 +96,7 @@ constexpr PlanFault kFaults[] = {
      "write codes such as H302 or EUH066"},
     {"hazards that are no list", R"(role = "acid")", "role = \"acid\"\nhazards = \"H302\"",
      "36:component.acid.hazards", "this is not a list of texts",
-     R"(write for example ["H302", "H315"])"},
+     "write texts in quotation marks between [ and ]"},
 };
 
 }  // namespace

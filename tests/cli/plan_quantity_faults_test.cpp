@@ -34,7 +34,7 @@ constexpr PlanFault kFaults[] = {
      "'21': the unit is missing (character 3)", "write a number with one of the units degC, K"},
     {"a bare number for a temperature", R"("21 degC")", "21", "12:seal.temperature",
      "a bare number where a text in quotation marks is wanted",
-     R"(write it with its unit, for example temperature = "2.0 degC")"},
+     R"(write it with its unit, for example temperature = "21 degC")"},
     {"no number", R"(amount = "0.200 mmol")", R"(amount = "some mmol")",
      "23:component.amine.amount", "'some mmol': no number here (character 1)",
      "begin with a number, such as 12.3"},
