@@ -46,6 +46,8 @@ SqlText amongSql(const std::string& expression, const std::vector<app::RowNumber
 
 SqlText roleSql(const std::string& role, const std::string& column) {
   if (role == "catalyst") return {column + " IN ('photocatalyst', 'cocatalyst')"};
+  // An acid or base is an additive to whoever looks for one.
+  if (role == "additive") return {column + " IN ('additive', 'acid', 'base')"};
   return {column + " = ?", {withoutNul(role)}};
 }
 

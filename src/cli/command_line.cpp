@@ -126,7 +126,7 @@ void describe(CLI::App& program, CommonOptions& common) {
 std::vector<Verb> allVerbs(CLI::App& program) {
   std::vector<Verb> verbs;
   for (const auto make :
-       {massVerb,    chargeVerb, sheetVerb,   createVerb, shelfVerb,      addVerb,
+       {massVerb,    chargeVerb, sheetVerb,   createVerb, demoVerb, shelfVerb,      addVerb,
         cloneVerb,   runsVerb,   findVerb,    showVerb,   weighVerb,      logVerb,
         correctVerb, resultVerb, compareVerb, labelVerb,  importVerb,     exportVerb,
         backupVerb,  verifyVerb, keyVerb,     sealVerb,   countersignVerb}) {

@@ -19,6 +19,7 @@ bool isWithin(const std::optional<double>& value, const app::Interval& interval)
 
 bool hasRole(const std::string& role, const std::string& wanted) {
   if (wanted == "catalyst") return role == "photocatalyst" || role == "cocatalyst";
+  if (wanted == "additive") return role == "additive" || role == "acid" || role == "base";
   return wanted.empty() || role == wanted;
 }
 
