@@ -5,6 +5,8 @@
 #include <fmt/format.h>
 
 #include <cmath>
+#include <string>
+#include <unordered_map>
 
 #include "chem/solvents.h"
 #include "stats/uncertain.h"
@@ -129,9 +131,17 @@ Identity identityOf(const ComponentPlan& component) {
 
 SmilesReader structureModuleReader() {
   return [](std::string_view smiles) -> std::expected<chem::Structure, chem::StructureFault> {
+    // A group's plans name the same few substances over and over, and reading one costs more than all the
+    // rest of a charge. Each thread has its own, for the engine serves one at a time.
+    constexpr std::size_t kMostKept = 4096;
+    thread_local std::unordered_map<std::string, chem::Structure> kept;
+    const std::string text(smiles);
+    if (const auto known = kept.find(text); known != kept.end()) return known->second;
     const auto engine = chem::structureEngine();
     if (!engine) return std::unexpected(engine.error());
-    return (*engine)->read(smiles);
+    auto structure = (*engine)->read(smiles);
+    if (structure && kept.size() < kMostKept) kept.emplace(text, *structure);
+    return structure;
   };
 }
 
