@@ -15,6 +15,7 @@
 #include "db/audited_writer.h"
 #include "db/canonical_json.h"
 #include "db/migrations.h"
+#include "db/verifier.h"
 
 namespace vialkeeper::db {
 namespace {
@@ -143,6 +144,12 @@ class ArchiveReader {
     if (!m_connection.rows("PRAGMA foreign_key_check").empty()) {
       return fault(m_folder.string(), 0, "rows of the archive refer to others that are not in it",
                    "export it again");
+    }
+    // An archive that was altered must not become a notebook that looks sound.
+    if (const auto report = verifyNotebook(m_connection); !report.findings.empty()) {
+      const app::Finding& first = report.findings.front();
+      return fault(m_folder.string(), 0, "the archive was altered: " + first.where + ": " + first.what,
+                   "export it again from the notebook; nothing was imported");
     }
     transaction.commit();
     return {};

@@ -9,6 +9,7 @@
 
 #include <cstdlib>
 #include <filesystem>
+#include <map>
 
 #include "text/embedded_file.h"
 
@@ -69,6 +70,29 @@ text::Checked<void> migrate(Connection& connection, const std::string& stamp) {
   }
   for (int to = found + 1; to <= newestSchema(); ++to) step(connection, to);
   return {};
+}
+
+std::vector<std::string> schemaDifferences(Connection& connection) {
+  constexpr const char* kSchema = "SELECT type || ' ' || name AS name, coalesce(sql, '') AS sql FROM sqlite_master";
+  const int schema = schemaOf(connection);
+  if (schema < 1 || schema > newestSchema()) return {};  // a form that this program does not know
+  SQLite::Database fresh(":memory:", SQLite::OPEN_READWRITE | SQLite::OPEN_CREATE);
+  for (int to = 1; to <= schema; ++to) fresh.exec(std::string(text::migrationFiles[to - 1].contents));
+  std::map<std::string, std::string> expected;
+  SQLite::Statement statement(fresh, kSchema);
+  while (statement.executeStep()) expected[statement.getColumn(0).getString()] = statement.getColumn(1).getString();
+  std::vector<std::string> differences;
+  for (const Row& row : connection.rows(kSchema)) {
+    const auto known = expected.find(row.text("name"));
+    if (known == expected.end()) {
+      differences.push_back(row.text("name") + " does not belong to a notebook");
+    } else {
+      if (known->second != row.text("sql")) differences.push_back(row.text("name") + " was altered");
+      expected.erase(known);
+    }
+  }
+  for (const auto& [name, sql] : expected) differences.push_back(name + " is missing");
+  return differences;
 }
 
 text::Checked<void> copyTo(Connection& connection, const std::string& file) {

@@ -3,6 +3,7 @@
 #pragma once
 
 #include <string>
+#include <vector>
 
 #include "db/connection.h"
 #include "text/fault.h"
@@ -19,6 +20,9 @@ namespace vialkeeper::db {
 /// file that holds anything, a copy is made beside it, named by form and time; without it nothing
 /// is done. `stamp` is part of that name: `20260304-142005`.
 [[nodiscard]] text::Checked<void> migrate(Connection& connection, const std::string& stamp);
+
+/// Tables, indexes and triggers that the file should have and has not, or has and should not.
+[[nodiscard]] std::vector<std::string> schemaDifferences(Connection& connection);
 
 /// A verified copy of the open database: written under a temporary name, opened again, checked page
 /// by page, then renamed. Fault: a file of that name is there, the copy is not sound, the disk is

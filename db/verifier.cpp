@@ -10,6 +10,7 @@
 #include "db/audited_writer.h"
 #include "db/canonical_json.h"
 #include "db/canonical_run.h"
+#include "db/migrations.h"
 #include "db/raw_json.h"
 #include "db/signing.h"
 
@@ -22,6 +23,9 @@ class Verifier {
 
   app::VerifyReport run() {
     step("pages", [this] { checkPages(); });
+    step("schema", [this] {
+      for (const std::string& difference : schemaDifferences(m_connection)) find("schema", difference);
+    });
     step("references", [this] { checkReferences(); });
     step("full-text index", [this] { checkWords(); });
     step("revisions", [this] { checkChain(); });

@@ -143,6 +143,11 @@ StockSheetContent sheetOf(const PlannedRun& run, const StockOrder& order) {
     sheet.notices.emplace_back(
         "proposed by Vialkeeper; the plan still weighs this component directly");
   if (!order.component->hazards.empty()) sheet.hazards.push_back(hazardOf(*order.component));
+  for (const ComponentPlan& solvent : run.plan.components) {
+    if (solvent.isSolvent() && solvent.name == order.solvent && !solvent.hazards.empty()) {
+      sheet.hazards.push_back(hazardOf(solvent));
+    }
+  }
   return sheet;
 }
 

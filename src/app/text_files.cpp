@@ -11,6 +11,7 @@
 #include <cerrno>
 #include <cstring>
 #include <filesystem>
+#include <string_view>
 #include <utility>
 
 namespace vialkeeper::app {
@@ -118,6 +119,18 @@ text::Checked<void> writeFile(const std::string& named, const std::string& bytes
     return systemFault(path, error, true);
   }
   return {};
+}
+
+text::Checked<void> writePdf(const std::string& path, const std::string& bytes) {
+  struct stat status {};
+  if (::stat(path.c_str(), &status) == 0 && S_ISREG(status.st_mode) && status.st_size > 0) {
+    const Descriptor file(::open(path.c_str(), O_RDONLY | O_CLOEXEC));
+    std::array<char, 5> head{};
+    const bool pdf = file.isOpen() && ::read(file.number(), head.data(), head.size()) == 5 &&
+                     std::string_view(head.data(), head.size()) == "%PDF-";
+    if (!pdf) return fault(path, "there is a file of this name that is no PDF", "name another; nothing was changed");
+  }
+  return writeFile(path, bytes);
 }
 
 }  // namespace vialkeeper::app

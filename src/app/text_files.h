@@ -16,4 +16,8 @@ namespace vialkeeper::app {
 /// the disk, then renamed. Faults: the folder is missing or not writable, the disk is full.
 [[nodiscard]] text::Checked<void> writeFile(const std::string& path, const std::string& bytes);
 
+/// Writes a PDF as writeFile does, over an older PDF if one is there, but over nothing else: a notebook, a
+/// plan or a picture is never replaced by a page. Fault: the file that is there is no PDF.
+[[nodiscard]] text::Checked<void> writePdf(const std::string& path, const std::string& bytes);
+
 }  // namespace vialkeeper::app

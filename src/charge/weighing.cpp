@@ -14,6 +14,7 @@
 #include "text/text_fault.h"
 #include "text/utf8.h"
 #include "units/quantity_text.h"
+#include "units/shown.h"
 
 namespace vialkeeper::charge {
 namespace {
@@ -135,6 +136,7 @@ class WeighedCharge {
   void fillIn(Charge& charge) {
     const Uncertain limiting = limitingAmount() ? *limitingAmount() : plannedLimitingAmount(charge);
     const Uncertain liquid = liquidAsCharged(charge);
+    noteLiquid(liquid.value(), charge);
     for (std::size_t w = 0; w < m_weighings.size(); ++w) {
       ComponentCharge& component = charge.components[m_plan.indexOf(m_weighings[w].key)];
       AsCharged charged;
@@ -149,6 +151,7 @@ class WeighedCharge {
         if (component.liquidVolume) charged.concentration_mol_m3 = *amount / liquid;
       }
       noteDevice(m_plan.components[m_plan.indexOf(component.key)], charged, component);
+      noteOffTarget(charged, component);
       component.charged = std::move(charged);
     }
   }
@@ -209,6 +212,33 @@ class WeighedCharge {
       ratio = (*charged.mass / *component.density) / *component.targetVolume;
     }
     return ratio && std::isfinite(*ratio) ? std::optional(100.0 * (*ratio - 1.0)) : std::nullopt;
+  }
+
+  /// Deviations that a glance at the table must not miss.
+  static void noteOffTarget(const AsCharged& charged, ComponentCharge& component) {
+    if (!charged.offTargetPercent || std::abs(*charged.offTargetPercent) <= component.tolerancePercent) return;
+    component.notices.push_back({"off-target",
+                                 fmt::format("{:+.1f} % off the target, beyond ±{:.2g} %",
+                                             *charged.offTargetPercent, component.tolerancePercent),
+                                 "component." + component.key});
+  }
+
+  /// The liquid as recorded, where it is not what the plan says or more than the vial holds.
+  void noteLiquid(double liquid_m3, Charge& charge) const {
+    const auto shown = [](double volume_m3) { return units::shown(Volume::fromSi(volume_m3)); };
+    const double room_m3 = m_plan.vial ? m_plan.vial->volume.si() - m_plan.vial->displaced.si() : liquid_m3 + 1.0;
+    if (liquid_m3 >= room_m3) {
+      charge.notices.push_back({"no-headspace",
+                                fmt::format("as recorded, {} of liquid are more than the vial holds: check the "
+                                            "recorded volumes before you close it",
+                                            shown(liquid_m3)),
+                                "liquid"});
+    } else if (std::abs(liquid_m3 / charge.totalLiquid.si() - 1.0) > 0.05) {
+      charge.notices.push_back({"liquid-off-plan",
+                                fmt::format("as recorded the liquid comes to {}, planned are {}", shown(liquid_m3),
+                                            shown(charge.totalLiquid.si())),
+                                "liquid"});
+    }
   }
 
   static void noteDevice(const ComponentPlan& plan, const AsCharged& charged,

@@ -190,6 +190,10 @@ class FormulaReader {
   Reading readPart() {
     double factor = 1.0;
     const std::size_t begin = m_at;
+    if (isDigit(peek()) && m_at == 0 && m_plain.characters.find_first_of("*.") == std::string::npos) {
+      return fault(0, 1, "a number before the first element",
+                   "an isotope stands in brackets, [13C]; leave out how many formula units there are");
+    }
     if (isDigit(peek())) {
       const auto number = readFactor();
       if (!number) return std::unexpected(number.error());

@@ -58,6 +58,12 @@ text::Checked<NotebookSession> NotebookSession::forWriting(const CommonOptions& 
   return NotebookSession(*std::move(notebook), common.around->clock, *std::move(person));
 }
 
+text::Checked<NotebookSession> NotebookSession::forChecking(const CommonOptions& common) {
+  auto notebook = open(common, db::OpenFor::kWriting);
+  if (!notebook) return std::unexpected(notebook.error());
+  return NotebookSession(*std::move(notebook), common.around->clock, "");
+}
+
 text::Checked<NotebookSession> NotebookSession::forRebuilding(const CommonOptions& common) {
   const auto file = bookFile(common);
   if (!file) return std::unexpected(file.error());

@@ -18,6 +18,9 @@ class NotebookSession {
   /// For changing: also who works, by --person or VIALKEEPER_PERSON, or the only one there is.
   [[nodiscard]] static text::Checked<NotebookSession> forWriting(const CommonOptions& common);
 
+  /// For checking: open for writing where that is possible, because SQLite lets no reader check the
+  /// full-text index; nobody needs to be named.
+  [[nodiscard]] static text::Checked<NotebookSession> forChecking(const CommonOptions& common);
   /// For filling an empty notebook from an archive, which brings its own people; the file is made
   /// if it is not there.
   [[nodiscard]] static text::Checked<NotebookSession> forRebuilding(const CommonOptions& common);

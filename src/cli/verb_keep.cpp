@@ -33,7 +33,7 @@ VerbResult runBackup(const std::string& file, const CommonOptions& common) {
 
 /// What verify finds wrong is a fault of the notebook: told line by line, exit status 3.
 VerbResult runVerify(const CommonOptions& common) {
-  auto session = NotebookSession::forReading(common);
+  auto session = NotebookSession::forChecking(common);
   if (!session) return std::unexpected(session.error());
   const auto report = session->notebook().verify();
   if (!report) return std::unexpected(report.error());

@@ -30,7 +30,7 @@ VerbResult runLabel(const LabelOptions& options, const CommonOptions& common) {
   }
   const auto document = exports::printVialLabels(labels);
   if (!document) return std::unexpected(document.error());
-  if (const auto written = app::writeFile(options.pdf, document->bytes); !written)
+  if (const auto written = app::writePdf(options.pdf, document->bytes); !written)
     return std::unexpected(written.error());
   if (common.json)
     return toJsonText({{"pages", document->pages},

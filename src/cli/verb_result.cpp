@@ -23,6 +23,11 @@ struct ResultOptions {
 };
 
 VerbResult runResult(const ResultOptions& options, const CommonOptions& common) {
+  const app::ResultRequest& asked = options.request;
+  if (!asked.yield && !asked.conversion && !asked.conclusion && !asked.aim && !asked.title && !asked.state) {
+    return std::unexpected(text::Faults{usageFault("result", "nothing is given to record",
+                                                   "add --yield, --conversion, --conclusion, --aim, --title or --state")});
+  }
   auto session = NotebookSession::forWriting(common);
   if (!session) return std::unexpected(session.error());
   const auto run = app::runOfCode(session->notebook(), options.run);

@@ -3,6 +3,7 @@
 #include <fmt/format.h>
 
 #include <CLI/CLI.hpp>
+#include <filesystem>
 #include <memory>
 #include <nlohmann/json.hpp>
 #include <optional>
@@ -48,6 +49,12 @@ VerbResult runSheet(const SheetOptions& options, const CommonOptions& common) {
         usageFault("--paper", fmt::format("{} is no paper size here", text::quoted(options.paper)),
                    "choose A4 or Letter"));
   }
+  for (const std::string& input : {options.plan, options.weighed.value_or("")}) {
+    std::error_code ignored;
+    if (!input.empty() && std::filesystem::equivalent(input, options.pdf, ignored)) {
+      faults.push_back(usageFault("--pdf", "this is the file that is read", "name another file"));
+    }
+  }
   if (options.pdf.empty())
     faults.push_back(usageFault("--pdf", "the file name is empty", "name the PDF to write"));
   if (!faults.empty()) return std::unexpected(std::move(faults));
@@ -56,7 +63,7 @@ VerbResult runSheet(const SheetOptions& options, const CommonOptions& common) {
   const auto paper = options.paper == "A4" ? exports::Paper::kA4 : exports::Paper::kLetter;
   const auto document = print(*run, options.stocks, paper);
   if (!document) return std::unexpected(document.error());
-  if (const auto written = app::writeFile(options.pdf, document->bytes); !written) {
+  if (const auto written = app::writePdf(options.pdf, document->bytes); !written) {
     return std::unexpected(written.error());
   }
   if (common.json) {

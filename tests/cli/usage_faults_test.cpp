@@ -238,7 +238,7 @@ TEST_CASE("a mass of something else than a formula is refused with the character
        "'H2O)': ')' closes no bracket (character 4)",
        "remove it or open one"},
       {{"mass", "()"}, 1, "formula", "'()': empty brackets", "remove them"},
-      {{"mass", "2+"}, 1, "formula", "'2+': no atoms here", "write elements such as C8H9N"},
+      {{"mass", "2+"}, 1, "formula", "'2+': a number before the first element", "an isotope stands in brackets"},
       {{"mass", "+"}, 1, "formula", "'+': a charge without atoms", "name the elements"},
       {{"mass", "TcO2"},
        1,
