@@ -8,6 +8,7 @@
 #include <system_error>
 #include <vector>
 
+#include "chem/module_directories.h"
 #include "exports/pages_module.h"
 
 namespace vialkeeper::exports {
@@ -21,29 +22,6 @@ constexpr const char* kReinstall = "install Vialkeeper again, program and module
 std::unexpected<text::Faults> moduleFault(std::string what, std::string mend) {
   return std::unexpected(text::Faults{
       {.kind = text::FaultKind::kUsage, .what = std::move(what), .mend = std::move(mend)}});
-}
-
-/// The directories in which a module may stand, the most particular first: the same as for the
-/// structure modules.
-std::vector<fs::path> moduleDirectories() {
-  if (const char* named = std::getenv(kDirectoryVariable); named != nullptr && *named != '\0') {
-    return {fs::path(named)};
-  }
-  std::vector<fs::path> directories;
-  std::error_code unreadable;
-  const fs::path program = fs::read_symlink("/proc/self/exe", unreadable);
-  if (!unreadable) {
-    directories.push_back(program.parent_path().parent_path() / "lib" / "vialkeeper");
-  }
-#ifdef VIALKEEPER_MODULE_INSTALL_DIR
-  const fs::path installed(VIALKEEPER_MODULE_INSTALL_DIR);  // absolute, or below the prefix
-  if (installed.is_absolute()) {
-    directories.push_back(installed);
-  } else if (!unreadable) {
-    directories.push_back(program.parent_path().parent_path() / installed);
-  }
-#endif
-  return directories;
 }
 
 std::unexpected<text::Faults> missingModule(const std::vector<fs::path>& sought) {
@@ -84,7 +62,7 @@ text::Checked<PagePrinter*> open(const fs::path& file) {
 text::Checked<PagePrinter*> pagePrinter() {
   static PagePrinter* printer = nullptr;
   if (printer != nullptr) return printer;
-  const std::vector<fs::path> directories = moduleDirectories();
+  const std::vector<fs::path> directories = chem::moduleDirectories();
   for (const fs::path& directory : directories) {
     const fs::path file = directory / kPagesModuleFile;
     std::error_code unreadable;

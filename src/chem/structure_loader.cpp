@@ -11,6 +11,7 @@
 #include <system_error>
 #include <vector>
 
+#include "chem/module_directories.h"
 #include "chem/rdkit/structure_module.h"
 #include "chem/structure.h"
 
@@ -26,28 +27,6 @@ std::string reinstall(const StructureModule& module) {
   std::string mend = "install Vialkeeper again, program and modules together";
   if (module.detour != nullptr) mend.append(", or ").append(module.detour);
   return mend;
-}
-
-/// The directories in which a module may stand, the most particular first.
-std::vector<fs::path> moduleDirectories() {
-  if (const char* named = std::getenv(kDirectoryVariable); named != nullptr && *named != '\0') {
-    return {fs::path(named)};
-  }
-  std::vector<fs::path> directories;
-  std::error_code unreadable;
-  const fs::path program = fs::read_symlink("/proc/self/exe", unreadable);
-  if (!unreadable) {
-    directories.push_back(program.parent_path().parent_path() / "lib" / "vialkeeper");
-  }
-#ifdef VIALKEEPER_MODULE_INSTALL_DIR
-  const fs::path installed(VIALKEEPER_MODULE_INSTALL_DIR);  // absolute, or below the prefix
-  if (installed.is_absolute()) {
-    directories.push_back(installed);
-  } else if (!unreadable) {
-    directories.push_back(program.parent_path().parent_path() / installed);
-  }
-#endif
-  return directories;
 }
 
 StructureFault missingModule(const StructureModule& module, const std::vector<fs::path>& sought) {

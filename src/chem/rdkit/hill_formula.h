@@ -13,7 +13,7 @@ namespace vialkeeper::chem {
 /// throughout where there is no carbon. A labelled nuclide follows its element as `[13C]`.
 /// A net charge ends it as `+`, `-`, `^2+` or `^2-`; a single one as `^-` where the count before it
 /// could be taken for the charge (`N3^-`), so that parseFormula() reads back what is meant.
-/// Source: @cite hill1900. RDKit's own formula is not used, as it writes D as H.
+/// Source: Hill, J. Am. Chem. Soc. 22 (1900) 478. RDKit's own formula is not used, as it writes D as H.
 [[nodiscard]] std::string hillFormula(const RDKit::ROMol& mol);
 
 }  // namespace vialkeeper::chem
