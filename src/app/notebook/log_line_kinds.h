@@ -23,6 +23,8 @@ inline constexpr std::string_view kGasAdded = "gas added";
 inline constexpr std::string_view kLiquidAdded = "liquid added";
 inline constexpr std::string_view kObservation = "observation";
 inline constexpr std::string_view kPhoto = "photo";  ///< with an attachment; idle for the ledger
+inline constexpr std::string_view kWithdrawn =
+    "withdrawn";  ///< in the place of an entry that was taken back; idle for the ledger
 inline constexpr std::string_view kAddendum =
     "addendum";  ///< text on a sealed run; idle for the ledger
 
@@ -38,7 +40,7 @@ inline constexpr auto kOfLogFile = std::to_array<std::string_view>(
 
 /// Whether the notebook may hold an event of the kind.
 [[nodiscard]] constexpr bool isKnown(std::string_view kind) {
-  return isOfLogFile(kind) || kind == kPhoto || kind == kAddendum;
+  return isOfLogFile(kind) || kind == kPhoto || kind == kWithdrawn || kind == kAddendum;
 }
 
 }  // namespace vialkeeper::app::event_kind

@@ -47,4 +47,10 @@ struct LoggedEntry {
 [[nodiscard]] Checked<LoggedEntry> correctEvent(const Desk& desk, const RunRecord& run, int number,
                                                 const LogRequest& request);
 
+/// Takes an entry back, as a new entry in its place that says so: both stay visible, and the gas
+/// ledger counts neither. How logging is undone. The kind of the new entry is `withdrawn`.
+/// Faults as correctEvent's.
+[[nodiscard]] Checked<LoggedEntry> withdrawEntry(const Desk& desk, const RunRecord& run, int number,
+                                                 const std::string& reason);
+
 }  // namespace vialkeeper::app

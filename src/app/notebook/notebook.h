@@ -10,6 +10,7 @@
 #include <string_view>
 #include <vector>
 
+#include "app/notebook/find_completion.h"
 #include "app/notebook/find_query.h"
 #include "app/notebook/records.h"
 #include "text/fault.h"
@@ -51,6 +52,10 @@ class Writing {
                                     std::span<const ComponentRecord> components) = 0;
   virtual Checked<void> changeRun(const RunRecord& run) = 0;
   virtual Checked<void> changeComponent(const ComponentRecord& component) = 0;
+  /// A component more of a run that is there already; the record names the run and its position.
+  virtual Checked<RowNumber> addComponent(const ComponentRecord& component) = 0;
+  /// Takes a component out; the trail keeps it whole.
+  virtual Checked<void> removeComponent(const ComponentRecord& component) = 0;
   virtual Checked<RowNumber> addEvent(const EventRecord& event) = 0;
   virtual Checked<std::string> nextDatasetCode() = 0;
   /// `values[c]` are the numbers of column c; all have `record.rows` of them.
@@ -132,6 +137,14 @@ class Notebook {
   virtual Checked<std::string> canonicalRun(RowNumber run) = 0;
 
   virtual Checked<NotebookSummary> summary() = 0;
+  /// A number that differs after any change of the file, by whomever. Cheap enough to be asked
+  /// every second.
+  virtual Checked<std::int64_t> changeMark() = 0;
+  /// What the filter line completes from, with how often each is used; not prepared yet.
+  virtual Checked<FindVocabulary> vocabulary() = 0;
+  /// Makes a search that runs in another thread stop soon, with a fault of code `interrupted` in
+  /// its field. The only function that may be called from another thread.
+  virtual void interrupt() noexcept = 0;
   virtual Checked<VerifyReport> verify() = 0;
   /// A copy that was opened again and checked before it got its name. Fault: the file is there
   /// already.

@@ -26,4 +26,10 @@ struct ResultRequest {
 [[nodiscard]] Checked<RunRecord> recordResult(const Desk& desk, const RunRecord& run,
                                               const ResultRequest& request);
 
+/// Puts results, headings, conclusion and state of a run back to what `before` has, as a new
+/// change: how recordResult is undone. Fault: the run is sealed now, or the way back in its life
+/// does not exist.
+[[nodiscard]] Checked<RunRecord> restoreResult(const Desk& desk, const RunRecord& run,
+                                               const RunRecord& before, const std::string& reason);
+
 }  // namespace vialkeeper::app

@@ -39,4 +39,19 @@ struct ShelfImport {
 [[nodiscard]] Checked<ShelfImport> importShelf(const Desk& desk, std::string_view kindWord,
                                                std::string_view bytes, const std::string& file);
 
+/// Changes a card as it was read (its version is checked): `fields` are all of its fields as typed,
+/// what is left out is cleared. Faults as readCard's; a name that another card has.
+[[nodiscard]] Checked<ShelfCard> changeShelfCard(const Desk& desk, const ShelfCard& read,
+                                                 const std::string& name,
+                                                 const TypedFields& fields);
+
+/// The fields of a card as a person would type them, for a form.
+[[nodiscard]] TypedFields typedFields(Notebook& notebook, const ShelfCard& card);
+
+/// Imports substances from an SD file (records of MDL molfile V2000 or V3000 with data items): the
+/// name from the first line or a data item NAME, CAS number and synonyms from items of that name.
+/// All faults at once, with their record's number, and nothing is written then.
+[[nodiscard]] Checked<ShelfImport> importSubstancesFromSdf(const Desk& desk, std::string_view bytes,
+                                                           const std::string& file);
+
 }  // namespace vialkeeper::app

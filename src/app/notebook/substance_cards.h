@@ -49,4 +49,19 @@ struct SubstanceMatch {
 [[nodiscard]] Checked<SubstanceRecord> addSubstanceCard(const Desk& desk,
                                                         const SubstanceDraft& draft);
 
+/// Changes a card as it was read (its version is checked). Faults as describeSubstance's.
+[[nodiscard]] Checked<SubstanceRecord> changeSubstanceCard(const Desk& desk,
+                                                           const SubstanceRecord& read,
+                                                           const SubstanceDraft& draft);
+
+/// The draft from which a card would be described in the same way, for a form.
+[[nodiscard]] SubstanceDraft draftOf(const SubstanceRecord& substance);
+
+/// Substances of the shelf for what somebody has typed so far: those whose name, synonym or CAS
+/// number begins with it, then those in which a word begins so, then those that hold it; a SMILES
+/// finds its structure. At most `most`. Never fails on any text.
+[[nodiscard]] Checked<std::vector<SubstanceRecord>> suggestSubstances(Notebook& notebook,
+                                                                      std::string_view typed,
+                                                                      std::size_t most = 8);
+
 }  // namespace vialkeeper::app

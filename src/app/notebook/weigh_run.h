@@ -2,6 +2,7 @@
 // SPDX-License-Identifier: GPL-3.0-or-later
 #pragma once
 
+#include <optional>
 #include <string>
 #include <vector>
 
@@ -26,5 +27,29 @@ struct WeighedComponent {
                                                        const std::string& key,
                                                        const std::string& quantity, bool accepted,
                                                        const std::string& reason);
+
+/// What a quantity would mean for a component, without recording it: for a field that is read with
+/// every key.
+struct WeighingPreview {
+  std::optional<double> offTargetPercent = {};  ///< 100 (actual/target − 1)
+  bool withinTolerance = false;
+  std::string asCharged = {};  ///< `0.198 mmol, 9.9 mol%`; empty where it cannot be said
+  std::vector<SlipQuestion> questions = {};
+};
+
+/// Faults as weighComponent's, but for the run's state.
+[[nodiscard]] Checked<WeighingPreview> previewWeighing(const RunSheet& sheet,
+                                                       const std::string& key,
+                                                       const std::string& quantity);
+
+/// Takes a recorded quantity out again, or puts an earlier one back, as a new change: how a
+/// weighing is undone. `quantity` is the earlier text; empty: nothing is recorded any more. The run
+/// stays in its state.
+[[nodiscard]] Checked<RunSheet> restoreWeighing(const Desk& desk, const RunRecord& run,
+                                                const std::string& key, const std::string& quantity,
+                                                const std::string& reason);
+
+/// The components' keys in the order in which they are weighed and pipetted.
+[[nodiscard]] std::vector<std::string> weighingOrder(const RunSheet& sheet);
 
 }  // namespace vialkeeper::app
