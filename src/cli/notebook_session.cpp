@@ -4,25 +4,16 @@
 
 #include <filesystem>
 
+#include "app/system_clock.h"
 #include "db/sqlite_notebook.h"
 
 namespace vialkeeper::cli {
 namespace {
 
-/// `20260304-142005`, for the name of a copy made before a migration.
-std::string stampOf(const units::Moment& now) {
-  std::string stamp;
-  for (const char c : toIsoText(now).substr(0, 19)) {
-    if (c >= '0' && c <= '9') stamp += c;
-    if (c == 'T') stamp += '-';
-  }
-  return stamp;
-}
-
 text::Checked<std::unique_ptr<app::Notebook>> open(const CommonOptions& common, db::OpenFor use) {
   const auto file = bookFile(common);
   if (!file) return std::unexpected(file.error());
-  return db::openNotebook(*file, use, stampOf(common.around->clock.now()));
+  return db::openNotebook(*file, use, app::fileStamp(common.around->clock.now()));
 }
 
 }  // namespace

@@ -18,12 +18,6 @@ struct Surroundings {
   std::istream& in;
 };
 
-/// The wall clock with the offset of the local time zone.
-class SystemClock final : public app::Clock {
- public:
-  [[nodiscard]] units::Moment now() override;
-};
-
 /// The process's own clock, environment and standard input.
 [[nodiscard]] Surroundings& processSurroundings();
 

@@ -1,0 +1,22 @@
+// SPDX-FileCopyrightText: The Vialkeeper developers
+// SPDX-License-Identifier: GPL-3.0-or-later
+#pragma once
+
+#include <QWidget>
+
+#include "ui/models/notebook_link.h"
+
+namespace vialkeeper::ui {
+
+/// Substances, lots, stocks, vials, lamps, balances and pipettes: a table and a form for each.
+class ShelfPage : public QWidget {
+  Q_OBJECT
+
+ public:
+  explicit ShelfPage(NotebookLink& link, QWidget* parent = nullptr);
+
+ private:
+  NotebookLink& m_link;
+};
+
+}  // namespace vialkeeper::ui
