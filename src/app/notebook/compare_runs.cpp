@@ -48,7 +48,7 @@ class Comparer {
     m_result.runs = runs;
   }
 
-  Checked<Comparison> compare() {
+  Checked<RunComparison> compare() {
     if (auto read = readComponents(); !read) return std::unexpected(read.error());
     compareComponents();
     conditions();
@@ -173,14 +173,14 @@ class Comparer {
   }
 
   Notebook& m_notebook;
-  Comparison m_result;
+  RunComparison m_result;
   std::vector<ByPlace> m_components;
   std::vector<std::pair<std::string, RowNumber>> m_order;
 };
 
 }  // namespace
 
-Checked<Comparison> compareRuns(Notebook& notebook, const std::vector<RunRecord>& runs) {
+Checked<RunComparison> compareRuns(Notebook& notebook, const std::vector<RunRecord>& runs) {
   return Comparer(notebook, runs).compare();
 }
 

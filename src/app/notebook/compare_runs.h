@@ -15,7 +15,7 @@ struct Difference {
   std::vector<std::string> values;  ///< in the order of the runs
 };
 
-struct Comparison {
+struct RunComparison {
   std::vector<RunRecord> runs;
   std::vector<Difference> inputs;    ///< components, conditions, lots; amounts only where beyond 2u
   std::vector<Difference> outcomes;  ///< yield, conversion
@@ -25,7 +25,7 @@ struct Comparison {
 /// Sets runs side by side. Components are matched by role and substance; loadings as charged, else
 /// as planned, differ where they are further apart than twice their combined uncertainty, or 0.1 %
 /// where none is known.
-[[nodiscard]] Checked<Comparison> compareRuns(Notebook& notebook,
+[[nodiscard]] Checked<RunComparison> compareRuns(Notebook& notebook,
                                               const std::vector<RunRecord>& runs);
 
 }  // namespace vialkeeper::app
