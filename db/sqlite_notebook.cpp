@@ -250,6 +250,18 @@ class SqliteNotebook final : public app::Notebook {
     });
   }
 
+  Checked<std::int64_t> changeMark() override {
+    return guarded(m_connection->file(), [&]() -> Checked<std::int64_t> {
+      // The pragma tells what others wrote; what this connection wrote, it counts itself.
+      return m_connection->integer("PRAGMA data_version") +
+             m_connection->database().getTotalChanges();
+    });
+  }
+
+  Checked<app::FindVocabulary> vocabulary() override { return app::FindVocabulary{}; }
+
+  void interrupt() noexcept override {}
+
   Checked<app::VerifyReport> verify() override {
     return guarded(m_connection->file(),
                    [&]() -> Checked<app::VerifyReport> { return verifyNotebook(*m_connection); });

@@ -154,6 +154,16 @@ text::Checked<void> SqliteWriting::changeComponent(const app::ComponentRecord& c
   return m_writer.update("component", component.n, component.version, rowOf(component, number));
 }
 
+text::Checked<app::RowNumber> SqliteWriting::addComponent(const app::ComponentRecord& component) {
+  m_writer.concerns(component.run);
+  const auto number = [this](const std::string& code) { return personNumber(code); };
+  return m_writer.insert("component", rowOf(component, number));
+}
+
+text::Checked<void> SqliteWriting::removeComponent(const app::ComponentRecord& component) {
+  return fault("component " + component.key + " cannot be taken out yet", "wait");
+}
+
 text::Checked<app::RowNumber> SqliteWriting::addEvent(const app::EventRecord& event) {
   m_writer.concerns(event.run);
   if (event.supersedes != 0) {

@@ -25,6 +25,8 @@ class SqliteWriting final : public app::Writing {
                                        std::span<const app::ComponentRecord> components) override;
   text::Checked<void> changeRun(const app::RunRecord& run) override;
   text::Checked<void> changeComponent(const app::ComponentRecord& component) override;
+  text::Checked<app::RowNumber> addComponent(const app::ComponentRecord& component) override;
+  text::Checked<void> removeComponent(const app::ComponentRecord& component) override;
   text::Checked<app::RowNumber> addEvent(const app::EventRecord& event) override;
   text::Checked<std::string> nextDatasetCode() override;
   text::Checked<app::RowNumber> addDataset(const app::DatasetRecord& record,
