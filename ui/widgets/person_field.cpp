@@ -2,23 +2,17 @@
 // SPDX-License-Identifier: GPL-3.0-or-later
 #include "ui/widgets/person_field.h"
 
-#include <QStyle>
 #include <algorithm>
 
 #include "app/notebook/desk.h"
 #include "ui/models/qt_text.h"
+#include "ui/widgets/sentence_field.h"
 #include "ui/widgets/theme.h"
 
 namespace vialkeeper::ui {
 namespace {
 
 constexpr int kWidth_px = 90;
-
-void setFaulty(QWidget* field, bool faulty) {
-  field->setProperty("faulty", faulty);
-  field->style()->unpolish(field);
-  field->style()->polish(field);
-}
 
 }  // namespace
 
@@ -38,11 +32,11 @@ void PersonField::takeTyped() {
   const QString typed = text().trimmed().toUpper();
   if (typed == m_link.person()) {
     setText(typed);
-    setFaulty(this, false);
+    setFaulty(*this, false);
     return;
   }
   if (!app::areInitials(toUtf8(typed))) {
-    setFaulty(this, true);
+    setFaulty(*this, true);
     emit refused(tr("“%1” are no initials: type 1 to 8 capital letters and digits, a letter first.")
                      .arg(text()));
     return;
@@ -60,7 +54,7 @@ void PersonField::takeTyped() {
 
 void PersonField::takePerson(const QString& initials) {
   setText(initials);
-  setFaulty(this, false);
+  setFaulty(*this, false);
   m_link.setPerson(initials);
 }
 

@@ -6,6 +6,8 @@
 
 #include "ui/models/notebook_link.h"
 
+class QTabWidget;
+
 namespace vialkeeper::ui {
 
 /// Substances, lots, stocks, vials, lamps, balances and pipettes: a table and a form for each.
@@ -14,9 +16,10 @@ class ShelfPage : public QWidget {
 
  public:
   explicit ShelfPage(NotebookLink& link, QWidget* parent = nullptr);
+  [[nodiscard]] QTabWidget& compartments() { return *m_tabs; }
 
  private:
-  NotebookLink& m_link;
+  QTabWidget* m_tabs;
 };
 
 }  // namespace vialkeeper::ui
