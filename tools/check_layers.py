@@ -67,6 +67,7 @@ LAYERS = {
     "ui/models": Layer(CORE + ("app",), BASE + ("QtCore", "Qt's generated code")),
     "ui/widgets": Layer(CORE + ("app", "ui/models", "ui/charts"), BASE + QT_ALL),
     "ui/charts": Layer(CORE + ("app", "ui/models", "ui/widgets"), BASE + QT_ALL),
+    "ui/desktop": Layer((), (), anything=True),
     "ui/main.cpp": Layer((), (), anything=True),
     # What the tests of all layers share: tests/*.h, tests/*.cpp and tests/support/.
     "tests": Layer(("text",), OUTER + ("Catch2",)),
@@ -85,6 +86,7 @@ PLACES = {
     "ui/models": "ui/models",
     "ui/widgets": "ui/widgets",
     "ui/charts": "ui/charts",
+    "ui/desktop": "ui/desktop",
     "ui/main.cpp": "ui/main.cpp",
     "tests/support": "tests",
 }

@@ -2,30 +2,17 @@
 // SPDX-License-Identifier: GPL-3.0-or-later
 #include <QApplication>
 #include <QCommandLineParser>
-#include <QFileInfo>
+#include <QIcon>
 
 #include "app/system_clock.h"
 #include "db/signing.h"
-#include "db/sqlite_notebook.h"
+#include "ui/desktop/sqlite_files.h"
 #include "ui/models/recent_notebooks.h"
 #include "ui/widgets/main_window.h"
 #include "ui/widgets/theme.h"
 
 namespace vialkeeper::ui {
 namespace {
-
-/// Notebooks over SQLite.
-class SqliteFiles final : public NotebookFiles {
- public:
-  text::Checked<std::unique_ptr<app::Notebook>> open(const std::string& file, Use use) override {
-    return db::openNotebook(
-        file, use == Use::kWriting ? db::OpenFor::kWriting : db::OpenFor::kReading,
-        app::fileStamp(app::SystemClock().now()));
-  }
-  text::Checked<std::unique_ptr<app::Notebook>> create(const std::string& file) override {
-    return db::createNotebook(file);
-  }
-};
 
 int runDesktop(QApplication& application) {
   QCommandLineParser parser;
@@ -37,6 +24,7 @@ int runDesktop(QApplication& application) {
                                QApplication::tr("The .vialbook file to open; else the last one."),
                                QStringLiteral("[NOTEBOOK]"));
   parser.process(application);
+  QApplication::setWindowIcon(QIcon(QStringLiteral(":/vialkeeper/vialkeeper.svg")));
   SqliteFiles files;
   app::SystemClock clock;
   db::SodiumSigner signer;

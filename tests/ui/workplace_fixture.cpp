@@ -7,7 +7,6 @@
 
 #include "app/notebook/demo_campaign.h"
 #include "app/notebook/run_plan.h"
-#include "app/system_clock.h"
 #include "db/sqlite_notebook.h"
 #include "ui/models/qt_text.h"
 
@@ -30,15 +29,6 @@ const std::string& sharedDemo() {
 }
 
 }  // namespace
-
-text::Checked<std::unique_ptr<app::Notebook>> TestFiles::open(const std::string& file, Use use) {
-  return db::openNotebook(
-      file, use == Use::kWriting ? db::OpenFor::kWriting : db::OpenFor::kReading, "test");
-}
-
-text::Checked<std::unique_ptr<app::Notebook>> TestFiles::create(const std::string& file) {
-  return db::createNotebook(file);
-}
 
 units::Moment SetClock::now() {
   ++m_ms;

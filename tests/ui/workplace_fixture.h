@@ -7,19 +7,13 @@
 
 #include "db/signing.h"
 #include "support/scratch_folder.h"
+#include "ui/desktop/sqlite_files.h"
 #include "ui/models/action_history.h"
 #include "ui/models/notebook_link.h"
 #include "ui/models/open_run.h"
 
 /// Notebooks on disk for tests of the desktop, as the program itself has them, but for the clock.
 namespace vialkeeper::tests {
-
-/// Notebooks over SQLite.
-class TestFiles final : public ui::NotebookFiles {
- public:
-  text::Checked<std::unique_ptr<app::Notebook>> open(const std::string& file, Use use) override;
-  text::Checked<std::unique_ptr<app::Notebook>> create(const std::string& file) override;
-};
 
 /// A clock that stands at 2026-03-04 09:00:00 +01:00 until it is moved; each look goes on 1 ms.
 class SetClock final : public app::Clock {
@@ -53,7 +47,7 @@ class WorkplaceFixture {
 
  private:
   ScratchFolder m_folder;
-  TestFiles m_files;
+  ui::SqliteFiles m_files;
   SetClock m_clock;
   db::SodiumSigner m_signer;
 };
