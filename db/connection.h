@@ -28,9 +28,6 @@ class Connection {
   /// Opens an existing file, or creates it where `create` says so. Throws SQLite::Exception.
   Connection(const std::string& file, Access access, bool create);
 
-  /// A prepared statement, kept for the next time, with its cells bound.
-  [[nodiscard]] SQLite::Statement& prepared(const std::string& sql,
-                                            std::span<const Cell> cells = {});
   void run(const std::string& sql, std::span<const Cell> cells = {});
   void run(const std::string& sql, std::initializer_list<Cell> cells) {
     run(sql, std::span(cells.begin(), cells.size()));
@@ -49,6 +46,8 @@ class Connection {
 
  private:
   void configure();
+  /// A prepared statement, kept for the next time, with its cells bound. Good until the next one.
+  [[nodiscard]] SQLite::Statement& prepared(const std::string& sql, std::span<const Cell> cells);
 
   std::string m_file;
   Access m_access;

@@ -2,7 +2,10 @@
 // SPDX-License-Identifier: GPL-3.0-or-later
 #include "db/sqlite_notebook.h"
 
+#include <fcntl.h>
 #include <fmt/format.h>
+#include <sqlite3.h>
+#include <unistd.h>
 
 #include <algorithm>
 #include <array>
@@ -39,16 +42,12 @@ std::unexpected<Faults> notebookFault(const std::string& file, std::string what,
 
 class SqliteNotebook final : public app::Notebook {
  public:
-  SqliteNotebook(std::unique_ptr<Connection> connection, std::string readOnlyReason)
-      : m_connection(std::move(connection)), m_readOnlyReason(std::move(readOnlyReason)) {}
+  SqliteNotebook(std::unique_ptr<Connection> connection, WritingObstacle obstacle)
+      : m_connection(std::move(connection)), m_obstacle(std::move(obstacle)) {}
 
   Checked<void> act(const app::Action& action,
                     const std::function<Checked<void>(app::Writing&)>& work) override {
-    if (!m_readOnlyReason.empty()) {
-      return notebookFault(m_connection->file(),
-                           "the notebook is open for reading only: " + m_readOnlyReason,
-                           "nothing was changed");
-    }
+    if (auto may = mayWrite(); !may) return may;
     return guarded(m_connection->file(), [&]() -> Checked<void> {
       SQLite::Transaction transaction(m_connection->database(),
                                       SQLite::TransactionBehavior::IMMEDIATE);
@@ -266,13 +265,19 @@ class SqliteNotebook final : public app::Notebook {
   }
 
   Checked<void> importAll(const std::string& folder) override {
-    if (!m_readOnlyReason.empty())
-      return notebookFault(m_connection->file(), m_readOnlyReason, "nothing was changed");
+    if (auto may = mayWrite(); !may) return may;
     return guarded(m_connection->file(),
                    [&]() -> Checked<void> { return readArchive(*m_connection, folder); });
   }
 
-  [[nodiscard]] std::string readOnlyReason() const override { return m_readOnlyReason; }
+  [[nodiscard]] Checked<void> mayWrite() const override {
+    if (m_obstacle.what.empty()) return {};
+    return notebookFault(m_connection->file(),
+                         "the notebook is open for reading only: " + m_obstacle.what,
+                         m_obstacle.mend + "; nothing was changed");
+  }
+
+  [[nodiscard]] std::string readOnlyReason() const override { return m_obstacle.what; }
 
  private:
   template <class T, class Make>
@@ -333,7 +338,7 @@ class SqliteNotebook final : public app::Notebook {
   }
 
   std::unique_ptr<Connection> m_connection;
-  std::string m_readOnlyReason;
+  WritingObstacle m_obstacle;
   std::map<std::int64_t, std::string> m_people;
 };
 
@@ -380,13 +385,29 @@ std::optional<std::string> headerFault(const std::string& file) {
   return std::nullopt;
 }
 
-/// Why the file may only be read, or nothing.
-std::string writingObstacle(const std::string& file) {
-  std::error_code ignored;
-  const fs::path folder = fs::absolute(file, ignored).parent_path();
-  if (const std::string locking = lockingFault(file); !locking.empty()) return locking;
-  std::fstream probe(file, std::ios::in | std::ios::out | std::ios::binary);
-  return probe ? "" : "the file may not be written";
+/// Brings back what a writer left that was killed in mid-write: SQLite rolls its journal back with
+/// the first read by a connection that may write.
+void rollBackLeftovers(const std::string& file) { Connection(file, Access::kReadWrite, false); }
+
+/// A connection that has read its first page.
+std::unique_ptr<Connection> connected(const std::string& file, Access access) {
+  auto connection = std::make_unique<Connection>(file, access, false);
+  (void)schemaOf(*connection);
+  return connection;
+}
+
+/// As connected(); a journal that a killed writer left does not keep a reader out where the file
+/// may be written.
+std::unique_ptr<Connection> connectedForReading(const std::string& file) {
+  try {
+    return connected(file, Access::kReadOnly);
+  } catch (const SQLite::Exception& error) {
+    if (error.getExtendedErrorCode() != SQLITE_READONLY_ROLLBACK ||
+        !writingObstacle(file).what.empty())
+      throw;
+  }
+  rollBackLeftovers(file);
+  return connected(file, Access::kReadOnly);
 }
 
 }  // namespace
@@ -400,13 +421,12 @@ Checked<std::unique_ptr<app::Notebook>> createNotebook(const std::string& file) 
   const fs::path folder = fs::absolute(file, ignored).parent_path();
   if (!fs::is_directory(folder, ignored))
     return notebookFault(file, "the folder does not exist", "make it first");
-  if (const std::string locking = lockingFault(file); !locking.empty()) {
-    return notebookFault(file, locking, "keep the notebook in a folder of this computer");
-  }
+  if (const WritingObstacle obstacle = folderObstacle(file); !obstacle.what.empty())
+    return notebookFault(file, obstacle.what, obstacle.mend);
   return guarded(file, [&]() -> Checked<std::unique_ptr<app::Notebook>> {
     auto connection = std::make_unique<Connection>(file, Access::kReadWrite, true);
     if (const auto made = migrate(*connection, ""); !made) return std::unexpected(made.error());
-    return std::make_unique<SqliteNotebook>(std::move(connection), "");
+    return std::make_unique<SqliteNotebook>(std::move(connection), WritingObstacle{});
   });
 }
 
@@ -418,29 +438,40 @@ Checked<std::unique_ptr<app::Notebook>> openNotebook(const std::string& file, Op
                          "check the path, or make one with create");
   if (fs::is_directory(file, ignored))
     return notebookFault(file, "this is a folder, not a notebook", "name the .vialbook file");
+  if (::faccessat(AT_FDCWD, file.c_str(), R_OK, AT_EACCESS) != 0) {
+    return notebookFault(file, "there is no permission to read the notebook",
+                         "ask its owner for it, or name another");
+  }
   if (const auto wrong = headerFault(file))
     return notebookFault(file, *wrong, "name a .vialbook file");
   return guarded(file, [&]() -> Checked<std::unique_ptr<app::Notebook>> {
-    std::string reason = use == OpenFor::kReading ? "it was opened so" : writingObstacle(file);
-    auto connection = std::make_unique<Connection>(
-        file, reason.empty() ? Access::kReadWrite : Access::kReadOnly, false);
+    WritingObstacle obstacle = use == OpenFor::kReading
+                                   ? WritingObstacle{"it was opened so", "open it for writing"}
+                                   : writingObstacle(file);
+    auto connection =
+        obstacle.what.empty() ? connected(file, Access::kReadWrite) : connectedForReading(file);
     const int schema = schemaOf(*connection);
     if (schema > newestSchema()) {
-      reason = fmt::format("it was written by a newer Vialkeeper (form {}, this program knows {})",
-                           schema, newestSchema());
+      obstacle = {
+          fmt::format("it was written by a newer Vialkeeper (form {}, this program knows {})",
+                      schema, newestSchema()),
+          "use that Vialkeeper"};
       connection = std::make_unique<Connection>(file, Access::kReadOnly, false);
     } else if (schema < newestSchema()) {
-      if (!reason.empty()) {
+      if (const WritingObstacle forGood = writingObstacle(file); !forGood.what.empty()) {
         return notebookFault(
             file,
             fmt::format("the notebook is of an older form ({}) and must be written to be read",
-                        schema),
-            "open it from a place where it may be written");
+                        schema) +
+                ", but " + forGood.what,
+            forGood.mend);
       }
+      connection = connected(file, Access::kReadWrite);
       if (const auto moved = migrate(*connection, stamp); !moved)
         return std::unexpected(moved.error());
+      if (use == OpenFor::kReading) connection = connected(file, Access::kReadOnly);
     }
-    return std::make_unique<SqliteNotebook>(std::move(connection), reason);
+    return std::make_unique<SqliteNotebook>(std::move(connection), std::move(obstacle));
   });
 }
 

@@ -50,6 +50,8 @@ text::Checked<NotebookSession> NotebookSession::forReading(const CommonOptions& 
 text::Checked<NotebookSession> NotebookSession::forWriting(const CommonOptions& common) {
   auto notebook = open(common, db::OpenFor::kWriting);
   if (!notebook) return std::unexpected(notebook.error());
+  // Before anything else is looked at: another fault would send the person the wrong way.
+  if (const auto may = (*notebook)->mayWrite(); !may) return std::unexpected(may.error());
   auto person = app::whoWorks(**notebook, namedPerson(common));
   if (!person) {
     for (text::Fault& fault : person.error()) fault.kind = text::FaultKind::kUsage;

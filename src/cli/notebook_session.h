@@ -16,6 +16,8 @@ class NotebookSession {
   /// For looking: nobody needs to be named. Fault: no --book, or the file cannot be opened.
   [[nodiscard]] static text::Checked<NotebookSession> forReading(const CommonOptions& common);
   /// For changing: also who works, by --person or VIALKEEPER_PERSON, or the only one there is.
+  /// Fault: the notebook is open for reading only; told before anything that is wrong with the
+  /// work.
   [[nodiscard]] static text::Checked<NotebookSession> forWriting(const CommonOptions& common);
 
   /// For checking: open for writing where that is possible, because SQLite lets no reader check the

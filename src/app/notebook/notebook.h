@@ -142,6 +142,8 @@ class Notebook {
   /// Fills this notebook, which must be empty, from such a folder.
   virtual Checked<void> importAll(const std::string& folder) = 0;
 
+  /// Fault: the notebook is open for reading only, why, and what would let it be written.
+  [[nodiscard]] virtual Checked<void> mayWrite() const = 0;
   /// Why the notebook is open for reading only; empty where it may be written.
   [[nodiscard]] virtual std::string readOnlyReason() const = 0;
 };
