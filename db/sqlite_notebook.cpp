@@ -249,10 +249,7 @@ class SqliteNotebook final : public app::Notebook {
     });
   }
 
-  Checked<app::VerifyReport> verify() override {
-    return guarded(m_connection->file(),
-                   [&]() -> Checked<app::VerifyReport> { return verifyNotebook(*m_connection); });
-  }
+  Checked<app::VerifyReport> verify(const app::VerifyRequest& request) override;
 
   Checked<void> backup(const std::string& file) override {
     return guarded(m_connection->file(),
@@ -410,6 +407,45 @@ std::unique_ptr<Connection> connectedForReading(const std::string& file) {
   return connected(file, Access::kReadOnly);
 }
 
+/// What stands between a path and a notebook that can be opened.
+Checked<void> checkOpenable(const std::string& file) {
+  std::error_code ignored;
+  if (!fs::exists(file, ignored))
+    return notebookFault(file, "there is no such notebook",
+                         "check the path, or make one with create");
+  if (fs::is_directory(file, ignored))
+    return notebookFault(file, "this is a folder, not a notebook", "name the .vialbook file");
+  if (::faccessat(AT_FDCWD, file.c_str(), R_OK, AT_EACCESS) != 0) {
+    return notebookFault(file, "there is no permission to read the notebook",
+                         "ask its owner for it, or name another");
+  }
+  if (const auto wrong = headerFault(file))
+    return notebookFault(file, *wrong, "name a .vialbook file");
+  return {};
+}
+
+Checked<app::VerifyReport> SqliteNotebook::verify(const app::VerifyRequest& request) {
+  const std::string& file = m_connection->file();
+  std::unique_ptr<Connection> other;
+  if (!request.against.empty()) {
+    std::error_code ignored;
+    if (fs::equivalent(request.against, file, ignored)) {
+      return notebookFault(request.against, "this is the notebook itself",
+                           "name an earlier copy of it");
+    }
+    if (const auto openable = checkOpenable(request.against); !openable)
+      return std::unexpected(openable.error());
+    const auto opened = guarded(request.against, [&]() -> Checked<void> {
+      other = connectedForReading(request.against);
+      return {};
+    });
+    if (!opened) return std::unexpected(opened.error());
+  }
+  return guarded(file, [&]() -> Checked<app::VerifyReport> {
+    return verifyNotebook(*m_connection, request, other.get());
+  });
+}
+
 }  // namespace
 
 Checked<std::unique_ptr<app::Notebook>> createNotebook(const std::string& file) {
@@ -432,18 +468,8 @@ Checked<std::unique_ptr<app::Notebook>> createNotebook(const std::string& file) 
 
 Checked<std::unique_ptr<app::Notebook>> openNotebook(const std::string& file, OpenFor use,
                                                      const std::string& stamp) {
-  std::error_code ignored;
-  if (!fs::exists(file, ignored))
-    return notebookFault(file, "there is no such notebook",
-                         "check the path, or make one with create");
-  if (fs::is_directory(file, ignored))
-    return notebookFault(file, "this is a folder, not a notebook", "name the .vialbook file");
-  if (::faccessat(AT_FDCWD, file.c_str(), R_OK, AT_EACCESS) != 0) {
-    return notebookFault(file, "there is no permission to read the notebook",
-                         "ask its owner for it, or name another");
-  }
-  if (const auto wrong = headerFault(file))
-    return notebookFault(file, *wrong, "name a .vialbook file");
+  if (const auto openable = checkOpenable(file); !openable)
+    return std::unexpected(openable.error());
   return guarded(file, [&]() -> Checked<std::unique_ptr<app::Notebook>> {
     WritingObstacle obstacle = use == OpenFor::kReading
                                    ? WritingObstacle{"it was opened so", "open it for writing"}

@@ -104,6 +104,18 @@ TEST_CASE("a program that only reads and keeps a writer out is told as a reader"
             tool.pid())) != std::string::npos);
 }
 
+TEST_CASE("a lock that keeps verify from the index is told, and is no damage", "[db][safety]") {
+  const ScratchFolder folder;
+  const std::string file = folder.path("held.vialbook");
+  tests::makeSmallNotebook(file, 3);
+  const OtherTool tool(file, "UPDATE run SET title = 'another'");
+  const auto report = tests::opened(file)->verify({});
+  REQUIRE(report);
+  CHECK(report->findings.empty());
+  REQUIRE(report->notChecked.size() == 1);
+  CHECK(report->notChecked.front().find("another program was writing") != std::string::npos);
+}
+
 TEST_CASE("asking who holds a lock gives none of our own up", "[db][safety]") {
   const ScratchFolder folder;
   const std::string file = folder.path("ours.vialbook");

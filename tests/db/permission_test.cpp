@@ -34,7 +34,7 @@ std::string readThenWrite(const std::string& file) {
   if (!events || events->size() != 3) return "not read to the end";
   auto writing = db::openNotebook(file, db::OpenFor::kWriting, "test");
   if (!writing) return "not opened: " + toLine(writing.error().front());
-  if (!(*writing)->verify()->findings.empty()) return "not sound";
+  if (!(*writing)->verify({})->findings.empty()) return "not sound";
   tests::SteppingClock clock;
   const auto logged = app::logLine({**writing, clock, "KW"}, *app::runOfCode(**writing, "KW-0001"),
                                    {.line = "note a"});
