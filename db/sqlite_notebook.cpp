@@ -21,6 +21,7 @@
 #include "db/connection.h"
 #include "db/find_sql.h"
 #include "db/migrations.h"
+#include "db/new_file.h"
 #include "db/record_rows.h"
 #include "db/sqlite_writing.h"
 #include "db/verifier.h"
@@ -464,6 +465,23 @@ Checked<std::unique_ptr<app::Notebook>> createNotebook(const std::string& file) 
     if (const auto made = migrate(*connection, ""); !made) return std::unexpected(made.error());
     return std::make_unique<SqliteNotebook>(std::move(connection), WritingObstacle{});
   });
+}
+
+Checked<void> makeNotebook(const std::string& file,
+                           const std::function<Checked<void>(app::Notebook&)>& fill) {
+  NewFile target(file);
+  if (const auto may = target.check(); !may) return may;
+  const auto made = [&]() -> Checked<void> {
+    const auto notebook = createNotebook(target.temporary());
+    if (!notebook) return std::unexpected(notebook.error());
+    return fill(**notebook);
+  }();
+  if (made) return target.giveName();
+  Faults faults = made.error();
+  for (text::Fault& fault : faults) {
+    if (fault.file == target.temporary()) fault.file = file;
+  }
+  return std::unexpected(std::move(faults));
 }
 
 Checked<std::unique_ptr<app::Notebook>> openNotebook(const std::string& file, OpenFor use,

@@ -2,8 +2,6 @@
 // SPDX-License-Identifier: GPL-3.0-or-later
 #include "cli/notebook_session.h"
 
-#include <filesystem>
-
 #include "db/sqlite_notebook.h"
 
 namespace vialkeeper::cli {
@@ -62,16 +60,6 @@ text::Checked<NotebookSession> NotebookSession::forWriting(const CommonOptions& 
 
 text::Checked<NotebookSession> NotebookSession::forChecking(const CommonOptions& common) {
   auto notebook = open(common, db::OpenFor::kWriting);
-  if (!notebook) return std::unexpected(notebook.error());
-  return NotebookSession(*std::move(notebook), common.around->clock, "");
-}
-
-text::Checked<NotebookSession> NotebookSession::forRebuilding(const CommonOptions& common) {
-  const auto file = bookFile(common);
-  if (!file) return std::unexpected(file.error());
-  std::error_code ignored;
-  auto notebook = std::filesystem::exists(*file, ignored) ? open(common, db::OpenFor::kWriting)
-                                                          : db::createNotebook(*file);
   if (!notebook) return std::unexpected(notebook.error());
   return NotebookSession(*std::move(notebook), common.around->clock, "");
 }

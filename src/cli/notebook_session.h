@@ -23,9 +23,6 @@ class NotebookSession {
   /// For checking: open for writing where that is possible, because SQLite lets no reader check the
   /// full-text index; nobody needs to be named.
   [[nodiscard]] static text::Checked<NotebookSession> forChecking(const CommonOptions& common);
-  /// For filling an empty notebook from an archive, which brings its own people; the file is made
-  /// if it is not there.
-  [[nodiscard]] static text::Checked<NotebookSession> forRebuilding(const CommonOptions& common);
 
   [[nodiscard]] app::Notebook& notebook() { return *m_notebook; }
   [[nodiscard]] app::Desk desk() { return {*m_notebook, *m_clock, m_person}; }

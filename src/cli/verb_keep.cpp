@@ -17,6 +17,7 @@
 #include "cli/notebook_session.h"
 #include "cli/record_json.h"
 #include "cli/verb.h"
+#include "db/sqlite_notebook.h"
 #include "text/utf8.h"
 
 namespace vialkeeper::cli {
@@ -143,17 +144,30 @@ struct ImportOptions {
   std::string run;
 };
 
+/// Into a new file, or into an empty notebook that is there.
 VerbResult importArchive(const ImportOptions& options, const CommonOptions& common) {
-  auto session = NotebookSession::forRebuilding(common);
-  if (!session) return std::unexpected(session.error());
-  const auto done = session->notebook().importAll(options.file);
-  if (!done) return std::unexpected(done.error());
-  const auto summary = session->notebook().summary();
-  if (!summary) return std::unexpected(summary.error());
+  const auto file = bookFile(common);
+  if (!file) return std::unexpected(file.error());
+  app::NotebookSummary summary;
+  const auto fill = [&](app::Notebook& notebook) -> text::Checked<void> {
+    if (auto done = notebook.importAll(options.file); !done) return done;
+    const auto told = notebook.summary();
+    if (!told) return std::unexpected(told.error());
+    summary = *told;
+    return {};
+  };
+  std::error_code ignored;
+  if (std::filesystem::exists(*file, ignored)) {
+    auto session = NotebookSession::forChecking(common);
+    if (!session) return std::unexpected(session.error());
+    if (const auto done = fill(session->notebook()); !done) return std::unexpected(done.error());
+  } else if (const auto done = db::makeNotebook(*file, fill); !done) {
+    return std::unexpected(done.error());
+  }
   if (common.json)
     return toJsonText(
-        {{"runs", summary->runs}, {"revisions", summary->revisions}, {"notices", Json::array()}});
-  return fmt::format("{} runs, {} revisions\n", summary->runs, summary->revisions);
+        {{"runs", summary.runs}, {"revisions", summary.revisions}, {"notices", Json::array()}});
+  return fmt::format("{} runs, {} revisions\n", summary.runs, summary.revisions);
 }
 
 VerbResult importData(const ImportOptions& options, const CommonOptions& common) {
@@ -177,10 +191,20 @@ VerbResult importData(const ImportOptions& options, const CommonOptions& common)
 }
 
 VerbResult runImport(const ImportOptions& options, const CommonOptions& common) {
-  std::error_code ignored;
-  const bool archive =
-      std::filesystem::exists(std::filesystem::path(options.file) / "notebook.json", ignored);
-  if (options.kind.empty() && options.run.empty() && archive) return importArchive(options, common);
+  if (options.kind.empty() && options.run.empty()) {
+    std::error_code ignored;
+    const auto inputFault = [&options](const char* what, const char* mend) {
+      return std::unexpected(text::Faults{{.file = options.file, .what = what, .mend = mend}});
+    };
+    if (!std::filesystem::exists(options.file, ignored))
+      return inputFault("there is no such file or folder", "check the path");
+    if (std::filesystem::is_directory(options.file, ignored)) {
+      if (std::filesystem::exists(std::filesystem::path(options.file) / "notebook.json", ignored))
+        return importArchive(options, common);
+      return inputFault("this folder is no archive: it holds no notebook.json",
+                        "name the folder that export --all made, or a file with --as and --run");
+    }
+  }
   text::Faults faults;
   if (options.kind.empty()) {
     faults.push_back(usageFault(
