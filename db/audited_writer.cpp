@@ -6,6 +6,8 @@
 #include <fmt/ranges.h>
 #include <sodium.h>
 
+#include <algorithm>
+
 #include "db/canonical_json.h"
 
 namespace vialkeeper::db {
@@ -42,23 +44,36 @@ AuditedWriter::AuditedWriter(Connection& connection, const app::Action& action)
 
 std::int64_t AuditedWriter::insert(const std::string& table, Row row) {
   const std::int64_t now_ms = m_action.author.at.utc.time_since_epoch().count();
-  row.set("n", m_connection.integer(fmt::format("SELECT coalesce(max(n), 0) + 1 FROM {}", table)));
+  row.set("n", std::int64_t{0});
   row.set("id", Blob{newId(now_ms)});
   row.set("version", std::int64_t{1});
-  std::vector<std::string> columns;
-  std::vector<std::string> places;
+  Insertion& insertion = insertionInto(table, row);
+  const std::int64_t n = insertion.next;
+  row.set("n", n);
   std::vector<Cell> cells;
-  for (const auto& [column, cell] : row.cells()) {
-    columns.push_back(column);
-    places.emplace_back("?");
-    cells.push_back(cell);
-  }
-  m_connection.run(fmt::format("INSERT INTO {} ({}) VALUES ({})", table, fmt::join(columns, ", "),
-                               fmt::join(places, ", ")),
-                   std::span<const Cell>(cells));
-  const std::int64_t n = row.integer("n");
+  for (const auto& [column, cell] : row.cells()) cells.push_back(cell);
+  m_connection.run(insertion.sql, std::span<const Cell>(cells));
+  ++insertion.next;
   m_changes.push_back(changeText(table, n, "null", canonicalRow(row)));
   return n;
+}
+
+AuditedWriter::Insertion& AuditedWriter::insertionInto(const std::string& table, const Row& row) {
+  Insertion& insertion = m_insertions[table];
+  // The transaction keeps other writers out, and rows are added here alone: the count stays right.
+  if (insertion.next == 0) {
+    insertion.next =
+        m_connection.integer(fmt::format("SELECT coalesce(max(n), 0) + 1 FROM {}", table));
+  }
+  if (!std::ranges::equal(insertion.columns, row.cells(), {}, {},
+                          &std::pair<std::string, Cell>::first)) {
+    insertion.columns.clear();
+    for (const auto& [column, cell] : row.cells()) insertion.columns.push_back(column);
+    const std::vector<std::string> places(insertion.columns.size(), "?");
+    insertion.sql = fmt::format("INSERT INTO {} ({}) VALUES ({})", table,
+                                fmt::join(insertion.columns, ", "), fmt::join(places, ", "));
+  }
+  return insertion;
 }
 
 text::Checked<void> AuditedWriter::update(const std::string& table, std::int64_t n,

@@ -56,6 +56,7 @@ class SqliteNotebook final : public app::Notebook {
       AuditedWriter writer(*m_connection, action);
       SqliteWriting writing(*m_connection, writer);
       if (auto done = work(writing); !done) return done;
+      writing.finish();
       writer.finish();
       transaction.commit();
       m_people.clear();
@@ -343,7 +344,13 @@ class SqliteNotebook final : public app::Notebook {
 Checked<app::FindResult> SqliteNotebook::find(const app::FindQuery& query,
                                               const app::FindOptions& options) {
   return guarded(m_connection->file(), [&]() -> Checked<app::FindResult> {
-    const FindSql sql = findSql(query, options);
+    const auto counted = [this](const SqlText& counting) {
+      const auto rows = m_connection->rows(counting.sql, std::span<const Cell>(counting.cells));
+      if (rows.empty() || rows.front().cells().empty()) return std::int64_t{0};
+      const auto* count = std::get_if<std::int64_t>(&rows.front().cells().front().second);
+      return count != nullptr ? *count : std::int64_t{0};
+    };
+    const FindSql sql = findSql(query, options, counted);
     app::FindResult result;
     for (const Row& row :
          m_connection->rows(sql.select.sql, std::span<const Cell>(sql.select.cells))) {
@@ -354,12 +361,8 @@ Checked<app::FindResult> SqliteNotebook::find(const app::FindQuery& query,
       result.runs.push_back({*std::move(found), *std::move(parts)});
     }
     result.matches = static_cast<std::int64_t>(result.runs.size());
-    if (options.count && options.limit != 0 && result.runs.size() >= options.limit) {
-      const auto counted =
-          m_connection->rows(sql.count.sql, std::span<const Cell>(sql.count.cells));
-      result.matches =
-          counted.empty() ? 0 : std::get<std::int64_t>(counted.front().cells().front().second);
-    }
+    if (options.count && options.limit != 0 && result.runs.size() >= options.limit)
+      result.matches = counted(sql.count);
     return result;
   });
 }
