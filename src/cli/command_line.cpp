@@ -128,6 +128,8 @@ std::vector<Verb> allVerbs(CLI::App& program) {
   for (const auto make :
        {massVerb,    chargeVerb, sheetVerb,   createVerb, demoVerb, shelfVerb,      addVerb,
         cloneVerb,   runsVerb,   findVerb,    showVerb,   weighVerb,      logVerb,
+  program.add_flag("--new-person", common.newPerson,
+                   "the initials are somebody's who has not worked in this notebook yet");
         correctVerb, resultVerb, compareVerb, labelVerb,  importVerb,     exportVerb,
         backupVerb,  verifyVerb, keyVerb,     sealVerb,   countersignVerb}) {
     verbs.push_back(make(program));

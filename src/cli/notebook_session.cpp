@@ -50,9 +50,13 @@ text::Checked<NotebookSession> NotebookSession::forReading(const CommonOptions& 
 text::Checked<NotebookSession> NotebookSession::forWriting(const CommonOptions& common) {
   auto notebook = open(common, db::OpenFor::kWriting);
   if (!notebook) return std::unexpected(notebook.error());
-  auto person = app::whoWorks(**notebook, namedPerson(common));
+  auto person =
+      app::whoWorks(**notebook, namedPerson(common),
+                    common.newPerson ? app::Newcomer::kWelcome : app::Newcomer::kQuestioned);
   if (!person) {
-    for (text::Fault& fault : person.error()) fault.kind = text::FaultKind::kUsage;
+    for (text::Fault& fault : person.error()) {
+      if (fault.kind == text::FaultKind::kInput) fault.kind = text::FaultKind::kUsage;
+    }
     return std::unexpected(person.error());
   }
   return NotebookSession(*std::move(notebook), common.around->clock, *std::move(person));
