@@ -11,6 +11,7 @@
 #include "cli/charge_table.h"
 #include "cli/json_text.h"
 #include "cli/notebook_session.h"
+#include "cli/questions.h"
 #include "cli/verb.h"
 
 namespace vialkeeper::cli {
@@ -24,16 +25,6 @@ struct WeighOptions {
   bool yes = false;
   bool retarget = false;
 };
-
-text::Faults questionsAsFaults(const std::string& key,
-                               const std::vector<app::SlipQuestion>& questions) {
-  text::Faults faults;
-  for (const app::SlipQuestion& question : questions) {
-    faults.push_back(
-        {.field = key, .what = question.what, .mend = question.ask + " If it is right, add --yes"});
-  }
-  return faults;
-}
 
 VerbResult runWeigh(const WeighOptions& options, const CommonOptions& common) {
   auto session = NotebookSession::forWriting(common);

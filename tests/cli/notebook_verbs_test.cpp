@@ -1,0 +1,59 @@
+// SPDX-FileCopyrightText: The Vialkeeper developers
+// SPDX-License-Identifier: GPL-3.0-or-later
+#include <catch2/catch.hpp>
+
+#include "cli/notebook_bench.h"
+
+using namespace vialkeeper::tests;
+using Catch::Matchers::Contains;
+using Catch::Matchers::StartsWith;
+
+TEST_CASE("log questions what can hardly be, and keeps it when it is right", "[cli][log]") {
+  Book book;
+  const Ran asked = book.verb({"log", "KW-0001", "p 420 bar"});
+  CHECK(asked.status == 1);
+  CHECK(asked.out.empty());
+  CHECK(asked.err ==
+        "entry: 420 bar gauge is more than a glass vial holds: did you mean 420 mbar? If it is "
+        "right, add --yes\n");
+  CHECK(book.verb({"show", "KW-0001", "--json"}).json()["events"].empty());
+  REQUIRE(book.verb({"log", "KW-0001", "p 420 bar", "--yes"}).status == 0);
+  CHECK(book.verb({"show", "KW-0001", "--json"}).json()["events"][0]["pressure_bar"] == 420.0);
+  CHECK(book.verb({"correct", "KW-0001", "1", "p 410 bar"}).status == 1);
+  CHECK(book.verb({"correct", "KW-0001", "1", "p 0.42 bar"}).status == 0);
+}
+
+TEST_CASE("log holds samples against the liquid that is left", "[cli][log]") {
+  Book book;
+  REQUIRE(book.verb({"log", "KW-0001", "aliquot 1.5 mL"}).status == 0);
+  const Ran asked = book.verb({"log", "KW-0001", "aliquot 1 mL"});
+  CHECK(asked.status == 1);
+  CHECK_THAT(asked.err, Contains("is more than the vial's liquid (500 µL)"));
+  REQUIRE(book.verb({"log", "KW-0001", "add 1 mL acetonitrile"}).status == 0);
+  CHECK(book.verb({"log", "KW-0001", "aliquot 1 mL"}).status == 0);
+  // A corrected entry counts as it is now.
+  REQUIRE(book.verb({"correct", "KW-0001", "1", "aliquot 0.5 mL"}).status == 0);
+  CHECK(book.verb({"log", "KW-0001", "aliquot 1.4 mL"}).status == 0);
+}
+
+TEST_CASE("a time before the run was set up is questioned", "[cli][log]") {
+  Book book;
+  book.clock().goOn(std::chrono::minutes{30});
+  const Ran asked = book.verb({"log", "KW-0001", "lamp on", "--at", "13:50"});
+  CHECK(asked.status == 1);
+  CHECK(asked.err ==
+        "entry: 2026-03-04T13:50:00+01:00 is before the run was set up "
+        "(2026-03-04T14:00:00+01:00): is the time right? If it is right, add --yes\n");
+  CHECK(book.verb({"log", "KW-0001", "lamp on", "--at", "14:00"}).status == 0);
+  REQUIRE(book.verb({"log", "KW-0001", "lamp off", "--at", "13:50", "--yes"}).status == 0);
+  // Whoever corrects the words has answered for the time already.
+  CHECK(book.verb({"correct", "KW-0001", "2", "lamp off; fan on"}).status == 0);
+}
+
+TEST_CASE("times are shown with their offset", "[cli][log]") {
+  Book book;
+  CHECK_THAT(book.verb({"log", "KW-0001", "lamp on"}).out, Contains("2026-03-04T14:00+01:00"));
+  const Ran shown = book.verb({"show", "KW-0001"});
+  CHECK_THAT(shown.out, Contains("2026-03-04T14:00+01:00 by KW"));
+  CHECK_THAT(shown.out, Contains("   1  2026-03-04T14:00+01:00  lamp on"));
+}
