@@ -57,3 +57,16 @@ TEST_CASE("times are shown with their offset", "[cli][log]") {
   CHECK_THAT(shown.out, Contains("2026-03-04T14:00+01:00 by KW"));
   CHECK_THAT(shown.out, Contains("   1  2026-03-04T14:00+01:00  lamp on"));
 }
+
+TEST_CASE("weighing again says what was recorded before", "[cli][weigh]") {
+  Book book;
+  CHECK(book.verb({"weigh", "KW-0001", "amine", "24.3 mg", "--json"})
+            .json()["recorded_before"]
+            .is_null());
+  const Ran again = book.verb({"weigh", "KW-0001", "amine", "24.1 mg"});
+  CHECK_THAT(again.out,
+             StartsWith("amine: 24.3 mg → 24.1 mg; the old record stays in the history"));
+  CHECK(book.verb({"weigh", "KW-0001", "amine", "24.0 mg", "--json"}).json()["recorded_before"] ==
+        "24.1 mg");
+  CHECK_THAT(book.verb({"show", "KW-0001", "--history", "--json"}).out, Contains("24.3 mg"));
+}
