@@ -70,3 +70,32 @@ TEST_CASE("weighing again says what was recorded before", "[cli][weigh]") {
         "24.1 mg");
   CHECK_THAT(book.verb({"show", "KW-0001", "--history", "--json"}).out, Contains("24.3 mg"));
 }
+
+TEST_CASE("a second key is questioned, and older seals stay valid under the first", "[cli][seal]") {
+  Book book;
+  const std::string words = "an invented passphrase\n";
+  REQUIRE(book.verb({"weigh", "KW-0001", "amine", "24.3 mg"}).status == 0);
+  REQUIRE(book.verb({"result", "KW-0001", "--yield", "50 %"}).status == 0);
+  REQUIRE(book.verb({"result", "KW-0001", "--state", "closed"}).status == 0);
+  REQUIRE(book.verbWithInput("KW", {"key", "new"}, words).status == 0);
+  REQUIRE(book.verbWithInput("KW", {"seal", "KW-0001"}, words).status == 0);
+
+  const auto before = book.folder().contents();
+  const Ran asked = book.verbWithInput("KW", {"key", "new"}, words);
+  CHECK(asked.status == 1);
+  CHECK_THAT(asked.err, Contains("KW has a signing key already") && Contains("--yes") &&
+                            Contains("older seals stay valid"));
+  CHECK(book.folder().contents() == before);
+  const Ran replaced =
+      book.verbWithInput("KW", {"key", "new", "--yes", "--json"}, "another passphrase\n");
+  REQUIRE(replaced.status == 0);
+  CHECK(replaced.json()["replaced"] == true);
+  CHECK(book.verb({"verify"}).status == 0);
+
+  CHECK_THAT(book.verbWithInput("KW", {"countersign", "KW-0001"}, words).err,
+             Contains("KW sealed this run: a witness is somebody else"));
+  REQUIRE(book.verbWithInput("TS", {"key", "new", "--new-person"}, words).status == 0);
+  REQUIRE(book.verbWithInput("TS", {"countersign", "KW-0001"}, words).status == 0);
+  CHECK_THAT(book.verbWithInput("TS", {"countersign", "KW-0001"}, words).err,
+             Contains("TS has countersigned this run already"));
+}
