@@ -99,3 +99,26 @@ TEST_CASE("a second key is questioned, and older seals stay valid under the firs
   CHECK_THAT(book.verbWithInput("TS", {"countersign", "KW-0001"}, words).err,
              Contains("TS has countersigned this run already"));
 }
+
+TEST_CASE("the lists of runs count, and refuse what cannot be", "[cli][find]") {
+  Book book;
+  CHECK_THAT(book.verb({"runs"}).out, Catch::Matchers::EndsWith("\n1 run\n"));
+  REQUIRE(book.verb({"clone", "KW-0001"}).status == 0);
+  CHECK_THAT(book.verb({"runs"}).out, Catch::Matchers::EndsWith("\n2 runs\n"));
+  CHECK(book.verb({"runs", "--limit", "0"}).status == 0);
+  for (const auto& [options, err] : std::vector<std::pair<std::vector<std::string>, std::string>>{
+           {{"--limit=-1"}, "--limit: -1 is less than nothing: "},
+           {{"--limit", "-1"}, "--limit: -1 is less than nothing: "},
+           {{"--limit", "few"}, "--limit: its value cannot be read: "},
+           {{"--csv", "--json"}, "--csv: a list is written as CSV or as JSON, not as both: "}}) {
+    INFO(err);
+    std::vector<std::string> arguments{"runs"};
+    arguments.insert(arguments.end(), options.begin(), options.end());
+    const Ran ran = book.verb(arguments);
+    CHECK(ran.status == 2);
+    CHECK(ran.out.empty());
+    CHECK_THAT(ran.err, StartsWith(err));
+  }
+  CHECK(book.verb({"find", "***"}).status == 1);
+  CHECK_THAT(book.verb({"find", "5-20 mol%"}).err, Contains("how much of which substance"));
+}
