@@ -1,5 +1,6 @@
 // SPDX-FileCopyrightText: The Vialkeeper developers
 // SPDX-License-Identifier: GPL-3.0-or-later
+#include <algorithm>
 #include <catch2/catch.hpp>
 
 #include "cli/notebook_bench.h"
@@ -7,6 +8,24 @@
 using namespace vialkeeper::tests;
 using Catch::Matchers::Contains;
 using Catch::Matchers::StartsWith;
+
+namespace {
+
+/// The codes of a command's notices, in their order.
+std::vector<std::string> noticeCodes(const Ran& ran) {
+  INFO(ran.err);
+  REQUIRE(ran.status == 0);
+  std::vector<std::string> codes;
+  const nlohmann::json json = ran.json();
+  for (const auto& notice : json["notices"]) codes.push_back(notice["code"]);
+  return codes;
+}
+
+bool holds(const std::vector<std::string>& codes, const std::string& code) {
+  return std::find(codes.begin(), codes.end(), code) != codes.end();
+}
+
+}  // namespace
 
 TEST_CASE("log questions what can hardly be, and keeps it when it is right", "[cli][log]") {
   Book book;
@@ -100,6 +119,30 @@ TEST_CASE("a second key is questioned, and older seals stay valid under the firs
              Contains("TS has countersigned this run already"));
 }
 
+TEST_CASE("a title that speaks of what was set otherwise is told", "[cli][add]") {
+  Book book;
+  const auto clone = [&book](std::vector<std::string> options) {
+    options.insert(options.begin(), {"clone", "KW-0001", "--json"});
+    return book.verb(options);
+  };
+  // `Indoline dehydrogenation` names the amine and nothing of the acid.
+  const Ran kept = clone({"--set", "component.amine.amount=0.100 mmol"});
+  CHECK(holds(noticeCodes(kept), "title-kept"));
+  CHECK(kept.json()["notices"][0]["at"] == "title");
+  CHECK_FALSE(holds(noticeCodes(clone({"--set", "component.acid.equiv=0.2"})), "title-kept"));
+  CHECK_FALSE(
+      holds(noticeCodes(clone({"--set", "component.amine.amount=0.100 mmol", "--title", "Half"})),
+            "title-kept"));
+  const std::string plan = book.folder().write(
+      "loading.toml", changed(soundPlan(), "Indoline dehydrogenation", "Ni at 5 mol%, 0.2 mmol"));
+  const auto add = [&](const std::string& set) {
+    return noticeCodes(book.verb({"add", plan, "--json", "--set", set}));
+  };
+  CHECK(holds(add("component.nickel.mol_percent=10"), "title-kept"));
+  CHECK(holds(add("component.amine.amount=0.1 mmol"), "title-kept"));
+  CHECK_FALSE(holds(add("vial.volume=20 mL"), "title-kept"));
+}
+
 TEST_CASE("the lists of runs count, and refuse what cannot be", "[cli][find]") {
   Book book;
   CHECK_THAT(book.verb({"runs"}).out, Catch::Matchers::EndsWith("\n1 run\n"));
@@ -121,4 +164,15 @@ TEST_CASE("the lists of runs count, and refuse what cannot be", "[cli][find]") {
   }
   CHECK(book.verb({"find", "***"}).status == 1);
   CHECK_THAT(book.verb({"find", "5-20 mol%"}).err, Contains("how much of which substance"));
+}
+
+TEST_CASE("shelf add tells of a name on the shelf that looks like the new one", "[cli][shelf]") {
+  Book book;
+  const Ran near =
+      book.verb({"shelf", "add", "substance", "pivalc acid", "--formula", "C5H10O3", "--json"});
+  CHECK(noticeCodes(near) == std::vector<std::string>{"near-miss"});
+  CHECK_THAT(near.json()["notices"][0]["text"].get<std::string>(), Contains("pivalic acid"));
+  CHECK(noticeCodes(book.verb({"shelf", "add", "substance", "quinuclidine", "--formula", "C7H13N",
+                               "--json"}))
+            .empty());
 }
