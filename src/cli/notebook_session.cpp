@@ -50,9 +50,13 @@ text::Checked<NotebookSession> NotebookSession::forWriting(const CommonOptions& 
   if (!notebook) return std::unexpected(notebook.error());
   // Before anything else is looked at: another fault would send the person the wrong way.
   if (const auto may = (*notebook)->mayWrite(); !may) return std::unexpected(may.error());
-  auto person = app::whoWorks(**notebook, namedPerson(common));
+  auto person =
+      app::whoWorks(**notebook, namedPerson(common),
+                    common.newPerson ? app::Newcomer::kWelcome : app::Newcomer::kQuestioned);
   if (!person) {
-    for (text::Fault& fault : person.error()) fault.kind = text::FaultKind::kUsage;
+    for (text::Fault& fault : person.error()) {
+      if (fault.kind == text::FaultKind::kInput) fault.kind = text::FaultKind::kUsage;
+    }
     return std::unexpected(person.error());
   }
   return NotebookSession(*std::move(notebook), common.around->clock, *std::move(person));

@@ -54,30 +54,9 @@ Checked<ShelfPlace> placeOnShelf(Notebook& notebook, const ComponentPlan& compon
   const auto match = matchSubstance(notebook, *record);
   if (!match) return std::unexpected(match.error());
   if (!match->same.empty()) return ShelfPlace{match->same.front().n, {}};
-  if (!match->nearMisses.empty()) {
-    notices.push_back({"near-miss",
-                       fmt::format("{} is new on the shelf, where {} looks like it", component.name,
-                                   match->nearMisses.front()),
-                       "component." + component.key});
-  }
+  if (auto notice = nearMissNotice(*match, component.name, "component." + component.key))
+    notices.push_back(*std::move(notice));
   return ShelfPlace{0, *std::move(record)};
-}
-
-ComponentRecord componentRecord(const ComponentPlan& plan, const ComponentCharge& charge,
-                                int position) {
-  ComponentRecord record{.position = position,
-                         .key = plan.key,
-                         .role = std::string(toText(plan.role)),
-                         .name = plan.name,
-                         .actualText = {},
-                         .weighed = {},
-                         .weighedBy = {}};
-  if (charge.amount_mol) record.planned_mmol = charge.amount_mol->value() * 1e3;
-  record.planned_molPercent = charge.molPercent;
-  if (charge.concentration) record.planned_mol_L = charge.concentration->molPerLitre();
-  if (charge.targetMass) record.target_mg = charge.targetMass->milligrams();
-  if (charge.targetVolume) record.target_uL = charge.targetVolume->microlitres();
-  return record;
 }
 
 RunRecord runRecord(const PlannedRun& planned) {
@@ -122,6 +101,70 @@ Checked<std::vector<ShelfPlace>> placeAll(Notebook& notebook, const charge::Plan
   return places;
 }
 
+bool isLetterOrDigit(char c) {
+  return (c >= 'a' && c <= 'z') || (c >= '0' && c <= '9') ||
+         (static_cast<unsigned char>(c) >= 0x80);
+}
+
+/// Whether the text holds the word by itself, both in lower case; `figure`: behind a figure.
+bool holdsWord(std::string_view text, std::string_view word, bool figure) {
+  if (word.empty()) return false;
+  for (std::size_t at = text.find(word); at != std::string_view::npos;
+       at = text.find(word, at + 1)) {
+    const std::string_view before = text::trimmed(text.substr(0, at));
+    const bool begins = figure ? !before.empty() && before.back() >= '0' && before.back() <= '9'
+                               : at == 0 || !isLetterOrDigit(text[at - 1]);
+    const std::size_t end = at + word.size();
+    if (begins && (end == text.size() || !isLetterOrDigit(text[end]))) return true;
+  }
+  return false;
+}
+
+/// The unit in which a field's value is told, as a title would: `nm` of `455 nm`, `mol%`, `equiv`.
+std::string unitOf(const PlanOverride& override) {
+  if (override.path.ends_with(".mol_percent")) return "mol%";
+  if (override.path.ends_with(".equiv")) return "equiv";
+  const std::size_t figures = override.value.find_last_of("0123456789.,");
+  if (figures == std::string::npos) return {};
+  return text::asciiLowered(text::trimmed(std::string_view(override.value).substr(figures + 1)));
+}
+
+/// Whether the title speaks of what was set: of the component by key, role or name, or of a figure
+/// in the same unit that is not the new one.
+bool speaksOf(const charge::Plan& plan, const PlanOverride& override) {
+  const std::string title = text::asciiLowered(plan.title);
+  constexpr std::string_view kComponent = "component.";
+  if (override.path.starts_with(kComponent)) {
+    const std::string_view rest = std::string_view(override.path).substr(kComponent.size());
+    const ComponentPlan* component = plan.find(rest.substr(0, rest.find('.')));
+    if (component != nullptr) {
+      for (const std::string_view word : {std::string_view(component->key), toText(component->role),
+                                          std::string_view(component->name)}) {
+        if (holdsWord(title, text::asciiLowered(word), false)) return true;
+      }
+    }
+  }
+  const std::string unit = unitOf(override);
+  const std::string value = text::asciiLowered(override.value);
+  return holdsWord(title, unit, true) && title.find(value) == std::string::npos;
+}
+
+/// A title that is still the plan's though it speaks of what was set otherwise.
+void noteKeptTitle(const NewRun& wanted, const charge::Plan& plan, text::Notices& notices) {
+  const bool isSet = std::ranges::any_of(
+      wanted.overrides, [](const PlanOverride& each) { return each.path == "title"; });
+  if (!wanted.title.empty() || isSet) return;
+  for (const PlanOverride& override : wanted.overrides) {
+    if (!speaksOf(plan, override)) continue;
+    notices.push_back({"title-kept",
+                       fmt::format("{} is the title of the plan and may speak of another {}: give "
+                                   "this run its own with --title",
+                                   text::quoted(plan.title), override.path),
+                       "title"});
+    return;
+  }
+}
+
 bool isSameSubstance(const SubstanceRecord& a, const SubstanceRecord& b) {
   if (!a.canonicalSmiles.empty() && a.canonicalSmiles == b.canonicalSmiles) return true;
   if (!a.cas.empty() && a.cas == b.cas) return true;
@@ -157,6 +200,23 @@ Checked<void> writeRun(Writing& writing, RunRecord& run, std::vector<ComponentRe
 }
 
 }  // namespace
+
+ComponentRecord plannedRecord(const ComponentPlan& plan, const ComponentCharge& charge,
+                              int position) {
+  ComponentRecord record{.position = position,
+                         .key = plan.key,
+                         .role = std::string(toText(plan.role)),
+                         .name = plan.name,
+                         .actualText = {},
+                         .weighed = {},
+                         .weighedBy = {}};
+  if (charge.amount_mol) record.planned_mmol = charge.amount_mol->value() * 1e3;
+  record.planned_molPercent = charge.molPercent;
+  if (charge.concentration) record.planned_mol_L = charge.concentration->molPerLitre();
+  if (charge.targetMass) record.target_mg = charge.targetMass->milligrams();
+  if (charge.targetVolume) record.target_uL = charge.targetVolume->microlitres();
+  return record;
+}
 
 charge::Weighings recordedWeighings(const std::vector<ComponentRecord>& components) {
   charge::Weighings weighings;
@@ -224,6 +284,7 @@ Checked<AddedRun> addRun(const Desk& desk, const NewRun& wanted) {
         {"code-ignored", "the plan's own code is not used: the notebook gives the next free one",
          "code"});
   }
+  noteKeptTitle(wanted, planned->plan, added.notices);
   added.run.aim = wanted.aim;
   added.run.person = desk.person;
   added.run.created = desk.clock.now();
@@ -232,8 +293,8 @@ Checked<AddedRun> addRun(const Desk& desk, const NewRun& wanted) {
   if (!places) return std::unexpected(places.error());
   std::vector<ComponentRecord> components;
   for (std::size_t i = 0; i < planned->plan.components.size(); ++i) {
-    components.push_back(componentRecord(planned->plan.components[i], planned->charge.components[i],
-                                         static_cast<int>(i)));
+    components.push_back(plannedRecord(planned->plan.components[i], planned->charge.components[i],
+                                       static_cast<int>(i)));
   }
   const auto done = desk.notebook.act(
       desk.action(wanted.clonedFrom == 0 ? "add" : "clone"), [&](Writing& writing) {

@@ -23,6 +23,10 @@ struct RunSheet {
 [[nodiscard]] Checked<RunSheet> loadRun(Notebook& notebook, const RunRecord& run,
                                         charge::Retarget retarget = charge::Retarget::kNo);
 
+/// A component as planned, nothing of it recorded.
+[[nodiscard]] ComponentRecord plannedRecord(const charge::ComponentPlan& plan,
+                                            const charge::ComponentCharge& charge, int position);
+
 /// The recorded quantities of a run's components, as readings of its plan.
 [[nodiscard]] charge::Weighings recordedWeighings(const std::vector<ComponentRecord>& components);
 
@@ -46,7 +50,7 @@ struct NewRun {
 struct AddedRun {
   RunRecord run;
   std::vector<std::string> newSubstances;  ///< put on the shelf
-  text::Notices notices;                   ///< near misses on the shelf, and those of the charge
+  text::Notices notices;  ///< a title that was kept, near misses, and those of the charge
 };
 
 /// Adds a run from a plan: sets the overrides, works out the charge, matches every substance with
