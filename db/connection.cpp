@@ -5,12 +5,11 @@
 #include <fmt/format.h>
 #include <sqlite3.h>
 
-#include <array>
 #include <cstdint>
 #include <filesystem>
-#include <fstream>
 
 #include "db/lock_holder.h"
+#include "db/open_files.h"
 #include "db/writer_mark.h"
 
 namespace vialkeeper::db {
@@ -36,19 +35,20 @@ constexpr const char* kDamagedMend =
 
 /// A file that ends before its first page says it does is told as that.
 text::Fault damagedFault(const std::string& file) {
-  std::array<unsigned char, 100> header{};
-  std::ifstream stream(file, std::ios::binary);
-  stream.read(reinterpret_cast<char*>(header.data()), header.size());
+  std::string header = firstBytes(file, 100).value_or("");
+  const bool isWhole = header.size() == 100;
+  header.resize(100);
   const auto number = [&header](std::size_t at, std::size_t bytes) {
     std::uint64_t value = 0;
-    for (std::size_t i = at; i < at + bytes; ++i) value = (value << 8U) | header[i];
+    for (std::size_t i = at; i < at + bytes; ++i)
+      value = (value << 8U) | static_cast<unsigned char>(header[i]);
     return value;
   };
   const std::uint64_t page = number(16, 2) == 1 ? 65536 : number(16, 2);
   const std::uint64_t whole = page * number(28, 4);
   std::error_code unknown;
   const std::uint64_t there = std::filesystem::file_size(file, unknown);
-  const bool isCut = stream.gcount() == 100 && !unknown && there < whole;
+  const bool isCut = isWhole && !unknown && there < whole;
   return {.kind = text::FaultKind::kNotebook,
           .file = file,
           .what = isCut ? fmt::format("the notebook file is cut short: {} of {} bytes are there",
@@ -83,6 +83,7 @@ text::Fault lockedFault(const std::string& file) {
 Connection::Connection(const std::string& file, Access access, bool create)
     : m_file(file),
       m_access(access),
+      m_open(file),
       m_database(
           std::make_unique<SQLite::Database>(file, openFlags(access, create), kBusyTimeout_ms)) {
   configure();

@@ -11,6 +11,7 @@
 #include <unordered_map>
 #include <vector>
 
+#include "db/open_files.h"
 #include "db/row.h"
 #include "text/fault.h"
 
@@ -51,6 +52,7 @@ class Connection {
 
   std::string m_file;
   Access m_access;
+  OpenFile m_open;  ///< before the database opens, after it closes
   std::unique_ptr<SQLite::Database> m_database;
   std::unordered_map<std::string, std::unique_ptr<SQLite::Statement>> m_statements;
 };

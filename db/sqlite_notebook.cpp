@@ -8,9 +8,7 @@
 #include <unistd.h>
 
 #include <algorithm>
-#include <array>
 #include <filesystem>
-#include <fstream>
 #include <map>
 #include <optional>
 
@@ -22,6 +20,7 @@
 #include "db/find_sql.h"
 #include "db/migrations.h"
 #include "db/new_file.h"
+#include "db/open_files.h"
 #include "db/record_rows.h"
 #include "db/sqlite_writing.h"
 #include "db/verifier.h"
@@ -369,18 +368,14 @@ Checked<app::FindResult> SqliteNotebook::find(const app::FindQuery& query,
 
 /// What the first bytes of a file say it is: SQLite's magic and our application id.
 std::optional<std::string> headerFault(const std::string& file) {
-  std::ifstream stream(file, std::ios::binary);
-  std::array<char, 100> header{};
-  stream.read(header.data(), header.size());
-  const auto count = stream.gcount();
-  if (count == 0) return "the file is empty";
-  if (count < 100 ||
-      std::string_view(header.data(), 16) != std::string_view("SQLite format 3\0", 16)) {
+  const auto header = firstBytes(file, 100);
+  if (!header) return std::nullopt;  // it is open here already
+  if (header->empty()) return "the file is empty";
+  if (header->size() < 100 || !header->starts_with(std::string_view("SQLite format 3\0", 16)))
     return "this is no notebook";
-  }
   std::uint32_t id = 0;
   for (int i = 68; i < 72; ++i)
-    id = (id << 8U) | static_cast<unsigned char>(header[static_cast<std::size_t>(i)]);
+    id = (id << 8U) | static_cast<unsigned char>((*header)[static_cast<std::size_t>(i)]);
   if (id != static_cast<std::uint32_t>(kApplicationId))
     return "this is a database, but no notebook";
   return std::nullopt;

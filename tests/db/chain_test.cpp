@@ -101,7 +101,7 @@ void seal(const std::string& file) {
   tests::SteppingClock clock;
   const app::Desk desk{*notebook, clock, "KW"};
   db::SodiumSigner signer;
-  REQUIRE(app::makeSigningKey(desk, signer, kPassphrase));
+  REQUIRE(app::makeSigningKey(desk, signer, kPassphrase, app::OldKey::kKept));
   REQUIRE(
       app::recordResult(desk, tests::runOf(*notebook), {.state = "closed", .reason = "invented"}));
   REQUIRE(app::sealRun(desk, signer, tests::runOf(*notebook), kPassphrase));
@@ -220,7 +220,7 @@ TEST_CASE("seals of the first form, which name no revision, stay valid", "[db][s
   tests::SteppingClock clock;
   const app::Desk desk{*notebook, clock, "KW"};
   db::SodiumSigner signer;
-  REQUIRE(app::makeSigningKey(desk, signer, kPassphrase));
+  REQUIRE(app::makeSigningKey(desk, signer, kPassphrase, app::OldKey::kKept));
   const auto run = tests::runOf(*notebook);
   std::string canonical = *notebook->canonicalRun(run.n);
   REQUIRE(canonical.starts_with("{\"chain\":{"));

@@ -17,6 +17,7 @@
 #include "db/notebook_fixture.h"
 #include "db/sqlite_notebook.h"
 #include "support/scratch_folder.h"
+#include "support/stranger.h"
 
 using namespace vialkeeper;
 using tests::ScratchFolder;
@@ -131,4 +132,32 @@ TEST_CASE("asking who holds a lock gives none of our own up", "[db][safety]") {
   int status = 0;
   ::waitpid(pid, &status, 0);
   CHECK(status == 0);
+}
+
+TEST_CASE("opening the notebook again in one process takes no lock from a transaction under way",
+          "[db][safety]") {
+  // The desktop writes in one thread and searches in another; the system drops all locks of a file
+  // when a process closes any handle to it.
+  const ScratchFolder folder;
+  const std::string file = folder.path("twice.vialbook");
+  tests::makeSmallNotebook(file, 1);
+  const auto notebook = tests::opened(file);
+  std::string other;
+  const auto done = notebook->act(
+      {.author = {"KW", tests::SteppingClock().now()}, .name = "test"},
+      [&](app::Writing&) -> app::Checked<void> {
+        { const auto again = db::openNotebook(file, db::OpenFor::kReading, "test"); }
+        other = tests::inChild([&file]() -> std::string {
+          try {
+            SQLite::Database database(file, SQLite::OPEN_READWRITE, 0);
+            database.exec("BEGIN IMMEDIATE");
+            return "got in";
+          } catch (const SQLite::Exception&) {
+            return "kept out";
+          }
+        });
+        return {};
+      });
+  CHECK(other == "kept out");
+  (void)done;
 }
