@@ -148,7 +148,8 @@ class ArchiveReader {
     // An archive that was altered must not become a notebook that looks sound.
     if (const auto report = verifyNotebook(m_connection); !report.findings.empty()) {
       const app::Finding& first = report.findings.front();
-      return fault(m_folder.string(), 0, "the archive was altered: " + first.where + ": " + first.what,
+      return fault(m_folder.string(), 0,
+                   "the archive was altered: " + first.where + ": " + first.what,
                    "export it again from the notebook; nothing was imported");
     }
     transaction.commit();
@@ -201,7 +202,8 @@ class ArchiveReader {
         return fault(file, number, "an unknown column " + column, "export it again");
       auto cell = cellOf(value);
       if (!cell)
-        return fault(file, number, "the value of " + column + " cannot be read", "export it again");
+        return fault(file, number, column + ": " + cell.error(),
+                     "export it again from the notebook; nothing was imported");
       names.push_back(column);
       places.emplace_back("?");
       cells.push_back(*std::move(cell));
@@ -213,20 +215,25 @@ class ArchiveReader {
     return {};
   }
 
-  std::optional<Cell> cellOf(const json& value) {
+  /// The cell, or what is wrong with it.
+  std::expected<Cell, std::string> cellOf(const json& value) {
     if (value.is_string()) return Cell{value.get<std::string>()};
     if (value.is_number_integer()) return Cell{value.get<std::int64_t>()};
     if (value.is_number_float()) return Cell{value.get<double>()};
-    if (!value.is_object()) return std::nullopt;
-    if (value.contains("hex") && value["hex"].is_string())
-      return Cell{Blob{fromHex(value["hex"].get<std::string>())}};
-    if (!value.contains("file") || !value["file"].is_string()) return std::nullopt;
-    const auto digest = value["file"].get<std::string>();
+    const auto member = [&value](const char* name) {
+      const bool there = value.is_object() && value.contains(name) && value[name].is_string();
+      return there ? value[name].get<std::string>() : std::string{};
+    };
+    if (value.is_object() && value.contains("hex")) return Cell{Blob{fromHex(member("hex"))}};
+    const std::string digest = member("file");
+    if (digest.empty()) return std::unexpected("this is neither a text nor a number nor a file");
     if (digest.size() != 64 || fromHex(digest).size() != 32)
-      return std::nullopt;  // nothing but a hash names a file
+      return std::unexpected("this names no file of the archive");  // nothing but a hash does
     std::ifstream stream(m_folder / "blobs" / digest, std::ios::binary);
+    if (!stream) return std::unexpected(fmt::format("the file blobs/{} is missing", digest));
     std::string bytes((std::istreambuf_iterator<char>(stream)), std::istreambuf_iterator<char>());
-    if (!stream || toHex(sha256(bytes)) != digest) return std::nullopt;
+    if (toHex(sha256(bytes)) != digest)
+      return std::unexpected(fmt::format("the file blobs/{} was changed or cut short", digest));
     return Cell{Blob{std::move(bytes)}};
   }
 

@@ -6,6 +6,8 @@
 #include <fmt/ranges.h>
 #include <sodium.h>
 
+#include <algorithm>
+
 #include "db/canonical_json.h"
 
 namespace vialkeeper::db {
@@ -45,28 +47,41 @@ AuditedWriter::AuditedWriter(Connection& connection, const app::Action& action)
 
 std::int64_t AuditedWriter::insert(const std::string& table, Row row) {
   const std::int64_t now_ms = m_action.author.at.utc.time_since_epoch().count();
-  row.set("n",
-          1 + m_connection.integer(
-                  fmt::format("SELECT max(coalesce((SELECT max(n) FROM {}), 0), coalesce((SELECT "
-                              "CAST(value AS INTEGER) FROM setting WHERE name = ?), 0))",
-                              table),
-                  {Cell{removedSetting(table)}}));
+  row.set("n", std::int64_t{0});
   row.set("id", Blob{newId(now_ms)});
   row.set("version", std::int64_t{1});
-  std::vector<std::string> columns;
-  std::vector<std::string> places;
+  Insertion& insertion = insertionInto(table, row);
+  const std::int64_t n = insertion.next;
+  row.set("n", n);
   std::vector<Cell> cells;
-  for (const auto& [column, cell] : row.cells()) {
-    columns.push_back(column);
-    places.emplace_back("?");
-    cells.push_back(cell);
-  }
-  m_connection.run(fmt::format("INSERT INTO {} ({}) VALUES ({})", table, fmt::join(columns, ", "),
-                               fmt::join(places, ", ")),
-                   std::span<const Cell>(cells));
-  const std::int64_t n = row.integer("n");
+  for (const auto& [column, cell] : row.cells()) cells.push_back(cell);
+  m_connection.run(insertion.sql, std::span<const Cell>(cells));
+  ++insertion.next;
   m_changes.push_back(changeText(table, n, "null", canonicalRow(row)));
   return n;
+}
+
+AuditedWriter::Insertion& AuditedWriter::insertionInto(const std::string& table, const Row& row) {
+  Insertion& insertion = m_insertions[table];
+  // The transaction keeps other writers out, and rows are added here alone: the count stays right.
+  if (insertion.next == 0) {
+    // The number of a row that was taken out is never given again.
+    insertion.next =
+        1 + m_connection.integer(
+                fmt::format("SELECT max(coalesce((SELECT max(n) FROM {}), 0), coalesce((SELECT "
+                            "CAST(value AS INTEGER) FROM setting WHERE name = ?), 0))",
+                            table),
+                {Cell{removedSetting(table)}});
+  }
+  if (!std::ranges::equal(insertion.columns, row.cells(), {}, {},
+                          &std::pair<std::string, Cell>::first)) {
+    insertion.columns.clear();
+    for (const auto& [column, cell] : row.cells()) insertion.columns.push_back(column);
+    const std::vector<std::string> places(insertion.columns.size(), "?");
+    insertion.sql = fmt::format("INSERT INTO {} ({}) VALUES ({})", table,
+                                fmt::join(insertion.columns, ", "), fmt::join(places, ", "));
+  }
+  return insertion;
 }
 
 text::Checked<void> AuditedWriter::update(const std::string& table, std::int64_t n,
@@ -118,7 +133,15 @@ text::Checked<void> AuditedWriter::remove(const std::string& table, std::int64_t
       "CAST(max(CAST(value AS INTEGER), CAST(excluded.value AS INTEGER)) AS TEXT)",
       {Cell{removedSetting(table)}, Cell{std::to_string(n)}});
   m_changes.push_back(changeText(table, n, canonicalRow(present), "null"));
+  tellSetting(removedSetting(table));
   return {};
+}
+
+void AuditedWriter::tellSetting(const std::string& name) {
+  const auto rows = m_connection.rows("SELECT * FROM setting WHERE name = ?", {Cell{name}});
+  // Settings have no number: the trail calls them by their name.
+  m_changes.push_back(fmt::format(R"({{"after":{},"before":null,"n":{},"table":"setting"}})",
+                                  canonicalRow(rows.front()), canonicalText(name)));
 }
 
 text::Faults AuditedWriter::gone(const std::string& table, std::int64_t n) const {

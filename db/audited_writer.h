@@ -5,6 +5,7 @@
 #include <cstdint>
 #include <string>
 #include <string_view>
+#include <unordered_map>
 #include <vector>
 
 #include "app/notebook/notebook.h"
@@ -43,7 +44,16 @@ class AuditedWriter {
   void finish();
 
  private:
+  /// Puts what a setting is now into the trail.
+  void tellSetting(const std::string& name);
   [[nodiscard]] text::Faults gone(const std::string& table, std::int64_t n) const;
+  /// How a table's rows are added; worked out for the first of them.
+  struct Insertion {
+    std::vector<std::string> columns;
+    std::string sql;
+    std::int64_t next = 0;  ///< the number of the next row
+  };
+  [[nodiscard]] Insertion& insertionInto(const std::string& table, const Row& row);
   [[nodiscard]] text::Faults conflict(const std::string& table, const Row& present,
                                       const Row& changed) const;
 
@@ -51,6 +61,7 @@ class AuditedWriter {
   const app::Action& m_action;
   std::int64_t m_run = 0;
   std::vector<std::string> m_changes;
+  std::unordered_map<std::string, Insertion> m_insertions;
 };
 
 /// The hash of a revision: SHA-256 over a tag, the previous hash, and the revision's canonical

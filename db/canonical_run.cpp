@@ -60,6 +60,14 @@ std::string partsText(Connection& connection, std::int64_t run, const Part (&par
   return text + "}";
 }
 
+/// The last revision so far, by number and hash.
+std::string chainText(Connection& connection) {
+  const auto last = connection.rows("SELECT seq, hash FROM revision ORDER BY seq DESC LIMIT 1");
+  if (last.empty()) return R"({"hash":"","seq":0})";
+  return fmt::format(R"({{"hash":"{}","seq":{}}})", toHex(last.front().bytes("hash")),
+                     last.front().integer("seq"));
+}
+
 }  // namespace
 
 std::string ownRecordsText(Connection& connection, std::int64_t run) {
@@ -67,8 +75,9 @@ std::string ownRecordsText(Connection& connection, std::int64_t run) {
 }
 
 std::string canonicalRunText(Connection& connection, std::int64_t run) {
-  return fmt::format(R"({{"format":"vialkeeper-sealed-run/1","links":{},"own":{}}})",
-                     partsText(connection, run, kLinks), ownRecordsText(connection, run));
+  return fmt::format(R"({{"chain":{},"format":"vialkeeper-sealed-run/2","links":{},"own":{}}})",
+                     chainText(connection), partsText(connection, run, kLinks),
+                     ownRecordsText(connection, run));
 }
 
 }  // namespace vialkeeper::db

@@ -5,12 +5,18 @@
 #include <fmt/format.h>
 #include <sqlite3.h>
 
+#include <cstdint>
+#include <filesystem>
+
+#include "db/lock_holder.h"
+#include "db/open_files.h"
 #include "db/writer_mark.h"
 
 namespace vialkeeper::db {
 namespace {
 
 constexpr int kBusyTimeout_ms = 5000;
+constexpr std::size_t kMostStatements = 200;
 
 int openFlags(Access access, bool create) {
   if (access == Access::kReadOnly) return SQLite::OPEN_READONLY;
@@ -21,11 +27,63 @@ void require(bool ok, const char* what) {
   if (!ok) throw SQLite::Exception(what, SQLITE_MISUSE);
 }
 
+/// What a person does with a damaged file, however it came about.
+constexpr const char* kDamagedMend =
+    "copy the file as it is to a safe place, and go on with the newest backup; verify tells "
+    "whether "
+    "that one is sound";
+
+/// A file that ends before its first page says it does is told as that.
+text::Fault damagedFault(const std::string& file) {
+  std::string header = firstBytes(file, 100).value_or("");
+  const bool isWhole = header.size() == 100;
+  header.resize(100);
+  const auto number = [&header](std::size_t at, std::size_t bytes) {
+    std::uint64_t value = 0;
+    for (std::size_t i = at; i < at + bytes; ++i)
+      value = (value << 8U) | static_cast<unsigned char>(header[i]);
+    return value;
+  };
+  const std::uint64_t page = number(16, 2) == 1 ? 65536 : number(16, 2);
+  const std::uint64_t whole = page * number(28, 4);
+  std::error_code unknown;
+  const std::uint64_t there = std::filesystem::file_size(file, unknown);
+  const bool isCut = isWhole && !unknown && there < whole;
+  return {.kind = text::FaultKind::kNotebook,
+          .file = file,
+          .what = isCut ? fmt::format("the notebook file is cut short: {} of {} bytes are there",
+                                      there, whole)
+                        : "the notebook file is damaged or is no notebook",
+          .mend = kDamagedMend};
+}
+
+/// Who keeps us out: the system's list of locks knows programs of this computer, the writer's mark
+/// our own on any.
+text::Fault lockedFault(const std::string& file) {
+  const LockHolder holder = lockHolderOf(file);
+  const std::string marked = writerOf(file);
+  std::string who = marked.empty() ? "" : ": " + marked;
+  if (holder.process != 0) {
+    who = fmt::format(": {} (process {})", holder.program.empty() ? "unnamed" : holder.program,
+                      holder.process);
+  }
+  const bool reads = holder.process != 0 && !holder.writing;
+  return {.kind = text::FaultKind::kNotebook,
+          .file = file,
+          .what = (reads ? "another program is reading the notebook and lets nobody write"
+                         : "another program is writing to the notebook") +
+                  who,
+          .mend = holder.process == 0
+                      ? "wait a moment and try again; nothing was changed"
+                      : "wait a moment and try again, or close that program; nothing was changed"};
+}
+
 }  // namespace
 
 Connection::Connection(const std::string& file, Access access, bool create)
     : m_file(file),
       m_access(access),
+      m_open(file),
       m_database(
           std::make_unique<SQLite::Database>(file, openFlags(access, create), kBusyTimeout_ms)) {
   configure();
@@ -60,6 +118,8 @@ void Connection::configure() {
 }
 
 SQLite::Statement& Connection::prepared(const std::string& sql, std::span<const Cell> cells) {
+  // Searches are written anew each time: without a bound a long session would keep them all.
+  if (m_statements.size() >= kMostStatements && !m_statements.contains(sql)) m_statements.clear();
   auto& statement = m_statements[sql];
   if (!statement) statement = std::make_unique<SQLite::Statement>(*m_database, sql);
   statement->reset();
@@ -150,18 +210,20 @@ text::Fault toFault(const SQLite::Exception& error, const std::string& file) {
   switch (error.getErrorCode()) {
     case SQLITE_BUSY:
     case SQLITE_LOCKED: {
-      const std::string holder = writerOf(file);
-      return fault(
-          "another program is writing to the notebook" + (holder.empty() ? "" : ": " + holder),
-          "wait a moment and try again; nothing was changed");
+      return lockedFault(file);
     }
     case SQLITE_CORRUPT:
     case SQLITE_NOTADB:
-      return fault("the notebook file is damaged or is no notebook",
-                   "keep it as it is, run verify, and go back to a backup");
+      return damagedFault(file);
     case SQLITE_FULL:
       return fault("the disk is full", "free some room; nothing was changed");
     case SQLITE_READONLY:
+      if (error.getExtendedErrorCode() == SQLITE_READONLY_ROLLBACK) {
+        return fault(
+            "a change that was broken off must be taken back first, and that needs permission to "
+            "write file and folder",
+            "open it once from where both may be written; nothing is lost");
+      }
       return fault("the notebook may not be written here",
                    "check the permissions of file and folder");
     case SQLITE_CANTOPEN:

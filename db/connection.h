@@ -11,6 +11,7 @@
 #include <unordered_map>
 #include <vector>
 
+#include "db/open_files.h"
 #include "db/row.h"
 #include "text/fault.h"
 
@@ -28,9 +29,6 @@ class Connection {
   /// Opens an existing file, or creates it where `create` says so. Throws SQLite::Exception.
   Connection(const std::string& file, Access access, bool create);
 
-  /// A prepared statement, kept for the next time, with its cells bound.
-  [[nodiscard]] SQLite::Statement& prepared(const std::string& sql,
-                                            std::span<const Cell> cells = {});
   void run(const std::string& sql, std::span<const Cell> cells = {});
   void run(const std::string& sql, std::initializer_list<Cell> cells) {
     run(sql, std::span(cells.begin(), cells.size()));
@@ -49,9 +47,12 @@ class Connection {
 
  private:
   void configure();
+  /// A prepared statement, kept for the next time, with its cells bound. Good until the next one.
+  [[nodiscard]] SQLite::Statement& prepared(const std::string& sql, std::span<const Cell> cells);
 
   std::string m_file;
   Access m_access;
+  OpenFile m_open;  ///< before the database opens, after it closes
   std::unique_ptr<SQLite::Database> m_database;
   std::unordered_map<std::string, std::unique_ptr<SQLite::Statement>> m_statements;
 };

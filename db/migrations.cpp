@@ -3,14 +3,12 @@
 #include "db/migrations.h"
 
 #include <SQLiteCpp/Backup.h>
-#include <fcntl.h>
 #include <fmt/format.h>
-#include <unistd.h>
 
 #include <cstdlib>
-#include <filesystem>
 #include <map>
 
+#include "db/new_file.h"
 #include "text/embedded_file.h"
 
 namespace vialkeeper::text {
@@ -21,8 +19,6 @@ extern const std::size_t migrationFilesCount;
 
 namespace vialkeeper::db {
 namespace {
-
-namespace fs = std::filesystem;
 
 std::unexpected<text::Faults> fault(const std::string& file, std::string what, std::string mend) {
   return std::unexpected(text::Faults{{.kind = text::FaultKind::kNotebook,
@@ -38,13 +34,6 @@ void step(Connection& connection, int to) {
   connection.database().exec(fmt::format("PRAGMA application_id = {}", kApplicationId));
   connection.database().exec(fmt::format("PRAGMA user_version = {}", to));
   transaction.commit();
-}
-
-void flushToDisk(const std::string& file) {
-  const int descriptor = ::open(file.c_str(), O_RDONLY | O_CLOEXEC);
-  if (descriptor < 0) return;
-  ::fsync(descriptor);
-  ::close(descriptor);
 }
 
 }  // namespace
@@ -73,21 +62,25 @@ text::Checked<void> migrate(Connection& connection, const std::string& stamp) {
 }
 
 std::vector<std::string> schemaDifferences(Connection& connection) {
-  constexpr const char* kSchema = "SELECT type || ' ' || name AS name, coalesce(sql, '') AS sql FROM sqlite_master";
+  constexpr const char* kSchema =
+      "SELECT type || ' ' || name AS name, coalesce(sql, '') AS sql FROM sqlite_master";
   const int schema = schemaOf(connection);
   if (schema < 1 || schema > newestSchema()) return {};  // a form that this program does not know
   SQLite::Database fresh(":memory:", SQLite::OPEN_READWRITE | SQLite::OPEN_CREATE);
-  for (int to = 1; to <= schema; ++to) fresh.exec(std::string(text::migrationFiles[to - 1].contents));
+  for (int to = 1; to <= schema; ++to)
+    fresh.exec(std::string(text::migrationFiles[to - 1].contents));
   std::map<std::string, std::string> expected;
   SQLite::Statement statement(fresh, kSchema);
-  while (statement.executeStep()) expected[statement.getColumn(0).getString()] = statement.getColumn(1).getString();
+  while (statement.executeStep())
+    expected[statement.getColumn(0).getString()] = statement.getColumn(1).getString();
   std::vector<std::string> differences;
   for (const Row& row : connection.rows(kSchema)) {
     const auto known = expected.find(row.text("name"));
     if (known == expected.end()) {
       differences.push_back(row.text("name") + " does not belong to a notebook");
     } else {
-      if (known->second != row.text("sql")) differences.push_back(row.text("name") + " was altered");
+      if (known->second != row.text("sql"))
+        differences.push_back(row.text("name") + " was altered");
       expected.erase(known);
     }
   }
@@ -96,34 +89,23 @@ std::vector<std::string> schemaDifferences(Connection& connection) {
 }
 
 text::Checked<void> copyTo(Connection& connection, const std::string& file) {
-  std::error_code ignored;
-  if (fs::exists(file, ignored))
-    return fault(file, "there is a file of this name already", "name another");
-  const std::string temporary = file + ".part";
-  fs::remove(temporary, ignored);
+  NewFile copy(file);
+  if (const auto may = copy.check(); !may) return may;
   try {
     {
-      SQLite::Database target(temporary, SQLite::OPEN_READWRITE | SQLite::OPEN_CREATE);
+      SQLite::Database target(copy.temporary(), SQLite::OPEN_READWRITE | SQLite::OPEN_CREATE);
       SQLite::Backup(target, connection.database()).executeStep();
     }
-    SQLite::Database reopened(temporary, SQLite::OPEN_READONLY);
+    SQLite::Database reopened(copy.temporary(), SQLite::OPEN_READONLY);
     SQLite::Statement check(reopened, "PRAGMA integrity_check(1)");
     if (!check.executeStep() || check.getColumn(0).getString() != "ok") {
-      fs::remove(temporary, ignored);
       return fault(connection.file(),
                    "the copy is not sound, so the notebook itself may be damaged", "run verify");
     }
   } catch (const SQLite::Exception& error) {
-    fs::remove(temporary, ignored);
     return std::unexpected(text::Faults{toFault(error, file)});
   }
-  flushToDisk(temporary);
-  fs::rename(temporary, file, ignored);
-  if (ignored)
-    return fault(file, "the copy could not get its name: " + ignored.message(), "check the folder");
-  const fs::path folder = fs::absolute(file).parent_path();
-  flushToDisk(folder.string());
-  return {};
+  return copy.giveName();
 }
 
 }  // namespace vialkeeper::db

@@ -2,13 +2,13 @@
 // SPDX-License-Identifier: GPL-3.0-or-later
 #include "db/sqlite_notebook.h"
 
+#include <fcntl.h>
 #include <fmt/format.h>
 #include <sqlite3.h>
+#include <unistd.h>
 
 #include <algorithm>
-#include <array>
 #include <filesystem>
-#include <fstream>
 #include <map>
 #include <optional>
 
@@ -19,6 +19,8 @@
 #include "db/connection.h"
 #include "db/find_sql.h"
 #include "db/migrations.h"
+#include "db/new_file.h"
+#include "db/open_files.h"
 #include "db/record_rows.h"
 #include "db/sqlite_writing.h"
 #include "db/verifier.h"
@@ -41,16 +43,12 @@ std::unexpected<Faults> notebookFault(const std::string& file, std::string what,
 
 class SqliteNotebook final : public app::Notebook {
  public:
-  SqliteNotebook(std::unique_ptr<Connection> connection, std::string readOnlyReason)
-      : m_connection(std::move(connection)), m_readOnlyReason(std::move(readOnlyReason)) {}
+  SqliteNotebook(std::unique_ptr<Connection> connection, WritingObstacle obstacle)
+      : m_connection(std::move(connection)), m_obstacle(std::move(obstacle)) {}
 
   Checked<void> act(const app::Action& action,
                     const std::function<Checked<void>(app::Writing&)>& work) override {
-    if (!m_readOnlyReason.empty()) {
-      return notebookFault(m_connection->file(),
-                           "the notebook is open for reading only: " + m_readOnlyReason,
-                           "nothing was changed");
-    }
+    if (auto may = mayWrite(); !may) return may;
     return guarded(m_connection->file(), [&]() -> Checked<void> {
       SQLite::Transaction transaction(m_connection->database(),
                                       SQLite::TransactionBehavior::IMMEDIATE);
@@ -58,6 +56,7 @@ class SqliteNotebook final : public app::Notebook {
       AuditedWriter writer(*m_connection, action);
       SqliteWriting writing(*m_connection, writer);
       if (auto done = work(writing); !done) return done;
+      writing.finish();
       writer.finish();
       transaction.commit();
       m_people.clear();
@@ -267,10 +266,7 @@ class SqliteNotebook final : public app::Notebook {
 
   void interrupt() noexcept override { sqlite3_interrupt(m_connection->database().getHandle()); }
 
-  Checked<app::VerifyReport> verify() override {
-    return guarded(m_connection->file(),
-                   [&]() -> Checked<app::VerifyReport> { return verifyNotebook(*m_connection); });
-  }
+  Checked<app::VerifyReport> verify(const app::VerifyRequest& request) override;
 
   Checked<void> backup(const std::string& file) override {
     return guarded(m_connection->file(),
@@ -283,13 +279,19 @@ class SqliteNotebook final : public app::Notebook {
   }
 
   Checked<void> importAll(const std::string& folder) override {
-    if (!m_readOnlyReason.empty())
-      return notebookFault(m_connection->file(), m_readOnlyReason, "nothing was changed");
+    if (auto may = mayWrite(); !may) return may;
     return guarded(m_connection->file(),
                    [&]() -> Checked<void> { return readArchive(*m_connection, folder); });
   }
 
-  [[nodiscard]] std::string readOnlyReason() const override { return m_readOnlyReason; }
+  [[nodiscard]] Checked<void> mayWrite() const override {
+    if (m_obstacle.what.empty()) return {};
+    return notebookFault(m_connection->file(),
+                         "the notebook is open for reading only: " + m_obstacle.what,
+                         m_obstacle.mend + "; nothing was changed");
+  }
+
+  [[nodiscard]] std::string readOnlyReason() const override { return m_obstacle.what; }
 
  private:
   template <class T, class Make>
@@ -350,14 +352,20 @@ class SqliteNotebook final : public app::Notebook {
   }
 
   std::unique_ptr<Connection> m_connection;
-  std::string m_readOnlyReason;
+  WritingObstacle m_obstacle;
   std::map<std::int64_t, std::string> m_people;
 };
 
 Checked<app::FindResult> SqliteNotebook::find(const app::FindQuery& query,
                                               const app::FindOptions& options) {
   return guarded(m_connection->file(), [&]() -> Checked<app::FindResult> {
-    const FindSql sql = findSql(query, options);
+    const auto counted = [this](const SqlText& counting) {
+      const auto rows = m_connection->rows(counting.sql, std::span<const Cell>(counting.cells));
+      if (rows.empty() || rows.front().cells().empty()) return std::int64_t{0};
+      const auto* count = std::get_if<std::int64_t>(&rows.front().cells().front().second);
+      return count != nullptr ? *count : std::int64_t{0};
+    };
+    const FindSql sql = findSql(query, options, counted);
     app::FindResult result;
     for (const Row& row :
          m_connection->rows(sql.select.sql, std::span<const Cell>(sql.select.cells))) {
@@ -368,42 +376,89 @@ Checked<app::FindResult> SqliteNotebook::find(const app::FindQuery& query,
       result.runs.push_back({*std::move(found), *std::move(parts)});
     }
     result.matches = static_cast<std::int64_t>(result.runs.size());
-    if (options.count && options.limit != 0 && result.runs.size() >= options.limit) {
-      const auto counted =
-          m_connection->rows(sql.count.sql, std::span<const Cell>(sql.count.cells));
-      result.matches =
-          counted.empty() ? 0 : std::get<std::int64_t>(counted.front().cells().front().second);
-    }
+    if (options.count && options.limit != 0 && result.runs.size() >= options.limit)
+      result.matches = counted(sql.count);
     return result;
   });
 }
 
 /// What the first bytes of a file say it is: SQLite's magic and our application id.
 std::optional<std::string> headerFault(const std::string& file) {
-  std::ifstream stream(file, std::ios::binary);
-  std::array<char, 100> header{};
-  stream.read(header.data(), header.size());
-  const auto count = stream.gcount();
-  if (count == 0) return "the file is empty";
-  if (count < 100 ||
-      std::string_view(header.data(), 16) != std::string_view("SQLite format 3\0", 16)) {
+  const auto header = firstBytes(file, 100);
+  if (!header) return std::nullopt;  // it is open here already
+  if (header->empty()) return "the file is empty";
+  if (header->size() < 100 || !header->starts_with(std::string_view("SQLite format 3\0", 16)))
     return "this is no notebook";
-  }
   std::uint32_t id = 0;
   for (int i = 68; i < 72; ++i)
-    id = (id << 8U) | static_cast<unsigned char>(header[static_cast<std::size_t>(i)]);
+    id = (id << 8U) | static_cast<unsigned char>((*header)[static_cast<std::size_t>(i)]);
   if (id != static_cast<std::uint32_t>(kApplicationId))
     return "this is a database, but no notebook";
   return std::nullopt;
 }
 
-/// Why the file may only be read, or nothing.
-std::string writingObstacle(const std::string& file) {
+/// Brings back what a writer left that was killed in mid-write: SQLite rolls its journal back with
+/// the first read by a connection that may write.
+void rollBackLeftovers(const std::string& file) { Connection(file, Access::kReadWrite, false); }
+
+/// A connection that has read its first page.
+std::unique_ptr<Connection> connected(const std::string& file, Access access) {
+  auto connection = std::make_unique<Connection>(file, access, false);
+  (void)schemaOf(*connection);
+  return connection;
+}
+
+/// As connected(); a journal that a killed writer left does not keep a reader out where the file
+/// may be written.
+std::unique_ptr<Connection> connectedForReading(const std::string& file) {
+  try {
+    return connected(file, Access::kReadOnly);
+  } catch (const SQLite::Exception& error) {
+    if (error.getExtendedErrorCode() != SQLITE_READONLY_ROLLBACK ||
+        !writingObstacle(file).what.empty())
+      throw;
+  }
+  rollBackLeftovers(file);
+  return connected(file, Access::kReadOnly);
+}
+
+/// What stands between a path and a notebook that can be opened.
+Checked<void> checkOpenable(const std::string& file) {
   std::error_code ignored;
-  const fs::path folder = fs::absolute(file, ignored).parent_path();
-  if (const std::string locking = lockingFault(file); !locking.empty()) return locking;
-  std::fstream probe(file, std::ios::in | std::ios::out | std::ios::binary);
-  return probe ? "" : "the file may not be written";
+  if (!fs::exists(file, ignored))
+    return notebookFault(file, "there is no such notebook",
+                         "check the path, or make one with create");
+  if (fs::is_directory(file, ignored))
+    return notebookFault(file, "this is a folder, not a notebook", "name the .vialbook file");
+  if (::faccessat(AT_FDCWD, file.c_str(), R_OK, AT_EACCESS) != 0) {
+    return notebookFault(file, "there is no permission to read the notebook",
+                         "ask its owner for it, or name another");
+  }
+  if (const auto wrong = headerFault(file))
+    return notebookFault(file, *wrong, "name a .vialbook file");
+  return {};
+}
+
+Checked<app::VerifyReport> SqliteNotebook::verify(const app::VerifyRequest& request) {
+  const std::string& file = m_connection->file();
+  std::unique_ptr<Connection> other;
+  if (!request.against.empty()) {
+    std::error_code ignored;
+    if (fs::equivalent(request.against, file, ignored)) {
+      return notebookFault(request.against, "this is the notebook itself",
+                           "name an earlier copy of it");
+    }
+    if (const auto openable = checkOpenable(request.against); !openable)
+      return std::unexpected(openable.error());
+    const auto opened = guarded(request.against, [&]() -> Checked<void> {
+      other = connectedForReading(request.against);
+      return {};
+    });
+    if (!opened) return std::unexpected(opened.error());
+  }
+  return guarded(file, [&]() -> Checked<app::VerifyReport> {
+    return verifyNotebook(*m_connection, request, other.get());
+  });
 }
 
 }  // namespace
@@ -417,47 +472,64 @@ Checked<std::unique_ptr<app::Notebook>> createNotebook(const std::string& file) 
   const fs::path folder = fs::absolute(file, ignored).parent_path();
   if (!fs::is_directory(folder, ignored))
     return notebookFault(file, "the folder does not exist", "make it first");
-  if (const std::string locking = lockingFault(file); !locking.empty()) {
-    return notebookFault(file, locking, "keep the notebook in a folder of this computer");
-  }
+  if (const WritingObstacle obstacle = folderObstacle(file); !obstacle.what.empty())
+    return notebookFault(file, obstacle.what, obstacle.mend);
   return guarded(file, [&]() -> Checked<std::unique_ptr<app::Notebook>> {
     auto connection = std::make_unique<Connection>(file, Access::kReadWrite, true);
     if (const auto made = migrate(*connection, ""); !made) return std::unexpected(made.error());
-    return std::make_unique<SqliteNotebook>(std::move(connection), "");
+    return std::make_unique<SqliteNotebook>(std::move(connection), WritingObstacle{});
   });
+}
+
+Checked<void> makeNotebook(const std::string& file,
+                           const std::function<Checked<void>(app::Notebook&)>& fill) {
+  NewFile target(file);
+  if (const auto may = target.check(); !may) return may;
+  const auto made = [&]() -> Checked<void> {
+    const auto notebook = createNotebook(target.temporary());
+    if (!notebook) return std::unexpected(notebook.error());
+    return fill(**notebook);
+  }();
+  if (made) return target.giveName();
+  Faults faults = made.error();
+  for (text::Fault& fault : faults) {
+    if (fault.file == target.temporary()) fault.file = file;
+  }
+  return std::unexpected(std::move(faults));
 }
 
 Checked<std::unique_ptr<app::Notebook>> openNotebook(const std::string& file, OpenFor use,
                                                      const std::string& stamp) {
-  std::error_code ignored;
-  if (!fs::exists(file, ignored))
-    return notebookFault(file, "there is no such notebook",
-                         "check the path, or make one with create");
-  if (fs::is_directory(file, ignored))
-    return notebookFault(file, "this is a folder, not a notebook", "name the .vialbook file");
-  if (const auto wrong = headerFault(file))
-    return notebookFault(file, *wrong, "name a .vialbook file");
+  if (const auto openable = checkOpenable(file); !openable)
+    return std::unexpected(openable.error());
   return guarded(file, [&]() -> Checked<std::unique_ptr<app::Notebook>> {
-    std::string reason = use == OpenFor::kReading ? "it was opened so" : writingObstacle(file);
-    auto connection = std::make_unique<Connection>(
-        file, reason.empty() ? Access::kReadWrite : Access::kReadOnly, false);
+    WritingObstacle obstacle = use == OpenFor::kReading
+                                   ? WritingObstacle{"it was opened so", "open it for writing"}
+                                   : writingObstacle(file);
+    auto connection =
+        obstacle.what.empty() ? connected(file, Access::kReadWrite) : connectedForReading(file);
     const int schema = schemaOf(*connection);
     if (schema > newestSchema()) {
-      reason = fmt::format("it was written by a newer Vialkeeper (form {}, this program knows {})",
-                           schema, newestSchema());
+      obstacle = {
+          fmt::format("it was written by a newer Vialkeeper (form {}, this program knows {})",
+                      schema, newestSchema()),
+          "use that Vialkeeper"};
       connection = std::make_unique<Connection>(file, Access::kReadOnly, false);
     } else if (schema < newestSchema()) {
-      if (!reason.empty()) {
+      if (const WritingObstacle forGood = writingObstacle(file); !forGood.what.empty()) {
         return notebookFault(
             file,
             fmt::format("the notebook is of an older form ({}) and must be written to be read",
-                        schema),
-            "open it from a place where it may be written");
+                        schema) +
+                ", but " + forGood.what,
+            forGood.mend);
       }
+      connection = connected(file, Access::kReadWrite);
       if (const auto moved = migrate(*connection, stamp); !moved)
         return std::unexpected(moved.error());
+      if (use == OpenFor::kReading) connection = connected(file, Access::kReadOnly);
     }
-    return std::make_unique<SqliteNotebook>(std::move(connection), reason);
+    return std::make_unique<SqliteNotebook>(std::move(connection), std::move(obstacle));
   });
 }
 

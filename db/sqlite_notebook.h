@@ -2,6 +2,7 @@
 // SPDX-License-Identifier: GPL-3.0-or-later
 #pragma once
 
+#include <functional>
 #include <memory>
 #include <string>
 
@@ -13,6 +14,11 @@ namespace vialkeeper::db {
 /// Makes a new notebook file. Fault: there is a file of that name, the folder is missing or
 /// read-only, locks do not work there.
 [[nodiscard]] text::Checked<std::unique_ptr<app::Notebook>> createNotebook(const std::string& file);
+
+/// Makes a notebook and fills it: the file gets its name once `fill` is through, so that none that
+/// is half made stands there, whatever happens. Fault: as createNotebook(), or what `fill` says.
+[[nodiscard]] text::Checked<void> makeNotebook(
+    const std::string& file, const std::function<text::Checked<void>(app::Notebook&)>& fill);
 
 enum class OpenFor { kReading, kWriting };
 

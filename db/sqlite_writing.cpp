@@ -148,7 +148,7 @@ text::Checked<app::RowNumber> SqliteWriting::addRun(
     component.run = n;
     (void)m_writer.insert("component", rowOf(component, number));
   }
-  refreshWords(n);
+  m_runsOfNewWords.insert(n);
   return n;
 }
 
@@ -156,7 +156,7 @@ text::Checked<void> SqliteWriting::changeRun(const app::RunRecord& run) {
   m_writer.concerns(run.n);
   const auto number = [this](const std::string& code) { return personNumber(code); };
   auto changed = m_writer.update("run", run.n, run.version, rowOf(run, number));
-  if (changed) refreshWords(run.n);
+  if (changed) m_runsOfNewWords.insert(run.n);
   return changed;
 }
 
@@ -189,7 +189,7 @@ text::Checked<app::RowNumber> SqliteWriting::addEvent(const app::EventRecord& ev
   const app::RowNumber n = m_writer.insert("event", rowOf(event, number));
   const bool words = event.kind == "observation" || event.kind == "addendum" ||
                      !event.note.empty() || event.supersedes != 0;
-  if (words) refreshWords(event.run);
+  if (words) m_runsOfNewWords.insert(event.run);
   return n;
 }
 
@@ -249,6 +249,11 @@ text::Checked<app::RowNumber> SqliteWriting::addSeal(const app::SealRecord& seal
           {"sha256", Blob{seal.sha256}}, {"signature", Blob{seal.signature}}};
   setMoment(row, "signed", seal.signedAt);
   return m_writer.insert("seal", row);
+}
+
+void SqliteWriting::finish() {
+  for (const app::RowNumber run : m_runsOfNewWords) refreshWords(run);
+  m_runsOfNewWords.clear();
 }
 
 void SqliteWriting::refreshWords(app::RowNumber run) {

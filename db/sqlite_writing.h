@@ -2,6 +2,8 @@
 // SPDX-License-Identifier: GPL-3.0-or-later
 #pragma once
 
+#include <set>
+
 #include "app/notebook/notebook.h"
 #include "db/audited_writer.h"
 #include "db/connection.h"
@@ -35,6 +37,9 @@ class SqliteWriting final : public app::Writing {
   text::Checked<app::RowNumber> addSigningKey(const app::SigningKey& key) override;
   text::Checked<app::RowNumber> addSeal(const app::SealRecord& seal) override;
 
+  /// Brings the searchable words of the runs that were touched up to date: once, before the commit.
+  void finish();
+
  private:
   [[nodiscard]] std::int64_t personNumber(const std::string& code);
   void addNames(app::RowNumber substance, const app::SubstanceRecord& record);
@@ -43,6 +48,7 @@ class SqliteWriting final : public app::Writing {
 
   Connection& m_connection;
   AuditedWriter& m_writer;
+  std::set<app::RowNumber> m_runsOfNewWords;
 };
 
 /// Values in one block of a dataset's column.

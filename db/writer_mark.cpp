@@ -8,6 +8,7 @@
 
 #include <array>
 #include <cerrno>
+#include <cstring>
 #include <fstream>
 
 namespace vialkeeper::db {
@@ -41,13 +42,24 @@ std::string writerOf(const std::string& notebook) {
   return line.substr(0, 200);
 }
 
-std::string lockingFault(const std::string& notebook) {
+WritingObstacle folderObstacle(const std::string& notebook) {
+  constexpr const char* kElsewhere = "keep the notebook in a folder of this computer";
   const std::string probe = fmt::format("{}-lock-{}", notebook, ::getpid());
   const int first = ::open(probe.c_str(), O_RDWR | O_CREAT | O_CLOEXEC, 0600);
   if (first < 0) {
-    return errno == EACCES || errno == EROFS || errno == EPERM
-               ? "the folder may not be written"
-               : "no file can be made in the folder";
+    switch (errno) {
+      case EACCES:
+      case EROFS:
+      case EPERM:
+        return {"its folder may not be written, where a change keeps its journal",
+                "get permission to write in the folder, or work on a copy in a folder of yours"};
+      case ENOSPC:
+      case EDQUOT:
+        return {"the disk is full", "free some room"};
+      default:
+        return {std::string("no file can be made in its folder: ") + std::strerror(errno),
+                "check folder and disk"};
+    }
   }
   const int second = ::open(probe.c_str(), O_RDWR | O_CLOEXEC);
   const bool firstLocked = lock(first);
@@ -55,10 +67,21 @@ std::string lockingFault(const std::string& notebook) {
   ::close(first);
   if (second >= 0) ::close(second);
   ::unlink(probe.c_str());
-  if (!firstLocked)
-    return "the folder's file system does not lock files, so two writers could spoil the notebook";
-  if (secondLocked) return "locks on the folder's file system do not keep a second writer out";
+  if (!firstLocked) {
+    return {"the folder's file system does not lock files, so two writers could spoil the notebook",
+            kElsewhere};
+  }
+  if (secondLocked)
+    return {"locks on the folder's file system do not keep a second writer out", kElsewhere};
   return {};
+}
+
+WritingObstacle writingObstacle(const std::string& notebook) {
+  if (WritingObstacle obstacle = folderObstacle(notebook); !obstacle.what.empty()) return obstacle;
+  // Asked, not tried: a descriptor of the file, when closed, would take SQLite's locks with it.
+  if (::faccessat(AT_FDCWD, notebook.c_str(), W_OK, AT_EACCESS) == 0) return {};
+  return {"the file may not be written",
+          "get permission to write the file, or work on a copy of yours"};
 }
 
 }  // namespace vialkeeper::db

@@ -22,8 +22,17 @@ class WriterMark {
 /// `process 4711 on lab-3`, or empty where nobody left a mark.
 [[nodiscard]] std::string writerOf(const std::string& notebook);
 
-/// Whether locks in the notebook's folder keep a second writer out: tries one on a file of its own.
-/// Empty where they do, else what is wrong, for a person.
-[[nodiscard]] std::string lockingFault(const std::string& notebook);
+/// Why a notebook may not be written, and what would change that; both empty where it may.
+struct WritingObstacle {
+  std::string what;
+  std::string mend;
+};
+
+/// Whether the notebook's folder may be written and its locks keep a second writer out: tries one
+/// on a file of its own.
+[[nodiscard]] WritingObstacle folderObstacle(const std::string& notebook);
+
+/// The same, and whether the file itself may be written.
+[[nodiscard]] WritingObstacle writingObstacle(const std::string& notebook);
 
 }  // namespace vialkeeper::db

@@ -113,7 +113,7 @@ LIBRARIES = (
     ("the module loader", re.compile(r"dlfcn\.h$")),
     (
         "the system's interface",
-        re.compile(r"(unistd|fcntl|poll|pwd|spawn|termios|pthread|sysexits)\.h$|sys/[a-z]+\.h$"),
+        re.compile(r"(unistd|fcntl|poll|pwd|grp|spawn|termios|pthread|sysexits)\.h$|sys/[a-z]+\.h$"),
     ),
     ("fmt", re.compile(r"fmt/")),
     ("GSL", re.compile(r"gsl/gsl_")),

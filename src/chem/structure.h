@@ -96,8 +96,8 @@ class StructureEngine {
   [[nodiscard]] virtual std::expected<Extent, StructureFault> extent(std::string_view smiles) = 0;
 
   /// The fingerprint of a whole structure, for mayContain() in chem/fingerprint.h: 256 bytes, bit i
-  /// of 2048 as bit i % 8 (the lowest is 0) of byte i / 8. To be made anew with another release of
-  /// RDKit, which may change its meaning.
+  /// of 2048 as bit i % 8 (the lowest is 0) of byte i / 8, and behind them RDKit's release, with
+  /// which their meaning may change.
   /// Source: RDKit, pattern fingerprint 1.0.0.
   [[nodiscard]] virtual std::expected<std::string, StructureFault> fingerprint(
       std::string_view smiles) = 0;

@@ -53,8 +53,17 @@ Fault unknownVerb(const CLI::App& program, const std::string& name) {
                             : fmt::format("choose among {}", fmt::join(verbs, ", ")));
 }
 
+/// Whether the option of that name, of the program or of the verb that is called, takes a value.
+bool takesValue(const CLI::App& program, const std::string& name) {
+  const CLI::Option* option = program.get_option_no_throw(name);
+  for (const CLI::App* verb : program.get_subcommands()) {
+    if (option == nullptr) option = verb->get_option_no_throw(name);
+  }
+  return option != nullptr && option->get_items_expected_max() > 0;
+}
+
 /// One complaint about an option or argument that is known: its name goes into the place.
-Fault reworded(const CLI::ParseError& error, std::string hint) {
+Fault reworded(const CLI::App& program, const CLI::ParseError& error, std::string hint) {
   const std::string said = text::oneLine(error.what());
   switch (static_cast<CLI::ExitCodes>(error.get_exit_code())) {
     case CLI::ExitCodes::RequiredError:  // "PLAN is required"
@@ -73,8 +82,11 @@ Fault reworded(const CLI::ParseError& error, std::string hint) {
       break;
     case CLI::ExitCodes::ConversionError:  // "Could not convert: --json = maybe"
       if (const std::size_t begin = said.find("--"); begin != std::string::npos) {
-        return usageFault(said.substr(begin, said.find_first_of(" =", begin) - begin),
-                          "this option takes no value", std::move(hint));
+        const std::string name = said.substr(begin, said.find_first_of(" =", begin) - begin);
+        return usageFault(
+            name,
+            takesValue(program, name) ? "its value cannot be read" : "this option takes no value",
+            std::move(hint));
       }
       break;
     default:
@@ -107,7 +119,7 @@ Faults parserFaults(const CLI::App& program, const CLI::ParseError& error) {
     if (faults.empty()) faults.push_back(usageFault("", "no verb is given", helpHint(program)));
     return faults;
   }
-  return {reworded(error, helpHint(program))};
+  return {reworded(program, error, helpHint(program))};
 }
 
 void describe(CLI::App& program, CommonOptions& common) {
@@ -116,6 +128,8 @@ void describe(CLI::App& program, CommonOptions& common) {
   program.set_version_flag("--version", "vialkeeper " VIALKEEPER_VERSION);
   program.add_option("--book", common.book, "the notebook file (or VIALKEEPER_BOOK)");
   program.add_option("--person", common.person, "who works, by initials (or VIALKEEPER_PERSON)");
+  program.add_flag("--new-person", common.newPerson,
+                   "the initials are somebody's who has not worked in this notebook yet");
   program.add_flag("--json", common.json, "print one JSON object in place of a table");
   program.require_subcommand(1);
   program.fallthrough();
@@ -126,10 +140,10 @@ void describe(CLI::App& program, CommonOptions& common) {
 std::vector<Verb> allVerbs(CLI::App& program) {
   std::vector<Verb> verbs;
   for (const auto make :
-       {massVerb,    chargeVerb, sheetVerb,   createVerb, demoVerb, shelfVerb,      addVerb,
-        cloneVerb,   runsVerb,   findVerb,    showVerb,   weighVerb,      logVerb,
-        correctVerb, resultVerb, compareVerb, labelVerb,  importVerb,     exportVerb,
-        backupVerb,  verifyVerb, keyVerb,     sealVerb,   countersignVerb}) {
+       {massVerb,   chargeVerb,  sheetVerb,  createVerb,  demoVerb,  shelfVerb,
+        addVerb,    cloneVerb,   runsVerb,   findVerb,    showVerb,  weighVerb,
+        logVerb,    correctVerb, resultVerb, compareVerb, labelVerb, importVerb,
+        exportVerb, backupVerb,  verifyVerb, keyVerb,     sealVerb,  countersignVerb}) {
     verbs.push_back(make(program));
   }
   return verbs;

@@ -2,8 +2,6 @@
 // SPDX-License-Identifier: GPL-3.0-or-later
 #include "cli/notebook_session.h"
 
-#include <filesystem>
-
 #include "app/system_clock.h"
 #include "db/sqlite_notebook.h"
 
@@ -41,9 +39,15 @@ text::Checked<NotebookSession> NotebookSession::forReading(const CommonOptions& 
 text::Checked<NotebookSession> NotebookSession::forWriting(const CommonOptions& common) {
   auto notebook = open(common, db::OpenFor::kWriting);
   if (!notebook) return std::unexpected(notebook.error());
-  auto person = app::whoWorks(**notebook, namedPerson(common));
+  // Before anything else is looked at: another fault would send the person the wrong way.
+  if (const auto may = (*notebook)->mayWrite(); !may) return std::unexpected(may.error());
+  auto person =
+      app::whoWorks(**notebook, namedPerson(common),
+                    common.newPerson ? app::Newcomer::kWelcome : app::Newcomer::kQuestioned);
   if (!person) {
-    for (text::Fault& fault : person.error()) fault.kind = text::FaultKind::kUsage;
+    for (text::Fault& fault : person.error()) {
+      if (fault.kind == text::FaultKind::kInput) fault.kind = text::FaultKind::kUsage;
+    }
     return std::unexpected(person.error());
   }
   return NotebookSession(*std::move(notebook), common.around->clock, *std::move(person));
@@ -51,16 +55,6 @@ text::Checked<NotebookSession> NotebookSession::forWriting(const CommonOptions& 
 
 text::Checked<NotebookSession> NotebookSession::forChecking(const CommonOptions& common) {
   auto notebook = open(common, db::OpenFor::kWriting);
-  if (!notebook) return std::unexpected(notebook.error());
-  return NotebookSession(*std::move(notebook), common.around->clock, "");
-}
-
-text::Checked<NotebookSession> NotebookSession::forRebuilding(const CommonOptions& common) {
-  const auto file = bookFile(common);
-  if (!file) return std::unexpected(file.error());
-  std::error_code ignored;
-  auto notebook = std::filesystem::exists(*file, ignored) ? open(common, db::OpenFor::kWriting)
-                                                          : db::createNotebook(*file);
   if (!notebook) return std::unexpected(notebook.error());
   return NotebookSession(*std::move(notebook), common.around->clock, "");
 }

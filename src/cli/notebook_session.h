@@ -16,14 +16,13 @@ class NotebookSession {
   /// For looking: nobody needs to be named. Fault: no --book, or the file cannot be opened.
   [[nodiscard]] static text::Checked<NotebookSession> forReading(const CommonOptions& common);
   /// For changing: also who works, by --person or VIALKEEPER_PERSON, or the only one there is.
+  /// Fault: the notebook is open for reading only; told before anything that is wrong with the
+  /// work.
   [[nodiscard]] static text::Checked<NotebookSession> forWriting(const CommonOptions& common);
 
   /// For checking: open for writing where that is possible, because SQLite lets no reader check the
   /// full-text index; nobody needs to be named.
   [[nodiscard]] static text::Checked<NotebookSession> forChecking(const CommonOptions& common);
-  /// For filling an empty notebook from an archive, which brings its own people; the file is made
-  /// if it is not there.
-  [[nodiscard]] static text::Checked<NotebookSession> forRebuilding(const CommonOptions& common);
 
   [[nodiscard]] app::Notebook& notebook() { return *m_notebook; }
   [[nodiscard]] app::Desk desk() { return {*m_notebook, *m_clock, m_person}; }

@@ -19,6 +19,7 @@ namespace vialkeeper::cli {
 struct CommonOptions {
   std::string book;
   std::optional<std::string> person;
+  bool newPerson = false;  ///< initials that the notebook does not know are somebody new
   bool json = false;
   Surroundings* around = nullptr;
 };

@@ -52,7 +52,8 @@ std::string answer(const app::AddedRun& added, const CommonOptions& common) {
   for (const std::string& name : added.newSubstances)
     text += fmt::format("  new on the shelf: {}\n", text::oneLine(name));
   for (const text::Notice& notice : added.notices)
-    text += fmt::format("! {}\n", text::oneLine(notice.text));
+    text += fmt::format("! {}{}\n", notice.at.empty() ? "" : notice.at + ": ",
+                        text::oneLine(notice.text));
   return text;
 }
 

@@ -29,15 +29,14 @@ VerbResult runCreate(const std::string& name, const CommonOptions& common) {
         usageFault("--person", fmt::format("{} are no initials", text::quoted(*initials)),
                    "use 1 to 8 capital letters and digits, such as KW")});
   }
-  auto notebook = db::createNotebook(*file);
-  if (!notebook) return std::unexpected(notebook.error());
-  const app::Desk desk{**notebook, common.around->clock, *initials};
-  const auto done =
-      (*notebook)->act(desk.action("create"), [&](app::Writing& writing) -> text::Checked<void> {
-        const auto n = writing.addPerson({.code = *initials, .name = name});
-        if (!n) return std::unexpected(n.error());
-        return {};
-      });
+  const auto done = db::makeNotebook(*file, [&](app::Notebook& notebook) {
+    const app::Desk desk{notebook, common.around->clock, *initials};
+    return notebook.act(desk.action("create"), [&](app::Writing& writing) -> text::Checked<void> {
+      const auto n = writing.addPerson({.code = *initials, .name = name});
+      if (!n) return std::unexpected(n.error());
+      return {};
+    });
+  });
   if (!done) return std::unexpected(done.error());
   if (common.json)
     return toJsonText(

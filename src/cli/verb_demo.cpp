@@ -4,7 +4,6 @@
 #include <fmt/ranges.h>
 
 #include <CLI/CLI.hpp>
-#include <filesystem>
 #include <memory>
 #include <nlohmann/json.hpp>
 
@@ -34,7 +33,7 @@ std::string answer(const std::string& file, const app::DemoSummary& summary,
       file, summary.runs, fmt::join(app::kDemoPeople, ", "), summary.events, summary.datasets);
 }
 
-/// Makes the notebook and fills it.
+/// A demonstration that is half there is of no use: it is there whole or not at all.
 VerbResult runDemo(int runs, const CommonOptions& common) {
   const auto file = bookFile(common);
   if (!file) return std::unexpected(file.error());
@@ -42,15 +41,15 @@ VerbResult runDemo(int runs, const CommonOptions& common) {
     return std::unexpected(text::Faults{
         usageFault("--runs", "a demonstration has at least one run", "ask for 1 or more")});
   }
-  auto notebook = db::createNotebook(*file);
-  if (!notebook) return std::unexpected(notebook.error());
-  const auto summary = app::makeDemo(**notebook, {.runs = runs});
-  if (summary) return answer(*file, *summary, common);
-  // A demonstration that is half there is of no use; the file is our own.
-  notebook->reset();
-  std::error_code ignored;
-  std::filesystem::remove(*file, ignored);
-  return std::unexpected(summary.error());
+  app::DemoSummary summary;
+  const auto made = db::makeNotebook(*file, [&](app::Notebook& notebook) -> text::Checked<void> {
+    const auto filled = app::makeDemo(notebook, {.runs = runs});
+    if (!filled) return std::unexpected(filled.error());
+    summary = *filled;
+    return {};
+  });
+  if (!made) return std::unexpected(made.error());
+  return answer(*file, summary, common);
 }
 
 }  // namespace

@@ -23,7 +23,7 @@ namespace {
 struct FindWords {
   std::vector<std::string> query;
   std::string sort = "newest";
-  std::size_t limit = 200;
+  std::int64_t limit = 200;
   bool csv = false;
 };
 
@@ -65,7 +65,7 @@ std::string tableText(const app::FindResult& result) {
   const auto shown = static_cast<std::int64_t>(result.runs.size());
   const std::string count = shown < result.matches
                                 ? fmt::format("{} of {} runs", shown, result.matches)
-                                : fmt::format("{} runs", shown);
+                                : fmt::format("{} {}", shown, shown == 1 ? "run" : "runs");
   return table.toText() + count + "\n";
 }
 
@@ -115,12 +115,22 @@ VerbResult runFind(const FindWords& words, const CommonOptions& common) {
         text::Faults{usageFault("--sort", fmt::format("{} is no order", text::quoted(words.sort)),
                                 "choose newest, oldest, rank, yield or code")});
   }
+  if (words.limit < 0) {
+    return std::unexpected(
+        text::Faults{usageFault("--limit", fmt::format("{} is less than nothing", words.limit),
+                                "give how many runs to list, or 0 for all")});
+  }
+  if (words.csv && common.json) {
+    return std::unexpected(text::Faults{usageFault(
+        "--csv", "a list is written as CSV or as JSON, not as both", "leave out --csv or --json")});
+  }
   auto session = NotebookSession::forReading(common);
   if (!session) return std::unexpected(session.error());
   std::string query;
   for (const std::string& word : words.query) query += (query.empty() ? "" : " ") + word;
   const auto result =
-      app::findRuns(session->notebook(), query, {.order = order->second, .limit = words.limit});
+      app::findRuns(session->notebook(), query,
+                    {.order = order->second, .limit = static_cast<std::size_t>(words.limit)});
   if (!result) return std::unexpected(result.error());
   if (common.json) return jsonText(*result);
   return words.csv ? csvText(*result) : tableText(*result);

@@ -3,12 +3,15 @@
 #include <fmt/format.h>
 
 #include <CLI/CLI.hpp>
+#include <algorithm>
 #include <memory>
 #include <nlohmann/json.hpp>
 
 #include "app/notebook/log_run.h"
 #include "cli/json_text.h"
+#include "cli/moment_text.h"
 #include "cli/notebook_session.h"
+#include "cli/questions.h"
 #include "cli/record_json.h"
 #include "cli/verb.h"
 #include "text/utf8.h"
@@ -40,21 +43,24 @@ VerbResult write(const LogOptions& options, const CommonOptions& common, bool co
       correcting ? app::correctEvent(session->desk(), *run, options.event, requestOf(options))
                  : app::logLine(session->desk(), *run, requestOf(options));
   if (!logged) return std::unexpected(logged.error());
+  if (!logged->questions.empty())
+    return std::unexpected(questionsAsFaults("entry", logged->questions));
+  const auto events = app::numberedEvents(session->notebook(), *run);
+  if (!events) return std::unexpected(events.error());
+  const auto entry = std::ranges::find(*events, logged->event.n,
+                                       [](const app::NumberedEvent& each) { return each.event.n; });
   text::Notices notices;
   if (logged->late)
     notices.push_back(
         {"late-entry", "the entry is written down more than a day after it happened", "at"});
   if (common.json) {
-    const auto events = app::numberedEvents(session->notebook(), *run);
-    if (!events) return std::unexpected(events.error());
     return toJsonText({{"run", run->code},
                        {"read_as", logged->sentence},
-                       {"event", toJson(logged->entry, *events)},
+                       {"event", toJson(*entry, *events)},
                        {"notices", noticesJson(notices)}});
   }
-  std::string answer =
-      fmt::format("{} entry {}: {}, {}\n", run->code, logged->entry.number,
-                  text::oneLine(logged->sentence), toIsoText(logged->entry.event.at).substr(0, 16));
+  std::string answer = fmt::format("{} entry {}: {}, {}\n", run->code, entry->number,
+                                   text::oneLine(logged->sentence), minuteText(logged->event.at));
   for (const text::Notice& notice : notices) answer += "! " + notice.text + "\n";
   return answer;
 }
@@ -64,7 +70,8 @@ void addCommon(CLI::App& parser, LogOptions& options) {
   parser.add_option("--at", options.at,
                     "when it happened: 14:20, 20 min ago, 2026-03-04T14:20+01:00");
   parser.add_option("--reason", options.reason, "why, where the run's state asks for it");
-  parser.add_flag("--yes", options.yes, "keep a line that looks like a slip as an observation");
+  parser.add_flag("--yes", options.yes,
+                  "keep a line that cannot be read as an observation, a likely slip as it is");
 }
 
 }  // namespace

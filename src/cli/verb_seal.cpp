@@ -21,6 +21,7 @@ namespace {
 struct SealOptions {
   std::string run;
   std::string passphraseFile;
+  bool yes = false;
 };
 
 /// The passphrase: the first line of a file, or of standard input. It never stands on the command
@@ -70,13 +71,17 @@ VerbResult newKey(const SealOptions& options, const CommonOptions& common) {
   const auto words = passphrase(options, common);
   if (!words) return std::unexpected(words.error());
   db::SodiumSigner signer;
-  const auto made = app::makeSigningKey(session->desk(), signer, *words);
-  if (!made) return std::unexpected(made.error());
-  if (common.json)
-    return toJsonText(
-        {{"person", session->desk().person}, {"notices", nlohmann::ordered_json::array()}});
-  return fmt::format("{} has a new signing key; without its passphrase nobody can sign with it\n",
-                     session->desk().person);
+  const auto replaced = app::makeSigningKey(
+      session->desk(), signer, *words, options.yes ? app::OldKey::kReplaced : app::OldKey::kKept);
+  if (!replaced) return std::unexpected(replaced.error());
+  if (common.json) {
+    return toJsonText({{"person", session->desk().person},
+                       {"replaced", *replaced},
+                       {"notices", nlohmann::ordered_json::array()}});
+  }
+  return fmt::format("{} has a new signing key; without its passphrase nobody can sign with it\n{}",
+                     session->desk().person,
+                     *replaced ? "older seals stay valid under the key they were made with\n" : "");
 }
 
 void addPassphrase(CLI::App& parser, SealOptions& options) {
@@ -103,6 +108,7 @@ Verb keyVerb(CLI::App& program) {
   CLI::App* make = parser->add_subcommand("new", "Make a signing key, protected by a passphrase");
   make->fallthrough();
   addPassphrase(*make, *options);
+  make->add_flag("--yes", options->yes, "replace the key that you have; older seals stay valid");
   return {parser, [options](const CommonOptions& common) { return newKey(*options, common); }};
 }
 

@@ -75,8 +75,16 @@ VerbResult addCardOrSubstance(ShelfOptions options, const CommonOptions& common)
     options.draft.name = options.name;
     const auto added = app::addSubstanceCard(session->desk(), options.draft);
     if (!added) return std::unexpected(added.error());
-    if (common.json) return toJsonText({{"substance", toJson(*added)}, {"notices", Json::array()}});
-    return fmt::format("on the shelf: {} {}\n", text::oneLine(added->name), added->formula);
+    const app::SubstanceRecord& substance = added->substance;
+    if (common.json) {
+      return toJsonText(
+          {{"substance", toJson(substance)}, {"notices", noticesJson(added->notices)}});
+    }
+    std::string answer =
+        fmt::format("on the shelf: {} {}\n", text::oneLine(substance.name), substance.formula);
+    for (const text::Notice& notice : added->notices)
+      answer += fmt::format("! {}\n", text::oneLine(notice.text));
+    return answer;
   }
   const auto kind = kindOf(options.kind);
   if (!kind) return std::unexpected(kind.error());

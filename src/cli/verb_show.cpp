@@ -11,6 +11,7 @@
 #include "cli/charge_json.h"
 #include "cli/charge_table.h"
 #include "cli/json_text.h"
+#include "cli/moment_text.h"
 #include "cli/notebook_session.h"
 #include "cli/record_json.h"
 #include "cli/text_table.h"
@@ -86,11 +87,10 @@ std::string jsonText(const Shown& shown, bool withHistory) {
 std::string eventLine(const app::NumberedEvent& entry) {
   const app::EventRecord& event = entry.event;
   const bool late = event.at.utc != event.logged.utc;
-  std::string line =
-      fmt::format("{:>4}  {}  {:<13}  {}", entry.number, toIsoText(event.at).substr(0, 16),
-                  event.kind, text::oneLine(event.raw));
+  std::string line = fmt::format("{:>4}  {}  {:<13}  {}", entry.number, minuteText(event.at),
+                                 event.kind, text::oneLine(event.raw));
   if (event.supersededBy != 0) line += "  (corrected)";
-  if (late) line += fmt::format("  (written down {})", toIsoText(event.logged).substr(0, 16));
+  if (late) line += fmt::format("  (written down {})", minuteText(event.logged));
   return line + fmt::format("  {}\n", event.person);
 }
 
@@ -98,7 +98,7 @@ std::string peopleText(const Shown& shown, bool withHistory) {
   const app::RunRecord& run = shown.run;
   std::string text =
       fmt::format("{}  {}  {}\n", run.code, toText(run.state), text::oneLine(run.title));
-  text += fmt::format("{} by {}", toIsoText(run.created).substr(0, 16), run.person);
+  text += fmt::format("{} by {}", minuteText(run.created), run.person);
   if (!run.series.empty()) text += ", series " + text::oneLine(run.series);
   text += "\n";
   if (!run.aim.empty()) text += "aim: " + text::oneLine(run.aim) + "\n";

@@ -11,7 +11,10 @@
 #include "cli/charge_table.h"
 #include "cli/json_text.h"
 #include "cli/notebook_session.h"
+#include "cli/questions.h"
+#include "cli/record_json.h"
 #include "cli/verb.h"
+#include "text/utf8.h"
 
 namespace vialkeeper::cli {
 namespace {
@@ -24,16 +27,6 @@ struct WeighOptions {
   bool yes = false;
   bool retarget = false;
 };
-
-text::Faults questionsAsFaults(const std::string& key,
-                               const std::vector<app::SlipQuestion>& questions) {
-  text::Faults faults;
-  for (const app::SlipQuestion& question : questions) {
-    faults.push_back(
-        {.field = key, .what = question.what, .mend = question.ask + " If it is right, add --yes"});
-  }
-  return faults;
-}
 
 VerbResult runWeigh(const WeighOptions& options, const CommonOptions& common) {
   auto session = NotebookSession::forWriting(common);
@@ -50,9 +43,15 @@ VerbResult runWeigh(const WeighOptions& options, const CommonOptions& common) {
     if (!retargeted) return std::unexpected(retargeted.error());
     weighed->sheet = *std::move(retargeted);
   }
-  if (!common.json) return chargeTable(weighed->sheet.planned, true, false);
+  if (!common.json) {
+    const std::string table = chargeTable(weighed->sheet.planned, true, false);
+    if (weighed->before.empty()) return table;
+    return fmt::format("{}: {} → {}; the old record stays in the history\n\n{}", options.key,
+                       text::oneLine(weighed->before), text::oneLine(options.quantity), table);
+  }
   auto json = toJson(weighed->sheet.planned, true);
   json["run"] = run->code;
+  json["recorded_before"] = textOrNullJson(weighed->before);
   return toJsonText(json);
 }
 

@@ -298,9 +298,22 @@ TEST_CASE("a large structure keeps all its bits", "[chem][identity]") {
   }
 }
 
-TEST_CASE("a fingerprint is 256 bytes and does not depend on the writing", "[chem][identity]") {
-  CHECK(fingerprintOf("CCO").size() == 256);
-  CHECK(patternOf("CCO")->fingerprint().size() == 256);
+TEST_CASE("a fingerprint of another release is not believed", "[chem][safety]") {
+  const std::string pattern = patternOf("C=O")->fingerprint();
+  const std::string alkane = fingerprintOf("CCCC");
+  REQUIRE_FALSE(mayContain(alkane, pattern));
+  std::string other = alkane;
+  other.back() = other.back() == '9' ? '8' : '9';
+  CHECK(mayContain(other, pattern));
+  CHECK(mayContain(alkane.substr(0, kFingerprintBytes), pattern));
+}
+
+TEST_CASE("a fingerprint is 256 bytes with the release behind and does not depend on the writing",
+          "[chem][identity]") {
+  const std::string release = fingerprintOf("CCO").substr(kFingerprintBytes);
+  CHECK(release.find_first_not_of("0123456789.") == std::string::npos);
+  CHECK(release.size() > 4);
+  CHECK(patternOf("CCO")->fingerprint().substr(kFingerprintBytes) == release);
   CHECK(fingerprintOf("CCO") == fingerprintOf("[H]OC([H])([H])C"));
   CHECK(fingerprintOf(kIndole) == fingerprintOf("C1=CNC2=CC=CC=C12"));
   CHECK(fingerprintOf(kIndole) != fingerprintOf(kIndoline));

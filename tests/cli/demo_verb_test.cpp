@@ -109,7 +109,7 @@ TEST_CASE("two demonstrations agree in every code, text and number", "[demo][ide
 
 TEST_CASE("a demonstration verifies and is marked as invented", "[demo][identity]") {
   const auto notebook = demo().notebook();
-  const auto report = notebook->verify();
+  const auto report = notebook->verify({});
   REQUIRE(report);
   for (const app::Finding& finding : report->findings)
     FAIL_CHECK(finding.where << ": " << finding.what);
@@ -240,7 +240,7 @@ TEST_CASE("runs filled in bulk have 8 components and 10 events, and the charge o
     }
   }
   CHECK(codes.size() == 620);
-  const auto report = (*notebook)->verify();
+  const auto report = (*notebook)->verify({});
   REQUIRE(report);
   CHECK(report->findings.empty());
 }

@@ -4,40 +4,41 @@
 #include <string>
 #include <vector>
 
-#include "cli/command_bench.h"
-#include "support/scratch_folder.h"
+#include "cli/notebook_bench.h"
 
 using namespace vialkeeper::tests;
 
 namespace {
 
-/// A notebook of KW with one run, reached by its verbs alone.
-class Book {
- public:
-  Book() : m_file(m_folder.path("book.vialbook")) {
-    REQUIRE(verb({"create"}).status == 0);
-    REQUIRE(verb({"add", m_folder.write("plan.toml", soundPlan())}).status == 0);
-  }
-
-  [[nodiscard]] Ran verb(std::vector<std::string> arguments) const {
-    std::vector<std::string> all{"--book", m_file, "--person", "KW"};
-    all.insert(all.end(), arguments.begin(), arguments.end());
-    return run(all);
-  }
-  [[nodiscard]] const ScratchFolder& folder() const { return m_folder; }
-
- private:
-  ScratchFolder m_folder;
-  std::string m_file;
-};
-
 /// Texts that have broken other programs.
 const std::vector<std::string>& hostileTexts() {
-  static const std::vector<std::string> texts = {
-      "'; DROP TABLE run; --", "\" OR 1=1 --", "x' UNION SELECT * FROM person --", "%_*?[a-z]",
-      "NEAR(a b, 2)", "a AND NOT b OR (c", "title : x", "^start", "\"open", "*", "()", "-", "{}",
-      "=cmd|' /C calc'!A0", "+1+1", "@SUM(1)", "\xE2\x80\xAE" "abc", "a\xE2\x80\x8B" "b",
-      "\xF0\x9F\xA7\xAA", "../../etc/passwd", "%n%s%x", "{0}{1}", "<b>&amp;", "\\", "\t tab"};
+  static const std::vector<std::string> texts = {"'; DROP TABLE run; --",
+                                                 "\" OR 1=1 --",
+                                                 "x' UNION SELECT * FROM person --",
+                                                 "%_*?[a-z]",
+                                                 "NEAR(a b, 2)",
+                                                 "a AND NOT b OR (c",
+                                                 "title : x",
+                                                 "^start",
+                                                 "\"open",
+                                                 "*",
+                                                 "()",
+                                                 "-",
+                                                 "{}",
+                                                 "=cmd|' /C calc'!A0",
+                                                 "+1+1",
+                                                 "@SUM(1)",
+                                                 "\xE2\x80\xAE"
+                                                 "abc",
+                                                 "a\xE2\x80\x8B"
+                                                 "b",
+                                                 "\xF0\x9F\xA7\xAA",
+                                                 "../../etc/passwd",
+                                                 "%n%s%x",
+                                                 "{0}{1}",
+                                                 "<b>&amp;",
+                                                 "\\",
+                                                 "\t tab"};
   return texts;
 }
 
@@ -48,14 +49,18 @@ bool isOrderly(const Ran& ran) {
 
 }  // namespace
 
-TEST_CASE("hostile texts are kept or refused in every field, and the notebook stays sound", "[cli][safety]") {
-  const Book book;
+TEST_CASE("hostile texts are kept or refused in every field, and the notebook stays sound",
+          "[cli][safety]") {
+  Book book;
   for (const std::string& text : hostileTexts()) {
     INFO(text);
-    CHECK(isOrderly(book.verb({"shelf", "add", "substance", "s " + text, "--formula", "C8H9N", "--note", text})));
-    CHECK(isOrderly(book.verb({"shelf", "add", "vial", "v " + text, "--set", "volume=11.6 mL", "--set", "note=" + text})));
+    CHECK(isOrderly(book.verb(
+        {"shelf", "add", "substance", "s " + text, "--formula", "C8H9N", "--note", text})));
+    CHECK(isOrderly(book.verb({"shelf", "add", "vial", "v " + text, "--set", "volume=11.6 mL",
+                               "--set", "note=" + text})));
     CHECK(isOrderly(book.verb({"shelf", "show", text})));
-    CHECK(isOrderly(book.verb({"result", "KW-0001", "--title", text, "--aim", text, "--conclusion", text})));
+    CHECK(isOrderly(
+        book.verb({"result", "KW-0001", "--title", text, "--aim", text, "--conclusion", text})));
     CHECK(isOrderly(book.verb({"log", "KW-0001", "note " + text})));
     CHECK(isOrderly(book.verb({"log", "KW-0001", text})));
     CHECK(isOrderly(book.verb({"find", text})));
@@ -71,7 +76,7 @@ TEST_CASE("hostile texts are kept or refused in every field, and the notebook st
 }
 
 TEST_CASE("what a person typed comes back to the letter", "[cli][safety]") {
-  const Book book;
+  Book book;
   for (const std::string& text : hostileTexts()) {
     const Ran logged = book.verb({"log", "KW-0001", "note " + text, "--json"});
     INFO(text << logged.err);
@@ -81,11 +86,12 @@ TEST_CASE("what a person typed comes back to the letter", "[cli][safety]") {
 }
 
 TEST_CASE("a note of ten megabytes is kept, bytes that are no text are refused", "[cli][safety]") {
-  const Book book;
+  Book book;
   const std::string large = "note " + std::string(10 << 20, 'x');
   REQUIRE(book.verb({"log", "KW-0001", large}).status == 0);
   CHECK(book.verb({"show", "KW-0001", "--json"}).json()["events"][0]["raw"] == large);
-  for (const std::string& bad : {std::string("note \xFF\xFE"), std::string("note a\0b", 8), std::string("note \xC3")}) {
+  for (const std::string& bad :
+       {std::string("note \xFF\xFE"), std::string("note a\0b", 8), std::string("note \xC3")}) {
     const Ran refused = book.verb({"log", "KW-0001", bad});
     CHECK(refused.status == 1);
     CHECK(refused.out.empty());
@@ -94,8 +100,9 @@ TEST_CASE("a note of ten megabytes is kept, bytes that are no text are refused",
 }
 
 TEST_CASE("cells that a spreadsheet would run are led by an apostrophe", "[cli][safety]") {
-  const Book book;
-  for (const std::string& title : {std::string("=1+1"), std::string("+cmd"), std::string("-2"), std::string("@SUM(A1)")}) {
+  Book book;
+  for (const std::string& title :
+       {std::string("=1+1"), std::string("+cmd"), std::string("-2"), std::string("@SUM(A1)")}) {
     REQUIRE(book.verb({"result", "KW-0001", "--title", title}).status == 0);
     const Ran csv = book.verb({"runs", "--csv"});
     INFO(csv.out);
@@ -104,7 +111,7 @@ TEST_CASE("cells that a spreadsheet would run are led by an apostrophe", "[cli][
 }
 
 TEST_CASE("an export stays in its folder whatever a raw file is called", "[cli][safety]") {
-  const Book book;
+  Book book;
   const std::string photo = book.folder().write("..evil.jpg", "not a picture");
   REQUIRE(book.verb({"log", "KW-0001", "photo " + photo}).status == 0);
   REQUIRE(book.verb({"export", "KW-0001", "--to", book.folder().path("out")}).status == 0);

@@ -53,7 +53,7 @@ TEST_CASE("600 flipped bytes never crash, and none that changes a record goes un
     auto notebook = db::openNotebook(copy, db::OpenFor::kReading, "test");
     if (!notebook) {
       found = "does not open";
-    } else if (const auto report = (*notebook)->verify(); !report) {
+    } else if (const auto report = (*notebook)->verify({}); !report) {
       found = "verify refuses";
     } else if (!report->findings.empty()) {
       found = report->findings.front().what;

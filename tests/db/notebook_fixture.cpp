@@ -87,7 +87,7 @@ app::RunRecord runOf(app::Notebook& notebook, const std::string& code) {
 
 std::string findings(app::Notebook& notebook) {
   std::string lines;
-  for (const app::Finding& finding : required(notebook.verify()).findings)
+  for (const app::Finding& finding : required(notebook.verify({})).findings)
     lines += finding.where + ": " + finding.what + "\n";
   return lines;
 }

@@ -2,10 +2,13 @@
 // SPDX-License-Identifier: GPL-3.0-or-later
 // Measures the notebook file; each command prints one line.
 //   bench_notebook fill FILE RUNS          a new notebook of so many invented runs: runs/s, bytes
-//   bench_notebook find FILE QUERY COUNT   so many searches: p50 and p95 in ms. In QUERY {pc}
+//   bench_notebook find FILE QUERY COUNT   so many searches: p50 and p95 in ms, of the clock and of
+//                                          the processor. In QUERY {pc}
 //   {metal} {acid}
 //                                          {additive} {word} {low} {high} are put in anew for each
 //                                          search.
+//   bench_notebook write QUERY COUNT       the same searches' texts with their places filled, one a
+//                                          line: QUERY may be anything, such as SQL
 //   bench_notebook log FILE COUNT          log entries with full durability, each into another of
 //   the newest
 //                                          open runs in turn: entries/s
@@ -19,6 +22,7 @@
 #include <array>
 #include <charconv>
 #include <chrono>
+#include <ctime>
 #include <filesystem>
 #include <iostream>
 #include <string>
@@ -34,6 +38,10 @@ namespace {
 
 using namespace vialkeeper;
 using Steady = std::chrono::steady_clock;
+
+constexpr std::uint64_t kSeed = 20260302;
+constexpr std::uint64_t kStream = 2'000'000;
+constexpr std::int64_t kWarming = 5;
 
 double secondsSince(Steady::time_point start) {
   return std::chrono::duration<double>(Steady::now() - start).count();
@@ -76,15 +84,22 @@ void replaceAll(std::string& text, std::string_view what, const std::string& by)
 /// The query with its places filled; names from the whole shelf, used and hardly used ones alike.
 std::string varied(std::string query, app::DemoRandom& random) {
   const app::DemoVocabulary& vocabulary = app::demoVocabulary();
+  // {'pc'} and the like are for SQL, without the search language's quotation marks.
   const auto quoted = [&random](const std::vector<std::string>& names) {
     return fmt::format("\"{}\"", random.pick(names));
   };
   constexpr auto kLow = std::to_array<double>({0.5, 1, 2, 5, 10});
   const double low = random.pick(kLow);
-  replaceAll(query, "{pc}", quoted(vocabulary.photocatalysts));
-  replaceAll(query, "{metal}", quoted(vocabulary.cocatalysts));
-  replaceAll(query, "{acid}", quoted(vocabulary.acids));
-  replaceAll(query, "{additive}", quoted(vocabulary.additives));
+  const auto named = [&](const char* place, const std::vector<std::string>& names) {
+    const std::string name = quoted(names);
+    replaceAll(query, fmt::format("{{'{}'}}", place),
+               fmt::format("'{}'", name.substr(1, name.size() - 2)));
+    replaceAll(query, fmt::format("{{{}}}", place), name);
+  };
+  named("pc", vocabulary.photocatalysts);
+  named("metal", vocabulary.cocatalysts);
+  named("acid", vocabulary.acids);
+  named("additive", vocabulary.additives);
   replaceAll(query, "{word}", random.pick(vocabulary.words));
   replaceAll(query, "{low}", fmt::format("{:g}", low));
   replaceAll(query, "{high}", fmt::format("{:g}", 2.0 * low));
@@ -94,28 +109,40 @@ std::string varied(std::string query, app::DemoRandom& random) {
 int find(const std::string& file, const std::string& query, std::int64_t count) {
   auto notebook = db::openNotebook(file, db::OpenFor::kReading, "bench");
   if (!notebook) return fail(notebook.error());
-  app::DemoRandom random(20260302, 2'000'000);
+  app::DemoRandom random(kSeed, kStream);
   std::vector<double> times_ms;
+  std::vector<double> cpu_ms;
   std::int64_t matches = 0;
-  for (std::int64_t i = -5; i < count; ++i) {  // the first few warm the caches
+  for (std::int64_t i = -kWarming; i < count; ++i) {  // the first few warm the caches
     const std::string text = varied(query, random);
     const auto start = Steady::now();
+    const std::clock_t cpuStart = std::clock();
     const auto found = app::findRuns(**notebook, text, {});
+    const double worked_ms = 1e3 * static_cast<double>(std::clock() - cpuStart) / CLOCKS_PER_SEC;
     const double took_ms = 1e3 * secondsSince(start);
     if (!found) return fail(found.error());
     if (i < 0) continue;
     times_ms.push_back(took_ms);
+    cpu_ms.push_back(worked_ms);
     matches += found->matches;
   }
   std::ranges::sort(times_ms);
-  const auto percentile = [&times_ms](std::size_t p) {
-    return times_ms[std::min(times_ms.size() - 1, times_ms.size() * p / 100)];
+  std::ranges::sort(cpu_ms);
+  const auto percentile = [](const std::vector<double>& times, std::size_t p) {
+    return times[std::min(times.size() - 1, times.size() * p / 100)];
   };
   std::cout << fmt::format(
-      "find: p50 {:.2f} ms, p95 {:.2f} ms, most {:.2f} ms, {} searches, {:.1f} matches on "
-      "average\n",
-      percentile(50), percentile(95), times_ms.back(), count,
-      static_cast<double>(matches) / static_cast<double>(count));
+      "find: p50 {:.2f} ms, p95 {:.2f} ms, most {:.2f} ms, cpu50 {:.2f} ms, cpu95 {:.2f} ms, {} "
+      "searches, {:.1f} matches on average\n",
+      percentile(times_ms, 50), percentile(times_ms, 95), times_ms.back(), percentile(cpu_ms, 50),
+      percentile(cpu_ms, 95), count, static_cast<double>(matches) / static_cast<double>(count));
+  return 0;
+}
+
+/// The texts that find() would ask for, in the same order and with the same chances.
+int write(const std::string& query, std::int64_t count) {
+  app::DemoRandom random(kSeed, kStream);
+  for (std::int64_t i = -kWarming; i < count; ++i) std::cout << varied(query, random) << '\n';
   return 0;
 }
 
@@ -186,9 +213,11 @@ int main(int argc, char** argv) {
       count > 0;
   if (counted && words.size() == 3 && words[0] == "fill") return fill(words[1], count);
   if (counted && words.size() == 4 && words[0] == "find") return find(words[1], words[2], count);
+  if (counted && words.size() == 3 && words[0] == "write") return write(words[1], count);
   if (counted && words.size() == 3 && words[0] == "log") return log(words[1], count);
   if (counted && words.size() == 3 && words[0] == "fsync") return sync(words[1], count);
-  std::cerr << "usage: bench_notebook fill FILE RUNS | find FILE QUERY COUNT | log FILE COUNT | "
+  std::cerr << "usage: bench_notebook fill FILE RUNS | find FILE QUERY COUNT | write QUERY COUNT | "
+               "log FILE COUNT | "
                "fsync FOLDER COUNT\n";
   return 2;
 }

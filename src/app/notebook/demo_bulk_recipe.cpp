@@ -10,6 +10,8 @@
 #include "app/notebook/demo_chemistry.h"
 #include "app/notebook/demo_series.h"
 #include "app/notebook/fold_name.h"
+#include "app/notebook/component_records.h"
+#include "app/notebook/run_plan.h"
 #include "app/plan_charge.h"
 
 namespace vialkeeper::app {
@@ -137,20 +139,6 @@ void scale(ComponentRecord& component, double factor) {
         &component.target_mg, &component.target_uL}) {
     if (*number) **number *= factor;
   }
-}
-
-ComponentRecord plannedRecord(const charge::ComponentPlan& plan,
-                              const charge::ComponentCharge& charge, int position) {
-  ComponentRecord record{.position = position,
-                         .key = plan.key,
-                         .role = std::string(toText(plan.role)),
-                         .name = plan.name};
-  if (charge.amount_mol) record.planned_mmol = charge.amount_mol->value() * 1e3;
-  record.planned_molPercent = charge.molPercent;
-  if (charge.concentration) record.planned_mol_L = charge.concentration->molPerLitre();
-  if (charge.targetMass) record.target_mg = charge.targetMass->milligrams();
-  if (charge.targetVolume) record.target_uL = charge.targetVolume->microlitres();
-  return record;
 }
 
 }  // namespace

@@ -103,6 +103,7 @@ class LogWriter {
     if (m_run.person == "KW" && gauge_bar > 0.15 && m_random.once(0.04)) {
       const std::size_t wrong =
           say(hour, fmt::format("p {:.1f} bar {:.0f} C", gauge_bar * 10.0, celsius));
+      m_log.entries[wrong].accepted = true;
       correct(wrong, hour + 2 * kMinute, line, "decimal point");
     } else {
       say(hour, line);

@@ -150,12 +150,15 @@ class StepWriter : public std::enable_shared_from_this<StepWriter> {
     if (!current) return std::unexpected(current.error());
     LogRequest request{.line = entry.line, .accepted = entry.accepted, .reason = entry.reason};
     ++m_summary.events;
-    if (entry.corrects)
-      return withoutValue(
-          correctEvent(desk, *current, static_cast<int>(*entry.corrects) + 1, request));
-    if (entry.happened_h != entry.written_h)
+    if (!entry.corrects && entry.happened_h != entry.written_h)
       request.at = demoTimeText(laterBy(m_lamp, entry.happened_h), written);
-    return withoutValue(logLine(desk, *current, request));
+    const auto logged =
+        entry.corrects
+            ? correctEvent(desk, *current, static_cast<int>(*entry.corrects) + 1, request)
+            : logLine(desk, *current, request);
+    if (!logged) return std::unexpected(logged.error());
+    if (logged->questions.empty()) return {};
+    return askedFault(m_run.code, logged->questions.front().what, logged->questions.front().ask);
   }
 
   void outcome() {

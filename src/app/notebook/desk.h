@@ -37,11 +37,17 @@ struct Desk {
 /// Whether these are initials: 1 to 8 capital letters and digits, a letter first.
 [[nodiscard]] bool areInitials(std::string_view text);
 
-/// Who works: the initials that were given, else the only person of the notebook.
-/// Fault: initials that are none (1 to 8 capital letters and digits), or nobody named where there
-/// are several or none.
+/// Whether initials that a notebook does not know may be those of somebody new.
+enum class Newcomer { kQuestioned, kWelcome };
+
+/// Who works: the initials that were given, else the only person of the notebook. A notebook that
+/// knows nobody takes the first initials without question.
+/// Fault: initials that are none (1 to 8 capital letters and digits), initials that a notebook with
+/// people does not know unless a newcomer is welcome, or nobody named where there are several or
+/// none.
 [[nodiscard]] Checked<std::string> whoWorks(Notebook& notebook,
-                                            const std::optional<std::string>& given);
+                                            const std::optional<std::string>& given,
+                                            Newcomer newcomer = Newcomer::kQuestioned);
 
 /// A fault of what was asked, at a place.
 [[nodiscard]] std::unexpected<text::Faults> askedFault(std::string field, std::string what,

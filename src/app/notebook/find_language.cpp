@@ -46,6 +46,13 @@ class Parser {
       return textFault(m_scanner.at, 1, "this parenthesis was never opened",
                        fmt::format("take it away, or {}", kLiteralAdvice));
     }
+    m_scanner.at = 0;
+    m_scanner.skipBlanks();
+    if (conditions->empty() && !m_scanner.atEnd() && !m_asYouType) {
+      return textFault(m_scanner.at, m_scanner.text.size() - m_scanner.at,
+                       "this asks for nothing: there is no letter and no figure in it",
+                       "write a word or a field, or nothing at all for every run");
+    }
     return ParsedQuery{std::move(*conditions)};
   }
 
@@ -272,6 +279,12 @@ Reading<void> Parser::parseTerm(ParsedConditions& conditions, GatheredWords& wor
   if (*dates) {
     conditions.push_back({MeasureCondition{Measure::kDate, **dates}});
     return {};
+  }
+  if (const auto stray = strayLoading(m_scanner)) {
+    return textFault(stray->offset, stray->length, "how much of which substance",
+                     fmt::format("write it behind a role and a name, such as acid:\"pivalic acid\" "
+                                 "{}, or {}",
+                                 loadingRange().example, kLiteralAdvice));
   }
   return parseWord(conditions, words);
 }

@@ -378,6 +378,27 @@ ScanResult<FoundRange> scanRange(FindScanner& scanner, const RangeForm& form) {
   return *read;
 }
 
+std::optional<TextRange> strayLoading(const FindScanner& scanner) {
+  FindScanner behind = scanner;
+  const bool isCompared = behind.comparison() != Comparison::kNone;
+  const WrittenEnd first = scanEnd(behind);
+  behind.at = first.end;
+  bool isBetween = behind.skipDots();
+  if (!isBetween && first.isThere()) {
+    behind.skipBlanks();
+    const std::size_t sign = dash(behind).size();
+    behind.at += sign;
+    behind.skipBlanks();
+    isBetween = sign > 0 && !behind.atEnd() && isDigit(behind.text[behind.at]);
+  }
+  if (!isCompared && !isBetween) return std::nullopt;
+  const WrittenEnd last = isBetween ? scanEnd(behind) : first;
+  const units::Unit* unit = last.known != nullptr ? last.known : first.known;
+  const std::vector<Kind> kinds = loadingRange().kinds;
+  if (unit == nullptr || std::ranges::find(kinds, unit->kind) == kinds.end()) return std::nullopt;
+  return TextRange{scanner.at, std::max(first.end, last.end) - scanner.at};
+}
+
 bool endsWithinRange(FindScanner scanner) {
   while (true) {
     scanner.skipBlanks();

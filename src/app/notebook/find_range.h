@@ -41,6 +41,11 @@ using ScanResult = std::expected<std::optional<T>, text::TextFault>;
 /// uses a dash.
 [[nodiscard]] ScanResult<FoundRange> scanRange(FindScanner& scanner, const RangeForm& form);
 
+/// The place of a loading that stands by itself, as a range or comparison (`5..20 mol%`, `5-20
+/// mol%`,
+/// `>5 mol%`), or nothing. A lone `5 mol%` may be anybody's text.
+[[nodiscard]] std::optional<TextRange> strayLoading(const FindScanner& scanner);
+
 /// Reads days, months or years and ranges of them as milliseconds of the local clock.
 /// With `mayBeAbsent` only what looks like a month or day is taken.
 [[nodiscard]] ScanResult<Interval> scanDates(FindScanner& scanner, bool mayBeAbsent);

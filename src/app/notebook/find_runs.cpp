@@ -5,6 +5,9 @@
 #include <fmt/format.h>
 
 #include <memory>
+#include <optional>
+#include <utility>
+#include <vector>
 
 #include "app/notebook/find_language.h"
 #include "app/notebook/fold_name.h"
@@ -30,8 +33,8 @@ class NotebookResolver final : public SubstanceResolver {
 
   std::vector<RowNumber> numbersByNameBeginning(std::string_view folded) override {
     std::vector<RowNumber> numbers;
-    for (const auto& [name, n] : kept(m_notebook.substanceNames())) {
-      if (foldName(name).starts_with(folded)) numbers.push_back(n);
+    for (const auto& [name, n] : foldedNames()) {
+      if (name.starts_with(folded)) numbers.push_back(n);
     }
     return numbers;
   }
@@ -78,8 +81,17 @@ class NotebookResolver final : public SubstanceResolver {
     return {};
   }
 
+  /// Every name and synonym folded, worked out once for all beginnings of a search.
+  const std::vector<std::pair<std::string, RowNumber>>& foldedNames() {
+    if (m_folded) return *m_folded;
+    m_folded = kept(m_notebook.substanceNames());
+    for (auto& [name, n] : *m_folded) name = foldName(name);
+    return *m_folded;
+  }
+
   Notebook& m_notebook;
   text::Faults m_faults;
+  std::optional<std::vector<std::pair<std::string, RowNumber>>> m_folded;
 };
 
 std::unexpected<text::Faults> queryFault(const text::TextFault& fault, std::string_view text) {

@@ -11,6 +11,7 @@
 #include "app/notebook/log_time.h"
 #include "app/notebook/run_life.h"
 #include "app/text_files.h"
+#include "charge/plan_reader.h"
 #include "text/text_fault.h"
 #include "text/utf8.h"
 
@@ -88,10 +89,34 @@ Checked<LoggedEntry> write(const Desk& desk, const RunRecord& run, const Action&
     return changed.state == run.state ? Checked<void>{} : writing.changeRun(changed);
   });
   if (!done) return std::unexpected(done.error());
-  const auto events = numberedEvents(desk.notebook, run);
-  if (!events) return std::unexpected(events.error());
   entry.event.n = n;
-  return LoggedEntry{{numberOf(*events, n), entry.event}, entry.sentence, late};
+  return LoggedEntry{{}, std::move(entry.event), std::move(entry.sentence), late};
+}
+
+/// The liquid of the plan less the samples and with what was added.
+Checked<units::Volume> liquidAfter(Notebook& notebook, const RunRecord& run) {
+  const auto events = notebook.events(run.n);
+  if (!events) return std::unexpected(events.error());
+  double liquid_uL = run.liquid_mL * 1e3;
+  for (const EventRecord& event : *events) {
+    if (event.supersededBy != 0 || !event.volume_uL) continue;
+    if (event.kind == event_kind::kLiquidSample) liquid_uL -= *event.volume_uL;
+    if (event.kind == event_kind::kLiquidAdded) liquid_uL += *event.volume_uL;
+  }
+  return units::Volume::fromMicrolitres(std::max(0.0, liquid_uL));
+}
+
+/// What is odd about an entry; the notebook is asked for what the entry can be held against only.
+Checked<std::vector<LogSlip>> slipsOf(Notebook& notebook, const RunRecord& run,
+                                      const EventRecord& event) {
+  const bool ofLiquid =
+      event.kind == event_kind::kLiquidSample || event.kind == event_kind::kLiquidAdded;
+  if (!event.pressure_bar && !event.temperature_C && !event.volume_uL)
+    return logSlips({.created = run.created}, event);
+  const auto vial =
+      vialContext(notebook, run, ofLiquid ? LiquidNow::kFollowed : LiquidNow::kAsPlanned);
+  if (!vial) return std::unexpected(vial.error());
+  return logSlips(*vial, event);
 }
 
 }  // namespace
@@ -110,6 +135,28 @@ Checked<std::vector<NumberedEvent>> numberedEvents(Notebook& notebook, const Run
   return numbered;
 }
 
+Checked<VialContext> vialContext(Notebook& notebook, const RunRecord& run, LiquidNow liquid) {
+  VialContext context{.liquid = units::Volume::fromMillilitres(run.liquid_mL),
+                      .created = run.created};
+  if (run.temperature_C) context.planned = units::Temperature::fromCelsius(*run.temperature_C);
+  if (liquid == LiquidNow::kFollowed) {
+    const auto now = liquidAfter(notebook, run);
+    if (!now) return std::unexpected(now.error());
+    context.liquid = *now;
+  }
+  const auto planText = notebook.attachment(run.plan);
+  if (!planText) return std::unexpected(planText.error());
+  // A plan that cannot be read says nothing of the vial; the line is kept all the same.
+  const auto plan = charge::readPlan(*planText, run.code);
+  if (!plan) return context;
+  if (plan->seal) context.ambient = plan->seal->ambient;
+  if (!plan->vial) return context;
+  context.vial = plan->vial->volume;
+  context.displaced = plan->vial->displaced;
+  context.ratedGauge = plan->vial->ratedGauge;
+  return context;
+}
+
 Checked<LoggedEntry> logLine(const Desk& desk, const RunRecord& run, const LogRequest& request) {
   if (const auto sound = checkLine(request.line); !sound) return std::unexpected(sound.error());
   const Deed deed = run.state == RunState::kSealed ? Deed::kAddAddendum : Deed::kLog;
@@ -122,6 +169,11 @@ Checked<LoggedEntry> logLine(const Desk& desk, const RunRecord& run, const LogRe
   if (!time) return std::unexpected(time.error());
   entry->event.at = time->at;
   entry->event.logged = action.author.at;
+  if (!request.accepted && run.state != RunState::kSealed) {
+    auto slips = slipsOf(desk.notebook, run, entry->event);
+    if (!slips) return std::unexpected(slips.error());
+    if (!slips->empty()) return LoggedEntry{*std::move(slips), {}, {}};
+  }
   return write(desk, run, action, *std::move(entry), time->late);
 }
 
@@ -140,6 +192,14 @@ Checked<LoggedEntry> correctEvent(const Desk& desk, const RunRecord& run, int nu
   entry->event.at = time->at;
   entry->event.logged = action.author.at;
   entry->event.supersedes = original->event.n;
+  if (!request.accepted) {
+    auto slips = slipsOf(desk.notebook, run, entry->event);
+    if (!slips) return std::unexpected(slips.error());
+    // A time that was taken over from the original was answered for with that.
+    if (!request.at)
+      std::erase_if(*slips, [](const LogSlip& s) { return s.kind == LogSlipKind::kTime; });
+    if (!slips->empty()) return LoggedEntry{*std::move(slips), {}, {}};
+  }
   return write(desk, run, action, *std::move(entry), time->late);
 }
 

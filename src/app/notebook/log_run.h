@@ -8,6 +8,7 @@
 
 #include "app/notebook/desk.h"
 #include "app/notebook/log_line.h"
+#include "app/notebook/log_slip.h"
 
 namespace vialkeeper::app {
 
@@ -26,19 +27,29 @@ struct NumberedEvent {
 struct LogRequest {
   std::string line;
   std::optional<std::string> at = {};  ///< when it happened, as a person writes it; nothing: now
-  bool accepted = false;               ///< keep a doubtful line as an observation
+  bool accepted = false;  ///< keep a doubtful line as an observation, a likely slip as it is
   std::string reason = {};
 };
 
 struct LoggedEntry {
-  NumberedEvent entry;
+  std::vector<LogSlip> questions;  ///< if there are any, nothing was logged
+  EventRecord event;
   std::string sentence;  ///< how it was understood
   bool late = false;     ///< back-dated by more than a day
 };
 
-/// Logs one line. A line that looks like a shorthand but cannot be read is a fault that points at
-/// the place, unless it is accepted as text. `lamp on` moves a planned or charged run to
-/// irradiating; a photo is kept byte for byte; a sealed run takes addenda only.
+/// How much of the vial's liquid is known.
+enum class LiquidNow { kAsPlanned, kFollowed };
+
+/// What a run's lines are held against (log_slip.h). Followed, the liquid is that of the plan less
+/// the samples and with what was added; for that all entries are read.
+[[nodiscard]] Checked<VialContext> vialContext(Notebook& notebook, const RunRecord& run,
+                                               LiquidNow liquid);
+
+/// Logs one line, reading of the run only what that line needs. What can hardly be (log_slip.h) is
+/// questioned unless it is accepted. A line that looks like a shorthand but cannot be read is a
+/// fault that points at the place, unless it is accepted as text. `lamp on` moves a planned or
+/// charged run to irradiating; a photo is kept byte for byte; a sealed run takes addenda only.
 [[nodiscard]] Checked<LoggedEntry> logLine(const Desk& desk, const RunRecord& run,
                                            const LogRequest& request);
 

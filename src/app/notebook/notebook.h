@@ -72,12 +72,29 @@ struct Finding {
   std::string what;
 };
 
+/// The last link of the chain: what must be known from elsewhere to notice that links were cut off.
+struct ChainHead {
+  std::int64_t seq = 0;   ///< of the revision; 0 where there is none
+  std::string hash = {};  ///< lower-case hexadecimal
+};
+
+/// What `verify` compares the chain with, besides looking at the file itself.
+struct VerifyRequest {
+  std::optional<ChainHead> head = {};  ///< as somebody wrote it down; the hash may be its beginning
+  std::string against = {};            ///< an earlier copy of the notebook
+};
+
 /// What `verify` looked at and found.
 struct VerifyReport {
   std::int64_t revisions = 0;
   std::int64_t records = 0;
   std::int64_t attachments = 0;
   std::int64_t seals = 0;
+  ChainHead head = {};
+  std::optional<std::int64_t> compared =
+      {};                                    ///< revisions of the earlier copy that are in this one
+  bool isNewerForm = false;                  ///< the file's form is unknown to this program
+  std::vector<std::string> notChecked = {};  ///< what could not be looked at, and why
   std::vector<Finding> findings;
 };
 
@@ -145,7 +162,8 @@ class Notebook {
   /// Makes a search that runs in another thread stop soon, with a fault of code `interrupted` in
   /// its field. The only function that may be called from another thread.
   virtual void interrupt() noexcept = 0;
-  virtual Checked<VerifyReport> verify() = 0;
+  /// Fault: the earlier copy cannot be opened.
+  virtual Checked<VerifyReport> verify(const VerifyRequest& request) = 0;
   /// A copy that was opened again and checked before it got its name. Fault: the file is there
   /// already.
   virtual Checked<void> backup(const std::string& file) = 0;
@@ -155,6 +173,8 @@ class Notebook {
   /// Fills this notebook, which must be empty, from such a folder.
   virtual Checked<void> importAll(const std::string& folder) = 0;
 
+  /// Fault: the notebook is open for reading only, why, and what would let it be written.
+  [[nodiscard]] virtual Checked<void> mayWrite() const = 0;
   /// Why the notebook is open for reading only; empty where it may be written.
   [[nodiscard]] virtual std::string readOnlyReason() const = 0;
 };

@@ -7,6 +7,7 @@
 #include <algorithm>
 
 #include "app/notebook/component_records.h"
+#include "app/notebook/kept_title.h"
 #include "app/notebook/shelf_places.h"
 #include "app/sheet_parts.h"
 #include "charge/plan_edit.h"
@@ -127,6 +128,7 @@ Checked<AddedRun> addRun(const Desk& desk, const NewRun& wanted) {
         {"code-ignored", "the plan's own code is not used: the notebook gives the next free one",
          "code"});
   }
+  noteKeptTitle(wanted, planned->plan, added.notices);
   added.run.aim = wanted.aim;
   added.run.person = desk.person;
   added.run.created = desk.clock.now();

@@ -52,7 +52,7 @@ struct NewRun {
 struct AddedRun {
   RunRecord run;
   std::vector<std::string> newSubstances;  ///< put on the shelf
-  text::Notices notices;                   ///< near misses on the shelf, and those of the charge
+  text::Notices notices;  ///< a title that was kept, near misses, and those of the charge
 };
 
 /// Adds a run from a plan: sets the overrides, works out the charge, matches every substance with

@@ -33,14 +33,25 @@ Checked<void> signInside(const Desk& desk, Signer& signer, Writing& writing, con
 
 }  // namespace
 
-Checked<void> makeSigningKey(const Desk& desk, Signer& signer, const std::string& passphrase) {
+Checked<bool> makeSigningKey(const Desk& desk, Signer& signer, const std::string& passphrase,
+                             OldKey old) {
+  const auto earlier = desk.notebook.signingKey(desk.person);
+  if (!earlier) return std::unexpected(earlier.error());
+  if (*earlier && old == OldKey::kKept) {
+    return askedFault("key", fmt::format("{} has a signing key already", desk.person),
+                      "keep it, or replace it with --yes: from then on the new one signs, and "
+                      "older seals stay valid under the key they were made with");
+  }
   auto key = signer.makeKey(desk.person, passphrase);
   if (!key) return std::unexpected(key.error());
-  return desk.notebook.act(desk.action("key new"), [&](Writing& writing) -> Checked<void> {
-    const auto added = writing.addSigningKey(*key);
-    if (!added) return std::unexpected(added.error());
-    return {};
-  });
+  const auto done =
+      desk.notebook.act(desk.action("key new"), [&](Writing& writing) -> Checked<void> {
+        const auto added = writing.addSigningKey(*key);
+        if (!added) return std::unexpected(added.error());
+        return {};
+      });
+  if (!done) return std::unexpected(done.error());
+  return earlier->has_value();
 }
 
 Checked<void> sealRun(const Desk& desk, Signer& signer, const RunRecord& run,
@@ -71,10 +82,12 @@ Checked<void> countersignRun(const Desk& desk, Signer& signer, const RunRecord& 
   if (!seals) return std::unexpected(seals.error());
   const auto signedBefore = std::ranges::find(*seals, desk.person, &SealRecord::person);
   if (signedBefore != seals->end()) {
-    return askedFault(
-        run.code,
-        fmt::format("{} has signed this run already, as {}", desk.person, signedBefore->meaning),
-        "a witness is somebody else");
+    const bool isAuthor = signedBefore->meaning == "author";
+    return askedFault(run.code,
+                      isAuthor ? fmt::format("{} sealed this run", desk.person)
+                               : fmt::format("{} has countersigned this run already", desk.person),
+                      isAuthor ? "a witness is somebody else: say who, --person"
+                               : "once is enough; another witness may still sign");
   }
   const auto key = keyOf(desk);
   if (!key) return std::unexpected(key.error());

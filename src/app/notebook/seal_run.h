@@ -9,10 +9,15 @@
 
 namespace vialkeeper::app {
 
-/// Makes a signing key for the person at the desk. A later key takes the place of an earlier one
-/// for signing; what the earlier one signed stays valid.
-[[nodiscard]] Checked<void> makeSigningKey(const Desk& desk, Signer& signer,
-                                           const std::string& passphrase);
+/// Whether a new key may take the place of one that the person has.
+enum class OldKey { kKept, kReplaced };
+
+/// Makes a signing key for the person at the desk. Where one may be replaced, the later key takes
+/// its place for signing; what the earlier one signed stays valid under it. Fault: the person has a
+/// key that is to be kept.
+/// Gives whether there was an earlier one.
+[[nodiscard]] Checked<bool> makeSigningKey(const Desk& desk, Signer& signer,
+                                           const std::string& passphrase, OldKey old);
 
 /// Seals a closed run: from then on it takes addenda only. The seal covers the run and all it links
 /// to. Fault: the run is not closed, the person has no key, the passphrase does not open it.

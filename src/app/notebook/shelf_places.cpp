@@ -41,12 +41,8 @@ Checked<ShelfPlace> placeOnShelf(Notebook& notebook, const ComponentPlan& compon
   const auto match = matchSubstance(notebook, *record);
   if (!match) return std::unexpected(match.error());
   if (!match->same.empty()) return ShelfPlace{match->same.front().n, {}};
-  if (!match->nearMisses.empty()) {
-    notices.push_back({"near-miss",
-                       fmt::format("{} is new on the shelf, where {} looks like it", component.name,
-                                   match->nearMisses.front()),
-                       "component." + component.key});
-  }
+  if (auto notice = nearMissNotice(*match, component.name, "component." + component.key))
+    notices.push_back(*std::move(notice));
   return ShelfPlace{0, *std::move(record)};
 }
 

@@ -168,6 +168,15 @@ Checked<SubstanceMatch> matchSubstance(Notebook& notebook, const SubstanceRecord
   return match;
 }
 
+std::optional<text::Notice> nearMissNotice(const SubstanceMatch& match, std::string_view name,
+                                           std::string at) {
+  if (!match.same.empty() || match.nearMisses.empty()) return std::nullopt;
+  return text::Notice{
+      "near-miss",
+      fmt::format("{} is new on the shelf, where {} looks like it", name, match.nearMisses.front()),
+      std::move(at)};
+}
+
 Checked<SubstanceMatch> lookUpSubstance(Notebook& notebook, std::string_view nameOrCas) {
   SubstanceMatch match;
   auto byCas = notebook.substanceByCas(nameOrCas);
@@ -186,9 +195,9 @@ Checked<SubstanceMatch> lookUpSubstance(Notebook& notebook, std::string_view nam
   return match;
 }
 
-Checked<SubstanceRecord> addSubstanceCard(const Desk& desk, const SubstanceDraft& draft) {
+Checked<AddedSubstance> addSubstanceCard(const Desk& desk, const SubstanceDraft& draft) {
   auto record = describeSubstance(draft);
-  if (!record) return record;
+  if (!record) return std::unexpected(record.error());
   const auto match = matchSubstance(desk.notebook, *record);
   if (!match) return std::unexpected(match.error());
   if (!match->same.empty()) {
@@ -206,7 +215,10 @@ Checked<SubstanceRecord> addSubstanceCard(const Desk& desk, const SubstanceDraft
         return {};
       });
   if (!done) return std::unexpected(done.error());
-  return record;
+  AddedSubstance added{*std::move(record), {}};
+  if (auto notice = nearMissNotice(*match, draft.name, "name"))
+    added.notices.push_back(*std::move(notice));
+  return added;
 }
 
 }  // namespace vialkeeper::app

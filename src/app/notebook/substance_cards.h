@@ -2,12 +2,14 @@
 // SPDX-License-Identifier: GPL-3.0-or-later
 #pragma once
 
+#include <optional>
 #include <string>
 #include <string_view>
 #include <vector>
 
 #include "app/notebook/desk.h"
 #include "app/notebook/notebook.h"
+#include "text/notice.h"
 
 namespace vialkeeper::app {
 
@@ -41,13 +43,24 @@ struct SubstanceMatch {
 [[nodiscard]] Checked<SubstanceMatch> matchSubstance(Notebook& notebook,
                                                      const SubstanceRecord& substance);
 
+/// The notice `near-miss` of a substance that is new on the shelf though a name there looks like
+/// it.
+[[nodiscard]] std::optional<text::Notice> nearMissNotice(const SubstanceMatch& match,
+                                                         std::string_view name, std::string at);
+
 /// The substances that a person may mean by a name, CAS number or synonym.
 [[nodiscard]] Checked<SubstanceMatch> lookUpSubstance(Notebook& notebook,
                                                       std::string_view nameOrCas);
 
+/// A substance that was put on the shelf.
+struct AddedSubstance {
+  SubstanceRecord substance;
+  text::Notices notices;  ///< `near-miss`: a name on the shelf that looks like it
+};
+
 /// Puts a substance on the shelf. Fault: it is there already.
-[[nodiscard]] Checked<SubstanceRecord> addSubstanceCard(const Desk& desk,
-                                                        const SubstanceDraft& draft);
+[[nodiscard]] Checked<AddedSubstance> addSubstanceCard(const Desk& desk,
+                                                       const SubstanceDraft& draft);
 
 /// Changes a card as it was read (its version is checked). Faults as describeSubstance's.
 [[nodiscard]] Checked<SubstanceRecord> changeSubstanceCard(const Desk& desk,

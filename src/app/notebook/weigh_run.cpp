@@ -23,10 +23,11 @@ Checked<WeighedComponent> weighComponent(const Desk& desk, const RunRecord& run,
   if (!accepted) {
     auto questions =
         questionWeighing(**component, *sheet->planned.charge.find(key), *actual, quantity);
-    if (!questions.empty()) return WeighedComponent{std::move(questions), *std::move(sheet)};
+    if (!questions.empty()) return WeighedComponent{std::move(questions), *std::move(sheet), {}};
   }
   const Action action = desk.action("weigh", reason);
   const auto record = std::ranges::find(sheet->components, key, &ComponentRecord::key);
+  const std::string before = record->actualText;
   takeActual(*record, *actual, quantity, action.author);
   if (const auto judged =
           judgeAll(sheet->planned.plan, sheet->planned.substances, sheet->components);
@@ -45,7 +46,7 @@ Checked<WeighedComponent> weighComponent(const Desk& desk, const RunRecord& run,
   if (!current) return std::unexpected(current.error());
   auto reloaded = loadRun(desk.notebook, *current);
   if (!reloaded) return std::unexpected(reloaded.error());
-  return WeighedComponent{{}, *std::move(reloaded)};
+  return WeighedComponent{{}, *std::move(reloaded), before};
 }
 
 }  // namespace vialkeeper::app

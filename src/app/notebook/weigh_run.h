@@ -16,6 +16,7 @@ namespace vialkeeper::app {
 struct WeighedComponent {
   std::vector<SlipQuestion> questions;  ///< if there are any, nothing was recorded
   RunSheet sheet;                       ///< the run with what is recorded now
+  std::string before = {};              ///< what was recorded before, as typed; empty: nothing
 };
 
 /// Records what the balance or pipette gave for one component, in place of what was recorded before

@@ -4,6 +4,7 @@
 #include <GraphMol/Fingerprints/Fingerprints.h>
 #include <GraphMol/MolOps.h>
 #include <GraphMol/Substruct/SubstructMatch.h>
+#include <RDGeneral/versions.h>
 
 #include <algorithm>
 #include <map>
@@ -12,6 +13,7 @@
 #include <utility>
 #include <vector>
 
+#include "chem/fingerprint.h"
 #include "chem/rdkit/molecule.h"
 #include "chem/rdkit/search_query.h"
 #include "chem/rdkit/structure_module.h"
@@ -20,13 +22,13 @@ namespace vialkeeper::chem {
 namespace {
 
 std::string patternFingerprint(const RDKit::ROMol& mol) {
-  constexpr unsigned int kBits = 2048;
+  constexpr auto kBits = static_cast<unsigned int>(8 * kFingerprintBytes);
   const std::unique_ptr<ExplicitBitVect> bits(RDKit::PatternFingerprintMol(mol, kBits));
   std::string bytes(kBits / 8, '\0');
   for (unsigned int i = 0; i < kBits; ++i) {
     if (bits->getBit(i)) bytes[i / 8] = static_cast<char>(bytes[i / 8] | (1 << (i % 8)));
   }
-  return bytes;
+  return bytes + RDKit::rdkitVersion;
 }
 
 using ElementCounts = std::map<int, int>;  // atoms by atomic number

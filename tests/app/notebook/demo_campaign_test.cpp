@@ -95,11 +95,13 @@ TEST_CASE("a line of the campaign's logs is read without doubt, or kept as text 
       const DemoEntry& entry = run.log.entries[i];
       const ReadEntry read = readLogLine(entry.line);
       INFO(run.spec.recipe.title << ": " << entry.line);
-      CHECK(read.doubt.has_value() == entry.accepted);
+      // Besides what cannot be read, a pressure with its decimal sign in the wrong place.
+      if (read.doubt) CHECK(entry.accepted);
+      if (entry.accepted && !read.doubt) CHECK(read.event.kind == "pressure");
       const bool superseded = std::ranges::any_of(
           run.log.entries, [i](const DemoEntry& other) { return other.corrects == i; });
       if (entry.accepted) CHECK(superseded);
-      doubted += entry.accepted ? 1U : 0U;
+      doubted += read.doubt ? 1U : 0U;
       corrected += superseded ? 1U : 0U;
     }
   }
