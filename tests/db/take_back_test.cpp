@@ -31,15 +31,14 @@ TEST_CASE("a withdrawn entry stays to be seen and counts no more", "[app][log][r
   CHECK(found(work, "foaming") == 1);
   const auto withdrawn =
       good(app::withdrawEntry(work.desk(), work.run(), 2, "the other vial was foaming"));
-  CHECK(withdrawn.entry.number == 3);
-  CHECK(withdrawn.entry.event.kind == app::event_kind::kWithdrawn);
+  CHECK(withdrawn.event.kind == app::event_kind::kWithdrawn);
   CHECK(withdrawn.sentence == "entry 2 withdrawn: 'the other vial was foaming'");
   const auto events = good(app::numberedEvents(work.notebook(), work.run()));
   REQUIRE(events.size() == 3);
   const auto original = std::ranges::find(events, 2, &app::NumberedEvent::number);
   CHECK(original->event.raw == "note foaming heavily");
-  CHECK(original->event.supersededBy == withdrawn.entry.event.n);
-  CHECK(withdrawn.entry.event.at.utc == original->event.at.utc);
+  CHECK(original->event.supersededBy == withdrawn.event.n);
+  CHECK(withdrawn.event.at.utc == original->event.at.utc);
   // Neither the entry nor the reason is found among the observations.
   CHECK(found(work, "foaming") == 0);
   CHECK(tests::findings(work.notebook()).empty());

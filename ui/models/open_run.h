@@ -35,6 +35,7 @@ struct Outcome {
   bool done = false;
   text::Faults faults = {};
   std::vector<app::SlipQuestion> questions = {};  ///< answer by calling again with `accepted`
+  std::vector<app::LogSlip> slips = {};  ///< the same of a line of the log
   bool conflict = false;                          ///< told by OpenRun::conflictFound
 
   [[nodiscard]] static Outcome success() { return {.done = true}; }

@@ -24,11 +24,20 @@ std::optional<std::string> timeTyped(const QString& at) {
   return at.isEmpty() ? std::nullopt : std::optional(toUtf8(at));
 }
 
+/// The number of an entry in its run's log; 0 where it is not there.
+int numberOf(app::Notebook& notebook, const app::RunRecord& run, const app::EventRecord& event) {
+  const auto events = app::numberedEvents(notebook, run);
+  if (!events) return 0;
+  const auto found = std::ranges::find_if(
+      *events, [&](const app::NumberedEvent& each) { return each.event.n == event.n; });
+  return found == events->end() ? 0 : found->number;
+}
+
 /// Takes the entry back.
 auto withdrawing(app::Desk desk, EntryInLog entry, const char* why) {
   return [desk, entry, why](const app::RunRecord& present) {
     auto withdrawn = app::withdrawEntry(desk, present, *entry, why);
-    if (withdrawn) *entry = withdrawn->entry.number;
+    if (withdrawn) *entry = numberOf(desk.notebook, present, withdrawn->event);
     return withdrawn;
   };
 }
@@ -38,7 +47,7 @@ auto replacing(app::Desk desk, EntryInLog entry, app::LogRequest request, const 
   request.reason = why;
   return [desk, entry, request](const app::RunRecord& present) {
     auto corrected = app::correctEvent(desk, present, *entry, request);
-    if (corrected) *entry = corrected->entry.number;
+    if (corrected) *entry = numberOf(desk.notebook, present, corrected->event);
     return corrected;
   };
 }
@@ -52,8 +61,9 @@ Outcome OpenRun::log(const QString& line, const QString& at, const CommandOption
                                 .reason = toUtf8(options.reason)};
   const auto logged = app::logLine(m_link.desk(), run(), request);
   if (!logged) return Outcome::failure(logged.error());
-  const auto entry = std::make_shared<int>(logged->entry.number);
-  const app::LogRequest written = asItWas(logged->entry.event);
+  if (!logged->questions.empty()) return {.slips = logged->questions};
+  const auto entry = std::make_shared<int>(numberOf(m_link.notebook(), run(), logged->event));
+  const app::LogRequest written = asItWas(logged->event);
   m_history.add(
       {tr("log “%1”").arg(line.left(40)),
        [this, n = run().n, entry] {
@@ -76,8 +86,9 @@ Outcome OpenRun::correct(int number, const QString& line, const QString& at,
                                 .reason = toUtf8(options.reason)};
   const auto corrected = app::correctEvent(m_link.desk(), run(), number, request);
   if (!corrected) return Outcome::failure(corrected.error());
-  const auto entry = std::make_shared<int>(corrected->entry.number);
-  const app::LogRequest later = asItWas(corrected->entry.event);
+  if (!corrected->questions.empty()) return {.slips = corrected->questions};
+  const auto entry = std::make_shared<int>(numberOf(m_link.notebook(), run(), corrected->event));
+  const app::LogRequest later = asItWas(corrected->event);
   m_history.add(
       {tr("correct entry %1").arg(number),
        [this, n = run().n, entry, earlier] {
@@ -96,7 +107,7 @@ Outcome OpenRun::withdraw(int number, const CommandOptions& options) {
   const auto withdrawn =
       app::withdrawEntry(m_link.desk(), run(), number, toUtf8(options.reason));
   if (!withdrawn) return Outcome::failure(withdrawn.error());
-  const auto entry = std::make_shared<int>(withdrawn->entry.number);
+  const auto entry = std::make_shared<int>(numberOf(m_link.notebook(), run(), withdrawn->event));
   m_history.add(
       {tr("withdraw entry %1").arg(number),
        [this, n = run().n, entry, earlier] {

@@ -44,8 +44,11 @@ void SealWork::start(Work work, const QString& sentence) {
 
 void SealWork::makeKey(const QString& passphrase) {
   start(
-      [passphrase = toUtf8(passphrase)](const app::Desk& desk, app::Signer& signer) {
-        return app::makeSigningKey(desk, signer, passphrase);
+      [passphrase = toUtf8(passphrase)](const app::Desk& desk,
+                                        app::Signer& signer) -> text::Checked<void> {
+        const auto made = app::makeSigningKey(desk, signer, passphrase, app::OldKey::kKept);
+        if (!made) return std::unexpected(made.error());
+        return {};
       },
       tr("%1 has a signing key now. Without its passphrase nobody can sign for %1.")
           .arg(m_link.person()));

@@ -60,12 +60,6 @@ Checked<std::string> photoBytes(const std::string& file) {
   return readFile(file);
 }
 
-int numberOf(const std::vector<NumberedEvent>& events, RowNumber n) {
-  const auto found =
-      std::ranges::find_if(events, [n](const NumberedEvent& entry) { return entry.event.n == n; });
-  return found == events.end() ? 0 : found->number;
-}
-
 /// Writes the event, and the state it implies, in one action.
 Checked<LoggedEntry> write(const Desk& desk, const RunRecord& run, const Action& action,
                            ReadEntry entry, bool late) {

@@ -64,13 +64,8 @@ Checked<LoggedEntry> withdrawEntry(const Desk& desk, const RunRecord& run, int n
     return {};
   });
   if (!done) return std::unexpected(done.error());
-  const auto events = numberedEvents(desk.notebook, run);
-  if (!events) return std::unexpected(events.error());
-  const auto written = std::ranges::find_if(
-      *events, [&](const NumberedEvent& entry) { return entry.event.n == event.n; });
   const std::string sentence = fmt::format("entry {} {}", number, eventSentence(event));
-  return LoggedEntry{
-      {written == events->end() ? 0 : written->number, std::move(event)}, sentence, false};
+  return LoggedEntry{.questions = {}, .event = std::move(event), .sentence = sentence};
 }
 
 }  // namespace vialkeeper::app
