@@ -362,8 +362,9 @@ Checked<app::FindResult> SqliteNotebook::find(const app::FindQuery& query,
       if (!parts) return std::unexpected(parts.error());
       result.runs.push_back({*std::move(found), *std::move(parts)});
     }
-    result.matches = static_cast<std::int64_t>(result.runs.size());
-    if (options.count && options.limit != 0 && result.runs.size() >= options.limit) {
+    result.matches = static_cast<std::int64_t>(options.skip + result.runs.size());
+    const bool isPage = options.skip > 0 || result.runs.size() >= options.limit;
+    if (options.count && options.limit != 0 && isPage) {
       const auto counted =
           m_connection->rows(sql.count.sql, std::span<const Cell>(sql.count.cells));
       result.matches =
