@@ -89,7 +89,7 @@ struct Bench {
 
   bool open(const QString& file) {
     window.openNotebook(file);
-    window.show();
+    window.setVisible(true);
     if (window.workspace() == nullptr) return false;
     filter = window.findChild<QLineEdit*>(QStringLiteral("filterLine"));
     table = window.findChild<QTableView*>(QStringLiteral("runsTable"));

@@ -85,7 +85,13 @@ bool FilterLine::eventFilter(QObject* watched, QEvent* event) {
     const auto* key = static_cast<QKeyEvent*>(event);
     return keyPressed(key->key(), key->modifiers()) || QWidget::eventFilter(watched, event);
   }
-  if (event->type() == QEvent::FocusOut) m_list->hide();
+  if (event->type() == QEvent::FocusOut) {
+    // Nothing hangs over the runs while somebody is among them.
+    m_list->hide();
+    m_faultPanel->hide();
+  } else if (event->type() == QEvent::FocusIn) {
+    showFault();
+  }
   return QWidget::eventFilter(watched, event);
 }
 
@@ -164,7 +170,7 @@ void FilterLine::showFault() {
   m_edit->setAccessibleDescription(fault->sentence);
   QAccessibleEvent told(m_edit, QAccessible::DescriptionChanged);
   QAccessible::updateAccessibility(&told);
-  if (!m_list->isVisible()) m_faultPanel->drop();
+  if (!m_list->isVisible() && m_edit->hasFocus()) m_faultPanel->drop();
 }
 
 }  // namespace vialkeeper::ui

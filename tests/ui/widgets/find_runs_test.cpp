@@ -35,7 +35,7 @@ struct WindowBench {
     window->resize(1280, 800);
     window->openNotebook(fixture.demoFile());
     REQUIRE(window->workspace() != nullptr);
-    window->show();
+    window->setVisible(true);
     window->activateWindow();
     REQUIRE(QTest::qWaitForWindowActive(window.get()));
     REQUIRE(rowsAre([](int rows) { return rows > 10; }));

@@ -26,7 +26,7 @@ struct EmptyBench {
     window.createNotebook(fixture.bookFile());
     REQUIRE(window.workspace() != nullptr);
     window.workspace()->link().setPerson(QStringLiteral("KW"));
-    window.show();
+    window.setVisible(true);
     window.activateWindow();
     REQUIRE(QTest::qWaitForWindowActive(&window));
   }
