@@ -181,9 +181,11 @@ Source sourceByRun(const Conjunction& all, const Lead& lead) {
   return source;
 }
 
-SqlText limited(SqlText sql, std::size_t limit) {
-  if (limit == 0) return sql;
-  sql += SqlText{" LIMIT ?", {static_cast<std::int64_t>(limit)}};
+SqlText limited(SqlText sql, const FindOptions& options) {
+  if (options.limit == 0 && options.skip == 0) return sql;
+  const std::int64_t most = options.limit == 0 ? -1 : static_cast<std::int64_t>(options.limit);
+  sql += SqlText{" LIMIT ?", {most}};
+  if (options.skip > 0) sql += SqlText{" OFFSET ?", {static_cast<std::int64_t>(options.skip)}};
   return sql;
 }
 
@@ -191,7 +193,7 @@ SqlText selectInOrder(const Source& source, std::string_view order, const FindOp
   SqlText sql{fmt::format("SELECT {}{} AS n", source.mayRepeat ? "DISTINCT " : "", source.run)};
   sql += source.text;
   sql += fmt::format(" ORDER BY {}", order);
-  return limited(std::move(sql), options.limit);
+  return limited(std::move(sql), options);
 }
 
 /// The newest hits by their words' weight; what is older follows where more is asked for.
@@ -205,13 +207,13 @@ SqlText selectByRank(const Source& source, const FindOptions& options) {
   SqlText sql{"SELECT n FROM (SELECT * FROM ("};
   sql += newest("bm25(run_search) AS score, 0 AS tier", fmt::format("LIMIT {}", kMostRanked));
   sql += ")";
-  if (options.limit == 0 || options.limit > static_cast<std::size_t>(kMostRanked)) {
+  if (options.limit == 0 || options.skip + options.limit > static_cast<std::size_t>(kMostRanked)) {
     sql += " UNION ALL SELECT * FROM (";
     sql += newest("0.0 AS score, 1 AS tier", fmt::format("LIMIT -1 OFFSET {}", kMostRanked));
     sql += ")";
   }
   sql += ") ORDER BY tier, score, n DESC";
-  return limited(std::move(sql), options.limit);
+  return limited(std::move(sql), options);
 }
 
 SqlText countSql(const Source& source) {

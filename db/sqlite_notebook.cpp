@@ -375,9 +375,9 @@ Checked<app::FindResult> SqliteNotebook::find(const app::FindQuery& query,
       if (!parts) return std::unexpected(parts.error());
       result.runs.push_back({*std::move(found), *std::move(parts)});
     }
-    result.matches = static_cast<std::int64_t>(result.runs.size());
-    if (options.count && options.limit != 0 && result.runs.size() >= options.limit)
-      result.matches = counted(sql.count);
+    result.matches = static_cast<std::int64_t>(options.skip + result.runs.size());
+    const bool isPage = options.skip > 0 || result.runs.size() >= options.limit;
+    if (options.count && options.limit != 0 && isPage) result.matches = counted(sql.count);
     return result;
   });
 }

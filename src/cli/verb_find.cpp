@@ -32,25 +32,6 @@ constexpr auto kOrders = {
     std::pair{"rank", app::FindOrder::kRank}, std::pair{"yield", app::FindOrder::kYield},
     std::pair{"code", app::FindOrder::kCode}};
 
-/// What is not solvent, in a few words: `4CzIPN 1 %, pivalic acid 10 %`.
-std::string contents(const app::FoundRun& found) {
-  std::string text;
-  for (const app::ComponentRecord& component : found.components) {
-    if (component.role == "solvent" || component.key == found.run.limitingKey) continue;
-    const auto loading = component.loading_molPercent();
-    text += (text.empty() ? "" : ", ") + component.name;
-    if (loading) text += fmt::format(" {} %", units::toSignificant(*loading, 2));
-  }
-  return text;
-}
-
-std::string yieldText(const app::RunRecord& run) {
-  if (!run.yield_percent) return "";
-  return run.uYield_percent
-             ? fmt::format("{:.3g} ± {:.1g}", *run.yield_percent, *run.uYield_percent)
-             : fmt::format("{:.3g}", *run.yield_percent);
-}
-
 std::string tableText(const app::FindResult& result) {
   TextTable table;
   using enum TextTable::Align;
@@ -59,8 +40,8 @@ std::string tableText(const app::FindResult& result) {
   table.addColumn("yield %", kRight);
   for (const app::FoundRun& found : result.runs) {
     table.addRow({found.run.code, std::string(toText(found.run.state)),
-                  toIsoText(found.run.created).substr(0, 10), found.run.title, contents(found),
-                  yieldText(found.run)});
+                  toIsoText(found.run.created).substr(0, 10), found.run.title, contentsText(found),
+                  app::percentText(found.run.yield_percent, found.run.uYield_percent)});
   }
   const auto shown = static_cast<std::int64_t>(result.runs.size());
   const std::string count = shown < result.matches
@@ -87,7 +68,7 @@ std::string csvText(const app::FindResult& result) {
     const app::RunRecord& run = found.run;
     csv += fmt::format("{},{},{},{},{},{},{},{},{}\r\n", safeCell(run.code), toText(run.state),
                        toIsoText(run.created), safeCell(run.person), safeCell(run.title),
-                       safeCell(run.series), safeCell(contents(found)), number(run.yield_percent),
+                       safeCell(run.series), safeCell(contentsText(found)), number(run.yield_percent),
                        number(run.uYield_percent));
   }
   return csv;

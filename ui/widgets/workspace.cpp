@@ -5,6 +5,7 @@
 #include <QHBoxLayout>
 #include <QLabel>
 #include <QPushButton>
+#include <QShortcut>
 #include <QSplitter>
 #include <QStackedWidget>
 #include <QVBoxLayout>
@@ -66,6 +67,11 @@ Workspace::Workspace(std::unique_ptr<NotebookLink> link, QWidget* parent)
   column->addWidget(m_messages);
   column->addWidget(split, 1);
   connect(m_runs, &RunsTable::runChosen, this, &Workspace::showRun);
+  connect(m_runs, &RunsTable::filterWanted, this, &Workspace::focusFilter);
+  connect(m_filter, &FilterLine::runsWanted, this, &Workspace::focusRuns);
+  // A field that takes text takes the key itself before it becomes a shortcut.
+  auto* slash = new QShortcut(QKeySequence(Qt::Key_Slash), this);
+  connect(slash, &QShortcut::activated, this, &Workspace::focusFilter);
   connect(m_newRun, &NewRunPage::created, this, &Workspace::showRun);
   connect(m_newRun, &NewRunPage::cancelled, this, [this] {
     m_stack->setCurrentWidget(m_run->isOpen() ? static_cast<QWidget*>(m_runPage) : m_nothing);
@@ -76,8 +82,9 @@ Workspace::Workspace(std::unique_ptr<NotebookLink> link, QWidget* parent)
   });
   watchPeople();
   if (m_link->isReadOnly())
-    m_messages->show(MessageBar::Kind::kNotice,
-                     tr("This notebook is open for reading only: %1.").arg(m_link->readOnlyReason()));
+    m_messages->show(
+        MessageBar::Kind::kNotice,
+        tr("This notebook is open for reading only: %1.").arg(m_link->readOnlyReason()));
 }
 
 Workspace::~Workspace() = default;
@@ -113,12 +120,12 @@ void Workspace::watchPeople() {
     m_messages->show(MessageBar::Kind::kFault, sentence);
   });
   connect(m_person, &PersonField::strangerTyped, this, [this](const QString& initials) {
-    m_messages->show(MessageBar::Kind::kNotice,
-                     tr("Nobody with the initials %1 has worked in this notebook.").arg(initials),
-                     {{tr("%1 is new here").arg(initials),
-                       [this, initials] { m_person->takePerson(initials); }},
-                      {tr("Back to %1").arg(m_link->person()),
-                       [this] { m_person->takePerson(m_link->person()); }}});
+    m_messages->show(
+        MessageBar::Kind::kNotice,
+        tr("Nobody with the initials %1 has worked in this notebook.").arg(initials),
+        {{tr("%1 is new here").arg(initials), [this, initials] { m_person->takePerson(initials); }},
+         {tr("Back to %1").arg(m_link->person()),
+          [this] { m_person->takePerson(m_link->person()); }}});
   });
   if (m_link->person().isEmpty() && !m_link->isReadOnly()) {
     m_messages->show(MessageBar::Kind::kNotice,

@@ -34,6 +34,7 @@ class Workspace : public QWidget {
 
   [[nodiscard]] NotebookLink& link() { return *m_link; }
   [[nodiscard]] OpenRun& openRun() { return *m_run; }
+  [[nodiscard]] RunSearch& runSearch() { return *m_search; }
   [[nodiscard]] ActionHistory& history() { return m_history; }
   [[nodiscard]] RunPage& runPage() { return *m_runPage; }
   [[nodiscard]] MessageBar& messages() { return *m_messages; }

@@ -92,6 +92,7 @@ struct FindOptions {
   FindOrder order = FindOrder::kNewest;
   std::size_t limit = 200;  ///< most rows to return; 0: all
   bool count = true;        ///< whether to count all matches
+  std::size_t skip = 0;     ///< rows of the order to leave out before the first: a further page
 };
 
 /// One found run with what a table of runs shows.
@@ -101,7 +102,8 @@ struct FoundRun {
 };
 
 struct FindResult {
-  std::int64_t matches = 0;  ///< of all, if they were counted; else the rows returned
+  std::int64_t matches =
+      0;  ///< of all, if they were counted; else the rows up to the last returned
   std::vector<FoundRun> runs;
 };
 

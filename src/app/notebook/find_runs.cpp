@@ -94,24 +94,39 @@ class NotebookResolver final : public SubstanceResolver {
   std::optional<std::vector<std::pair<std::string, RowNumber>>> m_folded;
 };
 
-std::unexpected<text::Faults> queryFault(const text::TextFault& fault, std::string_view text) {
-  return std::unexpected(text::Faults{
-      {.field = "query",
-       .what = fmt::format("{}: {}", text::quoted(text), whatWithPosition(fault, text)),
-       .mend = fault.mend}});
+std::unexpected<FindRefusal> refused(const text::TextFault& fault, std::string_view text) {
+  return std::unexpected(FindRefusal{
+      fault,
+      {{.field = "query",
+        .what = fmt::format("{}: {}", text::quoted(text), whatWithPosition(fault, text)),
+        .mend = fault.mend}}});
+}
+
+std::unexpected<FindRefusal> refused(text::Faults faults) {
+  return std::unexpected(FindRefusal{std::nullopt, std::move(faults)});
 }
 
 }  // namespace
 
-Checked<FindResult> findRuns(Notebook& notebook, std::string_view text, const FindOptions& options,
-                             bool asYouType) {
+std::expected<FindResult, FindRefusal> findRunsPointing(Notebook& notebook, std::string_view text,
+                                                        const FindOptions& options,
+                                                        bool asYouType) {
   const auto parsed = parseFind(text, {.asYouType = asYouType});
-  if (!parsed) return queryFault(parsed.error(), text);
+  if (!parsed) return refused(parsed.error(), text);
   NotebookResolver resolver(notebook);
   const auto query = resolveQuery(*parsed, resolver, {.unknownMatchesNothing = asYouType});
-  if (!resolver.faults().empty()) return std::unexpected(resolver.faults());
-  if (!query) return queryFault(query.error(), text);
-  return notebook.find(*query, options);
+  if (!resolver.faults().empty()) return refused(resolver.faults());
+  if (!query) return refused(query.error(), text);
+  auto found = notebook.find(*query, options);
+  if (!found) return refused(std::move(found.error()));
+  return *std::move(found);
+}
+
+Checked<FindResult> findRuns(Notebook& notebook, std::string_view text, const FindOptions& options,
+                             bool asYouType) {
+  auto found = findRunsPointing(notebook, text, options, asYouType);
+  if (!found) return std::unexpected(std::move(found.error().faults));
+  return *std::move(found);
 }
 
 }  // namespace vialkeeper::app

@@ -65,6 +65,69 @@ void headPlan(charge::Plan& plan, const RunRecord& run) {
   if (plan.date.empty()) plan.date = toIsoText(run.created).substr(0, 10);
 }
 
+namespace {
+
+/// A run that is ready to be written.
+struct PreparedRun {
+  PlannedRun planned;
+  RunRecord run;
+  std::vector<ComponentRecord> components;
+  std::vector<ShelfPlace> places;  ///< of the components
+  text::Notices notices;
+};
+
+Checked<std::string> withOverrides(std::string planText, const NewRun& wanted) {
+  text::Faults faults;
+  for (const PlanOverride& override : wanted.overrides) {
+    auto edited = charge::withField(planText, override.path, override.value);
+    if (edited) {
+      planText = *std::move(edited);
+    } else {
+      for (text::Fault& fault : edited.error()) {
+        if (fault.file == "plan") fault.file = wanted.planFile;
+        faults.push_back(std::move(fault));
+      }
+    }
+  }
+  if (!faults.empty()) return std::unexpected(std::move(faults));
+  return planText;
+}
+
+Checked<PreparedRun> prepareRun(Notebook& notebook, const NewRun& wanted) {
+  auto planText = withOverrides(wanted.planText, wanted);
+  if (!planText) return std::unexpected(planText.error());
+  auto planned = planCharge(*std::move(planText), wanted.planFile, {});
+  if (!planned) return std::unexpected(planned.error());
+  PreparedRun prepared{*std::move(planned), {}, {}, {}, {}};
+  const charge::Charge& charge = prepared.planned.charge;
+  const charge::Plan& plan = prepared.planned.plan;
+  prepared.run = runRecord(prepared.planned);
+  if (!wanted.title.empty()) prepared.run.title = wanted.title;
+  prepared.run.aim = wanted.aim;
+  prepared.run.clonedFrom = wanted.clonedFrom;
+  if (!plan.code.empty()) {
+    prepared.notices.push_back(
+        {"code-ignored", "the plan's own code is not used: the notebook gives the next free one",
+         "code"});
+  }
+  noteKeptTitle(wanted, plan, prepared.notices);
+  auto places = placeAll(notebook, plan, {}, prepared.notices);
+  if (!places) return std::unexpected(places.error());
+  prepared.places = *std::move(places);
+  for (std::size_t i = 0; i < plan.components.size(); ++i) {
+    prepared.components.push_back(
+        plannedRecord(plan.components[i], charge.components[i], static_cast<int>(i)));
+  }
+  for (const ComponentCharge& component : charge.components) {
+    prepared.notices.insert(prepared.notices.end(), component.notices.begin(),
+                            component.notices.end());
+  }
+  prepared.notices.insert(prepared.notices.end(), charge.notices.begin(), charge.notices.end());
+  return prepared;
+}
+
+}  // namespace
+
 charge::Weighings recordedWeighings(const std::vector<ComponentRecord>& components) {
   charge::Weighings weighings;
   for (const ComponentRecord& component : components) {
@@ -104,52 +167,34 @@ Checked<RunSheet> loadRun(Notebook& notebook, const RunRecord& run, charge::Reta
                   !weighings.empty()};
 }
 
+Checked<RunPreview> previewRun(Notebook& notebook, const NewRun& wanted) {
+  auto prepared = prepareRun(notebook, wanted);
+  if (!prepared) return std::unexpected(prepared.error());
+  RunPreview preview{std::move(prepared->planned), {}, std::move(prepared->notices)};
+  preview.planned.plan.title = prepared->run.title;
+  for (const ShelfPlace& place : prepared->places) {
+    const std::string& name = place.record.name;
+    if (place.n == 0 &&
+        std::ranges::find(preview.newSubstances, name) == preview.newSubstances.end())
+      preview.newSubstances.push_back(name);
+  }
+  return preview;
+}
+
 Checked<AddedRun> addRun(const Desk& desk, const NewRun& wanted) {
-  std::string planText = wanted.planText;
-  text::Faults faults;
-  for (const PlanOverride& override : wanted.overrides) {
-    auto edited = charge::withField(planText, override.path, override.value);
-    if (edited) {
-      planText = *std::move(edited);
-    } else {
-      for (text::Fault& fault : edited.error()) {
-        if (fault.file == "plan") fault.file = wanted.planFile;
-        faults.push_back(std::move(fault));
-      }
-    }
-  }
-  if (!faults.empty()) return std::unexpected(std::move(faults));
-  auto planned = planCharge(planText, wanted.planFile, {});
-  if (!planned) return std::unexpected(planned.error());
-  AddedRun added{.run = runRecord(*planned), .newSubstances = {}, .notices = {}};
-  if (!wanted.title.empty()) added.run.title = wanted.title;
-  if (!planned->plan.code.empty()) {
-    added.notices.push_back(
-        {"code-ignored", "the plan's own code is not used: the notebook gives the next free one",
-         "code"});
-  }
-  noteKeptTitle(wanted, planned->plan, added.notices);
-  added.run.aim = wanted.aim;
+  auto prepared = prepareRun(desk.notebook, wanted);
+  if (!prepared) return std::unexpected(prepared.error());
+  AddedRun added{.run = std::move(prepared->run),
+                 .newSubstances = {},
+                 .notices = std::move(prepared->notices)};
   added.run.person = desk.person;
   added.run.created = desk.clock.now();
-  added.run.clonedFrom = wanted.clonedFrom;
-  auto places = placeAll(desk.notebook, planned->plan, {}, added.notices);
-  if (!places) return std::unexpected(places.error());
-  std::vector<ComponentRecord> components;
-  for (std::size_t i = 0; i < planned->plan.components.size(); ++i) {
-    components.push_back(plannedRecord(planned->plan.components[i], planned->charge.components[i],
-                                       static_cast<int>(i)));
-  }
   const auto done = desk.notebook.act(
       desk.action(wanted.clonedFrom == 0 ? "add" : "clone"), [&](Writing& writing) {
-        return writeRun(writing, added.run, components, *places, planText, added.newSubstances);
+        return writeRun(writing, added.run, prepared->components, prepared->places,
+                        prepared->planned.planText, added.newSubstances);
       });
   if (!done) return std::unexpected(done.error());
-  for (const ComponentCharge& component : planned->charge.components) {
-    added.notices.insert(added.notices.end(), component.notices.begin(), component.notices.end());
-  }
-  added.notices.insert(added.notices.end(), planned->charge.notices.begin(),
-                       planned->charge.notices.end());
   return added;
 }
 

@@ -55,6 +55,17 @@ struct AddedRun {
   text::Notices notices;  ///< a title that was kept, near misses, and those of the charge
 };
 
+/// What a new run would be.
+struct RunPreview {
+  PlannedRun planned;
+  std::vector<std::string> newSubstances;  ///< would be put on the shelf
+  text::Notices notices;                   ///< as addRun's
+};
+
+/// What addRun would do, without doing it; needs no more than a notebook that can be read.
+/// Faults as addRun's.
+[[nodiscard]] Checked<RunPreview> previewRun(Notebook& notebook, const NewRun& wanted);
+
 /// Adds a run from a plan: sets the overrides, works out the charge, matches every substance with
 /// the shelf or puts it there, gives the next code of the person.
 [[nodiscard]] Checked<AddedRun> addRun(const Desk& desk, const NewRun& wanted);
