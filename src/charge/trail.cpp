@@ -13,8 +13,8 @@ using units::shown;
 
 std::string basisStep(const Plan& plan, const Charge& charge, const ComponentPlan& component,
                       const std::string& amount) {
-  const std::string limiting =
-      fmt::format("{} ({}, limiting)", shown(charge.limitingAmount), charge.limiting);
+  const std::string limiting = fmt::format("{} ({}, limiting)", shown(charge.limitingAmount),
+                                           charge.find(charge.limiting)->name);
   const std::string& written = component.amount.asWritten;
   switch (component.amount.basis) {
     case Basis::kEquiv:

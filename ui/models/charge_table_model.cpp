@@ -75,8 +75,12 @@ QVariant ChargeTableModel::headerData(int section, Qt::Orientation orientation, 
   }
 }
 
+bool ChargeTableModel::isHere(const QModelIndex& index) const {
+  return index.isValid() && index.row() < rowCount() && index.column() < kColumns;
+}
+
 Qt::ItemFlags ChargeTableModel::flags(const QModelIndex& index) const {
-  if (!checkIndex(index, CheckIndexOption::IndexIsValid)) return Qt::NoItemFlags;
+  if (!isHere(index)) return Qt::NoItemFlags;
   Qt::ItemFlags flags = Qt::ItemIsSelectable | Qt::ItemIsEnabled | Qt::ItemNeverHasChildren;
   const auto may = [this](app::Deed deed) {
     return m_run.permission(deed) != app::Permission::kNo;
@@ -152,7 +156,7 @@ QString ChargeTableModel::spoken(const ChargeRow& row, int column) const {
 }
 
 QVariant ChargeTableModel::data(const QModelIndex& index, int role) const {
-  if (!checkIndex(index, CheckIndexOption::IndexIsValid)) return {};
+  if (!isHere(index)) return {};
   const ChargeRow& row = m_rows[static_cast<std::size_t>(index.row())];
   const int column = index.column();
   const Kept* weighing = kept(row.key, kWeighed);
@@ -286,7 +290,7 @@ void ChargeTableModel::forgetWaiting() {
 }
 
 bool ChargeTableModel::forget(const QModelIndex& index) {
-  if (!checkIndex(index, CheckIndexOption::IndexIsValid)) return false;
+  if (!isHere(index)) return false;
   const std::string key = keyOf(index.row());
   const bool was = m_kept.erase({key, index.column()}) > 0;
   if (was) tellRow(key);
@@ -330,7 +334,7 @@ QString ChargeTableModel::nameOf(const std::string& key) const {
 
 ChargeTableModel::Reading ChargeTableModel::preview(const QModelIndex& index,
                                                     const QString& typed) const {
-  if (!checkIndex(index, CheckIndexOption::IndexIsValid) || typed.trimmed().isEmpty()) return {};
+  if (!isHere(index) || typed.trimmed().isEmpty()) return {};
   const std::string key = keyOf(index.row());
   if (index.column() == kAmount) {
     const auto sheet = app::previewEdit(m_run.link().notebook(), m_run.run(),

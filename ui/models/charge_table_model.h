@@ -73,6 +73,7 @@ class ChargeTableModel : public QAbstractTableModel {
   using Place = std::pair<std::string, int>;
 
   void follow();
+  [[nodiscard]] bool isHere(const QModelIndex& index) const;
   void forgetWaiting();
   [[nodiscard]] QString shown(const ChargeRow& row, int column) const;
   [[nodiscard]] QString secondLine(const ChargeRow& row, int column) const;

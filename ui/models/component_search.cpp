@@ -32,7 +32,7 @@ std::optional<app::SubstanceRecord> ComponentSearch::substance(int row) const {
 }
 
 QVariant ComponentSearch::data(const QModelIndex& index, int role) const {
-  if (!checkIndex(index, CheckIndexOption::IndexIsValid)) return {};
+  if (!index.isValid() || index.row() >= rowCount()) return {};
   const auto found = substance(index.row());
   if (role == kIsNewRole) return !found.has_value();
   if (!found) {

@@ -65,6 +65,15 @@ ChargeRow WeighSteps::row() const {
   return isEmpty() ? ChargeRow{} : chargeRow(sheet(), sheet().planned.plan.indexOf(key()));
 }
 
+std::vector<WeighStep> WeighSteps::overview() const {
+  std::vector<WeighStep> steps;
+  for (const std::string& each : m_order) {
+    const ChargeRow row = chargeRow(sheet(), sheet().planned.plan.indexOf(each));
+    steps.push_back({row.name, row.target, row.weighed, each == key()});
+  }
+  return steps;
+}
+
 QString WeighSteps::nextName() const {
   if (m_at + 1 >= count()) return {};
   const auto* next = sheet().planned.plan.find(m_order[static_cast<std::size_t>(m_at + 1)]);

@@ -23,6 +23,14 @@ struct TargetChange {
   QString after;
 };
 
+/// One line of the overview of what is weighed.
+struct WeighStep {
+  QString name;
+  QString target;
+  QString actual;  ///< empty: not yet
+  bool isOn = false;
+};
+
 /// Weighing one component after the other, in the order of addition: which one is on, what the line
 /// being typed would mean for it, and recording it.
 class WeighSteps : public QObject {
@@ -45,6 +53,7 @@ class WeighSteps : public QObject {
   [[nodiscard]] QString recorded() const;
   /// The component that is on, with the targets that are shown: re-targeted ones after retarget().
   [[nodiscard]] ChargeRow row() const;
+  [[nodiscard]] std::vector<WeighStep> overview() const;
   /// The one after it, or empty.
   [[nodiscard]] QString nextName() const;
 

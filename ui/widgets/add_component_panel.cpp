@@ -15,6 +15,7 @@
 #include "ui/models/component_search.h"
 #include "ui/widgets/found_substance_delegate.h"
 #include "ui/widgets/structure_view.h"
+#include "ui/widgets/theme.h"
 
 namespace vialkeeper::ui {
 namespace {
@@ -60,7 +61,7 @@ AddComponentPanel::AddComponentPanel(ComponentSearch& search, ComponentDraft& dr
   row->setContentsMargins(10, 8, 10, 8);
   row->setSpacing(14);
   row->addWidget(m_list, 3);
-  row->addWidget(makeFields(), 4);
+  row->addWidget(makeFields(), 5);
   row->addWidget(m_structure, 2);
   connect(m_list, &QListView::clicked, this, &AddComponentPanel::takeChosen);
   connect(&m_draft, &ComponentDraft::changed, this, &AddComponentPanel::showDraft);
@@ -89,6 +90,7 @@ QWidget* AddComponentPanel::makeFields() {
   auto* amountName = new QLabel(tr("Amoun&t"));
   amountName->setBuddy(m_amount);
   amountName->setProperty("quiet", true);
+  m_amount->setMinimumWidth(Theme::instance().scaled(90));
   m_amount->setObjectName(QStringLiteral("newAmount"));
   m_reading->setWordWrap(true);
   m_reading->setTextFormat(Qt::PlainText);

@@ -13,8 +13,6 @@
 namespace vialkeeper::ui {
 namespace {
 
-constexpr int kWrap = Qt::TextWordWrap | Qt::TextWrapAnywhere;
-
 const char* colourOf(BandLine::Kind kind) {
   return kind == BandLine::Kind::kFault ? "limit" : "notice";
 }
@@ -90,16 +88,21 @@ void ChargeDelegate::paintTexts(QPainter& painter, const QRect& cell, const QMod
                                  : QFontMetrics(all.target).height();
   painter.setFont(font);
   painter.setPen(inkOf(index, selected));
-  painter.drawText(QRect(inside.topLeft(), QSize(inside.width(), firstHeight)),
-                   static_cast<int>(side) | (isName ? Qt::AlignTop | kWrap : Qt::AlignVCenter),
-                   first);
+  painter.drawText(
+      QRect(inside.topLeft(), QSize(inside.width(), firstHeight)),
+      static_cast<int>(side) |
+          (isName ? Qt::AlignTop | ChargeRowLayout::wrapping(first, font, inside.width())
+                  : Qt::AlignVCenter),
+      first);
   const QString second = index.data(ChargeTableModel::kSecondLineRole).toString();
   if (second.isEmpty()) return;
   painter.setFont(all.small);
   const bool isCharged = index.column() == ChargeTableModel::kCharged;
   painter.setPen(isCharged ? inkOf(index, selected) : colour(selected ? "selectedText" : "quiet"));
   painter.drawText(QRect(inside.left(), inside.top() + firstHeight, inside.width(), cell.height()),
-                   static_cast<int>(side) | Qt::AlignTop | (isName ? kWrap : 0), second);
+                   static_cast<int>(side) | Qt::AlignTop |
+                       (isName ? ChargeRowLayout::wrapping(second, all.small, inside.width()) : 0),
+                   second);
 }
 
 void ChargeDelegate::paintBand(QPainter& painter, const QRect& row,
@@ -114,8 +117,11 @@ void ChargeDelegate::paintBand(QPainter& painter, const QRect& row,
     painter.setFont(font);
     painter.setPen(colour(colourOf(each.kind)));
     const int left = row.left() + layout.bandTextLeft();
-    painter.drawText(QRect(left, top, row.right() - ChargeRowLayout::kPadding - left, each.height),
-                     Qt::AlignLeft | Qt::AlignTop | kWrap, each.text);
+    const QRect place(left, top, row.right() - ChargeRowLayout::kPadding - left + 1, each.height);
+    painter.drawText(
+        place,
+        Qt::AlignLeft | Qt::AlignTop | ChargeRowLayout::wrapping(each.text, font, place.width()),
+        each.text);
   }
 }
 
@@ -153,6 +159,7 @@ void ChargeDelegate::paint(QPainter* painter, const QStyleOptionViewItem& option
 QWidget* ChargeDelegate::createEditor(QWidget* parent, const QStyleOptionViewItem&,
                                       const QModelIndex& index) const {
   auto* editor = new AmountEditor(parent);
+  editor->setAlignment(index.data(Qt::TextAlignmentRole).value<Qt::Alignment>());
   editor->setAccessibleName(index.data(Qt::AccessibleTextRole).toString());
   const QPersistentModelIndex place(index);
   connect(editor, &QLineEdit::textEdited, this, [this, editor, place](const QString& typed) {

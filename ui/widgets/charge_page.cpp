@@ -24,7 +24,10 @@
 namespace vialkeeper::ui {
 namespace {
 
-constexpr int kFootHeight = 148;
+constexpr int kLeastFoot = 148;
+constexpr int kMostFoot = 240;
+constexpr int kAlmostAll = 1000;  ///< a stretch that leaves the others what it cannot take
+constexpr int kVolumeLines = 3;
 
 }  // namespace
 
@@ -44,6 +47,7 @@ ChargePage::ChargePage(OpenRun& run, QWidget* parent)
       m_trail(new TrailPanel),
       m_adding(new AddComponentPanel(m_search, m_draft)),
       m_volumes(new QLabel),
+      m_conditions(new QLabel),
       m_cautions(new QLabel),
       m_weigh(new WeighPage(m_steps)),
       m_print(new PrintPage(run)) {
@@ -83,9 +87,12 @@ QWidget* ChargePage::makeTablePage() {
   panels->addWidget(makeVialText(), 10);
   m_foot->addWidget(foot);
   m_foot->addWidget(m_adding);
-  m_foot->setFixedHeight(Theme::instance().scaled(kFootHeight));
-  connect(&Theme::instance(), &Theme::changed, this,
-          [this] { m_foot->setFixedHeight(Theme::instance().scaled(kFootHeight)); });
+  const auto setHeights = [this] {
+    m_foot->setMinimumHeight(Theme::instance().scaled(kLeastFoot));
+    m_foot->setMaximumHeight(Theme::instance().scaled(kMostFoot));
+  };
+  setHeights();
+  connect(&Theme::instance(), &Theme::changed, this, setHeights);
   connect(m_table, &ChargeTable::cellChosen, this, &ChargePage::showTrail);
   connect(m_table, &ChargeTable::trailWanted, this, [this] {
     leaveAdding();
@@ -104,9 +111,10 @@ QWidget* ChargePage::makeTablePage() {
   auto* column = new QVBoxLayout(page);
   column->setContentsMargins(0, 0, 0, 0);
   column->setSpacing(6);
-  column->addWidget(m_table, 1);
+  column->addWidget(m_table, kAlmostAll);
   column->addWidget(makeLine());
-  column->addWidget(m_foot);
+  column->addWidget(m_foot, 10);
+  column->addStretch(1);
   return page;
 }
 
@@ -133,11 +141,12 @@ QWidget* ChargePage::makeLine() {
 }
 
 QWidget* ChargePage::makeVialText() {
-  for (QLabel* label : {m_volumes, m_cautions}) {
+  for (QLabel* label : {m_volumes, m_conditions, m_cautions}) {
     label->setWordWrap(true);
     label->setTextFormat(Qt::PlainText);
     label->setTextInteractionFlags(Qt::TextSelectableByMouse);
   }
+  m_conditions->setProperty("small", true);
   m_cautions->setProperty("quiet", true);
   m_cautions->setProperty("small", true);
   auto* inside = new QWidget;
@@ -145,6 +154,7 @@ QWidget* ChargePage::makeVialText() {
   column->setContentsMargins(0, 2, 4, 2);
   column->setSpacing(4);
   column->addWidget(m_volumes);
+  column->addWidget(m_conditions);
   column->addWidget(m_cautions);
   column->addStretch(1);
   auto* scroll = new QScrollArea;
@@ -177,7 +187,8 @@ void ChargePage::addShortcuts() {
 void ChargePage::follow() {
   if (!m_run.isOpen()) return;
   const QStringList volumes = vialLines(m_run.sheet());
-  m_volumes->setText(volumes.join(QStringLiteral(" · ")));
+  m_volumes->setText(volumes.mid(0, kVolumeLines).join(QStringLiteral(" · ")));
+  m_conditions->setText(volumes.mid(kVolumeLines).join(QStringLiteral(" · ")));
   m_cautions->setText(cautionLines(m_run.sheet()).join(QLatin1Char(' ')));
   const QString noChange = m_run.refusal(app::Deed::kChangePlan);
   m_addLine->setReadOnly(!noChange.isEmpty());

@@ -73,6 +73,7 @@ class ChargePage : public QWidget {
   TrailPanel* m_trail;
   AddComponentPanel* m_adding;
   QLabel* m_volumes;
+  QLabel* m_conditions;
   QLabel* m_cautions;
   WeighPage* m_weigh;
   PrintPage* m_print;

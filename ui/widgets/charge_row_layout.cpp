@@ -14,7 +14,6 @@ namespace {
 
 constexpr int kBandGap = 2;
 constexpr int kAnswersHeight = 38;
-constexpr int kWrap = Qt::TextWordWrap | Qt::TextWrapAnywhere;
 
 QFont scaledFont(QFont font, double factor, QFont::Weight weight) {
   font.setPointSizeF(font.pointSizeF() * factor);
@@ -35,10 +34,19 @@ const QFont& ChargeRowLayout::fontOf(int column, const ChargeFonts& fonts) {
   return column == ChargeTableModel::kTarget ? fonts.target : fonts.plain;
 }
 
+int ChargeRowLayout::wrapping(const QString& text, const QFont& font, int width) {
+  const QFontMetrics metrics(font);
+  const QStringList words = text.split(QLatin1Char(' '));
+  const bool fit = std::ranges::all_of(
+      words, [&](const QString& word) { return metrics.horizontalAdvance(word) <= width; });
+  return fit ? Qt::TextWordWrap : Qt::TextWrapAnywhere;
+}
+
 int ChargeRowLayout::wrappedHeight(const QString& text, const QFont& font, int width) {
   if (text.isEmpty()) return 0;
   return QFontMetrics(font)
-      .boundingRect(QRect(0, 0, std::max(1, width), 100000), Qt::AlignLeft | kWrap, text)
+      .boundingRect(QRect(0, 0, std::max(1, width), 100000),
+                    Qt::AlignLeft | wrapping(text, font, width), text)
       .height();
 }
 

@@ -50,6 +50,9 @@ class ChargeRowLayout {
   [[nodiscard]] static int widthOf(const QModelIndex& index, const ChargeFonts& fonts);
   /// The font of a cell's first line.
   [[nodiscard]] static const QFont& fontOf(int column, const ChargeFonts& fonts);
+  /// How a text is drawn that may take several lines: broken between words, and within one only
+  /// where it is wider than the line.
+  [[nodiscard]] static int wrapping(const QString& text, const QFont& font, int width);
   [[nodiscard]] static int wrappedHeight(const QString& text, const QFont& font, int width);
 
  private:

@@ -86,6 +86,9 @@ void ChargeTable::layOut() {
   setColumnWidth(0, std::max(theme.scaled(kLeastName), viewport()->width() - taken));
   for (int row = 0; row < m_model.rowCount(); ++row)
     setRowHeight(row, m_delegate->layoutOf(row).height());
+  // As high as it is full: what stands below follows at once.
+  setMaximumHeight(horizontalHeader()->sizeHint().height() + verticalHeader()->length() +
+                   2 * frameWidth());
   placeAnswers();
 }
 

@@ -106,7 +106,6 @@ void PrintPage::showPages() {
     pixmap.setDevicePixelRatio(ratio);
     auto* picture = new QLabel;
     picture->setPixmap(pixmap);
-    picture->setFrameShape(QFrame::Box);
     picture->setObjectName(QStringLiteral("printedPage"));
     picture->setAccessibleName(tr("Page %1 of %2").arg(i + 1).arg(images->size()));
     m_column->addWidget(picture);

@@ -16,7 +16,7 @@
 namespace vialkeeper::ui {
 namespace {
 
-constexpr double kTargetSize = 4.6;
+constexpr double kTargetSize = 6.0;
 constexpr double kNameSize = 2.0;
 constexpr double kDeviationSize = 1.7;
 
@@ -64,17 +64,25 @@ WeighPage::WeighPage(WeighSteps& steps, QWidget* parent)
       m_question(labelOf("notice")),
       m_answers(new SlipAnswers),
       m_next(labelOf("quiet")),
+      m_overview(labelOf("quiet")),
       m_changes(labelOf()),
       m_written(labelOf("good")),
       m_retarget(new QPushButton(tr("Re-target (F5)"))) {
+  auto* step = new QVBoxLayout;
+  step->setSpacing(8);
+  step->addWidget(makeTarget());
+  step->addWidget(makeEntry());
+  step->addWidget(m_changes);
+  step->addStretch(1);
+  auto* both = new QHBoxLayout;
+  both->setSpacing(24);
+  both->addLayout(step, 5);
+  both->addWidget(m_overview, 2, Qt::AlignTop);
   auto* column = new QVBoxLayout(this);
   column->setContentsMargins(4, 8, 4, 8);
   column->setSpacing(8);
   column->addWidget(makeHead());
-  column->addWidget(makeTarget());
-  column->addWidget(makeEntry());
-  column->addWidget(m_changes);
-  column->addStretch(1);
+  column->addLayout(both, 1);
   column->addWidget(m_next);
   connect(&m_steps, &WeighSteps::moved, this, [this] {
     m_field->clear();
@@ -108,6 +116,7 @@ QWidget* WeighPage::makeTarget() {
   m_tolerance->setAlignment(Qt::AlignLeft | Qt::AlignBottom);
   m_target->setWordWrap(false);
   auto* number = new QHBoxLayout;
+  number->setSpacing(18);
   number->addWidget(m_target);
   number->addWidget(m_tolerance, 1);
   auto* area = new QWidget;
@@ -172,6 +181,20 @@ void WeighPage::showStep() {
                                  : tr("Then: %1. Up and Down go back and forth.").arg(next));
   showReading();
   showTargets();
+  showOverview();
+}
+
+/// What is done and what is to come, told apart by a sign.
+void WeighPage::showOverview() {
+  QStringList lines;
+  for (const WeighStep& each : m_steps.overview()) {
+    const QString sign =
+        each.isOn ? QStringLiteral("▸ ")
+                  : (each.actual.isEmpty() ? QStringLiteral("   ") : QStringLiteral("✓ "));
+    lines += sign + each.name + QStringLiteral("\n     ") +
+             (each.actual.isEmpty() ? each.target : tr("%1 of %2").arg(each.actual, each.target));
+  }
+  m_overview->setText(lines.join(QLatin1Char('\n')));
 }
 
 void WeighPage::showReading() {

@@ -39,6 +39,7 @@ class WeighPage : public QWidget {
   void showStep();
   void showReading();
   void showTargets();
+  void showOverview();
   void setFonts();
 
   WeighSteps& m_steps;
@@ -54,6 +55,7 @@ class WeighPage : public QWidget {
   QLabel* m_question;
   SlipAnswers* m_answers;
   QLabel* m_next;
+  QLabel* m_overview;
   QLabel* m_changes;
   QLabel* m_written;
   QPushButton* m_retarget;
