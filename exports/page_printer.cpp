@@ -1,6 +1,7 @@
 // SPDX-FileCopyrightText: The Vialkeeper developers
 // SPDX-License-Identifier: GPL-3.0-or-later
 #include "exports/gui_session.h"
+#include "exports/page_pictures.h"
 #include "exports/pages_module.h"
 #include "exports/pdf_file.h"
 #include "exports/qr_code.h"
@@ -54,13 +55,46 @@ class QtPagePrinter final : public PagePrinter {
   }
 
   text::Checked<PdfDocument> vialLabels(const std::vector<app::LabelContent>& contents) override {
+    const auto family = startGuiSession();
+    if (!family) return std::unexpected(family.error());
+    PdfFile file(vialLabelGeometry(), *family, contents.empty() ? "" : contents.front().title);
+    const auto flows = layOutLabels(file, contents);
+    if (!flows) return std::unexpected(flows.error());
+    return file.write(*flows);
+  }
+
+  text::Checked<std::vector<PagePicture>> weighingSheetPictures(const app::SheetContent& content,
+                                                                const SchemePictures& pictures,
+                                                                Paper paper,
+                                                                double resolution_dpi) override {
+    const auto family = startGuiSession();
+    if (!family) return std::unexpected(family.error());
+    const auto qr = codeFor(content.qrText);
+    if (!qr) return std::unexpected(qr.error());
+    const PdfFile file(paper, *family, content.title);
+    return paintPages(
+        {layOutWeighingSheet(file.typesetter(), file.geometry(), content, pictures, *qr)},
+        file.typesetter(), file.geometry(), resolution_dpi);
+  }
+
+  text::Checked<std::vector<PagePicture>> vialLabelPictures(
+      const std::vector<app::LabelContent>& contents, double resolution_dpi) override {
+    const auto family = startGuiSession();
+    if (!family) return std::unexpected(family.error());
+    const PdfFile file(vialLabelGeometry(), *family,
+                       contents.empty() ? "" : contents.front().title);
+    const auto flows = layOutLabels(file, contents);
+    if (!flows) return std::unexpected(flows.error());
+    return paintPages(*flows, file.typesetter(), file.geometry(), resolution_dpi);
+  }
+
+ private:
+  static text::Checked<std::vector<PageFlow>> layOutLabels(
+      const PdfFile& file, const std::vector<app::LabelContent>& contents) {
     if (contents.empty()) {
       return std::unexpected(text::Faults{
           {.what = "there is no vial to print a label for", .mend = "name a plan or a run"}});
     }
-    const auto family = startGuiSession();
-    if (!family) return std::unexpected(family.error());
-    PdfFile file(vialLabelGeometry(), *family, contents.front().title);
     std::vector<PageFlow> flows;
     for (const app::LabelContent& content : contents) {
       const auto qr = codeFor(content.qrText);
@@ -69,7 +103,7 @@ class QtPagePrinter final : public PagePrinter {
       if (!label) return std::unexpected(label.error());
       flows.push_back(*label);
     }
-    return file.write(flows);
+    return flows;
   }
 };
 

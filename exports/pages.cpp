@@ -28,4 +28,20 @@ text::Checked<PdfDocument> printVialLabels(const std::vector<app::LabelContent>&
   return (*printer)->vialLabels(contents);
 }
 
+text::Checked<std::vector<PagePicture>> paintWeighingSheet(const app::SheetContent& content,
+                                                           Paper paper, double resolution_dpi) {
+  const auto printer = pagePrinter();
+  if (!printer) return std::unexpected(printer.error());
+  const auto pictures = drawStructures(content.scheme);
+  if (!pictures) return std::unexpected(pictures.error());
+  return (*printer)->weighingSheetPictures(content, *pictures, paper, resolution_dpi);
+}
+
+text::Checked<std::vector<PagePicture>> paintVialLabels(
+    const std::vector<app::LabelContent>& contents, double resolution_dpi) {
+  const auto printer = pagePrinter();
+  if (!printer) return std::unexpected(printer.error());
+  return (*printer)->vialLabelPictures(contents, resolution_dpi);
+}
+
 }  // namespace vialkeeper::exports

@@ -20,6 +20,15 @@ struct PdfDocument {
   int pages = 0;
 };
 
+/// A page as it will be printed: rows of red, green and blue from the top left, without padding.
+struct PagePicture {
+  int width_px = 0;
+  int height_px = 0;
+  double width_mm = 0.0;
+  double height_mm = 0.0;
+  std::string rgb;
+};
+
 /// The weighing sheet: one page where it fits, else broken between rows with the table's head
 /// repeated. Fonts are embedded, text can be selected, structures and the QR code are vector
 /// graphics. Fault: the pages module or a font is missing, a structure cannot be drawn.
@@ -38,5 +47,11 @@ struct PdfDocument {
 /// that do not fit; the pages module or a font is missing.
 [[nodiscard]] text::Checked<PdfDocument> printVialLabels(
     const std::vector<app::LabelContent>& contents);
+
+/// The same pages as pictures, for a preview and for printers. Faults as above.
+[[nodiscard]] text::Checked<std::vector<PagePicture>> paintWeighingSheet(
+    const app::SheetContent& content, Paper paper, double resolution_dpi);
+[[nodiscard]] text::Checked<std::vector<PagePicture>> paintVialLabels(
+    const std::vector<app::LabelContent>& contents, double resolution_dpi);
 
 }  // namespace vialkeeper::exports

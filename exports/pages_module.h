@@ -14,7 +14,7 @@ namespace vialkeeper::exports {
 
 /// Raised whenever a class of this file, of pages.h or of app/sheet_content.h changes: a module of
 /// another number is refused before any of its functions is called.
-inline constexpr int kPagesModuleAbi = 2;
+inline constexpr int kPagesModuleAbi = 3;
 
 inline constexpr const char* kPagesModuleFile = "vialkeeper_pages.so";
 inline constexpr const char* kPagesModuleFactory = "vialkeeper_open_page_printer";
@@ -47,6 +47,11 @@ class PagePrinter {
       const std::vector<app::StockSheetContent>& contents, Paper paper) = 0;
   [[nodiscard]] virtual text::Checked<PdfDocument> vialLabels(
       const std::vector<app::LabelContent>& contents) = 0;
+  [[nodiscard]] virtual text::Checked<std::vector<PagePicture>> weighingSheetPictures(
+      const app::SheetContent& content, const SchemePictures& pictures, Paper paper,
+      double resolution_dpi) = 0;
+  [[nodiscard]] virtual text::Checked<std::vector<PagePicture>> vialLabelPictures(
+      const std::vector<app::LabelContent>& contents, double resolution_dpi) = 0;
 };
 
 /// The module's one export. The function takes the caller's ABI number and returns the printer,

@@ -13,8 +13,8 @@ using units::shown;
 
 std::string basisStep(const Plan& plan, const Charge& charge, const ComponentPlan& component,
                       const std::string& amount) {
-  const std::string limiting =
-      fmt::format("{} ({}, limiting)", shown(charge.limitingAmount), charge.limiting);
+  const std::string limiting = fmt::format("{} ({}, limiting)", shown(charge.limitingAmount),
+                                           charge.find(charge.limiting)->name);
   const std::string& written = component.amount.asWritten;
   switch (component.amount.basis) {
     case Basis::kEquiv:
@@ -92,6 +92,60 @@ std::string deviceStep(const ComponentPlan& component, const ComponentCharge& ch
                      shown(pipette->randomLimit));
 }
 
+std::string molarMassOf(const ComponentCharge& charge) {
+  return charge.substance.molarMass
+             ? fmt::format("{:.2f} g/mol", charge.substance.molarMass->value.gramsPerMole())
+             : "M";
+}
+
+std::string densityOf(const ComponentCharge& charge) {
+  return charge.density ? fmt::format(" × {:.4g} g/mL", charge.density->gramsPerMillilitre()) : "";
+}
+
+/// The amount from what was recorded; `amount` is what it came to.
+std::string recordedStep(const ComponentPlan& component, const ComponentCharge& charge,
+                         const std::string& amount) {
+  const bool byVolume = charge.charged->volume.has_value();
+  const std::string recorded =
+      byVolume ? shown(*charge.charged->volume) : shown(*charge.charged->mass);
+  if (amount.empty()) return fmt::format("{} as recorded; the molar mass is not known", recorded);
+  const std::string density = byVolume ? densityOf(charge) : "";
+  if (const auto* solid = std::get_if<SolidSupply>(&component.supply)) {
+    const std::string assay = solid->assay == 1.0 ? "" : fmt::format(" × {} (assay)", solid->assay);
+    return fmt::format("{} = {}{} ÷ {}", amount, recorded, assay, molarMassOf(charge));
+  }
+  if (const auto* liquid = std::get_if<LiquidSupply>(&component.supply)) {
+    const std::string assay =
+        liquid->assay == 1.0 ? "" : fmt::format(" × {} (assay)", liquid->assay);
+    return fmt::format("{} = {}{}{} ÷ {}", amount, recorded, density, assay, molarMassOf(charge));
+  }
+  if (const auto* stock = std::get_if<StockSupply>(&component.supply)) {
+    const std::string volume =
+        byVolume ? recorded : fmt::format("{} ÷ density of the stock", recorded);
+    if (stock->concentration)
+      return fmt::format("{} = {} × {}", amount, volume, shown(*stock->concentration));
+    return fmt::format("{} = {}{} × {} ÷ {}", amount, recorded, density, *stock->massFraction,
+                       molarMassOf(charge));
+  }
+  const auto& gas = std::get<GasSupply>(component.supply);
+  return fmt::format("{} = {} × {} ÷ (R × {})", amount, shown(gas.pressure), recorded,
+                     shown(gas.temperature));
+}
+
+/// The ratio from the amount: against the limiting component as weighed, or as planned where it was
+/// not.
+std::string chargedRatioStep(const Plan& plan, const Charge& charge, const ComponentPlan& component,
+                             const AsCharged& charged, const std::string& amount) {
+  if (!charged.equiv || component.isSolvent() || component.key == plan.limiting) return {};
+  const ComponentCharge& limiting = *charge.find(plan.limiting);
+  const bool weighed = limiting.charged && limiting.charged->amount_mol;
+  const units::Amount base = weighed
+                                 ? units::Amount::fromMoles(limiting.charged->amount_mol->value())
+                                 : charge.limitingAmount;
+  return fmt::format("{} equiv = {} ÷ {} ({}, {})", units::toSignificant(charged.equiv->value(), 3),
+                     amount, shown(base), limiting.name, weighed ? "as weighed" : "as planned");
+}
+
 std::string percentText(double fraction) { return fmt::format("{:.4g} %", 100.0 * fraction); }
 
 }  // namespace
@@ -108,6 +162,27 @@ std::vector<std::string> trailOf(const Plan& plan, const Charge& charge, std::st
   };
   add(targetStep(component, result, amount));
   add(deviceStep(component, result));
+  if (!result.substance.molarMassSource.empty())
+    add("molar mass: " + result.substance.molarMassSource);
+  if (!result.densitySource.empty()) add("density: " + result.densitySource);
+  return steps;
+}
+
+std::vector<std::string> chargedTrailOf(const Plan& plan, const Charge& charge,
+                                        std::string_view key) {
+  const ComponentPlan& component = *plan.find(key);
+  const ComponentCharge& result = *charge.find(key);
+  if (!result.charged) return {};
+  const AsCharged& charged = *result.charged;
+  const std::string amount =
+      charged.amount_mol ? shown(units::Amount::fromMoles(charged.amount_mol->value())) : "";
+  std::vector<std::string> steps{recordedStep(component, result, amount)};
+  const auto add = [&steps](std::string step) {
+    if (!step.empty()) steps.push_back(std::move(step));
+  };
+  add(chargedRatioStep(plan, charge, component, charged, amount));
+  const auto u = charged.amount_mol ? charged.amount_mol->standardUncertainty() : std::nullopt;
+  if (u) add(fmt::format("u = {}", shown(units::Amount::fromMoles(*u), 2)));
   if (!result.substance.molarMassSource.empty())
     add("molar mass: " + result.substance.molarMassSource);
   if (!result.densitySource.empty()) add("density: " + result.densitySource);

@@ -15,6 +15,11 @@ namespace vialkeeper::charge {
 [[nodiscard]] std::vector<std::string> trailOf(const Plan& plan, const Charge& charge,
                                                std::string_view key);
 
+/// Where the numbers of a component as charged are from: the amount from what was recorded, its
+/// ratio from the limiting component, the uncertainty. Empty where nothing is recorded.
+[[nodiscard]] std::vector<std::string> chargedTrailOf(const Plan& plan, const Charge& charge,
+                                                      std::string_view key);
+
 /// How a component is supplied, for a table: `solid, 98 %`, `stock 2.0 mM in acetonitrile`.
 [[nodiscard]] std::string supplyText(const Plan& plan, const ComponentPlan& component);
 

@@ -531,3 +531,25 @@ TEST_CASE("a missing pages module is a fault that says where it was sought", "[e
       folder.output("VIALKEEPER_MODULE_DIR=@ '" + self + "' '[.child-no-module]' 2>&1");
   CHECK_THAT(said, Catch::Contains("All tests passed"));
 }
+
+TEST_CASE("the pages as pictures have the paper's size and hold what the PDF holds",
+          "[exports][identity]") {
+  const auto pictures = paintWeighingSheet(samples::typicalSheet(), Paper::kA4, 96.0);
+  REQUIRE(pictures);
+  CHECK(static_cast<int>(pictures->size()) == printed(samples::typicalSheet()).pages);
+  for (const PagePicture& picture : *pictures) {
+    CHECK(picture.width_px == 794);
+    CHECK(picture.height_px == 1123);
+    CHECK(picture.rgb.size() == std::size_t{794} * 1123 * 3);
+    const auto dark = std::ranges::count_if(
+        picture.rgb, [](char c) { return static_cast<unsigned char>(c) < 80; });
+    // Some per cent of a printed page is ink.
+    CHECK(dark > static_cast<std::ptrdiff_t>(picture.rgb.size() / 200));
+    CHECK(dark < static_cast<std::ptrdiff_t>(picture.rgb.size() / 4));
+  }
+  const auto labels = paintVialLabels({samples::typicalLabel()}, 300.0);
+  REQUIRE(labels);
+  REQUIRE(labels->size() == 1);
+  CHECK(labels->front().width_mm == Approx(62.0));
+  CHECK_FALSE(paintVialLabels({}, 300.0));
+}
