@@ -9,9 +9,9 @@
 #include <optional>
 #include <vector>
 
+#include "charge/plan_text.h"
 #include "text/toml_tree.h"
 #include "text/utf8.h"
-#include "units/quantity_text.h"
 
 namespace vialkeeper::charge {
 namespace {
@@ -36,12 +36,6 @@ struct Target {
   bool component = false;
 };
 
-const TomlValue* memberOf(const TomlTable& table, std::string_view name) {
-  const auto found =
-      std::ranges::find_if(table, [name](const auto& entry) { return entry.first == name; });
-  return found == table.end() ? nullptr : &found->second;
-}
-
 std::vector<std::string> splitPath(std::string_view path) {
   std::vector<std::string> parts;
   while (true) {
@@ -50,20 +44,6 @@ std::vector<std::string> splitPath(std::string_view path) {
     if (dot == std::string_view::npos) return parts;
     path.remove_prefix(dot + 1);
   }
-}
-
-/// A component's table by its key.
-const TomlValue* componentOf(const TomlTable& root, std::string_view key) {
-  const TomlValue* list = memberOf(root, "component");
-  const auto* array = list != nullptr ? std::get_if<text::TomlArray>(&list->data) : nullptr;
-  if (array == nullptr) return nullptr;
-  for (const TomlValue& entry : *array) {
-    const auto* table = std::get_if<TomlTable>(&entry.data);
-    const TomlValue* name = table != nullptr ? memberOf(*table, "key") : nullptr;
-    const auto* written = name != nullptr ? std::get_if<std::string>(&name->data) : nullptr;
-    if (written != nullptr && *written == key) return &entry;
-  }
-  return nullptr;
 }
 
 text::Checked<Target> targetOf(const TomlTable& root, std::string_view path) {
@@ -87,17 +67,6 @@ text::Checked<Target> targetOf(const TomlTable& root, std::string_view path) {
                  "check the name");
   }
   return Target{table, section->line, parts.back(), component};
-}
-
-std::string written(std::string_view value) {
-  const bool truth = value == "true" || value == "false";
-  if (truth || units::readNumber(value, units::Dialect::kFile)) return std::string(value);
-  std::string quoted = "\"";
-  for (const char c : value) {
-    if (c == '"' || c == '\\') quoted += '\\';
-    quoted += c;
-  }
-  return quoted + '"';
 }
 
 /// Where a new field goes: behind the last single-line field of the section's own, else its header.
@@ -125,15 +94,9 @@ text::Checked<std::string> withField(std::string_view planText, std::string_view
   const auto target = targetOf(document.root, path);
   if (!target) return std::unexpected(target.error());
 
-  std::vector<std::string> lines;
-  for (std::string_view rest = planText;;) {
-    const std::size_t end = rest.find('\n');
-    lines.emplace_back(rest.substr(0, end));
-    if (end == std::string_view::npos) break;
-    rest.remove_prefix(end + 1);
-  }
+  std::vector<std::string> lines = linesOf(planText);
   const bool basis = target->component && std::ranges::find(kBases, target->field) != kBases.end();
-  const std::string line = fmt::format("{} = {}", target->field, written(value));
+  const std::string line = fmt::format("{} = {}", target->field, writtenValue(value));
   int replaced = 0;
   for (const auto& [name, present] : *target->table) {
     const bool otherBasis = basis && std::ranges::find(kBases, name) != kBases.end();
@@ -148,7 +111,7 @@ text::Checked<std::string> withField(std::string_view planText, std::string_view
     replaced = present.line;
   }
   if (replaced == 0) lines.insert(lines.begin() + lineToInsertAfter(*target), line);
-  return fmt::format("{}", fmt::join(lines, "\n"));
+  return joined(lines);
 }
 
 }  // namespace vialkeeper::charge
