@@ -12,12 +12,15 @@ namespace vialkeeper::db {
 namespace {
 
 /// One entry of a revision's `changes`. A changed row is told whole afterwards, and before in the
-/// columns that were different.
+/// columns that were different; of a removed one, `after` is null and `before` the whole row.
 std::string changeText(const std::string& table, std::int64_t n, const std::string& before,
                        const std::string& after) {
   return fmt::format(R"({{"after":{},"before":{},"n":{},"table":{}}})", after, before, n,
                      canonicalText(table));
 }
+
+/// The setting that holds the highest number of a row that was taken out of the table.
+std::string removedSetting(const std::string& table) { return "removed " + table; }
 
 std::string shownCell(const Cell& cell) {
   if (const auto* text = std::get_if<std::string>(&cell)) return "'" + text->substr(0, 60) + "'";
@@ -42,7 +45,12 @@ AuditedWriter::AuditedWriter(Connection& connection, const app::Action& action)
 
 std::int64_t AuditedWriter::insert(const std::string& table, Row row) {
   const std::int64_t now_ms = m_action.author.at.utc.time_since_epoch().count();
-  row.set("n", m_connection.integer(fmt::format("SELECT coalesce(max(n), 0) + 1 FROM {}", table)));
+  row.set("n",
+          1 + m_connection.integer(
+                  fmt::format("SELECT max(coalesce((SELECT max(n) FROM {}), 0), coalesce((SELECT "
+                              "CAST(value AS INTEGER) FROM setting WHERE name = ?), 0))",
+                              table),
+                  {Cell{removedSetting(table)}}));
   row.set("id", Blob{newId(now_ms)});
   row.set("version", std::int64_t{1});
   std::vector<std::string> columns;
@@ -65,12 +73,7 @@ text::Checked<void> AuditedWriter::update(const std::string& table, std::int64_t
                                           std::int64_t expectedVersion, const Row& changed) {
   const auto found =
       m_connection.rows(fmt::format("SELECT * FROM {} WHERE n = ?", table), {Cell{n}});
-  if (found.empty()) {
-    return std::unexpected(text::Faults{{.kind = text::FaultKind::kNotebook,
-                                         .file = m_connection.file(),
-                                         .what = fmt::format("{} {} is no longer there", table, n),
-                                         .mend = "read it again"}});
-  }
+  if (found.empty()) return std::unexpected(gone(table, n));
   const Row& present = found.front();
   if (present.integer("version") != expectedVersion)
     return std::unexpected(conflict(table, present, changed));
@@ -94,6 +97,35 @@ text::Checked<void> AuditedWriter::update(const std::string& table, std::int64_t
                    std::span<const Cell>(cells));
   m_changes.push_back(changeText(table, n, canonicalRow(before), canonicalRow(after)));
   return {};
+}
+
+text::Checked<void> AuditedWriter::remove(const std::string& table, std::int64_t n,
+                                          std::int64_t expectedVersion) {
+  const auto found =
+      m_connection.rows(fmt::format("SELECT * FROM {} WHERE n = ?", table), {Cell{n}});
+  if (found.empty()) return std::unexpected(gone(table, n));
+  const Row& present = found.front();
+  if (present.integer("version") != expectedVersion)
+    return std::unexpected(conflict(table, present, {}));
+  // A row is deleted only while it is named here; the triggers see to that.
+  const std::string removing = "removing " + table;
+  m_connection.run("INSERT INTO setting (name, value) VALUES (?, ?)",
+                   {Cell{removing}, Cell{std::to_string(n)}});
+  m_connection.run(fmt::format("DELETE FROM {} WHERE n = ?", table), {Cell{n}});
+  m_connection.run("DELETE FROM setting WHERE name = ?", {Cell{removing}});
+  m_connection.run(
+      "INSERT INTO setting (name, value) VALUES (?1, ?2) ON CONFLICT (name) DO UPDATE SET value = "
+      "CAST(max(CAST(value AS INTEGER), CAST(excluded.value AS INTEGER)) AS TEXT)",
+      {Cell{removedSetting(table)}, Cell{std::to_string(n)}});
+  m_changes.push_back(changeText(table, n, canonicalRow(present), "null"));
+  return {};
+}
+
+text::Faults AuditedWriter::gone(const std::string& table, std::int64_t n) const {
+  return {{.kind = text::FaultKind::kNotebook,
+           .file = m_connection.file(),
+           .what = fmt::format("{} {} is no longer there", table, n),
+           .mend = "read it again"}};
 }
 
 text::Faults AuditedWriter::conflict(const std::string& table, const Row& present,

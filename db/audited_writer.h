@@ -31,6 +31,11 @@ class AuditedWriter {
   [[nodiscard]] text::Checked<void> update(const std::string& table, std::int64_t n,
                                            std::int64_t expectedVersion, const Row& changed);
 
+  /// Takes a row out of which the caller has read `expectedVersion`; the trail keeps it whole, and
+  /// its number is never given again. Fault as update's.
+  [[nodiscard]] text::Checked<void> remove(const std::string& table, std::int64_t n,
+                                           std::int64_t expectedVersion);
+
   /// The run to which the action belongs, for the trail.
   void concerns(std::int64_t run) { m_run = run; }
 
@@ -38,6 +43,7 @@ class AuditedWriter {
   void finish();
 
  private:
+  [[nodiscard]] text::Faults gone(const std::string& table, std::int64_t n) const;
   [[nodiscard]] text::Faults conflict(const std::string& table, const Row& present,
                                       const Row& changed) const;
 

@@ -171,6 +171,12 @@ text::Fault toFault(const SQLite::Exception& error, const std::string& file) {
       return fault("the disk reported an error", "check disk and share; nothing was changed");
     case SQLITE_TOOBIG:
       return fault("a text or file is too large for the notebook", "keep it under 900 MB");
+    case SQLITE_INTERRUPT:
+      return {.kind = text::FaultKind::kNotebook,
+              .file = file,
+              .field = "interrupted",
+              .what = "the search was broken off",
+              .mend = "nothing is to be done"};
     case SQLITE_CONSTRAINT:
       return fault(std::string("the notebook refuses this: ") + error.what(),
                    "nothing was changed");

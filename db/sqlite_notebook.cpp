@@ -3,6 +3,7 @@
 #include "db/sqlite_notebook.h"
 
 #include <fmt/format.h>
+#include <sqlite3.h>
 
 #include <algorithm>
 #include <array>
@@ -21,6 +22,7 @@
 #include "db/record_rows.h"
 #include "db/sqlite_writing.h"
 #include "db/verifier.h"
+#include "db/vocabulary_sql.h"
 #include "db/writer_mark.h"
 
 namespace vialkeeper::db {
@@ -258,9 +260,12 @@ class SqliteNotebook final : public app::Notebook {
     });
   }
 
-  Checked<app::FindVocabulary> vocabulary() override { return app::FindVocabulary{}; }
+  Checked<app::FindVocabulary> vocabulary() override {
+    return guarded(m_connection->file(),
+                   [&]() -> Checked<app::FindVocabulary> { return readVocabulary(*m_connection); });
+  }
 
-  void interrupt() noexcept override {}
+  void interrupt() noexcept override { sqlite3_interrupt(m_connection->database().getHandle()); }
 
   Checked<app::VerifyReport> verify() override {
     return guarded(m_connection->file(),

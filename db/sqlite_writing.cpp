@@ -83,8 +83,20 @@ text::Checked<app::RowNumber> SqliteWriting::addSubstance(const app::SubstanceRe
 
 text::Checked<void> SqliteWriting::changeSubstance(const app::SubstanceRecord& substance) {
   auto changed = m_writer.update("substance", substance.n, substance.version, rowOf(substance));
-  if (changed) addNames(substance.n, substance);
-  return changed;
+  if (!changed) return changed;
+  for (const Row& row :
+       m_connection.rows("SELECT n, version, name FROM substance_name WHERE substance_n = ?",
+                         {Cell{substance.n}})) {
+    const std::string name = row.text("name");
+    if (name == substance.name ||
+        std::ranges::find(substance.synonyms, name) != substance.synonyms.end())
+      continue;
+    if (auto gone = m_writer.remove("substance_name", row.integer("n"), row.integer("version"));
+        !gone)
+      return gone;
+  }
+  addNames(substance.n, substance);
+  return {};
 }
 
 text::Checked<app::RowNumber> SqliteWriting::addCard(const app::ShelfCard& card) {
@@ -161,7 +173,8 @@ text::Checked<app::RowNumber> SqliteWriting::addComponent(const app::ComponentRe
 }
 
 text::Checked<void> SqliteWriting::removeComponent(const app::ComponentRecord& component) {
-  return fault("component " + component.key + " cannot be taken out yet", "wait");
+  m_writer.concerns(component.run);
+  return m_writer.remove("component", component.n, component.version);
 }
 
 text::Checked<app::RowNumber> SqliteWriting::addEvent(const app::EventRecord& event) {
@@ -242,7 +255,7 @@ void SqliteWriting::refreshWords(app::RowNumber run) {
   std::string observations;
   for (const Row& row :
        m_connection.rows("SELECT raw, note, kind FROM event WHERE run_n = ? AND (kind IN "
-                         "('observation', 'addendum') OR note IS NOT NULL) "
+                         "('observation', 'addendum') OR note IS NOT NULL) AND kind <> 'withdrawn' "
                          "AND n NOT IN (SELECT supersedes_n FROM event WHERE run_n = ? AND "
                          "supersedes_n IS NOT NULL) ORDER BY at_ms, n",
                          {Cell{run}, Cell{run}})) {

@@ -119,7 +119,15 @@ class Verifier {
         find(where, "holds a change that cannot be read");
         continue;
       }
-      m_told[fmt::format("{} {}", table.substr(1, table.size() - 2), n)] = sha256(after);
+      const std::string name = fmt::format("{} {}", table.substr(1, table.size() - 2), n);
+      if (after == "null") {
+        const auto told = m_told.find(name);
+        if (told == m_told.end() || told->second != sha256(rawMember(entry, "before")))
+          find(where, "takes out another " + name + " than the trail tells");
+        m_told.erase(name);
+        continue;
+      }
+      m_told[name] = sha256(after);
     }
   }
 

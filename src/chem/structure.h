@@ -53,10 +53,11 @@ class Pattern {
   [[nodiscard]] virtual bool isIn(std::string_view smiles) const = 0;
 };
 
-/// Reads, draws and searches structures. Implemented by three modules over RDKit and libinchi; the
-/// one that reads is loaded by structureEngine(), those that draw (three times as slow to load) and
-/// search by the first drawing, fingerprint or pattern. A SMILES has at most 10 000 characters and
-/// 1000 atoms; blanks around it do not count. Not safe for use from two threads at once.
+/// Reads, draws and searches structures. Implemented by modules over RDKit and libinchi; the one
+/// that reads is loaded by structureEngine(), those that draw (three times as slow to load), search
+/// and read files by the first drawing, fingerprint or pattern, and molfile. A SMILES has at most
+/// 10 000 characters and 1000 atoms; blanks around it do not count. Not safe for use from two
+/// threads at once.
 class StructureEngine {
  public:
   StructureEngine() = default;
@@ -67,6 +68,13 @@ class StructureEngine {
   /// Reads a SMILES. The whole text must be the notation: nothing after it, no reaction arrow, no
   /// atom or bond that stands for "any". Salts and hydrates written with `.` are one formula.
   [[nodiscard]] virtual std::expected<Structure, StructureFault> read(std::string_view smiles) = 0;
+
+  /// The canonical SMILES of a molfile (V2000 or V3000, up to `M  END`), as read() gives it: what
+  /// an SD file's record begins with. Explicit hydrogens become counted ones. Fault: no structure,
+  /// one whose valences do not add up, atoms or bonds that stand for any of several, more than 1000
+  /// atoms.
+  [[nodiscard]] virtual std::expected<std::string, StructureFault> readMolfile(
+      std::string_view molfile) = 0;
 
   /// The InChI and InChIKey of a SMILES. Apart from read(), because a charge does not need them.
   [[nodiscard]] virtual std::expected<Identity, StructureFault> identify(

@@ -55,6 +55,11 @@ class LoadedEngine final : public StructureEngine {
   std::expected<Structure, StructureFault> read(std::string_view smiles) override {
     return m_reader->read(smiles);
   }
+  std::expected<std::string, StructureFault> readMolfile(std::string_view molfile) override {
+    const auto opened = fileReader();
+    if (!opened) return std::unexpected(opened.error());
+    return (*opened)->readMolfile(molfile);
+  }
   std::expected<Identity, StructureFault> identify(std::string_view smiles) override {
     return m_reader->identify(smiles);
   }
@@ -82,6 +87,9 @@ class LoadedEngine final : public StructureEngine {
   }
 
  private:
+  std::expected<StructureFileReader*, StructureFault> fileReader() {
+    return openOnce(m_fileReader, kFileReaderModule);
+  }
   std::expected<StructureDrawer*, StructureFault> drawer() {
     return openOnce(m_drawer, kDrawerModule);
   }
@@ -101,6 +109,7 @@ class LoadedEngine final : public StructureEngine {
   }
 
   StructureReader* m_reader;
+  StructureFileReader* m_fileReader = nullptr;
   StructureDrawer* m_drawer = nullptr;
   StructureSearcher* m_searcher = nullptr;
 };

@@ -23,11 +23,11 @@ struct AmountEdit {
 /// A component more.
 struct ComponentAddition {
   std::string name;
-  std::string role = {};         ///< as in a plan file; empty: `additive`
-  std::string amount = {};       ///< as typed into its cell; empty: 1 equiv, a solvent 1 part
-  RowNumber substance = 0;       ///< of the shelf; its structure, formula and CAS number are taken
+  std::string role = {};    ///< as in a plan file; empty: `additive`
+  std::string amount = {};  ///< as typed into its cell; empty: 1 equiv, a solvent 1 part
+  RowNumber substance = 0;  ///< of the shelf; its structure, formula and CAS number are taken
   SubstanceRecord description = {};  ///< without a card: what is known of it, smiles or formula
-  std::string supply = {};  ///< `solid`, `liquid`, or empty: by the rule of the role
+  std::string supply = {};           ///< `solid`, `liquid`, or empty: by the rule of the role
 };
 
 struct ComponentRemoval {

@@ -7,6 +7,7 @@
 #include <algorithm>
 #include <filesystem>
 
+#include "app/notebook/entry_to_replace.h"
 #include "app/notebook/log_time.h"
 #include "app/notebook/run_life.h"
 #include "app/text_files.h"
@@ -129,19 +130,8 @@ Checked<LoggedEntry> correctEvent(const Desk& desk, const RunRecord& run, int nu
   if (const auto sound = checkLine(request.line); !sound) return std::unexpected(sound.error());
   if (const auto may = mayDo(run.state, Deed::kCorrectLog, request.reason); !may)
     return std::unexpected(may.error());
-  const auto events = numberedEvents(desk.notebook, run);
-  if (!events) return std::unexpected(events.error());
-  const auto original = std::ranges::find(*events, number, &NumberedEvent::number);
-  if (original == events->end()) {
-    return askedFault("event", fmt::format("{} has no entry {}", run.code, number),
-                      "see its numbers with show");
-  }
-  if (original->event.supersededBy != 0) {
-    return askedFault("event",
-                      fmt::format("entry {} was corrected already, by entry {}", number,
-                                  numberOf(*events, original->event.supersededBy)),
-                      "correct that one");
-  }
+  const auto original = entryToReplace(desk.notebook, run, number);
+  if (!original) return std::unexpected(original.error());
   auto entry = readEntry(run, request);
   if (!entry) return std::unexpected(entry.error());
   const Action action = desk.action("correct", request.reason);

@@ -7,6 +7,7 @@
 #include <filesystem>
 
 #include "app/notebook/desk.h"
+#include "app/notebook/log_line_kinds.h"
 #include "app/text_files.h"
 #include "text/csv.h"
 
@@ -23,7 +24,9 @@ std::string numberCell(const std::optional<double>& value, const char* unit) {
 std::string logCsv(const std::vector<EventRecord>& events) {
   std::string csv = "time,event,pressure,temperature,volume,gas,amount,fraction,note\r\n";
   for (const EventRecord& event : events) {
-    if (event.supersededBy != 0 || event.kind == "addendum") continue;
+    if (event.supersededBy != 0 || event.kind == event_kind::kAddendum ||
+        event.kind == event_kind::kWithdrawn)
+      continue;
     std::string pressure = numberCell(event.pressure_bar, "bar");
     if (!pressure.empty() && !event.pressureKind.empty()) pressure += " " + event.pressureKind;
     const bool words = event.kind == "observation" || event.kind == "photo";

@@ -6,79 +6,37 @@
 
 #include <algorithm>
 
-#include "app/notebook/fold_name.h"
-#include "app/notebook/substance_cards.h"
+#include "app/notebook/component_records.h"
+#include "app/notebook/shelf_places.h"
 #include "app/sheet_parts.h"
 #include "charge/plan_edit.h"
 #include "charge/plan_reader.h"
-#include "chem/solvents.h"
 #include "text/utf8.h"
 
 namespace vialkeeper::app {
 namespace {
 
 using charge::ComponentCharge;
-using charge::ComponentPlan;
 
-/// What a plan says of one component's substance, for the shelf.
-SubstanceDraft draftOf(const ComponentPlan& component) {
-  SubstanceDraft draft{.name = component.name,
-                       .formula = component.identity.formula,
-                       .smiles = component.identity.smiles,
-                       .cas = component.identity.cas,
-                       .hazards = component.hazards};
-  if (component.identity.molarMass) {
-    draft.molarMass = fmt::format("{:.6g} g/mol", component.identity.molarMass->gramsPerMole());
-  }
-  if (!component.identity.isEmpty()) return draft;
-  if (const chem::Solvent* solvent = chem::findSolvent(component.name)) {
-    draft.formula = solvent->formula;
-    draft.smiles = solvent->smiles;
-    if (draft.cas.empty()) draft.cas = solvent->cas;
-    if (foldName(solvent->name) != foldName(component.name))
-      draft.synonyms.push_back(solvent->name);
-  }
-  return draft;
+Checked<void> writeRun(Writing& writing, RunRecord& run, std::vector<ComponentRecord>& components,
+                       std::vector<ShelfPlace>& places, const std::string& planText,
+                       std::vector<std::string>& added) {
+  if (const auto put = putOnShelf(writing, places, added); !put) return put;
+  for (std::size_t i = 0; i < places.size(); ++i) components[i].substance = places[i].n;
+  const auto plan = writing.addAttachment(planText);
+  if (!plan) return std::unexpected(plan.error());
+  run.plan = *plan;
+  const auto code = writing.nextRunCode(run.person);
+  if (!code) return std::unexpected(code.error());
+  run.code = *code;
+  const auto n = writing.addRun(run, components);
+  if (!n) return std::unexpected(n.error());
+  run.n = *n;
+  run.version = 1;
+  return {};
 }
 
-/// A component's substance on the shelf, or a new card for it.
-struct ShelfPlace {
-  RowNumber n = 0;         ///< 0: to be added
-  SubstanceRecord record;  ///< of a new card
-};
-
-Checked<ShelfPlace> placeOnShelf(Notebook& notebook, const ComponentPlan& component,
-                                 text::Notices& notices) {
-  auto record = describeSubstance(draftOf(component));
-  if (!record) return std::unexpected(record.error());
-  const auto match = matchSubstance(notebook, *record);
-  if (!match) return std::unexpected(match.error());
-  if (!match->same.empty()) return ShelfPlace{match->same.front().n, {}};
-  if (!match->nearMisses.empty()) {
-    notices.push_back({"near-miss",
-                       fmt::format("{} is new on the shelf, where {} looks like it", component.name,
-                                   match->nearMisses.front()),
-                       "component." + component.key});
-  }
-  return ShelfPlace{0, *std::move(record)};
-}
-
-ComponentRecord componentRecord(const ComponentPlan& plan, const ComponentCharge& charge,
-                                int position) {
-  ComponentRecord record{.position = position,
-                         .key = plan.key,
-                         .role = std::string(toText(plan.role)),
-                         .name = plan.name,
-                         .actualText = {},
-                         .weighed = {},
-                         .weighedBy = {}};
-  if (charge.amount_mol) record.planned_mmol = charge.amount_mol->value() * 1e3;
-  record.planned_molPercent = charge.molPercent;
-  if (charge.concentration) record.planned_mol_L = charge.concentration->molPerLitre();
-  if (charge.targetMass) record.target_mg = charge.targetMass->milligrams();
-  if (charge.targetVolume) record.target_uL = charge.targetVolume->microlitres();
-  return record;
-}
+}  // namespace
 
 RunRecord runRecord(const PlannedRun& planned) {
   const charge::Plan& plan = planned.plan;
@@ -99,64 +57,12 @@ RunRecord runRecord(const PlannedRun& planned) {
   return run;
 }
 
-/// The shelf place of every component, substances that occur twice in the plan found once.
-Checked<std::vector<ShelfPlace>> placeAll(Notebook& notebook, const charge::Plan& plan,
-                                          text::Notices& notices) {
-  std::vector<ShelfPlace> places;
-  text::Faults faults;
-  for (const ComponentPlan& component : plan.components) {
-    auto place = placeOnShelf(notebook, component, notices);
-    if (place) {
-      places.push_back(*std::move(place));
-    } else {
-      for (text::Fault& fault : place.error()) {
-        if (fault.kind == text::FaultKind::kNotebook) return std::unexpected(place.error());
-        fault.field = "component." + component.key + (fault.field.empty() ? "" : "." + fault.field);
-        fault.file = plan.file;
-        fault.line = component.place.line;
-        faults.push_back(fault);
-      }
-    }
-  }
-  if (!faults.empty()) return std::unexpected(std::move(faults));
-  return places;
+void headPlan(charge::Plan& plan, const RunRecord& run) {
+  if (!run.title.empty()) plan.title = run.title;
+  plan.code = run.code;
+  if (plan.chemist.empty()) plan.chemist = run.person;
+  if (plan.date.empty()) plan.date = toIsoText(run.created).substr(0, 10);
 }
-
-bool isSameSubstance(const SubstanceRecord& a, const SubstanceRecord& b) {
-  if (!a.canonicalSmiles.empty() && a.canonicalSmiles == b.canonicalSmiles) return true;
-  if (!a.cas.empty() && a.cas == b.cas) return true;
-  return foldName(a.name) == foldName(b.name);
-}
-
-Checked<void> writeRun(Writing& writing, RunRecord& run, std::vector<ComponentRecord>& components,
-                       std::vector<ShelfPlace>& places, const std::string& planText,
-                       std::vector<std::string>& added) {
-  for (std::size_t i = 0; i < places.size(); ++i) {
-    if (places[i].n == 0) {
-      const auto n = writing.addSubstance(places[i].record);
-      if (!n) return std::unexpected(n.error());
-      added.push_back(places[i].record.name);
-      for (std::size_t j = i; j < places.size(); ++j) {
-        if (places[j].n == 0 && isSameSubstance(places[j].record, places[i].record))
-          places[j].n = *n;
-      }
-    }
-    components[i].substance = places[i].n;
-  }
-  const auto plan = writing.addAttachment(planText);
-  if (!plan) return std::unexpected(plan.error());
-  run.plan = *plan;
-  const auto code = writing.nextRunCode(run.person);
-  if (!code) return std::unexpected(code.error());
-  run.code = *code;
-  const auto n = writing.addRun(run, components);
-  if (!n) return std::unexpected(n.error());
-  run.n = *n;
-  run.version = 1;
-  return {};
-}
-
-}  // namespace
 
 charge::Weighings recordedWeighings(const std::vector<ComponentRecord>& components) {
   charge::Weighings weighings;
@@ -190,10 +96,7 @@ Checked<RunSheet> loadRun(Notebook& notebook, const RunRecord& run, charge::Reta
                     ? charge::computeCharge(*plan, *substances)
                     : charge::chargeAsWeighed(*plan, *substances, weighings, retarget);
   if (!result) return std::unexpected(result.error());
-  if (!run.title.empty()) plan->title = run.title;
-  plan->code = run.code;
-  if (plan->chemist.empty()) plan->chemist = run.person;
-  if (plan->date.empty()) plan->date = toIsoText(run.created).substr(0, 10);
+  headPlan(*plan, run);
   return RunSheet{run, *std::move(components),
                   PlannedRun{*std::move(planText), *std::move(plan), *std::move(substances),
                              *std::move(result)},
@@ -228,12 +131,12 @@ Checked<AddedRun> addRun(const Desk& desk, const NewRun& wanted) {
   added.run.person = desk.person;
   added.run.created = desk.clock.now();
   added.run.clonedFrom = wanted.clonedFrom;
-  auto places = placeAll(desk.notebook, planned->plan, added.notices);
+  auto places = placeAll(desk.notebook, planned->plan, {}, added.notices);
   if (!places) return std::unexpected(places.error());
   std::vector<ComponentRecord> components;
   for (std::size_t i = 0; i < planned->plan.components.size(); ++i) {
-    components.push_back(componentRecord(planned->plan.components[i], planned->charge.components[i],
-                                         static_cast<int>(i)));
+    components.push_back(plannedRecord(planned->plan.components[i], planned->charge.components[i],
+                                       static_cast<int>(i)));
   }
   const auto done = desk.notebook.act(
       desk.action(wanted.clonedFrom == 0 ? "add" : "clone"), [&](Writing& writing) {

@@ -23,6 +23,12 @@ struct RunSheet {
 [[nodiscard]] Checked<RunSheet> loadRun(Notebook& notebook, const RunRecord& run,
                                         charge::Retarget retarget = charge::Retarget::kNo);
 
+/// What the plan says of a run's headings; person, code and the like are left for the caller.
+[[nodiscard]] RunRecord runRecord(const PlannedRun& planned);
+
+/// Gives a plan the run's title and code, and its chemist and date where it names none.
+void headPlan(charge::Plan& plan, const RunRecord& run);
+
 /// The recorded quantities of a run's components, as readings of its plan.
 [[nodiscard]] charge::Weighings recordedWeighings(const std::vector<ComponentRecord>& components);
 

@@ -186,6 +186,7 @@ Checked<ShelfCard> addShelfCard(const Desk& desk, ShelfKind kind, const std::str
         const auto n = writing.addCard(*card);
         if (!n) return std::unexpected(n.error());
         card->n = *n;
+        card->version = 1;
         return {};
       });
   if (!done) return std::unexpected(done.error());

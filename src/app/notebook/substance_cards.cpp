@@ -202,6 +202,7 @@ Checked<SubstanceRecord> addSubstanceCard(const Desk& desk, const SubstanceDraft
         const auto n = writing.addSubstance(*record);
         if (!n) return std::unexpected(n.error());
         record->n = *n;
+        record->version = 1;
         return {};
       });
   if (!done) return std::unexpected(done.error());

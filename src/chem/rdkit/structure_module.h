@@ -14,7 +14,7 @@ namespace vialkeeper::chem {
 
 /// Raised whenever a class of this file or of chem/structure.h changes: a module of another
 /// number is refused before any of its functions is called.
-inline constexpr int kStructureModuleAbi = 2;
+inline constexpr int kStructureModuleAbi = 3;
 
 /// Reads and names structures; the functions are those of StructureEngine.
 class StructureReader {
@@ -26,6 +26,17 @@ class StructureReader {
   [[nodiscard]] virtual std::expected<Structure, StructureFault> read(std::string_view smiles) = 0;
   [[nodiscard]] virtual std::expected<Identity, StructureFault> identify(
       std::string_view smiles) = 0;
+};
+
+/// Reads structures out of files; the function is that of StructureEngine.
+class StructureFileReader {
+ public:
+  StructureFileReader() = default;
+  StructureFileReader(const StructureFileReader&) = delete;
+  StructureFileReader& operator=(const StructureFileReader&) = delete;
+  virtual ~StructureFileReader() = default;
+  [[nodiscard]] virtual std::expected<std::string, StructureFault> readMolfile(
+      std::string_view molfile) = 0;
 };
 
 /// Draws structures; the functions are those of StructureEngine.
@@ -70,11 +81,14 @@ inline constexpr StructureModule kReaderModule{
     "give a formula or molar mass in place of the SMILES"};
 inline constexpr StructureModule kDrawerModule{"vialkeeper_drawings.so",
                                                "vialkeeper_open_structure_drawer"};
+inline constexpr StructureModule kFileReaderModule{
+    "vialkeeper_molfiles.so", "vialkeeper_open_structure_file_reader",
+    "give the SMILES in a CSV file in place of the SD file"};
 inline constexpr StructureModule kSearcherModule{"vialkeeper_search.so",
                                                  "vialkeeper_open_structure_searcher"};
 
-/// The object of a module: a StructureReader*, StructureDrawer* or StructureSearcher* behind
-/// `void*`.
+/// The object of a module: a StructureReader*, StructureFileReader*, StructureDrawer* or
+/// StructureSearcher* behind `void*`.
 /// Sought in the directory that the environment variable VIALKEEPER_MODULE_DIR names and nowhere
 /// else if that is set; otherwise beside the program (`../lib/vialkeeper`), then where it was
 /// installed. An opened module stays for the life of the process.
