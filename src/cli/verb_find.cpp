@@ -8,6 +8,7 @@
 #include <nlohmann/json.hpp>
 
 #include "app/notebook/find_runs.h"
+#include "app/notebook/run_text.h"
 #include "cli/json_text.h"
 #include "cli/notebook_session.h"
 #include "cli/record_json.h"

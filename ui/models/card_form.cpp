@@ -121,11 +121,16 @@ text::Checked<std::string> CardForm::saveSubstance() {
                                   .molarMass = of("molar_mass"),
                                   .hazards = parts(text("hazards"), QLatin1Char(' ')),
                                   .note = of("note")};
-  const auto saved = m_substance ? app::changeSubstanceCard(m_link.desk(), *m_substance, draft)
-                                 : app::addSubstanceCard(m_link.desk(), draft);
-  if (!saved) return std::unexpected(saved.error());
-  show(*saved);
-  return saved->name;
+  if (m_substance) {
+    const auto changed = app::changeSubstanceCard(m_link.desk(), *m_substance, draft);
+    if (!changed) return std::unexpected(changed.error());
+    show(*changed);
+    return changed->name;
+  }
+  const auto added = app::addSubstanceCard(m_link.desk(), draft);
+  if (!added) return std::unexpected(added.error());
+  show(added->substance);
+  return added->substance.name;
 }
 
 text::Checked<std::string> CardForm::saveCard() {
