@@ -188,3 +188,43 @@ TEST_CASE("no text of the usual columns is cut off", "[ui][identity]") {
   }
   ui::Theme::instance().setHoodMode(*qApp, false);
 }
+
+TEST_CASE("pictures", "[.picture]") {
+  WindowBench bench;
+  auto save = [&](const char* name) {
+    QTest::qWait(150);
+    bench.window->grab().save(QString::fromLatin1("/tmp/u1-") + QString::fromLatin1(name) + QStringLiteral(".png"));
+  };
+  bench.table()->setFocus();
+  WindowBench::press(Qt::Key_Down);
+  save("light");
+  bench.filter()->setFocus();
+  WindowBench::type("acid:piv");
+  save("complete");
+  WindowBench::press(Qt::Key_Escape);
+  WindowBench::press(Qt::Key_Escape);
+  WindowBench::type("photoc");
+  save("complete2");
+  WindowBench::press(Qt::Key_Escape);
+  WindowBench::press(Qt::Key_Escape);
+  WindowBench::type("acid:\"pivalic acid\" yield>x ");
+  save("fault");
+  WindowBench::press(Qt::Key_Escape);
+  WindowBench::press(Qt::Key_Escape);
+  WindowBench::type("acid:pivalicc ");
+  save("nothing");
+  WindowBench::press(Qt::Key_Escape);
+  WindowBench::press(Qt::Key_Escape);
+  bench.table()->setFocus();
+  WindowBench::press(Qt::Key_D, Qt::ControlModifier);
+  QTest::qWait(800);
+  save("new");
+  ui::Theme::instance().apply(*qApp, ui::Theme::Choice::kDark);
+  save("new-dark");
+  WindowBench::press(Qt::Key_Escape);
+  save("dark");
+  ui::Theme::instance().setHoodMode(*qApp, true);
+  save("hood");
+  ui::Theme::instance().setHoodMode(*qApp, false);
+  ui::Theme::instance().apply(*qApp, ui::Theme::Choice::kLight);
+}
