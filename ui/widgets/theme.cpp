@@ -12,6 +12,10 @@
 #include <QStyleFactory>
 #include <stdexcept>
 
+/// A resource of a static library is left out of the program unless it is asked for by name, and
+/// that not from within a namespace.
+static void takeResources() { Q_INIT_RESOURCE(resources); }
+
 namespace vialkeeper::ui {
 namespace {
 
@@ -42,14 +46,14 @@ Theme::Kind kindFor(Theme::Choice choice, const QApplication& application) {
       break;
   }
   // The palette before ours is the system's.
-  static const bool systemIsDark =
-      application.palette().color(QPalette::Window).lightness() < 128;
+  static const bool systemIsDark = application.palette().color(QPalette::Window).lightness() < 128;
   return systemIsDark ? Theme::Kind::kDark : Theme::Kind::kLight;
 }
 
 }  // namespace
 
 Theme::Theme() {
+  takeResources();
   QFile file(QStringLiteral(":/vialkeeper/theme.json"));
   if (!file.open(QIODevice::ReadOnly)) throw std::logic_error("the theme is not in the program");
   const QJsonObject kinds = QJsonDocument::fromJson(file.readAll()).object();
@@ -87,7 +91,7 @@ void Theme::remember(Choice choice) {
 Theme::Choice Theme::chosen() {
   const int kept = QSettings().value(QStringLiteral("theme"), 0).toInt();
   return kept >= 0 && kept <= static_cast<int>(Choice::kContrast) ? static_cast<Choice>(kept)
-                                                                   : Choice::kSystem;
+                                                                  : Choice::kSystem;
 }
 
 void Theme::setHoodMode(QApplication& application, bool on) {
