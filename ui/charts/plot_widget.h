@@ -3,11 +3,14 @@
 #pragma once
 
 #include <QColor>
+#include <QImage>
 #include <QString>
 #include <QWidget>
 #include <memory>
 #include <optional>
 #include <vector>
+
+#include "text/fault.h"
 
 namespace vialkeeper::ui {
 
@@ -19,6 +22,7 @@ struct PlotSeries {
   Look look = Look::kLine;
   std::vector<double> x = {};
   std::vector<double> y = {};
+  bool onRight = false;  ///< drawn against the axis on the right
 };
 
 /// A stretch of the x axis with a meaning: the lamp was on.
@@ -50,6 +54,7 @@ struct PlotBand {
 struct PlotContent {
   QString xTitle = {};
   QString yTitle = {};
+  QString rightTitle = {};  ///< of the axis on the right, if a series wants it
   std::vector<PlotSeries> series = {};
   std::vector<PlotSpan> spans = {};
   std::vector<PlotLine> lines = {};
@@ -60,7 +65,8 @@ struct PlotContent {
 
 /// Axes with curves, bands, spans and lines; pan with the mouse or arrows, zoom with the wheel or
 /// `+` and `-`, `0` shows all. Long curves are drawn with four points for every pixel column at
-/// most. The one place that knows Qt Charts.
+/// most. The one place that knows Qt Charts. A click on a point tells of it; the context menu saves
+/// the picture.
 class PlotWidget : public QWidget {
   Q_OBJECT
 
@@ -74,20 +80,44 @@ class PlotWidget : public QWidget {
   void showAll();
   /// The part of the x axis in view.
   [[nodiscard]] std::pair<double, double> xView() const;
+  /// Shows this part of the x axis, moved and cut to what there is.
   void setXView(double from, double to);
+
+  /// The picture as it is shown, `scale` times as large in pixels.
+  [[nodiscard]] QImage picture(double scale = 2.0) const;
+  /// The picture as SVG; no curve leaves the axes in it.
+  [[nodiscard]] QByteArray svg() const;
+  /// Writes the picture: SVG where the name ends so, else PNG.
+  [[nodiscard]] text::Checked<void> savePicture(const QString& file) const;
+  /// Asks for a file and writes the picture.
+  void choosePictureFile();
 
  signals:
   /// A point of a series was clicked: its place in the series.
   void pointClicked(int series, int point);
+  /// The picture was written, or why it could not be.
+  void pictureSaved(const QString& file);
+  void refused(const vialkeeper::text::Faults& faults);
 
  protected:
-  void resizeEvent(QResizeEvent* event) override;
   void keyPressEvent(QKeyEvent* event) override;
+  void contextMenuEvent(QContextMenuEvent* event) override;
+  void focusInEvent(QFocusEvent* event) override;
+  void focusOutEvent(QFocusEvent* event) override;
+  void paintEvent(QPaintEvent* event) override;
+  void changeEvent(QEvent* event) override;
   bool eventFilter(QObject* watched, QEvent* event) override;
 
  private:
   class Chart;
+  void zoom(double factor, double around);
+  void pan(double share);
+  void tellClick(const QPointF& at);
+
   std::unique_ptr<Chart> m_chart;
+  std::optional<double> m_draggedFrom;  ///< x in pixels where the mouse went down
+  std::pair<double, double> m_viewBefore{0.0, 1.0};
+  bool m_moved = false;
 };
 
 }  // namespace vialkeeper::ui

@@ -30,8 +30,18 @@ QString doubtSentence(const text::TextFault& doubt, const std::string& utf8) {
 }  // namespace
 
 LogEntryModel::LogEntryModel(OpenRun& run, QObject* parent) : QObject(parent), m_run(run) {
-  connect(&m_run, &OpenRun::opened, this, &LogEntryModel::clear);
+  connect(&m_run, &OpenRun::opened, this, &LogEntryModel::followRun);
   connect(&m_run, &OpenRun::reloaded, this, &LogEntryModel::readAgain);
+  if (m_run.isOpen()) m_runNumber = m_run.run().n;
+}
+
+void LogEntryModel::followRun() {
+  const app::RowNumber opened = m_run.isOpen() ? m_run.run().n : 0;
+  if (opened == m_runNumber) return;
+  if (m_task == Task::kNew) m_drafts.insert(m_runNumber, m_line);
+  m_runNumber = opened;
+  clear();
+  setLine(m_drafts.take(opened));
 }
 
 app::Deed LogEntryModel::deed() const {
@@ -66,6 +76,12 @@ bool LogEntryModel::canKeepAsText() const { return m_lineInDoubt && m_task != Ta
 
 void LogEntryModel::setLine(const QString& line) {
   if (line == m_line) return;
+  m_line = line;
+  readAgain();
+}
+
+void LogEntryModel::begin(const QString& line) {
+  m_begun = line;
   m_line = line;
   readAgain();
 }
@@ -118,6 +134,7 @@ void LogEntryModel::startWithdrawal(int number) {
 void LogEntryModel::clear() {
   m_task = Task::kNew;
   m_entry = 0;
+  m_begun.clear();
   m_line.clear();
   m_at.clear();
   m_reason.clear();
@@ -141,6 +158,11 @@ void LogEntryModel::read() {
   if (!m_run.isOpen() || m_line.trimmed().isEmpty()) return;
   if (m_task == Task::kWithdrawal) {
     m_standing = Standing::kReads;
+    return;
+  }
+  if (m_line == m_begun && app::readLogLine(toUtf8(m_line)).doubt) {
+    m_standing = Standing::kUnfinished;
+    m_sentence = tr("goes on: type the figure");
     return;
   }
   if (const auto time = readTime()) readLine(*time);
@@ -185,7 +207,12 @@ void LogEntryModel::readLine(const QString& time) {
 }
 
 Outcome LogEntryModel::tell(Outcome outcome) {
-  if (!outcome.faults.empty()) emit failed(sentences(outcome.faults, false));
+  if (!outcome.faults.empty()) {
+    QString words = sentences(outcome.faults, false);
+    if (const std::string& file = outcome.faults.front().file; !file.empty())
+      words = toQt(file) + QStringLiteral(": ") + words;
+    emit failed(words);
+  }
   if (outcome.done) {
     int newest = 0;
     for (const app::NumberedEvent& entry : m_run.events()) newest = std::max(newest, entry.number);

@@ -2,6 +2,7 @@
 // SPDX-License-Identifier: GPL-3.0-or-later
 #pragma once
 
+#include <QHash>
 #include <QObject>
 #include <QString>
 #include <optional>
@@ -13,7 +14,8 @@
 namespace vialkeeper::ui {
 
 /// The one line in which entries are written: what is typed, how it reads, and what becomes of it.
-/// It writes a new entry, or one in the place of another, or takes one back.
+/// It writes a new entry, or one in the place of another, or takes one back. A line that was not
+/// finished waits while another run is open.
 class LogEntryModel : public QObject {
   Q_OBJECT
 
@@ -53,6 +55,8 @@ class LogEntryModel : public QObject {
   void setLine(const QString& line);
   void setAt(const QString& at);
   void setReason(const QString& reason);
+  /// A stamp begins this line: until a figure stands in it, it is unfinished and not in doubt.
+  void begin(const QString& line);
   /// Fills the line with an entry that is to be corrected. One that cannot be is left alone.
   void startCorrection(int entry);
   /// Takes an entry back at once, or asks for the reason first where the state wants one.
@@ -80,6 +84,7 @@ class LogEntryModel : public QObject {
   [[nodiscard]] app::Deed deed() const;
   [[nodiscard]] const app::EventRecord* original() const;
   void start(Task task, const app::NumberedEvent& entry);
+  void followRun();
   void read();
   [[nodiscard]] std::optional<QString> readTime();
   void readLine(const QString& time);
@@ -87,9 +92,12 @@ class LogEntryModel : public QObject {
   Outcome tell(Outcome outcome);
 
   OpenRun& m_run;
+  app::RowNumber m_runNumber = 0;
+  QHash<app::RowNumber, QString> m_drafts;  ///< lines that were left unfinished, by run
   Task m_task = Task::kNew;
   int m_entry = 0;
   QString m_line;
+  QString m_begun;
   QString m_at;
   QString m_reason;
   Standing m_standing = Standing::kEmpty;

@@ -154,9 +154,9 @@ StripView stripView(const app::VialStrip& strip) {
   view.gauge = gaugeView(strip);
   view.lamp = lampView(strip);
   view.timeline = TimelineMaker(strip).make();
-  const auto& marks = view.timeline.marks;
-  for (auto mark = marks.rbegin(); mark != marks.rend() && view.latest.size() < kLatest; ++mark)
-    view.latest.push_back(mark->sentence);
+  for (auto mark = strip.marks.rbegin(); mark != strip.marks.rend() && view.latest.size() < kLatest;
+       ++mark)
+    view.latest.push_back(clockText(mark->at) + QLatin1Char(' ') + toQt(mark->sentence));
   return view;
 }
 

@@ -71,6 +71,25 @@ TEST_CASE("the place of a doubt counts characters, not bytes", "[ui][identity]")
   }
 }
 
+TEST_CASE("a line that was not finished waits while another run is open", "[ui][identity]") {
+  Bench bench;
+  const app::RowNumber first = bench.run.run().n;
+  bench.type("p 0.4");
+  REQUIRE(bench.run.open(bench.fixture.addRun(*bench.link)));
+  CHECK(bench.entry.line().isEmpty());
+  bench.type("deep");
+  REQUIRE(bench.run.open(first));
+  CHECK(bench.entry.line() == QStringLiteral("p 0.4"));
+}
+
+TEST_CASE("a line that a stamp began is unfinished, not in doubt", "[ui][identity]") {
+  Bench bench;
+  bench.entry.begin(QStringLiteral("p  bar 35 C"));
+  CHECK(bench.entry.standing() == Standing::kUnfinished);
+  CHECK(bench.type("p 0.38 bar 35 C") == Standing::kReads);
+  CHECK(bench.type("p x bar 35 C") == Standing::kDoubtful);
+}
+
 TEST_CASE("the time field is read too", "[ui][identity]") {
   Bench bench;
   bench.type("vent");
