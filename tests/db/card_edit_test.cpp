@@ -26,7 +26,8 @@ app::SubstanceRecord addIndoline(WorkDesk& work) {
                                                   .smiles = "c1ccc2c(c1)CCN2",
                                                   .cas = "496-15-1",
                                                   .hazards = {"H302"},
-                                                  .note = "invented"}));
+                                                  .note = "invented"}))
+      .substance;
 }
 
 TEST_CASE("a substance's draft describes the same card", "[app][shelf][identity]") {

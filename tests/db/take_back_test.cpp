@@ -53,7 +53,7 @@ TEST_CASE("a withdrawn entry stays to be seen and counts no more", "[app][log][r
   // The withdrawal is undone by a correction with the line as it was.
   const auto again =
       good(app::correctEvent(work.desk(), work.run(), 3, {.line = original->event.raw}));
-  CHECK(again.entry.event.at.utc == original->event.at.utc);
+  CHECK(again.event.at.utc == original->event.at.utc);
   CHECK(found(work, "foaming") == 1);
 }
 

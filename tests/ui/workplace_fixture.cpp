@@ -61,8 +61,12 @@ std::unique_ptr<app::Notebook> WorkplaceFixture::other() {
 app::RowNumber WorkplaceFixture::addRun(ui::NotebookLink& link, const std::string& name) {
   const std::string file =
       std::string(VIALKEEPER_SOURCE_DIR) + "/templates/runs/" + name + ".toml";
+  // Set up well before: what tests log may have happened earlier than now.
+  constexpr std::chrono::hours kBefore(120);
+  m_clock.advance(-kBefore);
   const auto added =
       app::addRun(link.desk(), {.planText = bytesOf(file), .planFile = name + ".toml"});
+  m_clock.advance(kBefore);
   if (!added) FAIL(ui::toUtf8(ui::sentences(added.error())));
   link.lookForChanges();
   return added->run.n;

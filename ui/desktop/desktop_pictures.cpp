@@ -16,6 +16,7 @@
 #include "ui/desktop/sqlite_files.h"
 #include "ui/models/qt_text.h"
 #include "ui/widgets/main_window.h"
+#include "ui/widgets/message_bar.h"
 #include "ui/widgets/shelf_page.h"
 #include "ui/widgets/theme.h"
 #include "ui/widgets/workspace.h"
@@ -41,12 +42,6 @@ void press(QWidget& window, int key, Qt::KeyboardModifiers modifiers = Qt::NoMod
     QKeyEvent event(type, key, modifiers);
     QApplication::sendEvent(target, &event);
   }
-  settle();
-}
-
-void trigger(MainWindow& window, const QString& command) {
-  for (QAction* action : window.commands().actions())
-    if (action->text() == command) action->trigger();
   settle();
 }
 
@@ -76,11 +71,13 @@ void takeAll(MainWindow& window, const QString& notebook, const QString& code, P
   pictures.take(QStringLiteral("start"));
   window.openNotebook(notebook);
   Workspace& workspace = *window.workspace();
+  workspace.link().setPerson(QStringLiteral("KW"));
+  workspace.messages().dismiss();
   settle();
   openRun(workspace, code);
   workspace.showPage(RunPage::Page::kCharge);
   pictures.take(QStringLiteral("charge"));
-  trigger(window, MainWindow::tr("Weigh"));
+  press(window, Qt::Key_F4);
   pictures.take(QStringLiteral("weigh"));
   press(window, Qt::Key_Escape);
   workspace.showPage(RunPage::Page::kLog);

@@ -76,6 +76,7 @@ bool LogEntryModel::canKeepAsText() const { return m_lineInDoubt && m_task != Ta
 
 void LogEntryModel::setLine(const QString& line) {
   if (line == m_line) return;
+  m_questioned = false;
   m_line = line;
   readAgain();
 }
@@ -88,6 +89,7 @@ void LogEntryModel::begin(const QString& line) {
 
 void LogEntryModel::setAt(const QString& at) {
   if (at == m_at) return;
+  m_questioned = false;
   m_at = at;
   readAgain();
 }
@@ -132,6 +134,7 @@ void LogEntryModel::startWithdrawal(int number) {
 }
 
 void LogEntryModel::clear() {
+  m_questioned = false;
   m_task = Task::kNew;
   m_entry = 0;
   m_begun.clear();
@@ -207,6 +210,14 @@ void LogEntryModel::readLine(const QString& time) {
 }
 
 Outcome LogEntryModel::tell(Outcome outcome) {
+  if (!outcome.slips.empty()) {
+    QStringList questions;
+    for (const app::LogSlip& slip : outcome.slips)
+      questions += toQt(slip.what) + QStringLiteral(": ") + toQt(slip.ask);
+    m_questioned = true;
+    emit failed(questions.join(QLatin1Char('\n')));
+    emit changed();
+  }
   if (!outcome.faults.empty()) {
     QString words = sentences(outcome.faults, false);
     if (const std::string& file = outcome.faults.front().file; !file.empty())

@@ -44,6 +44,8 @@ class LogEntryModel : public QObject {
   /// The characters in doubt, as place and length in the line; of the time where that is at fault.
   [[nodiscard]] std::optional<std::pair<int, int>> doubtPlace() const { return m_doubtPlace; }
   [[nodiscard]] bool canKeepAsText() const;
+  /// Whether the line was questioned as a slip: it is kept as it stands with commit(true).
+  [[nodiscard]] bool isQuestioned() const { return m_questioned; }
   /// Whether the run's state wants a reason for what is being done.
   [[nodiscard]] bool wantsReason() const;
   /// Why nothing can be written now; empty where something can.
@@ -104,6 +106,7 @@ class LogEntryModel : public QObject {
   QString m_sentence;
   std::optional<std::pair<int, int>> m_doubtPlace;
   bool m_lineInDoubt = false;
+  bool m_questioned = false;
 };
 
 }  // namespace vialkeeper::ui

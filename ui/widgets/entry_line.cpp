@@ -239,7 +239,9 @@ void EntryLine::showReading() {
   setStyleProperty(*m_reading, "quiet", !doubtful && m_failure.isEmpty());
   setStyleProperty(*m_line, "faulty", standing == Standing::kDoubtful);
   setStyleProperty(*m_at, "faulty", standing == Standing::kBadTime);
-  m_keep->setVisible(m_model.canKeepAsText());
+  m_keep->setText(m_model.isQuestioned() ? tr("&Yes, log it as it stands")
+                                         : tr("&Keep it as an observation"));
+  m_keep->setVisible(m_model.canKeepAsText() || m_model.isQuestioned());
 }
 
 }  // namespace vialkeeper::ui

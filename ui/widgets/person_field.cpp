@@ -26,6 +26,7 @@ PersonField::PersonField(NotebookLink& link, QWidget* parent) : QLineEdit(parent
   setText(link.person());
   setReadOnly(link.isReadOnly());
   connect(this, &QLineEdit::editingFinished, this, &PersonField::takeTyped);
+  connect(&link, &NotebookLink::personChanged, this, [this] { setText(m_link.person()); });
 }
 
 void PersonField::takeTyped() {

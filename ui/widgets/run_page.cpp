@@ -43,7 +43,7 @@ RunPage::RunPage(OpenRun& run, QWidget* parent)
   m_pages->setDocumentMode(true);
   m_pages->setAccessibleName(tr("Pages of the run"));
   auto* column = new QVBoxLayout(this);
-  column->setContentsMargins(16, 10, 16, 8);
+  column->setContentsMargins(12, 10, 12, 8);
   column->setSpacing(8);
   column->addLayout(heading);
   column->addWidget(m_messages);

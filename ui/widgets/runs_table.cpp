@@ -16,7 +16,7 @@
 namespace vialkeeper::ui {
 namespace {
 
-constexpr int kLeastTitle_px = 190;
+constexpr int kLeastTitle_px = 202;
 constexpr int kMostUsualLines = 2;
 
 }  // namespace
@@ -58,6 +58,8 @@ void RunsTable::setUpView() {
   m_view->setHorizontalScrollMode(QAbstractItemView::ScrollPerPixel);
   m_view->verticalHeader()->hide();
   m_view->verticalHeader()->setSectionResizeMode(QHeaderView::Fixed);
+  // Always there, so that the columns need not give way when it comes.
+  m_view->setVerticalScrollBarPolicy(Qt::ScrollBarAlwaysOn);
   QHeaderView& head = *m_view->horizontalHeader();
   head.setSectionResizeMode(QHeaderView::Fixed);
   head.setSectionsClickable(true);

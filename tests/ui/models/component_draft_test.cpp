@@ -3,6 +3,8 @@
 #include <QAbstractItemModelTester>
 #include <catch2/catch.hpp>
 
+#include "app/notebook/substance_cards.h"
+
 #include "ui/models/component_draft.h"
 #include "ui/models/component_search.h"
 #include "ui/models/qt_text.h"
@@ -50,6 +52,7 @@ TEST_CASE("a substance of the shelf is found by name, CAS number and structure",
 
 TEST_CASE("a component from the shelf is added, and taken out again by undo", "[ui][identity]") {
   Bench bench;
+  REQUIRE(app::addSubstanceCard(bench.link->desk(), {.name = "indole", .formula = "C8H7N"}));
   bench.search.setText(QStringLiteral("indole"));
   REQUIRE(bench.search.substance(0));
   bench.draft.takeFromShelf(*bench.search.substance(0));

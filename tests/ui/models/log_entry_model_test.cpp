@@ -110,9 +110,25 @@ TEST_CASE("the time field is read too", "[ui][identity]") {
   REQUIRE(bench.run.events().size() == 1);
 }
 
+TEST_CASE("a pressure that the vial cannot hold is questioned, and kept when that was meant",
+          "[ui][identity]") {
+  Bench bench;
+  QSignalSpy failed(&bench.entry, &ui::LogEntryModel::failed);
+  bench.entry.setLine(QStringLiteral("p 420 bar"));
+  CHECK_FALSE(bench.entry.commit().done);
+  CHECK(bench.entry.isQuestioned());
+  REQUIRE(failed.count() == 1);
+  CHECK(failed.front().front().toString().contains(QStringLiteral("420 mbar")));
+  CHECK(bench.run.events().empty());
+  CHECK(bench.entry.line() == QStringLiteral("p 420 bar"));
+  CHECK(bench.entry.commit(true).done);
+  CHECK(bench.run.events().size() == 1);
+  CHECK_FALSE(bench.entry.isQuestioned());
+}
+
 TEST_CASE("a correction fills the line and keeps the original's time", "[ui][identity]") {
   Bench bench;
-  tests::requireDone(bench.run.log(QStringLiteral("p 4.2 bar 35 C"), QStringLiteral("20 min ago")));
+  tests::requireDone(bench.run.log(QStringLiteral("p 4.2 bar 35 C"), QStringLiteral("20 min ago"), {.accepted = true}));
   const auto before = bench.run.events().front().event.at;
   bench.entry.startCorrection(1);
   CHECK(bench.entry.task() == ui::LogEntryModel::Task::kCorrection);

@@ -66,7 +66,7 @@ TEST_CASE("the day stands where it changes, and a late entry says when it was wr
 
 TEST_CASE("a corrected entry stays, struck through, with a word for it", "[ui][identity]") {
   Bench bench;
-  tests::requireDone(bench.run.log(QStringLiteral("p 4.2 bar 35 C")));
+  tests::requireDone(bench.run.log(QStringLiteral("p 4.2 bar 35 C"), {}, {.accepted = true}));
   tests::requireDone(bench.run.correct(1, QStringLiteral("p 0.42 bar 35 C"), {}));
   REQUIRE(bench.model.rowCount() == 2);
   const int original = bench.model.rowOf(1);

@@ -140,7 +140,7 @@ TEST_CASE("a filter is kept under a name and chosen again", "[ui][identity]") {
   WindowBench::press(Qt::Key_Escape);
   CHECK(bench.filter()->text().isEmpty());
   act(QStringLiteral("done ones"));
-  CHECK(bench.filter()->text() == QStringLiteral("state:closed "));
+  CHECK(bench.filter()->text() == QStringLiteral("state:closed"));
 }
 
 TEST_CASE("the selected run stays selected when the list is read again", "[ui][identity]") {
