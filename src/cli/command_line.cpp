@@ -141,7 +141,7 @@ std::vector<Verb> allVerbs(CLI::App& program) {
   std::vector<Verb> verbs;
   for (const auto make :
        {massVerb,   chargeVerb,  sheetVerb,  createVerb,  demoVerb,  shelfVerb,
-        addVerb,    cloneVerb,   runsVerb,   findVerb,    showVerb,  weighVerb,
+        addVerb,    cloneVerb,   runsVerb,   findVerb,    showVerb,  changeVerb, weighVerb,
         logVerb,    correctVerb, resultVerb, compareVerb, labelVerb, importVerb,
         exportVerb, backupVerb,  verifyVerb, keyVerb,     sealVerb,  countersignVerb}) {
     verbs.push_back(make(program));

@@ -47,6 +47,7 @@ struct Verb {
 [[nodiscard]] Verb runsVerb(CLI::App& program);
 [[nodiscard]] Verb findVerb(CLI::App& program);
 [[nodiscard]] Verb showVerb(CLI::App& program);
+[[nodiscard]] Verb changeVerb(CLI::App& program);
 [[nodiscard]] Verb weighVerb(CLI::App& program);
 [[nodiscard]] Verb logVerb(CLI::App& program);
 [[nodiscard]] Verb correctVerb(CLI::App& program);

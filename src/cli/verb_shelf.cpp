@@ -179,7 +179,13 @@ VerbResult importCards(const ShelfOptions& options, const CommonOptions& common)
   if (!bytes) return std::unexpected(bytes.error());
   auto session = NotebookSession::forWriting(common);
   if (!session) return std::unexpected(session.error());
-  const auto result = app::importShelf(session->desk(), options.kind, *bytes, options.file);
+  const bool isSdf = text::asciiLowered(options.file).ends_with(".sdf");
+  if (isSdf && !isSubstance(options.kind)) {
+    return std::unexpected(text::Faults{
+        usageFault("--as", "an SD file holds substances", "import it --as substance")});
+  }
+  const auto result = isSdf ? app::importSubstancesFromSdf(session->desk(), *bytes, options.file)
+                            : app::importShelf(session->desk(), options.kind, *bytes, options.file);
   if (!result) return std::unexpected(result.error());
   if (common.json)
     return toJsonText(
@@ -211,8 +217,9 @@ Verb shelfVerb(CLI::App& program) {
   list->add_option("KIND", options->kind, "as for add")->required();
   CLI::App* show = parser->add_subcommand("show", "A substance by name, synonym or CAS number");
   show->add_option("NAME", options->name, "name, synonym or CAS number")->required();
-  CLI::App* import = parser->add_subcommand("import", "Cards from a CSV file");
-  import->add_option("FILE", options->file, "a CSV with a column name")->required();
+  CLI::App* import =
+      parser->add_subcommand("import", "Cards from a CSV file, substances from an SD file too");
+  import->add_option("FILE", options->file, "a CSV with a column name, or an .sdf")->required();
   import->add_option("--as", options->kind, "what the rows are")->required();
   for (CLI::App* verb : {add, list, show, import}) verb->fallthrough();
   return {parser, [=](const CommonOptions& common) -> VerbResult {
