@@ -25,7 +25,7 @@ namespace vialkeeper::ui {
 namespace {
 
 constexpr int kLeastFoot = 148;
-constexpr int kMostFoot = 240;
+constexpr int kMostFoot = 190;
 constexpr int kAlmostAll = 1000;  ///< a stretch that leaves the others what it cannot take
 constexpr int kVolumeLines = 3;
 

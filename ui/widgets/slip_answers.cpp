@@ -6,6 +6,11 @@
 #include <QPushButton>
 
 namespace vialkeeper::ui {
+namespace {
+
+constexpr int kSoonest_ms = 250;
+
+}  // namespace
 
 SlipAnswers::SlipAnswers(QWidget* parent)
     : QWidget(parent), m_likely(new QPushButton), m_accept(new QPushButton) {
@@ -16,8 +21,12 @@ SlipAnswers::SlipAnswers(QWidget* parent)
   row->addWidget(m_likely);
   row->addWidget(m_accept);
   row->addStretch(1);
-  connect(m_likely, &QPushButton::clicked, this, &SlipAnswers::likelyTaken);
-  connect(m_accept, &QPushButton::clicked, this, &SlipAnswers::accepted);
+  connect(m_likely, &QPushButton::clicked, this, [this] {
+    if (isMeant()) emit likelyTaken();
+  });
+  connect(m_accept, &QPushButton::clicked, this, [this] {
+    if (isMeant()) emit accepted();
+  });
 }
 
 void SlipAnswers::offer(const QString& typed, const QString& likely) {
@@ -25,6 +34,13 @@ void SlipAnswers::offer(const QString& typed, const QString& likely) {
   m_likely->setText(tr("I meant %1").arg(likely));
   m_accept->setText(tr("Yes, record %1").arg(typed));
 }
+
+void SlipAnswers::showEvent(QShowEvent* event) {
+  QWidget::showEvent(event);
+  m_shown.start();
+}
+
+bool SlipAnswers::isMeant() const { return m_shown.isValid() && m_shown.elapsed() >= kSoonest_ms; }
 
 void SlipAnswers::focusFirst() {
   (m_likely->isVisibleTo(this) ? m_likely : m_accept)->setFocus(Qt::OtherFocusReason);

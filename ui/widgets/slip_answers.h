@@ -2,6 +2,7 @@
 // SPDX-License-Identifier: GPL-3.0-or-later
 #pragma once
 
+#include <QElapsedTimer>
 #include <QWidget>
 
 class QPushButton;
@@ -22,7 +23,14 @@ class SlipAnswers : public QWidget {
   void accepted();
   void likelyTaken();
 
+ protected:
+  void showEvent(QShowEvent* event) override;
+
  private:
+  /// A device that sends two line ends must not answer with the second.
+  [[nodiscard]] bool isMeant() const;
+
+  QElapsedTimer m_shown;
   QPushButton* m_likely;
   QPushButton* m_accept;
 };

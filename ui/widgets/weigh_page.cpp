@@ -143,6 +143,7 @@ QWidget* WeighPage::makeEntry() {
   connect(m_answers, &SlipAnswers::likelyTaken, &m_steps, &WeighSteps::takeLikely);
   auto* area = new QWidget;
   auto* row = new QHBoxLayout;
+  row->setSpacing(16);
   row->addWidget(m_field, 5);
   row->addWidget(m_deviation, 6);
   auto* column = new QVBoxLayout(area);
@@ -202,12 +203,14 @@ void WeighPage::showReading() {
   setTone(m_understood, m_steps.tone() == Tone::kFault ? Tone::kFault : Tone::kPlain);
   m_deviation->setText(m_steps.deviation());
   put(m_understood, m_steps.understood());
-  put(m_question, m_steps.question());
+  put(m_question, m_steps.question().isEmpty()
+                      ? QString()
+                      : m_steps.question() + tr("  Tab goes to the answers; or weigh again."));
   const bool asks = !m_steps.question().isEmpty();
-  const bool isNew = asks && !m_answers->isVisible();
   m_answers->setVisible(asks);
   if (asks) m_answers->offer(m_steps.typed().trimmed(), m_steps.likely());
-  if (isNew && isVisible()) m_answers->focusFirst();
+  // The cursor stays in the field: a balance that sends another line, or a second line end, must
+  // not answer the question.
 }
 
 void WeighPage::showTargets() {

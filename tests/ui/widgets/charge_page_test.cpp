@@ -197,7 +197,12 @@ TEST_CASE("a slip at the balance is answered by keyboard", "[ui][identity]") {
   window.type(QString(target).remove(QLatin1Char('.')));
   window.press(Qt::Key_Return);
   CHECK(window.actual(first).empty());
+  CHECK(window.page().weighPage().field().hasFocus());
+  window.press(Qt::Key_Return);  // a second line end of the device's
+  CHECK(window.actual(first).empty());
+  window.press(Qt::Key_Tab);
   CHECK(qobject_cast<QPushButton*>(QApplication::focusWidget()) != nullptr);
+  QTest::qWait(300);
   window.press(Qt::Key_Return);
   CHECK_FALSE(window.actual(first).empty());
 }
@@ -277,6 +282,7 @@ TEST_CASE("pictures of the charge", "[.pictures]") {
   window.type(QStringLiteral("32 mg"));
   window.press(Qt::Key_Return);
   shoot("charge-question");
+  QTest::qWait(300);
   window.press(Qt::Key_Return);
   window.page().startAdding();
   window.type(QStringLiteral("ac"));
