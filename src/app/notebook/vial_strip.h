@@ -25,7 +25,7 @@ struct VialFilling {
 
 /// The last pressure or temperature that was read.
 struct LastReading {
-  double value = 0.0;    ///< bar or °C
+  double value = 0.0;     ///< bar or °C
   std::string kind = {};  ///< `gauge` or `abs`; of a pressure only
   units::Moment at{};
   int entry = 0;  ///< its number in the log
@@ -59,7 +59,7 @@ struct VialStrip {
   std::optional<VialFilling> filling = {};  ///< nothing where the plan names no vial
   std::optional<double> limit_bar = {};     ///< rated gauge × derating; nothing: no rating known
   std::optional<double> rated_bar = {};
-  std::optional<LastReading> pressure = {};     ///< as it was read
+  std::optional<LastReading> pressure = {};      ///< as it was read
   std::optional<double> pressureGauge_bar = {};  ///< the same over ambient, where that is known
   std::optional<LastReading> temperature = {};
   bool lampIsOn = false;
@@ -67,11 +67,12 @@ struct VialStrip {
   std::optional<units::Duration> planned = {};
   int interruptions = 0;
   std::string light = {};  ///< `440 nm, LED 440`
-  std::optional<units::Moment> begin = {};  ///< of the line: the first lamp on, else the first entry
+  std::optional<units::Moment> begin =
+      {};              ///< of the line: the first lamp on, else the first entry
   double end_h = 0.0;  ///< of the line: planned end, now, or the last entry, what is latest
   std::vector<TimelineInterval> lamp = {};
   std::vector<TimelineMark> marks = {};
-  std::vector<ReadingPoint> pressures = {};     ///< gauge; absolute readings less ambient
+  std::vector<ReadingPoint> pressures = {};  ///< gauge; absolute readings less ambient
   std::vector<ReadingPoint> temperatures = {};
 };
 
