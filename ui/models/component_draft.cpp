@@ -4,6 +4,7 @@
 
 #include "app/notebook/substance_cards.h"
 #include "chem/cas_number.h"
+#include "chem/solvents.h"
 #include "ui/models/charge_row.h"
 #include "ui/models/qt_text.h"
 
@@ -53,6 +54,7 @@ void ComponentDraft::takeFromShelf(const app::SubstanceRecord& substance) {
   m_smiles = toQt(substance.smiles);
   m_formula = toQt(substance.formula);
   m_cas = toQt(substance.cas);
+  if (chem::findSolvent(substance.name) != nullptr) m_role = kSolvent;
   read();
 }
 

@@ -56,6 +56,7 @@ AddComponentPanel::AddComponentPanel(ComponentSearch& search, ComponentDraft& dr
   m_list->setModel(&m_search);
   m_list->setItemDelegate(new FoundSubstanceDelegate(m_list));
   m_list->setAccessibleName(tr("Substances found on the shelf"));
+  m_list->setObjectName(QStringLiteral("foundList"));
   m_list->installEventFilter(this);
   auto* row = new QHBoxLayout(this);
   row->setContentsMargins(10, 8, 10, 8);

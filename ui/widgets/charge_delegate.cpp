@@ -134,7 +134,7 @@ void ChargeDelegate::paintFrame(QPainter& painter, const QRect& cell,
   painter.setRenderHint(QPainter::Antialiasing);
   painter.setBrush(Qt::NoBrush);
   painter.setPen(QPen(colour(isKept ? "limit" : "focus"), isCurrent ? 2.0 : 1.2));
-  painter.drawRoundedRect(QRectF(cell).adjusted(1.5, 2.5, -1.5, -2.5), 4, 4);
+  painter.drawRoundedRect(QRectF(cell).adjusted(1.5, 2.5, -1.5, -6.5), 4, 4);
 }
 
 void ChargeDelegate::paint(QPainter* painter, const QStyleOptionViewItem& option,

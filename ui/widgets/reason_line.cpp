@@ -39,7 +39,7 @@ ReasonLine::ReasonLine(ChangeReason& reason, QWidget* parent)
 void ReasonLine::follow() {
   const bool asks = m_reason.isAsked();
   const bool was = !isHidden();
-  m_question->setText(tr("The charge is under way. Why: %1?").arg(m_reason.waitingFor()));
+  m_question->setText(tr("The vial is charged already. Why %1?").arg(m_reason.waitingFor()));
   m_field->setAccessibleName(m_question->text());
   setVisible(asks);
   if (asks) {

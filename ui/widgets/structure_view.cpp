@@ -21,6 +21,9 @@ QByteArray recoloured(const std::string& svg) {
     text.replace(QByteArray("'") + black + "'", QByteArray("'") + ink + "'");
     text.replace(QByteArray("\"") + black + "\"", QByteArray("\"") + ink + "\"");
   }
+  // What has no colour of its own is black by the format's rule.
+  const qsizetype root = text.indexOf("<svg");
+  if (root >= 0) text.insert(root + 4, " fill=\"" + ink + "\"");
   return text;
 }
 

@@ -143,6 +143,7 @@ QWidget* WeighPage::makeEntry() {
   connect(m_answers, &SlipAnswers::likelyTaken, &m_steps, &WeighSteps::takeLikely);
   auto* area = new QWidget;
   auto* row = new QHBoxLayout;
+  row->setSpacing(16);
   row->addWidget(m_field, 5);
   row->addWidget(m_deviation, 6);
   auto* column = new QVBoxLayout(area);
