@@ -4,7 +4,6 @@
 #include <catch2/catch.hpp>
 
 #include "app/notebook/substance_cards.h"
-
 #include "ui/models/component_draft.h"
 #include "ui/models/component_search.h"
 #include "ui/models/qt_text.h"
@@ -52,8 +51,10 @@ TEST_CASE("a substance of the shelf is found by name, CAS number and structure",
 
 TEST_CASE("a component from the shelf is added, and taken out again by undo", "[ui][identity]") {
   Bench bench;
-  REQUIRE(app::addSubstanceCard(bench.link->desk(), {.name = "indole", .formula = "C8H7N"}));
-  bench.search.setText(QStringLiteral("indole"));
+  REQUIRE(app::addSubstanceCard(
+      bench.link->desk(),
+      {.name = "benzoic acid", .synonyms = {"BzOH"}, .smiles = "OC(=O)c1ccccc1"}));
+  bench.search.setText(QStringLiteral("bzoh"));
   REQUIRE(bench.search.substance(0));
   bench.draft.takeFromShelf(*bench.search.substance(0));
   bench.draft.setRole(QStringLiteral("additive"));
@@ -65,9 +66,9 @@ TEST_CASE("a component from the shelf is added, and taken out again by undo", "[
   QObject::connect(&bench.draft, &ui::ComponentDraft::added, [&](const QString& k) { key = k; });
   bench.draft.add();
   CHECK_FALSE(key.isEmpty());
-  REQUIRE(bench.component("indole"));
+  REQUIRE(bench.component("benzoic acid"));
   bench.history.undo();
-  CHECK_FALSE(bench.component("indole"));
+  CHECK_FALSE(bench.component("benzoic acid"));
 }
 
 TEST_CASE("a substance that is new is described in place", "[ui][identity]") {
