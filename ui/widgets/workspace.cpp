@@ -22,8 +22,8 @@
 namespace vialkeeper::ui {
 namespace {
 
-constexpr int kRunsWidth_px = 414;
-constexpr int kRunWidth_px = 866;
+constexpr int kRunsWidth_px = 417;
+constexpr int kRunWidth_px = 863;
 
 QPushButton* barButton(const QString& text) {
   auto* button = new QPushButton(text);
