@@ -26,6 +26,21 @@ constexpr double kLabelPreview_dpi = 200.0;
 constexpr double kPrinter_dpi = 300.0;
 constexpr double kLabelPrinter_dpi = 600.0;
 
+/// An empty text when it was done, else what went wrong.
+QString printOn(QPrinter& printer, const app::RunSheet& sheet, Printed what,
+                double resolution_dpi) {
+  const auto images = pageImages(sheet, what, resolution_dpi);
+  if (!images) return sentences(images.error());
+  QPainter painter;
+  if (!painter.begin(&printer))
+    return PrintPage::tr("The printer does not take the page: save it as a PDF and print that.");
+  for (std::size_t i = 0; i < images->size(); ++i) {
+    if (i > 0) printer.newPage();
+    painter.drawImage(QRectF(printer.paperRect(QPrinter::DevicePixel)), (*images)[i].image);
+  }
+  return {};
+}
+
 }  // namespace
 
 PrintPage::PrintPage(OpenRun& run, QWidget* parent)
@@ -101,6 +116,7 @@ void PrintPage::showPages() {
     m_messages->show(MessageBar::Kind::kFault, sentences(images.error()));
     return;
   }
+  if (!images->empty()) m_size_mm = images->front().size_mm;
   for (std::size_t i = 0; i < images->size(); ++i) {
     QPixmap pixmap = QPixmap::fromImage((*images)[i].image);
     pixmap.setDevicePixelRatio(ratio);
@@ -129,31 +145,22 @@ void PrintPage::saveAsPdf() {
 
 void PrintPage::print() {
   const bool isLabel = chosen() == Printed::kLabel;
-  const auto images =
-      pageImages(m_run.sheet(), chosen(), isLabel ? kLabelPrinter_dpi : kPrinter_dpi);
-  if (!images || images->empty()) {
-    if (!images) m_messages->show(MessageBar::Kind::kFault, sentences(images.error()));
-    return;
-  }
+  if (m_pictures.empty()) return;
   QPrinter printer(QPrinter::HighResolution);
   printer.setDocName(toQt(m_run.run().code));
   printer.setFullPage(true);
-  printer.setPageSize(QPageSize(images->front().size_mm, QPageSize::Millimeter, QString(),
+  printer.setPageSize(QPageSize(m_size_mm, QPageSize::Millimeter, QString(),
                                 isLabel ? QPageSize::ExactMatch : QPageSize::FuzzyMatch));
   QPrintDialog dialog(&printer, this);
   if (dialog.exec() != QDialog::Accepted) return;
-  QPainter painter;
-  if (!painter.begin(&printer)) {
-    m_messages->show(MessageBar::Kind::kFault,
-                     tr("The printer does not take the page: save it as a PDF and print that."));
-    return;
-  }
-  for (std::size_t i = 0; i < images->size(); ++i) {
-    if (i > 0) printer.newPage();
-    painter.drawImage(QRectF(printer.paperRect(QPrinter::DevicePixel)), (*images)[i].image);
-  }
-  painter.end();
-  m_messages->show(MessageBar::Kind::kGood, tr("Sent to %1.").arg(printer.printerName()));
+  QApplication::setOverrideCursor(Qt::WaitCursor);
+  const QString fault =
+      printOn(printer, m_run.sheet(), chosen(), isLabel ? kLabelPrinter_dpi : kPrinter_dpi);
+  QApplication::restoreOverrideCursor();
+  if (fault.isEmpty())
+    m_messages->show(MessageBar::Kind::kGood, tr("Sent to %1.").arg(printer.printerName()));
+  else
+    m_messages->show(MessageBar::Kind::kFault, fault);
 }
 
 void PrintPage::showEvent(QShowEvent* event) {

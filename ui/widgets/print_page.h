@@ -49,6 +49,7 @@ class PrintPage : public QWidget {
   QScrollArea* m_scroll;
   QVBoxLayout* m_column;
   std::vector<QLabel*> m_pictures;
+  QSizeF m_size_mm;  ///< of the paper
 };
 
 }  // namespace vialkeeper::ui

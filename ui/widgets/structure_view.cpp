@@ -16,14 +16,7 @@ namespace {
 QByteArray recoloured(const std::string& svg) {
   QByteArray text = QByteArray::fromStdString(svg);
   const QByteArray ink = colour("text").name().toLatin1();
-  for (const char* black : {"#000000", "#000"}) {
-    text.replace(QByteArray(":") + black + ";", QByteArray(":") + ink + ";");
-    text.replace(QByteArray("'") + black + "'", QByteArray("'") + ink + "'");
-    text.replace(QByteArray("\"") + black + "\"", QByteArray("\"") + ink + "\"");
-  }
-  // What has no colour of its own is black by the format's rule.
-  const qsizetype root = text.indexOf("<svg");
-  if (root >= 0) text.insert(root + 4, " fill=\"" + ink + "\"");
+  text.replace(":#000000", ":" + ink);
   return text;
 }
 

@@ -14,6 +14,7 @@
 #include "ui/widgets/charge_table.h"
 #include "ui/widgets/main_window.h"
 #include "ui/widgets/print_page.h"
+#include "ui/widgets/structure_view.h"
 #include "ui/widgets/theme.h"
 #include "ui/widgets/trail_panel.h"
 #include "ui/widgets/weigh_page.h"
@@ -304,5 +305,30 @@ TEST_CASE("pictures of the charge", "[.pictures]") {
   shoot("charge-print");
   window.page().printPage().choose(ui::Printed::kLabel);
   shoot("charge-label");
+  ui::Theme::instance().apply(*qApp, ui::Theme::Choice::kLight);
+}
+
+TEST_CASE("a structure is drawn in the colour of the text", "[ui][identity]") {
+  ui::Theme::instance().apply(*qApp, ui::Theme::Choice::kDark);
+  ui::StructureView view;
+  view.resize(200, 120);
+  view.setSmiles(QStringLiteral("CC#N"));
+  CHECK(view.isDrawn());
+  QImage image(view.size(), QImage::Format_ARGB32_Premultiplied);
+  image.fill(Qt::transparent);
+  view.render(&image, {}, {}, QWidget::DrawChildren);
+  int light = 0;
+  int dark = 0;
+  for (int y = 0; y < image.height(); ++y) {
+    for (int x = 0; x < image.width(); ++x) {
+      const QColor pixel = image.pixelColor(x, y);
+      if (pixel.alpha() < 200) continue;
+      ++(pixel.lightness() > 128 ? light : dark);
+    }
+  }
+  CHECK(light > 50);
+  CHECK(dark == 0);
+  view.setSmiles(QStringLiteral("no structure"));
+  CHECK_FALSE(view.isDrawn());
   ui::Theme::instance().apply(*qApp, ui::Theme::Choice::kLight);
 }
