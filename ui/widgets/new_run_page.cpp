@@ -102,6 +102,8 @@ QWidget* NewRunPage::makeSources() {
   m_list->setHorizontalScrollBarPolicy(Qt::ScrollBarAlwaysOff);
   m_list->setVerticalScrollMode(QAbstractItemView::ScrollPerPixel);
   m_list->setResizeMode(QListView::Adjust);
+  // Always there: rows are as high as their texts at this width.
+  m_list->setVerticalScrollBarPolicy(Qt::ScrollBarAlwaysOn);
   m_list->installEventFilter(this);
   column->addWidget(m_list, 1);
   auto* file = new QPushButton(tr("A &plan file…"));
@@ -160,6 +162,7 @@ void NewRunPage::makeTable() {
   m_table->horizontalHeader()->setSectionResizeMode(ChargePreview::kComponent,
                                                     QHeaderView::Stretch);
   m_table->verticalHeader()->setSectionResizeMode(QHeaderView::ResizeToContents);
+  m_table->setColumnHidden(ChargePreview::kRole, true);
 }
 
 void NewRunPage::showEvent(QShowEvent* event) {

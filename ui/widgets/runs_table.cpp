@@ -16,7 +16,7 @@
 namespace vialkeeper::ui {
 namespace {
 
-constexpr int kLeastTitle_px = 202;
+constexpr int kLeastTitle_px = 205;
 constexpr int kMostUsualLines = 2;
 
 }  // namespace

@@ -22,8 +22,8 @@
 namespace vialkeeper::ui {
 namespace {
 
-constexpr int kRunsWidth_px = 417;
-constexpr int kRunWidth_px = 863;
+constexpr int kRunsWidth_px = 424;
+constexpr int kRunWidth_px = 856;
 
 QPushButton* barButton(const QString& text) {
   auto* button = new QPushButton(text);
