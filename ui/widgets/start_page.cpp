@@ -20,7 +20,7 @@ constexpr int kChoiceWidth_px = 300;
 QWidget* choice(const QString& text, const QString& meaning, QPushButton*& button) {
   auto* box = new QWidget;
   button = new QPushButton(text);
-  button->setProperty("choice", true);
+  button->setProperty("first", true);
   button->setAccessibleDescription(meaning);
   auto* words = new QLabel(meaning);
   words->setWordWrap(true);
