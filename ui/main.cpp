@@ -44,6 +44,7 @@ int runDesktop(QApplication& application) {
 }  // namespace vialkeeper::ui
 
 int main(int argc, char** argv) {
+  QApplication::setOrganizationName(QStringLiteral("vialkeeper"));
   QApplication::setApplicationName(QStringLiteral("vialkeeper"));
   QApplication::setApplicationDisplayName(QStringLiteral("Vialkeeper"));
   QApplication::setApplicationVersion(QStringLiteral(VIALKEEPER_VERSION));

@@ -8,6 +8,7 @@
 // View-models run without any display: there is not even a QGuiApplication.
 int main(int argc, char** argv) {
   QCoreApplication application(argc, argv);
+  QCoreApplication::setOrganizationName(QStringLiteral("vialkeeper"));
   QCoreApplication::setApplicationName(QStringLiteral("vialkeeper-tests"));
   QStandardPaths::setTestModeEnabled(true);
   return Catch::Session().run(argc, argv);

@@ -12,6 +12,7 @@
 int main(int argc, char** argv) {
   setenv("QT_QPA_PLATFORM", "offscreen", 0);
   QApplication application(argc, argv);
+  QCoreApplication::setOrganizationName(QStringLiteral("vialkeeper"));
   QCoreApplication::setApplicationName(QStringLiteral("vialkeeper-tests"));
   QStandardPaths::setTestModeEnabled(true);
   vialkeeper::ui::Theme::instance().apply(application, vialkeeper::ui::Theme::Choice::kLight);

@@ -6,6 +6,7 @@
 #include <QElapsedTimer>
 #include <QKeyEvent>
 #include <QPixmap>
+#include <QSettings>
 #include <QStandardPaths>
 #include <QTabWidget>
 #include <cstdio>
@@ -105,12 +106,15 @@ int run(QApplication& application) {
   const QStringList given = parser.positionalArguments();
   if (given.size() != 3) parser.showHelp(2);
   QStandardPaths::setTestModeEnabled(true);
+  // Nobody's recent notebooks in a picture.
+  QSettings().clear();
   SqliteFiles files;
   app::SystemClock clock;
   db::SodiumSigner signer;
   const bool large = application.devicePixelRatio() > 1.5;
   for (const bool dark : {false, true}) {
     Theme::instance().apply(application, dark ? Theme::Choice::kDark : Theme::Choice::kLight);
+    QSettings().clear();
     MainWindow window({files, clock, signer});
     window.resize(kSize);
     window.setVisible(true);
@@ -127,6 +131,7 @@ int run(QApplication& application) {
 
 int main(int argc, char** argv) {
   qputenv("QT_QPA_PLATFORM", "offscreen");
+  QApplication::setOrganizationName(QStringLiteral("vialkeeper"));
   QApplication::setApplicationName(QStringLiteral("vialkeeper-pictures"));
   QApplication application(argc, argv);
   return vialkeeper::ui::run(application);
